@@ -1,0 +1,16 @@
+// The command line, bundled to plain files that Node 20 runs as they are.
+import { defineConfig } from 'vite';
+
+export default defineConfig({
+  build: {
+    ssr: true,
+    target: 'node20',
+    outDir: 'dist',
+    emptyOutDir: false,
+    rollupOptions: {
+      input: { ohmstead: 'src/ohmstead.ts', bench: 'src/bench.ts' },
+      output: { entryFileNames: '[name].js', chunkFileNames: 'chunks/[name].js' },
+    },
+  },
+  ssr: { noExternal: true },
+});

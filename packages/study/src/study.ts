@@ -1,0 +1,62 @@
+// The study as its file writes it (contract names, units in the keys) and as it is read with its tables.
+import type { ConductorTable } from '@ohmstead/core';
+
+export type Point = readonly [x: number, y: number];
+/** Corners in order, metres; closed without repeating the first. */
+export type Polygon = readonly Point[];
+
+export interface LayerInput {
+  readonly resistivity_ohm_m: number;
+  readonly thickness_m?: number | undefined;
+}
+
+export interface CaseInput {
+  readonly name: string;
+  /** either this with `division_factor` … */
+  readonly fault_current_A?: number | undefined;
+  readonly division_factor?: number | undefined;
+  /** … or the current that enters the ground, before decrement */
+  readonly grid_current_A?: number | undefined;
+  readonly x_over_r?: number | undefined;
+  readonly frequency_hz?: number | undefined;
+  readonly duration_s: number;
+  readonly inject?: { readonly x_m: number; readonly y_m: number; readonly depth_m: number } | undefined;
+}
+
+export interface Study {
+  readonly format: 'ohmstead-study';
+  readonly version: 1;
+  readonly title: string;
+  readonly soil: { readonly layers: readonly LayerInput[] };
+  readonly surfacing?: { readonly resistivity_ohm_m: number; readonly thickness_m: number } | undefined;
+  readonly metal_model?: 'resistive' | 'equipotential' | undefined;
+  readonly conductors: readonly string[];
+  readonly electrodes?: readonly { readonly name: string; readonly role: 'energised' | 'floating' }[] | undefined;
+  readonly cases: readonly CaseInput[];
+  readonly limits: { readonly basis: 'IEEE 80'; readonly body_mass_kg: 50 | 70 };
+  readonly areas?: { readonly touch?: readonly Polygon[] | undefined; readonly step?: readonly Polygon[] | undefined } | undefined;
+}
+
+/** Where a row of the conductor table was read. */
+export interface RowOrigin {
+  readonly file: string;
+  readonly line: number;
+}
+
+/** Something taken for granted or converted while reading; listed, never silent. */
+export interface Note {
+  readonly code: string;
+  readonly message: string;
+}
+
+/** A study with its tables, checked. */
+export interface LoadedStudy {
+  readonly study: Study;
+  readonly conductors: ConductorTable;
+  /** one a conductor */
+  readonly origins: readonly RowOrigin[];
+  /** assumed values and conversions, e.g. a material that was not given */
+  readonly notes: readonly Note[];
+  /** every file of the study, by its path, as read */
+  readonly files: ReadonlyMap<string, Uint8Array>;
+}
