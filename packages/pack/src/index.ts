@@ -1,1 +1,12 @@
-// placeholder
+// Review packs: study and outcome → zip, and back with every digest and number checked.
+export { SAME_NUMBER_TOLERANCE } from './compare-results.ts';
+export { type Difference, differenceLine } from './difference.ts';
+export { jsonText } from './json-text.ts';
+export type { Manifest, ManifestEntry } from './manifest.ts';
+export { type Pack, readPack } from './read-pack.ts';
+export type { Renderer } from './renderer.ts';
+export { studyFiles } from './study-files.ts';
+export { type Verification, type VerifyTools, verifyPack } from './verify-pack.ts';
+export { writePack } from './write-pack.ts';
+export { MAX_ENTRIES, MAX_TOTAL_BYTES } from './zip-limits.ts';
+export { readZip } from './zip-read.ts';

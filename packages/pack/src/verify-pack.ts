@@ -1,0 +1,147 @@
+// Review pack → every difference between what it holds and what its own study gives when solved again.
+import { InputFaults, type LoadedStudy, type Outcome } from '@ohmstead/study';
+import { checkDigests } from './check-digests.ts';
+import { type Comparison, compareResults } from './compare-results.ts';
+import type { Difference } from './difference.ts';
+import { jsonText } from './json-text.ts';
+import { packEntries, RESULTS_NAME, STUDY_FOLDER } from './pack-entries.ts';
+import { type Pack, readPack } from './read-pack.ts';
+import type { Renderer } from './renderer.ts';
+
+export interface VerifyTools {
+  /** files of the study by path → study; throws InputFaults */
+  readonly load: (files: ReadonlyMap<string, Uint8Array>) => LoadedStudy;
+  readonly solve: (loaded: LoadedStudy) => Outcome | Promise<Outcome>;
+  readonly renderer: Renderer;
+}
+
+export interface Verification {
+  readonly differences: readonly Difference[];
+  readonly checked: {
+    /** program that wrote the pack, and the one that recomputed it (null where the study could not be solved) */
+    readonly packVersion: string;
+    readonly programVersion: string | null;
+    /** entries whose digest was compared */
+    readonly digests: number;
+    readonly numbers: number;
+    readonly exactNumbers: number;
+    readonly closeNumbers: number;
+    /** sheet, figures and tables compared byte by byte */
+    readonly renderings: number;
+  };
+}
+
+/**
+ * Checks a review pack: digests, results number by number, sheet, figures and tables byte by byte.
+ * @param bytes the zip
+ * @param tools how to load, solve and draw a study
+ * @param file what to call the zip in faults
+ * @throws InputFaults where it is not a sound review pack; whatever can be compared is a difference instead
+ */
+export async function verifyPack(
+  bytes: Uint8Array,
+  tools: VerifyTools,
+  file?: string,
+): Promise<Verification> {
+  const pack = await readPack(bytes, file);
+  const digests = await checkDigests(pack);
+  const recomputed = await recompute(pack, tools);
+  return {
+    differences: withoutRepeats([...digests, ...recomputed.differences]),
+    checked: {
+      packVersion: pack.manifest.program_version,
+      programVersion: recomputed.programVersion,
+      digests: pack.manifest.entries.filter((entry) => pack.entries.has(entry.path)).length,
+      numbers: recomputed.numbers,
+      exactNumbers: recomputed.exact,
+      closeNumbers: recomputed.close,
+      renderings: recomputed.renderings,
+    },
+  };
+}
+
+interface Recomputed extends Comparison {
+  readonly programVersion: string | null;
+  readonly renderings: number;
+}
+
+async function recompute(pack: Pack, tools: VerifyTools): Promise<Recomputed> {
+  const unsolved = { programVersion: null, renderings: 0, numbers: 0, exact: 0, close: 0 };
+  const solved = await solveAgain(pack, tools);
+  if (solved.kind === 'faults') return { ...unsolved, differences: solved.differences };
+  const programVersion = solved.outcome.results.program_version;
+  // Another version of the program is not a difference by itself: its name is taken over, its numbers are compared.
+  const outcome: Outcome = {
+    ...solved.outcome,
+    results: { ...solved.outcome.results, program_version: pack.manifest.program_version },
+  };
+  const due = packEntries(solved.loaded, outcome, tools.renderer);
+  const results = compareResults(json(pack.entries.get(RESULTS_NAME)), JSON.parse(jsonText(outcome.results)));
+  const drawn = compareEntries(pack, due);
+  return {
+    ...results,
+    programVersion,
+    differences: [...(pack.entries.has(RESULTS_NAME) ? results.differences : []), ...drawn.differences],
+    renderings: drawn.compared,
+  };
+}
+
+type Solved =
+  | { readonly kind: 'solved'; readonly loaded: LoadedStudy; readonly outcome: Outcome }
+  | { readonly kind: 'faults'; readonly differences: readonly Difference[] };
+
+async function solveAgain(pack: Pack, tools: VerifyTools): Promise<Solved> {
+  const inside = [...pack.entries].filter(([path]) => path.startsWith(STUDY_FOLDER));
+  const files = new Map(inside.map(([path, content]) => [path.slice(STUDY_FOLDER.length), content]));
+  try {
+    const loaded = tools.load(files);
+    return { kind: 'solved', loaded, outcome: await tools.solve(loaded) };
+  } catch (error) {
+    if (!(error instanceof InputFaults)) throw error;
+    const differences = error.faults.map(
+      ({ file, message }): Difference => ({ kind: 'study', path: `${STUDY_FOLDER}${file}`, message }),
+    );
+    return { kind: 'faults', differences };
+  }
+}
+
+/** Every entry but the results, which are compared as numbers; the study's own files are due as they are. */
+function compareEntries(
+  pack: Pack,
+  due: ReadonlyMap<string, Uint8Array>,
+): { readonly differences: readonly Difference[]; readonly compared: number } {
+  const differences: Difference[] = [];
+  let compared = 0;
+  for (const path of [...new Set([...due.keys(), ...pack.entries.keys()])].toSorted()) {
+    const expected = due.get(path);
+    const found = pack.entries.get(path);
+    if (found === undefined) differences.push({ kind: 'missing', path });
+    else if (expected === undefined) differences.push({ kind: 'extra', path });
+    else if (path !== RESULTS_NAME && !path.startsWith(STUDY_FOLDER)) {
+      compared++;
+      if (!sameBytes(expected, found)) differences.push({ kind: 'rendering', path });
+    }
+  }
+  return { differences, compared };
+}
+
+function sameBytes(a: Uint8Array, b: Uint8Array): boolean {
+  return a.length === b.length && a.every((byte, index) => byte === b[index]);
+}
+
+function json(content: Uint8Array | undefined): unknown {
+  try {
+    return JSON.parse(new TextDecoder().decode(content));
+  } catch {
+    return undefined;
+  }
+}
+
+/** A missing or extra entry shows against the manifest and again against the recomputed study; once is enough. */
+function withoutRepeats(differences: readonly Difference[]): readonly Difference[] {
+  const seen = new Set<string>();
+  return differences.filter((difference) => {
+    const key = JSON.stringify([difference.kind, difference.path]);
+    return !seen.has(key) && seen.add(key);
+  });
+}
