@@ -1,5 +1,11 @@
 // Text ⇄ study, the chain from study to results, and their types.
+
+export { type Fault, faultLine, InputFaults } from './fault.ts';
+export * from './input/defaults.ts';
+export { studyJsonSchema } from './input/json-schema.ts';
+export { loadStudy } from './input/load-study.ts';
+export { loadPoints, type PointTable } from './input/points-csv.ts';
+export { type StudySource, sourceFromMap } from './input/source.ts';
 export type * from './outcome.ts';
 export type * from './results.ts';
 export type * from './study.ts';
-export { type Fault, faultLine, InputFaults } from './fault.ts';

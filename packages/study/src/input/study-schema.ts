@@ -1,0 +1,184 @@
+// What study.json may hold: keys, kinds and ranges, each with its trade name and what is expected.
+import { z } from 'zod';
+import type { Study } from '../study.ts';
+import * as most from './limits.ts';
+import { figure } from './shown-value.ts';
+
+// No code made at run time, so that a page with a strict content policy can read studies.
+z.config({ jitless: true });
+
+/** Text that can stand in a label: not blank, nothing invisible; a subset of what `invisibleCharacter` refuses. */
+const VISIBLE = /^(?=.*\S)[^\p{Cc}\p{Cs}\u2028\u2029\u200e\u200f\u202a-\u202e\u2066-\u2069]+$/u;
+
+/** `title` is the trade name that faults begin with, `description` ends the phrase "expected …". */
+function told<T extends z.ZodType>(schema: T, title: string, description: string): T {
+  return schema.meta({ title, description });
+}
+
+function label(title: string, longest: number): z.ZodString {
+  const schema = z.string().min(1).max(longest).regex(VISIBLE);
+  return told(schema, title, `visible text of at most ${longest} characters`);
+}
+
+function above(title: string, unit: string, largest: number): z.ZodNumber {
+  return told(z.number().gt(0).max(largest), title, `a number above 0 and at most ${figure(largest)}${unit}`);
+}
+
+function between(title: string, unit: string, least: number, largest: number, why = ''): z.ZodNumber {
+  return told(
+    z.number().min(least).max(largest),
+    title,
+    `a number from ${figure(least)} to ${figure(largest)}${unit}${why}`,
+  );
+}
+
+function coordinate(title: string): z.ZodNumber {
+  return between(title, ' m', -most.LARGEST_COORDINATE_M, most.LARGEST_COORDINATE_M);
+}
+
+const layer = told(
+  z.strictObject({
+    resistivity_ohm_m: between(
+      'soil resistivity',
+      ' Ω·m',
+      most.SMALLEST_SOIL_RESISTIVITY_OHM_M,
+      most.LARGEST_SOIL_RESISTIVITY_OHM_M,
+    ),
+    thickness_m: between(
+      'layer thickness',
+      ' m',
+      most.SMALLEST_LAYER_THICKNESS_M,
+      most.LARGEST_LAYER_THICKNESS_M,
+    ).optional(),
+  }),
+  'soil layer',
+  'an object with resistivity_ohm_m and, save the last layer, thickness_m',
+);
+
+const soil = told(
+  z.strictObject({
+    layers: told(
+      z.array(layer).min(1).max(most.MOST_SOIL_LAYERS),
+      'list of soil layers',
+      `1 to ${most.MOST_SOIL_LAYERS} layers, the top one first`,
+    ),
+  }),
+  'soil',
+  'an object with layers',
+);
+
+const surfacing = told(
+  z.strictObject({
+    resistivity_ohm_m: above('covering resistivity', ' Ω·m', most.LARGEST_COVERING_RESISTIVITY_OHM_M),
+    thickness_m: above('covering thickness', ' m', most.LARGEST_COVERING_THICKNESS_M),
+  }),
+  'covering',
+  'an object with resistivity_ohm_m and thickness_m',
+);
+
+const electrode = told(
+  z.strictObject({
+    name: label('electrode name', most.LONGEST_NAME),
+    role: told(z.enum(['energised', 'floating']), 'electrode role', 'energised or floating'),
+  }),
+  'electrode',
+  'an object with name and role',
+);
+
+const inject = told(
+  z.strictObject({
+    x_m: coordinate('x of the injection'),
+    y_m: coordinate('y of the injection'),
+    depth_m: between('depth of the injection', ' m', 0, most.LARGEST_DEPTH_M, ', positive downward'),
+  }),
+  'place of injection',
+  'a whole point, with x_m, y_m and depth_m',
+);
+
+const faultCase = told(
+  z.strictObject({
+    name: label('case name', most.LONGEST_NAME),
+    fault_current_A: above('fault current', ' A', most.LARGEST_CURRENT_A).optional(),
+    division_factor: above('division factor', '', 1).optional(),
+    grid_current_A: above('grid current', ' A', most.LARGEST_CURRENT_A).optional(),
+    x_over_r: between('X/R ratio', '', 0, most.LARGEST_X_OVER_R).optional(),
+    frequency_hz: above('frequency', ' Hz', most.LARGEST_FREQUENCY_HZ).optional(),
+    duration_s: between(
+      'fault duration',
+      ' s',
+      most.SHORTEST_DURATION_S,
+      most.LONGEST_DURATION_S,
+      ', where the body-current limits of IEEE Std 80 hold',
+    ),
+    inject: inject.optional(),
+  }),
+  'fault case',
+  'an object with name, duration_s and fault_current_A or grid_current_A',
+);
+
+const limits = told(
+  z.strictObject({
+    basis: told(z.literal('IEEE 80'), 'basis of the limits', '"IEEE 80"'),
+    body_mass_kg: told(z.literal([50, 70]), 'body mass', 'the number 50 or 70, kg'),
+  }),
+  'limits',
+  'an object with basis and body_mass_kg',
+);
+
+const corner = told(
+  z.tuple([coordinate('x of the corner'), coordinate('y of the corner')]),
+  'corner',
+  'two numbers [x, y] in metres',
+);
+const polygon = told(
+  z.array(corner).min(3).max(most.MOST_CORNERS),
+  'area',
+  `3 to ${most.MOST_CORNERS} corners [x, y] in metres, in order, the first not repeated`,
+);
+const areaList = told(
+  z.array(polygon).min(1).max(most.MOST_AREAS),
+  'list of areas',
+  `1 to ${most.MOST_AREAS} areas, each a list of corners`,
+);
+const areas = told(
+  z.strictObject({ touch: areaList.optional(), step: areaList.optional() }),
+  'assessed areas',
+  'an object with touch, step or both',
+);
+
+const tables = told(
+  z.array(told(z.string().min(1), 'path of a table', 'a path within the study folder')),
+  'list of conductor tables',
+  `1 to ${most.MOST_TABLES} file names such as "conductors.csv"`,
+);
+
+/** study.json, version 1, as this program can solve it; what keys mean to each other is judged apart. */
+export const studySchema: z.ZodType<Study> = told(
+  z.strictObject({
+    format: told(z.literal('ohmstead-study'), 'format', '"ohmstead-study"'),
+    version: told(z.literal(1), 'version of the format', 'the number 1'),
+    title: label('title', most.LONGEST_TITLE),
+    soil,
+    surfacing: surfacing.optional(),
+    metal_model: told(
+      z.enum(['resistive', 'equipotential']),
+      'model of the metal',
+      '"resistive" or "equipotential"',
+    ).optional(),
+    conductors: tables.min(1).max(most.MOST_TABLES),
+    electrodes: told(
+      z.array(electrode).max(most.MOST_ELECTRODES),
+      'list of electrodes',
+      'a list of objects with name and role',
+    ).optional(),
+    cases: told(
+      z.array(faultCase).min(1).max(most.MOST_CASES),
+      'list of fault cases',
+      `1 to ${most.MOST_CASES} fault cases`,
+    ),
+    limits,
+    areas: areas.optional(),
+  }),
+  'study',
+  'an object with format, version, title, soil, conductors, cases and limits',
+);
