@@ -46,7 +46,9 @@ export interface CaseResult {
 export interface ElectrodeResult {
   readonly name: string;
   readonly role: 'energised' | 'floating';
-  /** of the ground potential rise; floating metal: its own potential */
+  /** pieces of metal that no joint connects */
+  readonly piece_count: number;
+  /** of the ground potential rise; floating metal: the potential of its piece that takes most */
   readonly potential_ratio: number;
   readonly potential_uncertainty_ratio: number;
   /** of the injected current, net into the soil */
@@ -98,6 +100,8 @@ export interface Results {
     readonly current_balance: number;
     /** of the leakage equations, relative */
     readonly residual: number;
+    /** largest failure of Kirchhoff's current law at a node of the metal, of the current injected */
+    readonly node_balance: number;
     readonly solver_iterations: number;
     /** largest error of the image lists against the exact layer kernel, of the kernel's scale */
     readonly image_error: number;

@@ -1,0 +1,172 @@
+// Potential of the soil surface, fast: tables in horizontal distance by depth of the metal, for maps and searches.
+import type { SegmentMesh } from '../geometry/segments.ts';
+import { type DepthClass, depthClasses } from '../leakage/depth-classes.ts';
+import { CLOSED_FORM_RATIO } from '../leakage/pair-potential.ts';
+import { type RadialTable, radialValue } from '../leakage/radial-table.ts';
+import { smoothKernel } from '../leakage/smooth-kernel.ts';
+import { gaussLegendre } from '../numerics/gauss-legendre.ts';
+import type { SoilImages } from '../soil/image-list.ts';
+import { potentialAt } from './potential.ts';
+
+/** Surface potential at a place, V (or Ω for a leakage per ampere). */
+export type SurfacePotential = (x: number, y: number) => number;
+
+/** Segments of one depth class that leak; coordinates and currents packed, shape [count] each. */
+interface ClassGroup {
+  readonly vertical: boolean;
+  readonly z1: number;
+  readonly z2: number;
+  readonly count: number;
+  /** centre and half vector in plan */
+  readonly cx: Float64Array;
+  readonly cy: Float64Array;
+  readonly hx: Float64Array;
+  readonly hy: Float64Array;
+  readonly length: Float64Array;
+  readonly radiusSquared: Float64Array;
+  /** leakage times the list's factor */
+  readonly strength: Float64Array;
+  /** weight of the images at the metal's own distance: the source and its reflection in the surface */
+  readonly ownWeight: number;
+  /** all images (horizontal metal) */
+  readonly all: RadialTable | undefined;
+  /** images other than those at the metal's own distance */
+  readonly rest: RadialTable | undefined;
+}
+
+/** Ratio of distance to length past which two, and three, Gauss points are enough (see gaussOrder). */
+const TWO_POINTS = 8;
+const THREE_POINTS = 3.2;
+/** Gauss points of a near horizontal segment on the table of its farther images, per length over the table's smoothness. */
+const NEAR_ORDER_LEAST = 4;
+const NEAR_ORDER_MOST = 12;
+
+/** An image offset below this is none, m. */
+const NO_OFFSET = 1e-12;
+
+/**
+ * Prepares the evaluation of the surface potential of a leakage.
+ * @param leakage current into the soil by segment, A; shape [mesh.count]
+ * @param reach largest horizontal distance from metal to a place that will be asked for, m
+ */
+export function surfacePotential(
+  mesh: SegmentMesh,
+  images: SoilImages,
+  leakage: Float64Array,
+  reach: number,
+): SurfacePotential {
+  const classes = depthClasses(mesh);
+  const groups = classes.classes.map((c, at) => classGroup(mesh, images, leakage, c, at, classes.of, reach));
+  const sloped = leakage.map((current, i) => (classes.of[i]! < 0 ? current : 0));
+  const anySloped = sloped.some((current) => current !== 0);
+  return (x, y) => {
+    let sum = anySloped ? potentialAt(mesh, images, sloped, x, y, 0) : 0;
+    for (const group of groups) sum += group.vertical ? uprightSum(group, x, y) : levelSum(group, x, y);
+    return sum;
+  };
+}
+
+function classGroup(
+  mesh: SegmentMesh,
+  images: SoilImages,
+  leakage: Float64Array,
+  c: DepthClass,
+  at: number,
+  of: Int32Array,
+  reach: number,
+): ClassGroup {
+  const members = Array.from({ length: mesh.count }, (_, i) => i).filter((i) => of[i] === at && leakage[i] !== 0);
+  const list = images.list(c.layer, 0);
+  const pick = (value: (i: number) => number): Float64Array => Float64Array.from(members, value);
+  const every = Array.from({ length: list.count }, (_, k) => k);
+  const own = every.filter((k) => Math.abs(list.offset[k]!) < NO_OFFSET);
+  const others = every.filter((k) => Math.abs(list.offset[k]!) >= NO_OFFSET);
+  return {
+    vertical: c.vertical,
+    z1: c.z1,
+    z2: c.z2,
+    count: members.length,
+    cx: pick((i) => (mesh.x1[i]! + mesh.x2[i]!) / 2),
+    cy: pick((i) => (mesh.y1[i]! + mesh.y2[i]!) / 2),
+    hx: pick((i) => (mesh.x2[i]! - mesh.x1[i]!) / 2),
+    hy: pick((i) => (mesh.y2[i]! - mesh.y1[i]!) / 2),
+    length: pick((i) => mesh.length[i]!),
+    radiusSquared: pick((i) => mesh.radius[i]! ** 2),
+    strength: pick((i) => leakage[i]! * list.factor),
+    ownWeight: own.reduce((sum, k) => sum + list.weight[k]!, 0),
+    all: c.vertical ? undefined : smoothKernel(list, every, c, 0, reach),
+    rest: smoothKernel(list, others, c, 0, reach),
+  };
+}
+
+const TWO = Math.sqrt(1 / 3);
+const THREE = Math.sqrt(3 / 5);
+
+/** Horizontal metal: Gauss points on the table of all images when far, closed form and the rest's table when near. */
+function levelSum(group: ClassGroup, x: number, y: number): number {
+  const { cx, cy, hx, hy, length, strength, all } = group;
+  const table = all!;
+  const zz = group.z1 * group.z1;
+  let sum = 0;
+  for (let j = 0; j < group.count; j++) {
+    const dx = x - cx[j]!;
+    const dy = y - cy[j]!;
+    const ux = hx[j]!;
+    const uy = hy[j]!;
+    const ll = length[j]! * length[j]!;
+    const distance = dx * dx + dy * dy;
+    const ratio = (distance + zz) / ll;
+    let value: number;
+    if (ratio > TWO_POINTS * TWO_POINTS) {
+      const across = 2 * TWO * (dx * ux + dy * uy);
+      const base = distance + TWO * TWO * (ux * ux + uy * uy);
+      value = 0.5 * (radialValue(table, base + across) + radialValue(table, base - across));
+    } else if (ratio > THREE_POINTS * THREE_POINTS) {
+      const across = 2 * THREE * (dx * ux + dy * uy);
+      const base = distance + THREE * THREE * (ux * ux + uy * uy);
+      value = (5 * (radialValue(table, base + across) + radialValue(table, base - across)) + 8 * radialValue(table, distance)) / 18;
+    } else value = nearLevel(group, j, dx, dy);
+    sum += strength[j]! * value;
+  }
+  return sum;
+}
+
+function nearLevel(group: ClassGroup, j: number, dx: number, dy: number): number {
+  const ux = group.hx[j]!;
+  const uy = group.hy[j]!;
+  const above = group.z1 * group.z1 + group.radiusSquared[j]!;
+  const length = group.length[j]!;
+  const ends = Math.sqrt((dx - ux) ** 2 + (dy - uy) ** 2 + above) + Math.sqrt((dx + ux) ** 2 + (dy + uy) ** 2 + above);
+  const own = (group.ownWeight * Math.log((ends + length) / (ends - length))) / length;
+  if (group.rest === undefined) return own;
+  const wanted = Math.ceil((NEAR_ORDER_LEAST * length) / group.rest.smoothness);
+  const { points, weights } = gaussLegendre(Math.min(NEAR_ORDER_MOST, Math.max(NEAR_ORDER_LEAST, wanted)));
+  let rest = 0;
+  for (let a = 0; a < points.length; a++) {
+    const t = 2 * points[a]! - 1;
+    const px = dx - t * ux;
+    const py = dy - t * uy;
+    rest += weights[a]! * radialValue(group.rest, px * px + py * py);
+  }
+  return own + rest;
+}
+
+/** Vertical metal is one place in plan: closed form for its own distance, the table's mean for the rest. */
+function uprightSum(group: ClassGroup, x: number, y: number): number {
+  const { z1, z2, ownWeight, rest } = group;
+  let sum = 0;
+  for (let j = 0; j < group.count; j++) {
+    const dx = x - group.cx[j]!;
+    const dy = y - group.cy[j]!;
+    const rr = dx * dx + dy * dy;
+    const aa = group.radiusSquared[j]!;
+    const length = group.length[j]!;
+    const ends = Math.sqrt(rr + aa + z1 * z1) + Math.sqrt(rr + aa + z2 * z2);
+    const own =
+      rr > (CLOSED_FORM_RATIO * 100 * length) ** 2
+        ? ownWeight / Math.sqrt(rr + ((z1 + z2) / 2) ** 2)
+        : (ownWeight * Math.log((ends + length) / (ends - length))) / length;
+    sum += group.strength[j]! * (own + (rest === undefined ? 0 : radialValue(rest, rr)));
+  }
+  return sum;
+}

@@ -1,0 +1,81 @@
+// Preconditioned conjugate gradients for a symmetric positive-definite operator.
+
+export interface ConjugateGradientResult {
+  readonly x: Float64Array;
+  /** ‖b − A x‖/‖b‖, recomputed from the solution, not from the recursion */
+  readonly residual: number;
+  readonly iterations: number;
+  readonly outcome: 'converged' | 'stalled' | 'limit';
+}
+
+export interface ConjugateGradientOptions {
+  /** relative residual asked for */
+  readonly tolerance: number;
+  readonly limit: number;
+}
+
+export const CONJUGATE_GRADIENT_DEFAULTS: ConjugateGradientOptions = { tolerance: 1e-12, limit: 1000 };
+
+/** Iterations without a smaller residual before the rounding floor is taken as reached. */
+const PATIENCE = 25;
+
+/**
+ * Solves A x = b (Hestenes and Stiefel 1952), preconditioned by a diagonal.
+ * @param multiply writes A x into its second argument
+ * @param diagonal of A, positive, shape [n]
+ */
+export function conjugateGradients(
+  multiply: (x: Float64Array, into: Float64Array) => void,
+  diagonal: Float64Array,
+  b: Float64Array,
+  options: ConjugateGradientOptions = CONJUGATE_GRADIENT_DEFAULTS,
+): ConjugateGradientResult {
+  const n = b.length;
+  const x = new Float64Array(n);
+  const r = Float64Array.from(b);
+  const p = new Float64Array(n);
+  const q = new Float64Array(n);
+  const target = options.tolerance * Math.sqrt(dot(b, b));
+  let previous = 0;
+  let iterations = 0;
+  let best = Number.POSITIVE_INFINITY;
+  let bestAt = 0;
+  let outcome: ConjugateGradientResult['outcome'] = 'limit';
+  while (iterations < options.limit) {
+    const norm = Math.sqrt(dot(r, r));
+    if (norm <= target) {
+      outcome = 'converged';
+      break;
+    }
+    if (norm < best) {
+      best = norm;
+      bestAt = iterations;
+    } else if (iterations - bestAt > PATIENCE) {
+      outcome = 'stalled';
+      break;
+    }
+    let rho = 0;
+    for (let i = 0; i < n; i++) rho += (r[i]! * r[i]!) / diagonal[i]!;
+    const beta = iterations === 0 ? 0 : rho / previous;
+    for (let i = 0; i < n; i++) p[i] = r[i]! / diagonal[i]! + beta * p[i]!;
+    multiply(p, q);
+    const alpha = rho / dot(p, q);
+    for (let i = 0; i < n; i++) {
+      x[i]! += alpha * p[i]!;
+      r[i]! -= alpha * q[i]!;
+    }
+    previous = rho;
+    iterations++;
+  }
+  multiply(x, q);
+  let error = 0;
+  for (let i = 0; i < n; i++) error += (b[i]! - q[i]!) ** 2;
+  const scale = dot(b, b);
+  return { x, residual: scale === 0 ? 0 : Math.sqrt(error / scale), iterations, outcome };
+}
+
+function dot(a: Float64Array, b: Float64Array): number {
+  let sum = 0;
+  for (let i = 0; i < a.length; i++) sum += a[i]! * b[i]!;
+  return sum;
+}

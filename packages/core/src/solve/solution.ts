@@ -1,0 +1,160 @@
+// The graph solved: for one ampere injected at a node, where it leaks and what potential the metal takes.
+import type { SegmentMesh } from '../geometry/segments.ts';
+import type { LeakageMatrix } from '../leakage/leakage-matrix.ts';
+import { branchCurrents, nodeOutflow } from '../network/branches.ts';
+import { drawnFromNodes, groundedMetal, metalBranches, segmentPotentials } from '../network/metal.ts';
+import { factorPacked, multiplyPacked, solvePacked } from '../numerics/packed-cholesky.ts';
+import { linearSolver } from './linear-solver.ts';
+
+export type MetalModel = 'resistive' | 'equipotential';
+
+/** Response to one ampere injected at one node and taken back at remote earth. */
+export interface UnitSolution {
+  readonly injectionNode: number;
+  /** current into the soil by segment of the mesh, A/A; shape [mesh.count] */
+  readonly leakage: Float64Array;
+  /** node potentials, Ω (V/A); shape [mesh.nodeCount] */
+  readonly nodePotential: Float64Array;
+  /** mean current along each segment from node1 to node2, A/A; shape [mesh.count] */
+  readonly along: Float64Array;
+  /** potential of the injection node, Ω */
+  readonly resistance: number;
+  /** current arriving at remote earth less the current injected, of the latter: the equation struck out of the Laplacian */
+  readonly balance: number;
+  /** largest failure of Kirchhoff's current law at a node of the metal, A/A */
+  readonly nodeBalance: number;
+  /** ‖R I − B Φ‖/‖B Φ‖ of the leakage equations */
+  readonly residual: number;
+}
+
+export interface GraphSolution {
+  readonly mesh: SegmentMesh;
+  readonly units: readonly UnitSolution[];
+  readonly iterations: number;
+}
+
+/**
+ * Solves the graph: R I = B Φ couples every leaking segment with the soil, Y Φ + Bᵀ I = J is Kirchhoff's law in the metal,
+ * remote earth is the grounded node. With one reference node of each piece of metal struck out and Z the inverse of
+ * the metal's reduced Laplacian, Φ = φ_c + Z(J − Bᵀ I), so (R + B Z Bᵀ) I = Σ_c φ_c 1_c + B Z J, and the reference potentials
+ * φ_c follow from the net current of each piece: what is injected, zero for metal that floats.
+ * @param injectionNodes one for each response wanted
+ * @param resistancePerMetre by conductor, Ω/m; used in the equipotential model only to share the currents along the metal
+ * @throws SolverStalled, NotPositiveDefinite
+ */
+export function solveGraph(
+  mesh: SegmentMesh,
+  matrix: LeakageMatrix,
+  injectionNodes: readonly number[],
+  resistancePerMetre: Float64Array,
+  model: MetalModel,
+): GraphSolution {
+  const { segments, size, entries } = matrix;
+  const branches = metalBranches(mesh, resistancePerMetre);
+  const { laplacian, references } = groundedMetal(mesh, branches, injectionNodes);
+  const drop = (x: Float64Array): Float64Array => laplacian.solve(drawnFromNodes(mesh, segments, x));
+  const addMetal = (x: Float64Array, into: Float64Array): void => {
+    const potential = segmentPotentials(mesh, segments, drop(x));
+    for (let k = 0; k < size; k++) into[k]! += potential[k]!;
+  };
+  const component = Int32Array.from(segments, (i) => mesh.nodeComponent[mesh.node1[i]!]!);
+  const pieces = piecesThatLeak(component, mesh.componentCount);
+  const offReference = model === 'resistive' ? injectionNodes.filter((node) => !references.includes(node)).length : 0;
+  const solver = linearSolver(
+    model === 'resistive' ? { size, entries, addMetal } : { size, entries },
+    pieces.length + offReference,
+  );
+  let iterations = 0;
+  const solve = (b: Float64Array): Float64Array => {
+    const { x, iterations: steps } = solver.solve(b);
+    iterations += steps;
+    return x;
+  };
+  const response = pieces.map((c) => solve(Float64Array.from(component, (own) => (own === c ? 1 : 0))));
+  const net = (x: Float64Array): Float64Array => netByPiece(x, component, pieces);
+  const gram = packPieces(response.map(net));
+
+  const unit = (node: number): UnitSolution => {
+    const injection = new Float64Array(mesh.nodeCount);
+    injection[node] = 1;
+    const own = pieces.indexOf(mesh.nodeComponent[node]!);
+    const away = model === 'resistive' && !references.includes(node);
+    const fromInjection = away ? laplacian.solve(injection) : undefined;
+    const extra = fromInjection === undefined ? undefined : solve(segmentPotentials(mesh, segments, fromInjection));
+    const level = new Float64Array(pieces.length);
+    level[own] = 1;
+    if (extra !== undefined) net(extra).forEach((sum, p) => { level[p]! -= sum; }); // biome-ignore format: one line of algebra
+    solvePacked(gram, pieces.length, level);
+    const current = extra === undefined ? new Float64Array(size) : Float64Array.from(extra);
+    response.forEach((x, p) => {
+      for (let k = 0; k < size; k++) current[k]! += level[p]! * x[k]!;
+    });
+    const drawn = drawnFromNodes(mesh, segments, current);
+    const relative = laplacian.solve(injection.map((j, at) => j - drawn[at]!));
+    const levelOf = new Map(pieces.map((c, p) => [c, level[p]!]));
+    const nodePotential = relative.map((v, at) => (levelOf.get(mesh.nodeComponent[at]!) ?? 0) + (model === 'resistive' ? v : 0));
+    const along = branchCurrents(branches, relative);
+    const leakage = new Float64Array(mesh.count);
+    segments.forEach((i, k) => {
+      leakage[i] = current[k]!;
+    });
+    return {
+      injectionNode: node,
+      leakage,
+      nodePotential,
+      along,
+      resistance: nodePotential[node]!,
+      balance: current.reduce((sum, i) => sum + i, 0) - 1,
+      nodeBalance: kirchhoffFailure(nodeOutflow(branches, mesh.nodeCount, along), drawn, injection),
+      residual: leakageResidual(matrix, current, segmentPotentials(mesh, segments, nodePotential)),
+    };
+  };
+  const known = new Map<number, UnitSolution>();
+  const units = injectionNodes.map((node) => {
+    const solved = known.get(node) ?? unit(node);
+    known.set(node, solved);
+    return solved;
+  });
+  return { mesh, units, iterations };
+}
+
+function piecesThatLeak(component: Int32Array, count: number): number[] {
+  const leaks = new Uint8Array(count);
+  for (const c of component) leaks[c] = 1;
+  return Array.from({ length: count }, (_, c) => c).filter((c) => leaks[c] === 1);
+}
+
+/** Net leakage of each piece of metal; shape [pieces]. */
+function netByPiece(x: Float64Array, component: Int32Array, pieces: readonly number[]): Float64Array {
+  const place = new Map(pieces.map((c, p) => [c, p]));
+  const sums = new Float64Array(pieces.length);
+  for (let k = 0; k < x.length; k++) sums[place.get(component[k]!)!]! += x[k]!;
+  return sums;
+}
+
+/** Cholesky factor of the small matrix of net currents between pieces: symmetric positive definite as K⁻¹ is. */
+function packPieces(nets: readonly Float64Array[]): Float64Array {
+  const n = nets.length;
+  const packed = new Float64Array((n * (n + 1)) / 2);
+  for (let i = 0; i < n; i++)
+    for (let j = 0; j <= i; j++) packed[(i * (i + 1)) / 2 + j] = 0.5 * (nets[j]![i]! + nets[i]![j]!);
+  factorPacked(packed, n);
+  return packed;
+}
+
+/** Largest |outflow along the metal + leakage drawn − injection| over the nodes. */
+function kirchhoffFailure(outflow: Float64Array, drawn: Float64Array, injection: Float64Array): number {
+  return outflow.reduce((most, out, node) => Math.max(most, Math.abs(out + drawn[node]! - injection[node]!)), 0);
+}
+
+function leakageResidual(matrix: LeakageMatrix, current: Float64Array, potential: Float64Array): number {
+  const product = new Float64Array(matrix.size);
+  multiplyPacked(matrix.entries, matrix.size, current, product);
+  let error = 0;
+  let scale = 0;
+  for (let k = 0; k < matrix.size; k++) {
+    error += (product[k]! - potential[k]!) ** 2;
+    scale += potential[k]! ** 2;
+  }
+  return Math.sqrt(error / scale);
+}

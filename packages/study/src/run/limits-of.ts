@@ -1,0 +1,33 @@
+// The tolerable voltages that the study's basis gives a case.
+import { coveringDerating, tolerableStepVoltage, tolerableTouchVoltage } from '@ohmstead/core';
+import type { LimitsResult } from '../results.ts';
+import type { Study } from '../study.ts';
+
+export function limitsOf(study: Study): LimitsResult {
+  const soil = study.soil.layers[0]!.resistivity_ohm_m;
+  const covering = study.surfacing;
+  return {
+    basis: 'IEEE 80',
+    body_mass_kg: study.limits.body_mass_kg,
+    soil_resistivity_ohm_m: soil,
+    surfacing_resistivity_ohm_m: covering?.resistivity_ohm_m ?? null,
+    surfacing_thickness_m: covering?.thickness_m ?? null,
+    covering_factor:
+      covering === undefined ? 1 : coveringDerating(soil, covering.resistivity_ohm_m, covering.thickness_m),
+  };
+}
+
+export interface CaseLimits {
+  readonly touch: number;
+  readonly step: number;
+}
+
+/** @param duration of the shock, s */
+export function caseLimits(limits: LimitsResult, duration: number): CaseLimits {
+  const standing = limits.surfacing_resistivity_ohm_m ?? limits.soil_resistivity_ohm_m;
+  const effective = limits.covering_factor * standing;
+  return {
+    touch: tolerableTouchVoltage(limits.body_mass_kg, effective, duration),
+    step: tolerableStepVoltage(limits.body_mass_kg, effective, duration),
+  };
+}

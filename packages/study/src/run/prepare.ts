@@ -1,0 +1,215 @@
+// From a loaded study to what the solver needs: joined metal, roles, places of injection, areas, resistances.
+import {
+  type ConductorFault,
+  type ConductorTable,
+  conductorMaterials,
+  defaultAreas,
+  floatingJoined,
+  type Joints,
+  joinConductors,
+  type SoilModel,
+} from '@ohmstead/core';
+import { type Fault, InputFaults } from '../fault.ts';
+import type { ResultsWarning } from '../results.ts';
+import type { LoadedStudy, Polygon, Study } from '../study.ts';
+
+export interface Prepared {
+  readonly loaded: LoadedStudy;
+  readonly soil: SoilModel;
+  readonly interfaces: readonly number[];
+  readonly joints: Joints;
+  /** piece of metal of each conductor */
+  readonly componentOf: Int32Array;
+  /** by case, a node of the joints */
+  readonly injectionNodes: readonly number[];
+  /** pieces of metal that a case injects into */
+  readonly energised: ReadonlySet<number>;
+  /** by conductor, Ω/m */
+  readonly resistancePerMetre: Float64Array;
+  readonly touchArea: readonly Polygon[];
+  readonly stepArea: readonly Polygon[];
+  readonly assumptions: readonly ResultsWarning[];
+  readonly warnings: readonly ResultsWarning[];
+}
+
+/** A place of injection farther than this from the node that takes it is worth a warning, m. */
+const INJECTION_DISTANCE_M = 1;
+
+/** @throws InputFaults with every fault of the drawing */
+export function prepare(loaded: LoadedStudy): Prepared {
+  const { study, conductors } = loaded;
+  const joints = joinConductors(conductors);
+  const floating = new Set(study.electrodes?.filter((e) => e.role === 'floating').map((e) => e.name) ?? []);
+  const drawing = joints.faults.length > 0 ? joints.faults : floatingJoined(conductors, joints, floating);
+  if (drawing.length > 0) throw new InputFaults(drawing.map((fault) => located(fault, loaded)));
+
+  const componentOf = componentsOfConductors(conductors, joints);
+  const assumptions: ResultsWarning[] = [];
+  const warnings: ResultsWarning[] = [];
+  const candidates = energisedNodes(joints, componentOf, conductors, floating);
+  const injectionNodes = study.cases.map((_, c) => injectionNode(loaded, joints, candidates, c, assumptions, warnings));
+  const energised = new Set(injectionNodes.map((node) => joints.nodeComponent[node]!));
+  warnings.push(...unjoined(conductors, componentOf, energised, floating), ...nearMisses(conductors, joints));
+
+  const members = Array.from({ length: conductors.count }, (_, i) => i).filter((i) => energised.has(componentOf[i]!));
+  const areas = defaultAreas(conductors, members);
+  if (study.areas?.touch === undefined)
+    assumptions.push({
+      code: 'touch-area-default',
+      message:
+        'touch is assessed inside the outer boundary of the closed meshes (without meshes: within 1 m of the conductors), supposing no accessible metal within arm’s reach outside it',
+    });
+  if (study.areas?.step === undefined)
+    assumptions.push({ code: 'step-area-default', message: 'step is assessed inside the same boundary grown by 3 m' });
+  return {
+    loaded,
+    soil: soilOf(study),
+    interfaces: interfacesOf(study),
+    joints,
+    componentOf,
+    injectionNodes,
+    energised,
+    resistancePerMetre: resistances(conductors),
+    touchArea: study.areas?.touch ?? areas.touch,
+    stepArea: study.areas?.step ?? areas.step,
+    assumptions,
+    warnings,
+  };
+}
+
+function located(fault: ConductorFault, loaded: LoadedStudy): Fault {
+  const origin = loaded.origins[fault.conductor]!;
+  return { file: origin.file, line: origin.line, place: loaded.conductors.id[fault.conductor]!, code: fault.code, message: fault.message };
+}
+
+function soilOf(study: Study): SoilModel {
+  return {
+    layers: study.soil.layers.map((layer) => ({
+      resistivity: layer.resistivity_ohm_m,
+      thickness: layer.thickness_m ?? Number.POSITIVE_INFINITY,
+    })),
+  };
+}
+
+function interfacesOf(study: Study): number[] {
+  const depths: number[] = [];
+  let depth = 0;
+  for (const layer of study.soil.layers.slice(0, -1)) {
+    depth += layer.thickness_m!;
+    depths.push(depth);
+  }
+  return depths;
+}
+
+function componentsOfConductors(table: ConductorTable, joints: Joints): Int32Array {
+  const of = new Int32Array(table.count);
+  for (let piece = 0; piece < joints.pieceCount; piece++)
+    of[joints.pieceConductor[piece]!] = joints.nodeComponent[joints.pieceNode1[piece]!]!;
+  return of;
+}
+
+/** Nodes of metal that may take a fault: every piece with a conductor of an electrode that is not floating. */
+function energisedNodes(
+  joints: Joints,
+  componentOf: Int32Array,
+  table: ConductorTable,
+  floating: ReadonlySet<string>,
+): readonly number[] {
+  const may = new Set<number>();
+  for (let i = 0; i < table.count; i++) if (!floating.has(table.electrode[i]!)) may.add(componentOf[i]!);
+  return Array.from({ length: joints.nodeCount }, (_, node) => node).filter((node) => may.has(joints.nodeComponent[node]!));
+}
+
+function injectionNode(
+  loaded: LoadedStudy,
+  joints: Joints,
+  candidates: readonly number[],
+  at: number,
+  assumptions: ResultsWarning[],
+  warnings: ResultsWarning[],
+): number {
+  const given = loaded.study.cases[at]!;
+  const place = given.inject ?? centroid(joints, candidates);
+  let best = candidates[0]!;
+  let least = Number.POSITIVE_INFINITY;
+  for (const node of candidates) {
+    const distance = Math.hypot(
+      joints.nodeX[node]! - place.x_m,
+      joints.nodeY[node]! - place.y_m,
+      joints.nodeDepth[node]! - place.depth_m,
+    );
+    if (distance < least) {
+      least = distance;
+      best = node;
+    }
+  }
+  const where = `(${joints.nodeX[best]!.toFixed(2)}, ${joints.nodeY[best]!.toFixed(2)}) m`;
+  if (given.inject === undefined)
+    assumptions.push({ code: 'injection-at-centroid', message: `case ${given.name}: the fault enters at the node nearest the centroid, ${where}` });
+  else if (least > INJECTION_DISTANCE_M)
+    warnings.push({
+      code: 'injection-moved',
+      message: `case ${given.name}: the nearest node of the energised metal, ${where}, is ${least.toFixed(2)} m from the place of injection given`,
+    });
+  return best;
+}
+
+function centroid(joints: Joints, nodes: readonly number[]): { x_m: number; y_m: number; depth_m: number } {
+  const allowed = new Set(nodes);
+  const sum = { x: 0, y: 0, z: 0, length: 0 };
+  for (let piece = 0; piece < joints.pieceCount; piece++) {
+    const a = joints.pieceNode1[piece]!;
+    const b = joints.pieceNode2[piece]!;
+    if (!allowed.has(a)) continue;
+    const length = Math.hypot(
+      joints.nodeX[b]! - joints.nodeX[a]!,
+      joints.nodeY[b]! - joints.nodeY[a]!,
+      joints.nodeDepth[b]! - joints.nodeDepth[a]!,
+    );
+    sum.x += (length * (joints.nodeX[a]! + joints.nodeX[b]!)) / 2;
+    sum.y += (length * (joints.nodeY[a]! + joints.nodeY[b]!)) / 2;
+    sum.z += (length * (joints.nodeDepth[a]! + joints.nodeDepth[b]!)) / 2;
+    sum.length += length;
+  }
+  return { x_m: sum.x / sum.length, y_m: sum.y / sum.length, depth_m: sum.z / sum.length };
+}
+
+/** Conductors of an energised electrode that no metal joins to the place of any fault. */
+function unjoined(
+  table: ConductorTable,
+  componentOf: Int32Array,
+  energised: ReadonlySet<number>,
+  floating: ReadonlySet<string>,
+): ResultsWarning[] {
+  const loose = new Map<number, string[]>();
+  for (let i = 0; i < table.count; i++) {
+    if (energised.has(componentOf[i]!) || floating.has(table.electrode[i]!)) continue;
+    loose.set(componentOf[i]!, [...(loose.get(componentOf[i]!) ?? []), table.id[i]!]);
+  }
+  return [...loose.values()].map((ids) => ({
+    code: 'piece-not-joined',
+    message: `no metal joins ${listed(ids)} to the place of a fault: solved as floating`,
+  }));
+}
+
+function nearMisses(table: ConductorTable, joints: Joints): ResultsWarning[] {
+  return joints.nearMisses.map((miss) => ({
+    code: 'near-miss',
+    message: `an end of ${table.id[miss.conductor]!} stops ${(1000 * miss.distance).toFixed(0)} mm short of ${table.id[miss.other]!} at (${miss.x.toFixed(2)}, ${miss.y.toFixed(2)}) m: taken as not joined`,
+  }));
+}
+
+const LISTED_IDS = 8;
+
+function listed(ids: readonly string[]): string {
+  const shown = ids.slice(0, LISTED_IDS).join(', ');
+  return ids.length > LISTED_IDS ? `${shown} and ${ids.length - LISTED_IDS} more` : shown;
+}
+
+function resistances(table: ConductorTable): Float64Array {
+  return table.resistancePerMetre.map((given, i) =>
+    Number.isNaN(given)
+      ? conductorMaterials.get(table.material[i]!)!.resistivity20 / (Math.PI * table.radius[i]! ** 2)
+      : given,
+  );
+}

@@ -1,0 +1,118 @@
+// The chain from a loaded study to everything that the sheet, the pack and the command line show.
+import type { Outcome } from '../outcome.ts';
+import type { Results, ResultsWarning } from '../results.ts';
+import type { LoadedStudy } from '../study.ts';
+import { programVersion } from '../version.ts';
+import { caseResult } from './case-results.ts';
+import { caseFigures, planOf, segmentTable } from './drawing.ts';
+import { electrodeResults } from './electrode-results.ts';
+import { assessedBox } from './extent.ts';
+import { type Progress, type Solved, solveLevels } from './levels.ts';
+import { limitsOf } from './limits-of.ts';
+import { type Prepared, prepare } from './prepare.ts';
+import { conductorLength, isEnergised, isRod } from './roles.ts';
+
+export interface SolveOptions {
+  /** told of long work: a stage in words and the share done, 0 to 1 */
+  readonly onProgress?: Progress;
+}
+
+/** @throws InputFaults when the drawing has faults; SolverStalled or NotPositiveDefinite for a fault of the program */
+export function solveStudy(loaded: LoadedStudy, options: SolveOptions = {}): Outcome {
+  const progress = options.onProgress ?? (() => {});
+  progress('joining conductors', 0);
+  const prepared = prepare(loaded);
+  const solved = solveLevels(prepared, progress);
+  const limits = limitsOf(loaded.study);
+  const unitOf = (c: number) => solved.units[solved.unitOfCase[c]!]!;
+  const cases = loaded.study.cases.map((input, c) => caseResult(input, unitOf(c), solved.mesh, limits));
+  const box = assessedBox(prepared);
+  return {
+    study: loaded.study,
+    results: resultsOf(prepared, solved, limits, cases),
+    plan: planOf(prepared),
+    segments: segmentTable(solved),
+    cases: cases.map(({ result }, c) => caseFigures(result.name, result.grid_current_A, unitOf(c), box)),
+  };
+}
+
+function resultsOf(
+  prepared: Prepared,
+  solved: Solved,
+  limits: Results['limits'],
+  cases: readonly ReturnType<typeof caseResult>[],
+): Results {
+  const { loaded, joints } = prepared;
+  const table = loaded.conductors;
+  const energised = Array.from({ length: table.count }, (_, i) => i).filter((i) => isEnergised(prepared, i));
+  const first = solved.units[solved.unitOfCase[0]!]!;
+  const worst = (of: (unit: Solved['graph']['units'][number]) => number): number =>
+    solved.graph.units.reduce((most, unit) => Math.max(most, Math.abs(of(unit))), 0);
+  const images = usedImages(solved);
+  return {
+    format: 'ohmstead-results',
+    version: 1,
+    program_version: programVersion,
+    title: loaded.study.title,
+    metal_model: loaded.study.metal_model ?? 'resistive',
+    electrode: {
+      resistance_ohm: first.resistance,
+      resistance_uncertainty_ohm: first.resistanceUncertainty,
+      segment_count: solved.mesh.count,
+      node_count: joints.nodeCount,
+      conductor_count: energised.length,
+      rod_count: energised.filter((i) => isRod(table, i)).length,
+      conductor_length_m: energised.reduce((sum, i) => sum + conductorLength(table, i), 0),
+    },
+    electrodes: electrodeResults(prepared, solved),
+    checks: {
+      current_balance: worst((unit) => unit.balance),
+      residual: worst((unit) => unit.residual),
+      node_balance: worst((unit) => unit.nodeBalance),
+      solver_iterations: solved.graph.iterations,
+      image_error: images.error,
+      image_count: images.count,
+    },
+    soil: {
+      layers: prepared.soil.layers.map((layer) => ({
+        resistivity_ohm_m: layer.resistivity,
+        thickness_m: Number.isFinite(layer.thickness) ? layer.thickness : null,
+      })),
+    },
+    limits,
+    mesh: solved.levels,
+    cases: cases.map(({ result }) => result),
+    snaps: joints.snaps.map((snap) => ({
+      id: table.id[snap.conductor]!,
+      other_id: table.id[snap.other]!,
+      x_m: snap.x,
+      y_m: snap.y,
+      depth_m: snap.depth,
+      distance_m: snap.distance,
+    })),
+    assumptions: [...loaded.notes, ...prepared.assumptions],
+    warnings: [...prepared.warnings, ...doubts(loaded), ...cases.flatMap(({ warnings }) => warnings)],
+  };
+}
+
+/** Images of all layer pairs that the mesh and the surface use, and the largest error of their fits. */
+function usedImages(solved: Solved): { count: number; error: number } {
+  const layers = [...new Set(solved.mesh.layer)].sort((a, b) => a - b);
+  let count = 0;
+  let error = 0;
+  for (const source of layers)
+    for (const field of new Set([0, ...layers])) {
+      const list = solved.images.list(source, field);
+      count += list.count;
+      error = Math.max(error, list.error);
+    }
+  return { count, error };
+}
+
+function doubts(loaded: LoadedStudy): ResultsWarning[] {
+  if (loaded.study.surfacing === undefined) return [];
+  return [{
+    code: 'surfacing-assumed-wet',
+    message: `the covering is taken at ${loaded.study.surfacing.resistivity_ohm_m} Ω·m in its worst, wet state and present over the whole assessed area`,
+  }];
+}
