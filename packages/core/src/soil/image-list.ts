@@ -39,8 +39,8 @@ export interface SoilImages {
   list(sourceLayer: number, fieldLayer: number): ImageList;
 }
 
-/** Amplitude error asked of a fit when the caller names none; two orders below the mesh's own error. */
-export const IMAGE_TOLERANCE = 1e-7;
+/** Amplitude error asked of a fit when the caller names none; three orders below the mesh's own error. */
+export const IMAGE_TOLERANCE = 2e-8;
 /** Image distances per decade tried in turn until the tolerance is met. */
 const NODES_PER_DECADE = [6, 8, 10, 12] as const;
 /** Wavenumber samples per decade: well past two a node. */
@@ -50,6 +50,9 @@ const NEAREST = 0.5;
 /** Farthest image, in depths of the whole stack times the largest resistivity contrast: beyond it amplitudes are flat. */
 const FARTHEST = 20;
 const FARTHEST_LEAST = 300;
+/** Wavenumbers fitted: from where the farthest image is flat, times its distance, to where the nearest has vanished (e^{−15}), times the thinnest layer. */
+const LOWEST_WAVENUMBER = 0.05;
+const HIGHEST_WAVENUMBER = 30;
 /** Tikhonov term: keeps weights of the order of the amplitudes without adding error above it. */
 const TIKHONOV = 1e-12;
 /** A weight below this moves no printed digit. */
@@ -180,23 +183,28 @@ function fitAmplitudes(
   return fits;
 }
 
+/**
+ * The fit is made in units of the thinnest layer, so that soils of one shape get the same images whatever their size.
+ */
 function fitWithNodes(
-  soil: SoilModel,
+  full: SoilModel,
   k: Float64Array,
   source: number,
   field: number,
   limit: Float64Array,
   perDecade: number,
 ): AmplitudeFits {
-  const finite = soil.layers.slice(0, -1).map((layer) => layer.thickness);
-  const thinnest = Math.min(...finite);
-  const stack = finite.reduce((sum, thickness) => sum + thickness, 0);
+  const thinnest = Math.min(...full.layers.map((layer) => layer.thickness));
+  const soil: SoilModel = {
+    layers: full.layers.map((layer) => ({ ...layer, thickness: layer.thickness / thinnest })),
+  };
+  const stack = soil.layers.slice(0, -1).reduce((sum, layer) => sum + layer.thickness, 0);
   const contrast = k.reduce((most, x) => Math.max(most, (1 + Math.abs(x)) / (1 - Math.abs(x))), 1);
-  const near = NEAREST * thinnest;
+  const near = NEAREST;
   const far = stack * Math.max(FARTHEST_LEAST, FARTHEST * contrast);
   const distances = logSpaced(near, far, perDecade, 0);
-  const low = 0.05 / far;
-  const high = 30 / thinnest;
+  const low = LOWEST_WAVENUMBER / far;
+  const high = HIGHEST_WAVENUMBER;
   const fitted = sampleAmplitudes(soil, k, source, field, logSpaced(low, high, SAMPLES_PER_DECADE, 0));
   const between = sampleAmplitudes(soil, k, source, field, logSpaced(low, high, SAMPLES_PER_DECADE, 0.5));
 
@@ -222,7 +230,7 @@ function fitWithNodes(
     });
     return solution;
   });
-  return { distances, weights, error };
+  return { distances: distances.map((distance) => distance * thinnest), weights, error };
 }
 
 /** QR of the basis e^{−β_j λ_i}, rows scaled, with the Tikhonov rows below. */
