@@ -1,21 +1,50 @@
 // All computing, pure: no file, clock, network, console or DOM.
-export type * from './geometry/conductors.ts';
-export { type ConductorMaterial, conductorMaterials } from './materials/conductor-materials.ts';
-export type * from './soil/soil-model.ts';
-export { soilImages, type ImageList, type SoilImages, IMAGE_TOLERANCE } from './soil/image-list.ts';
-export { pointPotential } from './soil/point-potential.ts';
-export type { SegmentMesh } from './geometry/segments.ts';
-export { segmentMesh } from './geometry/segmentation.ts';
-export { leakageMatrix, type LeakageMatrix, planReach } from './leakage/leakage-matrix.ts';
-export { type Branches, branchCurrents, nodeOutflow, REMOTE_EARTH } from './network/branches.ts';
-export { type ReducedLaplacian, reducedLaplacian } from './network/reduced-laplacian.ts';
-export { type GraphSolution, type MetalModel, solveGraph, type UnitSolution } from './solve/solution.ts';
-export { MODEL_FLOOR, refinementUncertainty } from './solve/uncertainty.ts';
-export { adaptiveLattice, type Box, type Lattice, latticeValue } from './field/lattice.ts';
+
+export { decrementFactor } from './fault/decrement.ts';
+export { type FaultToGround, gridCurrent } from './fault/grid-current.ts';
 export { worstTouchNearLines } from './field/floating-touch.ts';
+export { adaptiveLattice, type Box, type Lattice, latticeValue } from './field/lattice.ts';
 export { type LineProfile, lineProfile } from './field/line-profile.ts';
 export { nearestNode } from './field/metal-nearby.ts';
 export { potentialAt } from './field/potential.ts';
-export { type SurfacePotential, surfacePotential } from './field/surface-potential.ts';
 export { PACE_M, stepLattice, type WorstStep, worstStep } from './field/step.ts';
+export { type SurfacePotential, surfacePotential } from './field/surface-potential.ts';
 export { type MetalPotential, touchLattice, type WorstPlace, worstTouch } from './field/touch.ts';
+export {
+  areaSquareMetres,
+  corridors,
+  grownOutlines,
+  insideArea,
+  nearestOnBoundary,
+  type PlanLine,
+  type Polygon,
+} from './geometry/area.ts';
+export { isRod, ROD_LEAN_DEGREES } from './geometry/conductor-axis.ts';
+export type * from './geometry/conductors.ts';
+export { CONTACT_TOLERANCE_M, NEAR_MISS_GAP_M } from './geometry/contact-tolerances.ts';
+export { defaultAreas, STEP_MARGIN_M } from './geometry/default-areas.ts';
+export { floatingJoined } from './geometry/floating-joined.ts';
+export { type Joints, joinConductors } from './geometry/joints.ts';
+export { meshOutlines } from './geometry/outline.ts';
+export { segmentMesh } from './geometry/segmentation.ts';
+export type { SegmentMesh } from './geometry/segments.ts';
+export { type LeakageMatrix, leakageMatrix, planReach } from './leakage/leakage-matrix.ts';
+export { type ConductorMaterial, conductorMaterials } from './materials/conductor-materials.ts';
+export { type Branches, branchCurrents, nodeOutflow, REMOTE_EARTH } from './network/branches.ts';
+export { type ReducedLaplacian, reducedLaplacian } from './network/reduced-laplacian.ts';
+export { type Covering, coveringDeratingFactor } from './safety/covering-derating.ts';
+export {
+  type BodyMass,
+  type Footing,
+  LONGEST_DURATION_S,
+  SHORTEST_DURATION_S,
+  tolerableMetalToMetalVoltage,
+  tolerableStepVoltage,
+  tolerableTouchVoltage,
+} from './safety/tolerable-voltage.ts';
+export { judge, type Verdict } from './safety/verdict.ts';
+export { IMAGE_TOLERANCE, type ImageList, type SoilImages, soilImages } from './soil/image-list.ts';
+export { pointPotential } from './soil/point-potential.ts';
+export type * from './soil/soil-model.ts';
+export { type GraphSolution, type MetalModel, solveGraph, type UnitSolution } from './solve/solution.ts';
+export { MODEL_FLOOR, refinementUncertainty } from './solve/uncertainty.ts';
