@@ -15,7 +15,7 @@ export default defineConfig({
       {
         test: {
           name: 'browser',
-          include: ['apps/report/test/**/*.test.ts'],
+          include: ['apps/report/test/**/*.test.ts', 'apps/cli/test-e2e/**/*.test.ts'],
           environment: 'node',
           testTimeout: 120_000,
           hookTimeout: 60_000,

@@ -1,5 +1,12 @@
 // Review pack → every difference between what it holds and what its own study gives when solved again.
-import { InputFaults, type LoadedStudy, type Outcome } from '@ohmstead/study';
+import {
+  InputFaults,
+  type LoadedStudy,
+  loadStudy,
+  type Outcome,
+  type StudySource,
+  sourceFromMap,
+} from '@ohmstead/study';
 import { checkDigests } from './check-digests.ts';
 import { type Comparison, compareResults } from './compare-results.ts';
 import type { Difference } from './difference.ts';
@@ -7,12 +14,16 @@ import { jsonText } from './json-text.ts';
 import { packEntries, RESULTS_NAME, STUDY_FOLDER } from './pack-entries.ts';
 import { type Pack, readPack } from './read-pack.ts';
 import type { Renderer } from './renderer.ts';
+import { sheetRenderer } from './sheet-renderer.ts';
 
-export interface VerifyTools {
-  /** files of the study by path → study; throws InputFaults */
-  readonly load: (files: ReadonlyMap<string, Uint8Array>) => LoadedStudy;
-  readonly solve: (loaded: LoadedStudy) => Outcome | Promise<Outcome>;
-  readonly renderer: Renderer;
+export type Solve = (loaded: LoadedStudy) => Outcome | Promise<Outcome>;
+
+export interface VerifyOptions {
+  /** what to call the zip in faults */
+  readonly file?: string;
+  /** study from its files; throws InputFaults */
+  readonly load?: (source: StudySource) => LoadedStudy;
+  readonly renderer?: Renderer;
 }
 
 export interface Verification {
@@ -34,18 +45,19 @@ export interface Verification {
 /**
  * Checks a review pack: digests, results number by number, sheet, figures and tables byte by byte.
  * @param bytes the zip
- * @param tools how to load, solve and draw a study
- * @param file what to call the zip in faults
+ * @param solve the chain from study to outcome
+ * @param options the program's own reader and sheet where left out
  * @throws InputFaults where it is not a sound review pack; whatever can be compared is a difference instead
  */
 export async function verifyPack(
   bytes: Uint8Array,
-  tools: VerifyTools,
-  file?: string,
+  solve: Solve,
+  options: VerifyOptions = {},
 ): Promise<Verification> {
+  const { file, load = loadStudy, renderer = sheetRenderer } = options;
   const pack = await readPack(bytes, file);
   const digests = await checkDigests(pack);
-  const recomputed = await recompute(pack, tools);
+  const recomputed = await recompute(pack, { load, solve, renderer });
   return {
     differences: withoutRepeats([...digests, ...recomputed.differences]),
     checked: {
@@ -60,12 +72,16 @@ export async function verifyPack(
   };
 }
 
+interface Tools extends Required<Omit<VerifyOptions, 'file'>> {
+  readonly solve: Solve;
+}
+
 interface Recomputed extends Comparison {
   readonly programVersion: string | null;
   readonly renderings: number;
 }
 
-async function recompute(pack: Pack, tools: VerifyTools): Promise<Recomputed> {
+async function recompute(pack: Pack, tools: Tools): Promise<Recomputed> {
   const unsolved = { programVersion: null, renderings: 0, numbers: 0, exact: 0, close: 0 };
   const solved = await solveAgain(pack, tools);
   if (solved.kind === 'faults') return { ...unsolved, differences: solved.differences };
@@ -90,11 +106,11 @@ type Solved =
   | { readonly kind: 'solved'; readonly loaded: LoadedStudy; readonly outcome: Outcome }
   | { readonly kind: 'faults'; readonly differences: readonly Difference[] };
 
-async function solveAgain(pack: Pack, tools: VerifyTools): Promise<Solved> {
+async function solveAgain(pack: Pack, tools: Tools): Promise<Solved> {
   const inside = [...pack.entries].filter(([path]) => path.startsWith(STUDY_FOLDER));
   const files = new Map(inside.map(([path, content]) => [path.slice(STUDY_FOLDER.length), content]));
   try {
-    const loaded = tools.load(files);
+    const loaded = tools.load(sourceFromMap(files));
     return { kind: 'solved', loaded, outcome: await tools.solve(loaded) };
   } catch (error) {
     if (!(error instanceof InputFaults)) throw error;

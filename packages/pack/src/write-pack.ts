@@ -4,6 +4,7 @@ import { jsonText } from './json-text.ts';
 import { MANIFEST_NAME, makeManifest } from './manifest.ts';
 import { packEntries } from './pack-entries.ts';
 import type { Renderer } from './renderer.ts';
+import { sheetRenderer } from './sheet-renderer.ts';
 import { writeZip } from './zip-write.ts';
 
 /**
@@ -18,7 +19,7 @@ export async function writePack(
   loaded: LoadedStudy,
   outcome: Outcome,
   version: string,
-  renderer: Renderer,
+  renderer: Renderer = sheetRenderer,
 ): Promise<Uint8Array> {
   const entries = packEntries(loaded, outcome, renderer);
   const manifest = jsonText(await makeManifest(entries, version));

@@ -1,7 +1,14 @@
 // A study of one rod with an invented outcome, and a renderer that shows one number: enough to pack and to verify.
-import { InputFaults, type LoadedStudy, type Outcome, type Results, type Study } from '@ohmstead/study';
+import {
+  InputFaults,
+  type LoadedStudy,
+  type Outcome,
+  type Results,
+  type Study,
+  type StudySource,
+} from '@ohmstead/study';
 import type { Renderer } from '../src/renderer.ts';
-import type { VerifyTools } from '../src/verify-pack.ts';
+import type { VerifyOptions } from '../src/verify-pack.ts';
 
 const study: Study = {
   format: 'ohmstead-study',
@@ -21,7 +28,8 @@ export const exampleFiles: ReadonlyMap<string, Uint8Array> = new Map([
 const none = new Float64Array();
 
 /** Stands in for the reader: any study.json that parses will do. */
-export function exampleLoad(files: ReadonlyMap<string, Uint8Array>): LoadedStudy {
+export function exampleLoad(source: StudySource): LoadedStudy {
+  const files = new Map(source.paths.map((path) => [path, source.read(path)]));
   let title: unknown;
   try {
     title = JSON.parse(new TextDecoder().decode(files.get('study.json'))).title;
@@ -150,8 +158,4 @@ export const exampleRenderer: Renderer = {
   tables: ({ results }) => [{ name: 'cases', csv: `gpr_V\n${results.cases[0].gpr_V}\n` }],
 };
 
-export const exampleTools: VerifyTools = {
-  load: exampleLoad,
-  solve: exampleSolve,
-  renderer: exampleRenderer,
-};
+export const exampleOptions: VerifyOptions = { file: 'a.zip', load: exampleLoad, renderer: exampleRenderer };

@@ -1,20 +1,21 @@
 // Verification finds every kind of tampering, and nothing in an honest pack.
+import { sourceFromMap } from '@ohmstead/study';
 import { beforeAll, describe, expect, test } from 'vitest';
 import { differenceLine } from '../src/difference.ts';
 import { jsonText } from '../src/json-text.ts';
 import { makeManifest } from '../src/manifest.ts';
-import { type VerifyTools, verifyPack } from '../src/verify-pack.ts';
+import { type Solve, verifyPack } from '../src/verify-pack.ts';
 import { writePack } from '../src/write-pack.ts';
 import { readZip } from '../src/zip-read.ts';
 import { writeZip } from '../src/zip-write.ts';
-import { exampleFiles, exampleLoad, exampleRenderer, exampleSolve, exampleTools } from './example.ts';
+import { exampleFiles, exampleLoad, exampleOptions, exampleRenderer, exampleSolve } from './example.ts';
 
 const bytes = (text: string): Uint8Array => new TextEncoder().encode(text);
 const text = (content: Uint8Array | undefined): string => new TextDecoder().decode(content);
 let honest: ReadonlyMap<string, Uint8Array>;
 
 beforeAll(async () => {
-  const loaded = exampleLoad(exampleFiles);
+  const loaded = exampleLoad(sourceFromMap(exampleFiles));
   honest = await readZip(await writePack(loaded, exampleSolve(loaded), '1.2.3', exampleRenderer), 'a.zip');
 });
 
@@ -35,14 +36,14 @@ async function tampered(
   return writeZip(entries);
 }
 
-async function lines(zip: Uint8Array, tools: VerifyTools = exampleTools): Promise<readonly string[]> {
-  return (await verifyPack(zip, tools, 'a.zip')).differences.map(differenceLine);
+async function lines(zip: Uint8Array): Promise<readonly string[]> {
+  return (await verifyPack(zip, exampleSolve, exampleOptions)).differences.map(differenceLine);
 }
 
 test('an honest pack has no differences, and everything was compared', async () => {
   const numbers = text(honest.get('results.json')).match(/(?<=: )-?\d/g)?.length;
   expect(numbers).toBeGreaterThan(30);
-  expect(await verifyPack(await tampered({}), exampleTools)).toEqual({
+  expect(await verifyPack(await tampered({}), exampleSolve, exampleOptions)).toEqual({
     differences: [],
     checked: {
       packVersion: '1.2.3',
@@ -120,24 +121,18 @@ describe('changed with a forged manifest', () => {
 });
 
 test('another program version is stated, its numbers compared, and by itself no difference', async () => {
-  const newer: VerifyTools = {
-    ...exampleTools,
-    solve: (loaded) => {
-      const outcome = exampleSolve(loaded);
-      return { ...outcome, results: { ...outcome.results, program_version: '9.9.9' } };
-    },
+  const newer: Solve = (loaded) => {
+    const outcome = exampleSolve(loaded);
+    return { ...outcome, results: { ...outcome.results, program_version: '9.9.9' } };
   };
-  const { differences, checked } = await verifyPack(await tampered({}), newer);
+  const { differences, checked } = await verifyPack(await tampered({}), newer, exampleOptions);
   expect(differences).toEqual([]);
   expect(checked).toMatchObject({ packVersion: '1.2.3', programVersion: '9.9.9' });
 });
 
 test('a fault of the program while solving is not taken for a difference', async () => {
-  const broken: VerifyTools = {
-    ...exampleTools,
-    solve: () => {
-      throw new TypeError('no pivot');
-    },
+  const broken: Solve = () => {
+    throw new TypeError('no pivot');
   };
-  await expect(verifyPack(await tampered({}), broken)).rejects.toThrow('no pivot');
+  await expect(verifyPack(await tampered({}), broken, exampleOptions)).rejects.toThrow('no pivot');
 });

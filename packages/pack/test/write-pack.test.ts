@@ -1,4 +1,5 @@
 // A review pack holds what it should, names it, and is the same bytes each time.
+import { sourceFromMap } from '@ohmstead/study';
 import { expect, test } from 'vitest';
 import { readPack } from '../src/read-pack.ts';
 import { sha256 } from '../src/sha256.ts';
@@ -8,7 +9,7 @@ import { exampleFiles, exampleLoad, exampleRenderer, exampleSolve } from './exam
 import { faultsOf } from './faults-of.ts';
 import { rawZip } from './raw-zip.ts';
 
-const loaded = exampleLoad(exampleFiles);
+const loaded = exampleLoad(sourceFromMap(exampleFiles));
 const outcome = exampleSolve(loaded);
 const pack = (): Promise<Uint8Array> => writePack(loaded, outcome, '1.2.3', exampleRenderer);
 

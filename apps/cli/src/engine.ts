@@ -1,0 +1,41 @@
+// The computing that commands call, in one place, so that tests can put a quick one in its stead.
+import { type Renderer, sheetRenderer } from '@ohmstead/pack';
+import {
+  type FieldPoint,
+  type FieldValue,
+  fieldAt,
+  type LoadedStudy,
+  loadPoints,
+  loadStudy,
+  type Outcome,
+  type PointTable,
+  programVersion,
+  type StudySource,
+  solveStudy,
+} from '@ohmstead/study';
+
+export interface Engine {
+  readonly loadStudy: (source: StudySource) => LoadedStudy;
+  readonly loadPoints: (source: StudySource, path: string) => PointTable;
+  readonly solveStudy: (
+    loaded: LoadedStudy,
+    options?: { readonly onProgress?: (stage: string, share: number) => void },
+  ) => Outcome;
+  readonly fieldAt: (
+    loaded: LoadedStudy,
+    points: readonly FieldPoint[],
+    caseName: string,
+    onProgress: (stage: string, share: number) => void,
+  ) => readonly FieldValue[];
+  readonly renderer: Renderer;
+  readonly version: string;
+}
+
+export const engine: Engine = {
+  loadStudy,
+  loadPoints,
+  solveStudy,
+  fieldAt,
+  renderer: sheetRenderer,
+  version: programVersion,
+};
