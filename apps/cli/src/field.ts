@@ -14,7 +14,7 @@ import { fileSource } from './file-source.ts';
 import type { Io } from './io.ts';
 import { openStudy } from './open-study.ts';
 import { printable } from './printable.ts';
-import { progress } from './progress.ts';
+import { withProgress } from './progress.ts';
 import { suggestion } from './suggestion.ts';
 
 export const field: Command = {
@@ -44,9 +44,7 @@ async function runField(given: Arguments, io: Io, engine: Engine): Promise<ExitS
   const name = caseName(loaded, given.values.get('case'));
   for (const { code, message } of points.notes) io.err(`note: ${printable(message)} (${code})\n`);
   if (!given.values.has('case') && loaded.study.cases.length > 1) io.err(`case: ${printable(name)}\n`);
-  const shown = progress(io);
-  const values = engine.fieldAt(loaded, rows(points), name, shown.report);
-  shown.done();
+  const values = await withProgress(io, (report) => engine.fieldAt(loaded, rows(points), name, report));
   io.out(csv(values));
   return DONE;
 }

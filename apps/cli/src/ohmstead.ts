@@ -1,13 +1,21 @@
 #!/usr/bin/env node
 // The program `ohmstead`: joins the command line to the process it runs in.
 import { engine } from './engine.ts';
+import { PROGRAM_FAULT } from './exit-status.ts';
 import type { Io } from './io.ts';
 import { main } from './main.ts';
+import { systemComplaint } from './system-complaint.ts';
 
-// A reader that has seen enough (`ohmstead … | head`) closes the pipe; that is no fault of anyone.
 for (const stream of [process.stdout, process.stderr]) {
   stream.on('error', (error: NodeJS.ErrnoException) => {
-    if (error.code !== 'EPIPE') throw error;
+    // A reader that has seen enough (`ohmstead … | head`) closes the pipe; that is no fault of anyone.
+    if (error.code === 'EPIPE') return;
+    process.exitCode = PROGRAM_FAULT;
+    if (stream === process.stdout) {
+      process.stderr.write(
+        `ohmstead: standard output cannot be written: ${systemComplaint(error) ?? error.message}\n`,
+      );
+    }
   });
 }
 
@@ -20,5 +28,6 @@ const io: Io = {
   now: () => performance.now(),
 };
 
-// Set, not exit(): what is still on its way to a pipe is written out first.
-process.exitCode = await main(process.argv.slice(2), io, engine);
+const status = await main(process.argv.slice(2), io, engine);
+// Set, not exit(): what is still on its way to a pipe is written out first. A failed stream has set it already.
+process.exitCode ??= status;

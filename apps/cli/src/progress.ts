@@ -17,6 +17,19 @@ export interface Progress {
   readonly done: () => void;
 }
 
+/** Runs work with its progress shown; the redrawn line is taken away however the work ends. */
+export async function withProgress<T>(
+  io: Io,
+  work: (report: Progress['report']) => T | Promise<T>,
+): Promise<T> {
+  const shown = progress(io);
+  try {
+    return await work(shown.report);
+  } finally {
+    shown.done();
+  }
+}
+
 /**
  * Progress of one piece of work, silent for its first half second.
  * @param io where to write, and its clock

@@ -8,7 +8,7 @@ import { DONE, type ExitStatus, FINDING } from './exit-status.ts';
 import type { Io } from './io.ts';
 import { openStudy } from './open-study.ts';
 import { printable } from './printable.ts';
-import { progress } from './progress.ts';
+import { withProgress } from './progress.ts';
 import { resultTable } from './result-table.ts';
 import { verdictRows } from './verdict.ts';
 import { outputFault, writeWhole } from './write-whole.ts';
@@ -39,15 +39,14 @@ async function runSolve(given: Arguments, io: Io, engine: Engine): Promise<ExitS
   const fault = pack === undefined ? undefined : packFault(pack, given.operand);
   if (fault !== undefined) throw new InputFaults([fault]);
   const loaded = engine.loadStudy(await openStudy(given.operand));
-  const shown = progress(io);
-  const outcome = engine.solveStudy(loaded, { onProgress: shown.report });
-  if (pack !== undefined) {
-    shown.report('drawing the sheet', 0);
-    const bytes = await writePack(loaded, outcome, outcome.results.program_version, engine.renderer);
-    writeWhole(pack, bytes);
-  }
-  shown.done();
-  const { results } = outcome;
+  const { results } = await withProgress(io, async (report) => {
+    const outcome = engine.solveStudy(loaded, { onProgress: report });
+    if (pack !== undefined) {
+      report('drawing the sheet', 0);
+      writeWhole(pack, await writePack(loaded, outcome, engine.version, engine.renderer));
+    }
+    return outcome;
+  });
   io.out(given.switches.has('json') ? jsonText(results) : resultTable(results, emphasis(io)));
   for (const { code, message } of results.warnings) io.err(`warning: ${printable(message)} (${code})\n`);
   if (pack !== undefined) io.err(`review pack written: ${printable(pack)}\n`);

@@ -6,7 +6,7 @@ import { DONE, type ExitStatus, FINDING } from './exit-status.ts';
 import type { Io } from './io.ts';
 import { readZipFile } from './open-study.ts';
 import { printable } from './printable.ts';
-import { progress } from './progress.ts';
+import { withProgress } from './progress.ts';
 
 /** Differences printed at most; a pack of another study differs in thousands of numbers, and a few tell as much. */
 const MOST_SHOWN = 50;
@@ -25,13 +25,14 @@ export const verify: Command = {
 };
 
 async function runVerify(given: Arguments, io: Io, engine: Engine): Promise<ExitStatus> {
-  const shown = progress(io);
-  const { differences, checked } = await verifyPack(
-    readZipFile(given.operand),
-    (loaded) => engine.solveStudy(loaded, { onProgress: shown.report }),
-    { file: given.operand, load: engine.loadStudy, renderer: engine.renderer },
+  const bytes = readZipFile(given.operand);
+  const { differences, checked } = await withProgress(io, (report) =>
+    verifyPack(bytes, (loaded) => engine.solveStudy(loaded, { onProgress: report }), {
+      file: given.operand,
+      load: engine.loadStudy,
+      renderer: engine.renderer,
+    }),
   );
-  shown.done();
   const lines = differences.map((difference) => `difference: ${printable(differenceLine(difference))}`);
   const more = lines.length - MOST_SHOWN;
   const listed = more > 0 ? [...lines.slice(0, MOST_SHOWN), `and ${more} differences more`] : lines;

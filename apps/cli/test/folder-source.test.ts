@@ -66,10 +66,14 @@ test('what the system refuses is a fault of the input', () => {
   );
 });
 
-test('a large tree is not walked through', () => {
-  for (let i = 0; i < 600; i++) writeFileSync(join(root, 'tables', `${i}.csv`), '');
+test('hidden folders are not listed', () => {
   mkdirSync(join(root, '.hidden'));
   writeFileSync(join(root, '.hidden', 'x'), '');
+  expect(folderSource(root).paths).toEqual(['study.json', 'tables/a.csv']);
+});
+
+test('a large tree is not walked through', () => {
+  for (let i = 0; i < 600; i++) writeFileSync(join(root, 'tables', `${i}.csv`), '');
   const { paths } = folderSource(root);
   expect(paths).toHaveLength(500);
   expect(paths[0]).toBe('study.json');

@@ -1,6 +1,6 @@
 // Progress is silent for quick work, redrawn on a terminal, and plain lines in a log.
 import { expect, test } from 'vitest';
-import { progress } from '../src/progress.ts';
+import { progress, withProgress } from '../src/progress.ts';
 import { type TestIo, testIo } from './test-io.ts';
 
 function at(io: TestIo, ms: number, act: () => void): void {
@@ -42,3 +42,13 @@ test.each([{ errIsTerminal: false }, { errIsTerminal: true, env: { TERM: 'dumb' 
     expect(io.written.err).toBe('mesh  10 %\nmesh  30 %\nfield<U+001B>[2J\n');
   },
 );
+
+test('the redrawn line is taken away when the work fails, too', async () => {
+  const io = testIo({ errIsTerminal: true });
+  const work = withProgress(io, (report) => {
+    at(io, 600, () => report('mesh', 0.5));
+    throw new Error('no');
+  });
+  await expect(work).rejects.toThrow('no');
+  expect(io.written.err.endsWith('mesh  50 %\r\u001b[K')).toBe(true);
+});
