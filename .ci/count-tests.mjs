@@ -6,6 +6,8 @@ const tests = report.testResults.flatMap(({ assertionResults }) => assertionResu
 const passed = tests.filter(({ status }) => status === 'passed').length;
 const failed = tests.filter(({ status }) => status === 'failed').length;
 // A file that cannot be loaded reports no test of its own, but must not pass unseen.
-const broken = report.testResults.filter((file) => file.status === 'failed' && file.assertionResults.length === 0);
+const broken = report.testResults.filter(
+  (file) => file.status === 'failed' && file.assertionResults.length === 0,
+);
 if (tests.length === 0) throw new Error('the report lists no tests');
 console.log(passed, failed + broken.length, tests.length - passed - failed);
