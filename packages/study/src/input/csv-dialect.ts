@@ -13,7 +13,9 @@ const separators: readonly (readonly [separator: string, name: string])[] = [
 /** A number with a decimal comma standing between separators or at the ends of a line. */
 const DECIMAL_COMMA = /(?:^|[;\t|"])\s*([+-]?\d+,\d+)\s*(?=$|[;\t|"])/m;
 const LOOKS_LIKE_NUMBER = /^[+-]?\d+$/;
-/** Lines looked at for decimal commas, characters. */
+const DECIMAL_POINT = /\d\.\d/;
+const COMMA_NUMBER = /^[+-]?\d+,\d+$/;
+/** Beginning of the table looked at for decimal commas, characters. */
 const SAMPLE_CHARACTERS = 10_000;
 
 /**
@@ -34,23 +36,37 @@ export function separatorFault(text: string, header: readonly string[]): string 
   return undefined;
 }
 
+/** A row whose decimal commas have made two cells of a number each: more cells than names, and no decimal point. */
+function splitByCommas({ cells }: CsvRow, width: number): boolean {
+  const numbers = cells.filter((cell) => LOOKS_LIKE_NUMBER.test(cell)).length;
+  const points = cells.some((cell) => DECIMAL_POINT.test(cell));
+  return cells.length > width && numbers >= 2 * (cells.length - width) && !points;
+}
+
 /**
- * Tells a table whose decimal commas have split its numbers into two cells each.
+ * Tells a table whose numbers have decimal commas, bare (each then makes two cells) or in quotation marks.
  * @param header names of the columns
  * @param rows rows under the header
+ * @param isNumber tells the name of a column of numbers
  * @returns the first such row and a message, or `undefined` where fewer than half of the rows look like it
  */
 export function decimalCommaFault(
   header: readonly string[],
   rows: readonly CsvRow[],
+  isNumber: (name: string) => boolean,
 ): { readonly line: number; readonly message: string } | undefined {
-  const split = rows.filter(({ cells }) => {
-    const numbers = cells.filter((cell) => LOOKS_LIKE_NUMBER.test(cell)).length;
-    return cells.length > header.length && numbers >= 2 * (cells.length - header.length);
-  });
-  const first = split[0];
-  if (first === undefined || 2 * split.length < rows.length) return undefined;
-  const seen = `${first.cells.length} cells under ${header.length} column names`;
-  const message = `${seen}; numbers seem to have a decimal comma (0,5); ${EXPECTED}`;
-  return { line: first.line, message };
+  const numberColumns = header.map((name, i) => (isNumber(name) ? i : -1)).filter((i) => i >= 0);
+  const commaCell = ({ cells }: CsvRow): string | undefined =>
+    numberColumns.map((i) => cells[i]).find((cell) => cell !== undefined && COMMA_NUMBER.test(cell));
+
+  const split = rows.filter((row) => splitByCommas(row, header.length));
+  if (split.length > 0 && 2 * split.length >= rows.length) {
+    const seen = `${split[0].cells.length} cells under ${header.length} column names`;
+    const message = `${seen}; numbers seem to have a decimal comma (0,5); ${EXPECTED}`;
+    return { line: split[0].line, message };
+  }
+  const commas = rows.filter((row) => commaCell(row) !== undefined);
+  if (commas.length === 0 || 2 * commas.length < rows.length) return undefined;
+  const message = `numbers have a decimal comma (${shown(commaCell(commas[0]) ?? '')}); ${EXPECTED}`;
+  return { line: commas[0].line, message };
 }

@@ -2,6 +2,7 @@
 import type { Fault } from '../fault.ts';
 import { decimalCommaFault, separatorFault } from './csv-dialect.ts';
 import { type CsvRow, csvRows } from './csv-rows.ts';
+import { MOST_COLUMNS } from './limits.ts';
 import { figure, quoted, shown } from './shown-value.ts';
 
 export interface CsvTable {
@@ -81,7 +82,7 @@ function headerRowFaults(header: CsvRow, rows: readonly CsvRow[]): ReadonlyMap<C
  * Reads a table.
  * @param file name for the faults
  * @param text the whole table, line ends `\n`
- * @param kind most rows under the header, and how to tell a column name that the table needs
+ * @param kind most rows under the header, and how to tell the name of a column that the table needs
  * @param faults gets what is wrong with the table as a table
  * @returns the table with the rows that have the width of the header, or `undefined` where it cannot be judged further
  */
@@ -110,6 +111,10 @@ export function readCsvTable(
     const message = `the table has more than ${figure(kind.mostRows)} rows under its header, the most that are read`;
     return add({ code: 'too-many-rows', message });
   }
+  if (header.cells.length > MOST_COLUMNS) {
+    const message = `the header has ${header.cells.length} columns; at most ${MOST_COLUMNS} are read`;
+    return add({ line: header.line, code: 'too-many-columns', message });
+  }
   const misplaced = headerFault(all, kind.isColumn);
   if (misplaced !== undefined) return add(misplaced);
   if (below.length === 0) {
@@ -119,7 +124,7 @@ export function readCsvTable(
       message: 'the table has a header row and no rows under it',
     });
   }
-  const split = decimalCommaFault(header.cells, below);
+  const split = decimalCommaFault(header.cells, below, kind.isColumn);
   if (split !== undefined) return add({ line: split.line, code: 'decimal-comma', message: split.message });
 
   for (const fault of columnNameFaults(header, below)) add(fault);

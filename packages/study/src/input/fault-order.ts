@@ -6,8 +6,11 @@ function compareText(a: string, b: string): number {
   return a < b ? -1 : a > b ? 1 : 0;
 }
 
-function kindOf(fault: Fault): string {
-  return `${fault.file}\n${fault.place ?? ''}\n${fault.code}`;
+/** What counts as one kind: the same code in one column or one part of study.json, whichever item of a list. */
+function kindOf({ file, place, code }: Fault): string {
+  // the place of an unknown key is that key; all of them are of one kind
+  const part = code === 'unknown-key' || place === undefined ? '' : place.replace(/\[\d+\]/g, '[]');
+  return `${file}\n${part}\n${code}`;
 }
 
 /** Lists the first `MOST_ALIKE_FAULTS` of a kind at one place of one file and counts the others in one fault. */

@@ -1,7 +1,7 @@
 // JSON text to its value, with the line of every part, and with faults where the language reader would be silent.
 import type { Fault } from '../fault.ts';
 import { type JsonDocument, type JsonObject, type JsonValue, placeOf } from './json-value.ts';
-import { DEEPEST_NESTING } from './limits.ts';
+import { DEEPEST_NESTING, LONGEST_PLACE } from './limits.ts';
 import { codePointName, quoted, shown } from './shown-value.ts';
 
 /** Stops the reading at the first fault of syntax. */
@@ -24,6 +24,10 @@ export function readJson(file: string, text: string, faults: Fault[]): JsonDocum
   const lines = new Map<string, number>();
   let at = 0;
   let line = 1;
+
+  const note = (place: string, at: number): void => {
+    if (place.length <= LONGEST_PLACE) lines.set(place, at);
+  };
 
   const fail = (message: string): never => {
     faults.push({ file, line, code: 'json-syntax', message });
@@ -140,7 +144,7 @@ export function readJson(file: string, text: string, faults: Fault[]): JsonDocum
         faults.push({ file, line: keyLine, place: keyPlace, code: 'json-key-twice', message });
       }
       entries.set(key, readValue(keyPlace, depth));
-      lines.set(keyPlace, keyLine);
+      note(keyPlace, keyLine);
       skipSpace();
       if (text[at] === '}') break;
       if (text[at] !== ',') fail(`expected , or } after the value of ${quoted(key)}, found ${here()}`);
@@ -170,7 +174,7 @@ export function readJson(file: string, text: string, faults: Fault[]): JsonDocum
 
   const readValue = (place: string, depth: number): JsonValue => {
     skipSpace();
-    lines.set(place, line);
+    note(place, line);
     const character = text[at] ?? '';
     if (character === '{' || character === '[') {
       if (depth >= DEEPEST_NESTING) fail(`brackets are nested deeper than ${DEEPEST_NESTING}`);

@@ -1,5 +1,8 @@
 // Values of a JSON text and the places of their parts.
 
+import { LONGEST_SHOWN } from './limits.ts';
+import { quoted } from './shown-value.ts';
+
 export type JsonValue = null | boolean | number | string | readonly JsonValue[] | JsonObject;
 export interface JsonObject {
   readonly [key: string]: JsonValue;
@@ -30,9 +33,9 @@ export function items(value: JsonValue | undefined, key: string): readonly JsonV
   return isList(list) ? list : [];
 }
 
-/** Place of a part: `soil` and `layers` give `soil.layers`, `cases` and 0 give `cases[0]`. */
+/** Place of a part: `soil` and `layers` give `soil.layers`, `cases` and 0 give `cases[0]`; odd keys are quoted. */
 export function placeOf(parent: string, part: string | number): string {
   if (typeof part === 'number') return `${parent}[${part}]`;
-  if (!/^[A-Za-z_]\w*$/.test(part)) return `${parent}[${JSON.stringify(part)}]`;
+  if (part.length > LONGEST_SHOWN || !/^[A-Za-z_]\w*$/.test(part)) return `${parent}[${quoted(part)}]`;
   return parent === '' ? part : `${parent}.${part}`;
 }

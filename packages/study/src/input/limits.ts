@@ -3,11 +3,14 @@
 /** Largest table, bytes. Reason: 100 000 conductors take about 12 MB; a larger file is refused before it is read. */
 export const LARGEST_TABLE_BYTES = 50_000_000;
 
-/** Largest study.json, bytes. Reason: the largest studies, with polygons of 1000 corners, stay below 1 MB. */
-export const LARGEST_STUDY_BYTES = 4_000_000;
+/** Largest study.json, bytes. Reason: a hundred areas of 500 corners take 1 MB. */
+export const LARGEST_STUDY_BYTES = 2_000_000;
 
 /** Most conductors in a study. Reason: five times the largest electrode that the solver is meant for. */
 export const MOST_CONDUCTORS = 100_000;
+
+/** Most columns of a table. Reason: each name is compared with those that are known. */
+export const MOST_COLUMNS = 1000;
 
 /** Most points in a points table. Reason: a lattice of 1000 by 1000. */
 export const MOST_POINTS = 1_000_000;
@@ -23,6 +26,12 @@ export const LONGEST_SHOWN = 40;
 
 /** Longest id, electrode or case name, characters. Reason: labels on figures. */
 export const LONGEST_NAME = 120;
+
+/** Longest path of a table, characters. Reason: some file systems take no more than 255 for a name. */
+export const LONGEST_PATH = 240;
+
+/** Longest place in study.json whose line is kept, characters. Reason: those of the schema stay below 40. */
+export const LONGEST_PLACE = 300;
 
 /** Longest title, characters. Reason: one line of the sheet. */
 export const LONGEST_TITLE = 200;

@@ -46,7 +46,7 @@ export function loadStudy(source: StudySource): LoadedStudy {
   // with a table unread, which electrodes have conductors is not known
   if (paths.length > 0 && tables.length === paths.length) {
     const used = [...new Set(rows.map(({ electrode }) => electrode))];
-    faults.push(...electrodeFaults(STUDY_FILE, reading.document, used));
+    for (const fault of electrodeFaults(STUDY_FILE, reading.document, used)) faults.push(fault);
   }
   const { study } = reading;
   if (faults.length > 0 || study === undefined) throw new InputFaults(orderedFaults(faults, STUDY_FILE));

@@ -5,13 +5,15 @@ export type NumberReading =
   | { readonly kind: 'number'; readonly value: number }
   | { readonly kind: 'fault'; readonly code: string; readonly message: string };
 
-const PLAIN = /^[+-]?(?:\d+\.?\d*|\.\d+)(?:[eE][+-]?\d+)?$/;
+const PLAIN = /^[+-]?(?:\d+(?:\.\d*)?|\.\d+)(?:[eE][+-]?\d+)?$/;
 const NONZERO_MANTISSA = /^[^eE]*[1-9]/;
 const COMMA = /^[+-]?[\d.' ]*\d,[\d.,]*$/;
-const NUMBER_THEN_UNIT = /^[+-]?(?:\d+\.?\d*|\.\d+)\s*(?:[\p{L}"'°µΩ%][^\d]*)$/u;
+const NUMBER_THEN_UNIT = /^[+-]?(?:\d+(?:\.\d*)?|\.\d+)\s*(?:[\p{L}"'°µΩ%][^\d]*)$/u;
 /** U+2010 to U+2015 and U+2212: dashes and the mathematical minus, as word processors write them. */
 const DASHED_MINUS = /^[\u2010-\u2015\u2212]\s*[\d.]/;
 
+/** Longest text worth reading as a number, characters. Reason: doubles need 25, padded exports some more. */
+const LONGEST_NUMBER = 100;
 const EXPECTED = 'expected a plain decimal number such as 12.5';
 
 function fault(code: string, message: string): NumberReading {
@@ -25,6 +27,8 @@ function fault(code: string, message: string): NumberReading {
  */
 export function readNumber(text: string): NumberReading {
   if (text === '') return fault('number-empty', `the cell is empty; ${EXPECTED}`);
+  if (text.length > LONGEST_NUMBER)
+    return fault('number-text', `${shown(text)} is not a number; ${EXPECTED}`);
   if (PLAIN.test(text)) {
     const value = Number(text);
     if (!Number.isFinite(value)) {

@@ -40,7 +40,7 @@ export function readStudyJson(source: StudySource, faults: Fault[]): StudyReadin
   }
   const textFaults: Fault[] = [];
   const document = readJson(STUDY_FILE, file.text, textFaults);
-  faults.push(...textFaults);
+  for (const fault of textFaults) faults.push(fault);
   if (document === undefined) return undefined;
 
   const parsed = studySchema.safeParse(document.value);
@@ -51,6 +51,6 @@ export function readStudyJson(source: StudySource, faults: Fault[]): StudyReadin
   const judged = schemaFaults(STUDY_FILE, document, issues, studyJsonSchema()).filter(
     ({ place }) => !toldBefore.has(place) && !(survey && place !== undefined && surveyPlaces.has(place)),
   );
-  faults.push(...judged, ...ruleFaults(STUDY_FILE, document));
+  for (const fault of [...judged, ...ruleFaults(STUDY_FILE, document)]) faults.push(fault);
   return { document, bytes: file.bytes, ...(parsed.success ? { study: parsed.data } : {}) };
 }

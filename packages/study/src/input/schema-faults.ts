@@ -146,8 +146,14 @@ export function schemaFaults(
       { ...at(parts), code: codeOf(issue, value, place), message: valueMessage(issue, value, node, place) },
     ];
   });
-  // a key that stands there misspelt is not told as missing too
-  return faults.filter(
-    ({ code, place }) => code !== 'missing' || place === undefined || !misspelt.has(place),
-  );
+  const said = new Set<string>();
+  return faults.filter(({ code, place, message }) => {
+    // a key that stands there misspelt is not told as missing too
+    if (code === 'missing' && place !== undefined && misspelt.has(place)) return false;
+    // nor is a text told twice that breaks two rules, being empty and without a visible character
+    const sentence = `${place}: ${message}`;
+    if (said.has(sentence)) return false;
+    said.add(sentence);
+    return true;
+  });
 }

@@ -136,11 +136,6 @@ function caseNotes(cases: readonly CaseInput[]): readonly Note[] {
       ({ frequency_hz: hz }) => hz !== undefined && (hz < lowest || hz > highest),
       `the body-current limits of IEEE Std 80 are stated for ${lowest} to ${highest} Hz and taken as they stand`,
     ),
-    ...about(
-      'inject-assumed',
-      (one) => one.inject === undefined,
-      'no inject, the current enters at the joint nearest the centroid of the energised electrode',
-    ),
   ];
 }
 

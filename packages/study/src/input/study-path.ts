@@ -1,4 +1,5 @@
 // Paths that a study may name: relative, within its folder, the same on every system.
+import { LONGEST_PATH } from './limits.ts';
 import { invisibleCharacter } from './shown-value.ts';
 
 const INSIDE = 'expected a path within the study folder such as conductors.csv';
@@ -9,7 +10,9 @@ const INSIDE = 'expected a path within the study folder such as conductors.csv';
  * @returns a message, or `undefined` where the path stays in the study folder
  */
 export function pathFault(path: string): string | undefined {
+  if (path.length > LONGEST_PATH) return `has more than ${LONGEST_PATH} characters; ${INSIDE}`;
   if (/^[A-Za-z]:/.test(path)) return `names a drive; ${INSIDE}`;
+  if (path.includes(':')) return `has a colon; ${INSIDE}`;
   if (path.includes('\\')) return 'has a backslash; expected / between folder and file';
   if (path.startsWith('/')) return `is absolute; ${INSIDE}`;
   const parts = path.split('/');

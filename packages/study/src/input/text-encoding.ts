@@ -52,11 +52,20 @@ function decodes(bytes: Uint8Array, stream: boolean): boolean {
   }
 }
 
-/** Place of the byte at which the bytes stop being UTF-8, by halving. */
+/** Whether a byte continues a UTF-8 character, 10xxxxxx. */
+function continues(byte: number): boolean {
+  return (byte & 0xc0) === 0x80;
+}
+
+/** Place of the byte at which the bytes stop being UTF-8, by halving; of the last character where that is cut off. */
 function firstForeignByte(bytes: Uint8Array): number {
   let good = 0;
   let bad = bytes.length;
-  if (decodes(bytes, true)) return bytes.length - 1;
+  if (decodes(bytes, true)) {
+    let start = bytes.length - 1;
+    while (start > 0 && continues(bytes[start])) start--;
+    return start;
+  }
   while (bad - good > 1) {
     const middle = (good + bad) >> 1;
     if (decodes(bytes.subarray(0, middle), true)) good = middle;
