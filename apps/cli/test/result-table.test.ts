@@ -3,6 +3,7 @@ import { loadStudy, type Results, sourceFromMap } from '@ohmstead/study';
 import { expect, test } from 'vitest';
 import { exampleSolve } from '../../../packages/pack/test/example.ts';
 import { resultTable } from '../src/result-table.ts';
+import { fence } from './double.ts';
 import { RODS_CSV, STUDY_JSON } from './study-folder.ts';
 
 const bytes = (text: string): Uint8Array => new TextEncoder().encode(text);
@@ -63,21 +64,7 @@ test('names are cut and cleaned, and no line is wider than 100', () => {
           },
         },
       ],
-      electrodes: [
-        {
-          name,
-          role: 'floating',
-          potential_ratio: 0.5,
-          potential_uncertainty_ratio: 0.001,
-          leakage_ratio: 0,
-          conductor_count: 1,
-          rod_count: 0,
-          conductor_length_m: 1,
-          touch_ratio: -0.4,
-          touch_x_m: 1,
-          touch_y_m: 1,
-        },
-      ],
+      electrodes: [{ ...fence, name }],
       warnings: Array.from({ length: 30 }, (_, i) => ({ code: `some-warning-${i}`, message: 'm' })),
     },
     plain,

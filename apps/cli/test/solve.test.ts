@@ -3,7 +3,7 @@ import { readFileSync, symlinkSync } from 'node:fs';
 import { describe, expect, test } from 'vitest';
 import { rawZip } from '../../../packages/pack/test/raw-zip.ts';
 import { main } from '../src/main.ts';
-import { doubleEngine, within } from './double.ts';
+import { doubleEngine, fence, within } from './double.ts';
 import { RODS_CSV, STUDY_JSON, studyFolder } from './study-folder.ts';
 import { testIo } from './test-io.ts';
 
@@ -55,21 +55,7 @@ describe('--strict', () => {
     const fenced = (touch_ratio: number) =>
       doubleEngine((results) => ({
         ...within(results),
-        electrodes: [
-          {
-            name: 'fence',
-            role: 'floating',
-            potential_ratio: 0.5,
-            potential_uncertainty_ratio: 0,
-            leakage_ratio: 0,
-            conductor_count: 1,
-            rod_count: 0,
-            conductor_length_m: 9,
-            touch_ratio,
-            touch_x_m: 1,
-            touch_y_m: 2,
-          },
-        ],
+        electrodes: [{ ...fence, touch_ratio }],
       }));
     // the example's rise is near 3340 V and its limit 800 V: the ratio at the limit is 0.24
     expect((await solve([folder.at('study'), '--strict'], fenced(-0.3))).status).toBe(3);

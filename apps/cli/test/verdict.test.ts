@@ -3,6 +3,7 @@ import { loadStudy, type Results, sourceFromMap } from '@ohmstead/study';
 import { expect, test } from 'vitest';
 import { exampleSolve } from '../../../packages/pack/test/example.ts';
 import { answer, verdictRows } from '../src/verdict.ts';
+import { fence } from './double.ts';
 import { RODS_CSV, STUDY_JSON } from './study-folder.ts';
 
 const bytes = (text: string): Uint8Array => new TextEncoder().encode(text);
@@ -46,19 +47,6 @@ test('the margin must be as large as the uncertainty to decide', () => {
 });
 
 test('floating metal is held against the limit of touch, with both uncertainties', () => {
-  const fence = {
-    name: 'fence',
-    role: 'floating',
-    potential_ratio: 0.5,
-    potential_uncertainty_ratio: 0.001,
-    leakage_ratio: 0,
-    conductor_count: 1,
-    rod_count: 0,
-    conductor_length_m: 1,
-    touch_ratio: -0.4,
-    touch_x_m: 1,
-    touch_y_m: 2,
-  } as const;
   const rows = verdictRows({ ...example, electrodes: [fence, { ...fence, touch_ratio: null }] });
   expect(rows).toHaveLength(3);
   const [{ gpr_V, gpr_uncertainty_V }] = example.cases;

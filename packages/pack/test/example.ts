@@ -84,6 +84,7 @@ export function exampleSolve({ study }: LoadedStudy): Outcome {
     checks: {
       current_balance: 1e-12,
       residual: 1e-13,
+      node_balance: 1e-13,
       solver_iterations: 3,
       image_error: 1e-9,
       image_count: 1,
