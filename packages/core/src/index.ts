@@ -3,13 +3,18 @@
 export { decrementFactor } from './fault/decrement.ts';
 export { type FaultToGround, gridCurrent } from './fault/grid-current.ts';
 export { worstTouchNearLines } from './field/floating-touch.ts';
-export { adaptiveLattice, type Box, type Lattice, latticeValue } from './field/lattice.ts';
+export { adaptiveLattices, type Box, type Lattice, latticeValue } from './field/lattice.ts';
 export { type LineProfile, lineProfile } from './field/line-profile.ts';
-export { nearestNode } from './field/metal-nearby.ts';
+export { type NearestNode, nearestNode, nodesReached } from './field/metal-nearby.ts';
 export { potentialAt } from './field/potential.ts';
 export { PACE_M, stepLattice, type WorstStep, worstStep } from './field/step.ts';
-export { type SurfacePotential, surfacePotential } from './field/surface-potential.ts';
-export { type MetalPotential, touchLattice, type WorstPlace, worstTouch } from './field/touch.ts';
+export {
+  onePotential,
+  type SurfacePotential,
+  type SurfacePotentials,
+  surfacePotentials,
+} from './field/surface-potential.ts';
+export { areaMask, type MetalPotential, touchLattice, type WorstPlace, worstTouch } from './field/touch.ts';
 export {
   areaSquareMetres,
   corridors,

@@ -8,4 +8,7 @@ export { loadPoints, type PointTable } from './input/points-csv.ts';
 export { type StudySource, sourceFromMap } from './input/source.ts';
 export type * from './outcome.ts';
 export type * from './results.ts';
+export { type FieldPoint, type FieldValue, fieldAt } from './run/field-at.ts';
+export { type SolveOptions, solveStudy } from './run/solve-study.ts';
 export type * from './study.ts';
+export { programVersion } from './version.ts';

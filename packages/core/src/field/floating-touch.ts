@@ -1,15 +1,13 @@
 // Touch voltage on floating metal: its own potential against the soil within reach of it.
-import { corridors, insideArea, type Polygon } from '../geometry/area.ts';
-import { climbFromAll, type MetalPotential, type WorstPlace } from './touch.ts';
-import type { SurfacePotential } from './surface-potential.ts';
 
-/** Reach of a hand from where one stands, m (IEEE Std 80-2013, 3, touch voltage). */
-export const REACH_M = 1;
+import { corridors, insideArea, type PlanLine, type Polygon } from '../geometry/area.ts';
+import { REACH_M } from '../geometry/default-areas.ts';
+import type { SurfacePotential } from './surface-potential.ts';
+import { climbFromAll, type MetalPotential, type WorstPlace } from './touch.ts';
+
 /** Spacing of the places that the search starts from, m. */
 const SPACING = 2;
 const STARTS = 8;
-
-export type PlanLine = readonly [x1: number, y1: number, x2: number, y2: number];
 
 /** Worst magnitude within reach of the given lines of metal, and the sign of metal minus soil there. */
 export function worstTouchNearLines(
@@ -39,7 +37,11 @@ function placesBeside([x1, y1, x2, y2]: PlanLine): [number, number][] {
   const count = Math.max(1, Math.ceil(length / SPACING));
   const nx = (-(y2 - y1) / length) * within;
   const ny = ((x2 - x1) / length) * within;
-  return Array.from({ length: count + 1 }, (_, k) => [x1 + ((x2 - x1) * k) / count, y1 + ((y2 - y1) * k) / count] as const).flatMap(
-    ([x, y]): [number, number][] => [[x + nx, y + ny], [x - nx, y - ny]],
-  );
+  return Array.from(
+    { length: count + 1 },
+    (_, k) => [x1 + ((x2 - x1) * k) / count, y1 + ((y2 - y1) * k) / count] as const,
+  ).flatMap(([x, y]): [number, number][] => [
+    [x + nx, y + ny],
+    [x - nx, y - ny],
+  ]);
 }

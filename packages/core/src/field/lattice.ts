@@ -23,23 +23,25 @@ export interface Box {
 
 /** Side of the coarsest cell in lattice spacings; a power of two. */
 const COARSEST = 8;
+/** Mark of a point that was computed, not interpolated. */
+const COMPUTED = 1;
 /** Side of the finest cell that may be interpolated. */
 const FINEST = 2;
 
 /**
- * Fills a lattice over a box. Each cell carries 3 × 3 values; its four quarter points are computed and compared with
- * the biquadratic through the nine. Where one differs by more than the tolerance the cell is quartered, otherwise its
- * points are interpolated.
- * @param f value at a place
- * @param spacing of the lattice, m
- * @param tolerance in the unit of f
+ * Fills lattices of several functions over one box. Each cell carries 3 × 3 values; its four quarter points are computed
+ * and compared with the biquadratic through the nine. Where one function differs by more than its tolerance the cell is
+ * quartered, otherwise its points are interpolated.
+ * @param f writes the values at a place; `into` shape [tolerances]
+ * @param spacing of the lattices, m
+ * @param tolerances one a function, in its unit
  */
-export function adaptiveLattice(
-  f: (x: number, y: number) => number,
+export function adaptiveLattices(
+  f: (x: number, y: number, into: Float64Array) => void,
+  tolerances: readonly number[],
   box: Box,
   spacing: number,
-  tolerance: number,
-): Lattice {
+): Lattice[] {
   const cells = (length: number): number => Math.max(1, Math.ceil(length / (spacing * COARSEST) - 1e-9));
   const across = cells(box.east - box.west);
   const up = cells(box.north - box.south);
@@ -48,57 +50,70 @@ export function adaptiveLattice(
   // the box in the middle of the lattice
   const x0 = (box.west + box.east - (nx - 1) * spacing) / 2;
   const y0 = (box.south + box.north - (ny - 1) * spacing) / 2;
-  const values = new Float64Array(nx * ny);
+  const values = tolerances.map(() => new Float64Array(nx * ny));
+  const errors = tolerances.map(() => 0);
   const known = new Uint8Array(nx * ny);
+  const here = new Float64Array(tolerances.length);
   let evaluated = 0;
-  let error = 0;
-  const at = (i: number, j: number): number => {
+  const compute = (i: number, j: number): number => {
     const place = j * nx + i;
-    if (known[place] !== 1) {
-      values[place] = f(x0 + i * spacing, y0 + j * spacing);
-      known[place] = 1;
+    if (known[place] !== COMPUTED) {
+      f(x0 + i * spacing, y0 + j * spacing, here);
+      values.forEach((of, u) => {
+        of[place] = here[u]!;
+      });
+      known[place] = COMPUTED;
       evaluated++;
     }
-    return values[place]!;
+    return place;
   };
+  const places = new Int32Array(9);
   const nine = new Float64Array(9);
+  const take = (of: Float64Array): void => places.forEach((place, k) => void (nine[k] = of[place]!));
   const fill = (i0: number, j0: number, side: number): void => {
     const half = side / 2;
-    for (let b = 0; b < 3; b++) for (let a = 0; a < 3; a++) nine[b * 3 + a] = at(i0 + a * half, j0 + b * half);
+    for (let b = 0; b < 3; b++)
+      for (let a = 0; a < 3; a++) places[b * 3 + a] = compute(i0 + a * half, j0 + b * half);
     if (side <= FINEST) return;
     const quarter = side / 4;
-    let worst = 0;
-    for (const b of [1, 3])
-      for (const a of [1, 3]) {
-        const guess = biquadratic(nine, a / 4, b / 4);
-        worst = Math.max(worst, Math.abs(at(i0 + a * quarter, j0 + b * quarter) - guess));
-      }
-    if (worst > tolerance) {
+    const tests = [1, 3].flatMap((b) =>
+      [1, 3].map((a) => [a, b, compute(i0 + a * quarter, j0 + b * quarter)] as const),
+    );
+    const misses = values.map((of) => {
+      take(of);
+      return tests.reduce(
+        (most, [a, b, place]) => Math.max(most, Math.abs(of[place]! - biquadratic(nine, a / 4, b / 4))),
+        0,
+      );
+    });
+    if (misses.some((miss, u) => miss > tolerances[u]!)) {
       for (const b of [0, half]) for (const a of [0, half]) fill(i0 + a, j0 + b, half);
       return;
     }
-    error = Math.max(error, worst);
-    for (let b = 0; b <= side; b++)
-      for (let a = 0; a <= side; a++) {
-        const place = (j0 + b) * nx + i0 + a;
-        if (known[place] === 0) {
-          values[place] = biquadratic(nine, a / side, b / side);
-          known[place] = 2;
+    values.forEach((of, u) => {
+      errors[u] = Math.max(errors[u]!, misses[u]!);
+      take(of);
+      for (let b = 0; b <= side; b++)
+        for (let a = 0; a <= side; a++) {
+          const place = (j0 + b) * nx + i0 + a;
+          if (known[place] !== COMPUTED) of[place] = biquadratic(nine, a / side, b / side);
         }
-      }
+    });
   };
   for (let j = 0; j < up; j++) for (let i = 0; i < across; i++) fill(i * COARSEST, j * COARSEST, COARSEST);
-  return { x0, y0, spacing, nx, ny, values, evaluated, error };
+  return values.map((of, u) => ({ x0, y0, spacing, nx, ny, values: of, evaluated, error: errors[u]! }));
 }
 
 /** Value of the biquadratic through 3 × 3 values at (u, v) in the unit square. */
 function biquadratic(nine: Float64Array, u: number, v: number): number {
-  const rows = [0, 3, 6].map((r) => quadratic(nine[r]!, nine[r + 1]!, nine[r + 2]!, u));
-  return quadratic(rows[0]!, rows[1]!, rows[2]!, v);
-}
-
-function quadratic(a: number, b: number, c: number, u: number): number {
-  return a * (1 - u) * (1 - 2 * u) + b * 4 * u * (1 - u) + c * u * (2 * u - 1);
+  const a = (1 - u) * (1 - 2 * u);
+  const b = 4 * u * (1 - u);
+  const c = u * (2 * u - 1);
+  return (
+    (1 - v) * (1 - 2 * v) * (a * nine[0]! + b * nine[1]! + c * nine[2]!) +
+    4 * v * (1 - v) * (a * nine[3]! + b * nine[4]! + c * nine[5]!) +
+    v * (2 * v - 1) * (a * nine[6]! + b * nine[7]! + c * nine[8]!)
+  );
 }
 
 /** Value between lattice points by bicubic convolution (Keys, IEEE Trans. ASSP 29, 1981); clamped at the border. */
@@ -114,7 +129,8 @@ export function latticeValue(lattice: Lattice, x: number, y: number): number {
   for (let b = -1; b <= 2; b++) {
     const row = Math.min(ny - 1, Math.max(0, j + b)) * nx;
     const wy = keys(v - b);
-    for (let a = -1; a <= 2; a++) sum += wy * keys(u - a) * values[row + Math.min(nx - 1, Math.max(0, i + a))]!;
+    for (let a = -1; a <= 2; a++)
+      sum += wy * keys(u - a) * values[row + Math.min(nx - 1, Math.max(0, i + a))]!;
   }
   return sum;
 }

@@ -1,6 +1,7 @@
 // Surface potential and touch voltage along a straight line on the surface.
-import type { MetalPotential } from './touch.ts';
+
 import type { SurfacePotential } from './surface-potential.ts';
+import type { MetalPotential } from './touch.ts';
 
 /** Shape [count] each. */
 export interface LineProfile {

@@ -11,8 +11,8 @@ const SHRINK = 0.5;
 const EVALUATION_LIMIT = 2000;
 
 /**
- * Compass search (Kolda, Lewis and Torczon, SIAM Review 45, 2003): tries every direction at the present step, moves to
- * the best that climbs, otherwise halves the step, until the step is below `finest` of its start.
+ * Compass search (Kolda, Lewis and Torczon, SIAM Review 45, 2003): takes the first direction that climbs at the present
+ * step and goes on from it; when none does, halves the step, until it is below `finest` of its start.
  * @param f function to climb; −Infinity outside its region
  * @param directions moves to try, in the units of the variables, at full step
  * @param finest smallest step, as a share of the first
@@ -26,20 +26,24 @@ export function climb(
   let at = start;
   let value = f(start);
   let step = 1;
+  let first = 0;
   let evaluations = 1;
   while (step >= finest && evaluations < EVALUATION_LIMIT) {
-    let better: readonly number[] | undefined;
-    for (const direction of directions(at)) {
-      const tried = at.map((coordinate, k) => coordinate + step * direction[k]!);
+    const moves = directions(at);
+    let climbed = false;
+    for (let k = 0; k < moves.length && !climbed; k++) {
+      const move = moves[(first + k) % moves.length]!;
+      const tried = at.map((coordinate, c) => coordinate + step * move[c]!);
       const there = f(tried);
       evaluations++;
       if (there > value) {
+        at = tried;
         value = there;
-        better = tried;
+        first = (first + k) % moves.length;
+        climbed = true;
       }
     }
-    if (better === undefined) step *= SHRINK;
-    else at = better;
+    if (!climbed) step *= SHRINK;
   }
   return { at, value };
 }

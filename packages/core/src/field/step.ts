@@ -3,7 +3,7 @@ import { insideArea, nearestOnBoundary, type Polygon } from '../geometry/area.ts
 import { type Lattice, latticeValue } from './lattice.ts';
 import { climb } from './local-search.ts';
 import type { SurfacePotential } from './surface-potential.ts';
-import { latticeMaxima, type WorstPlace } from './touch.ts';
+import { latticeMaxima, type WorstPlace, worthwhile } from './touch.ts';
 
 /** Distance between the feet, m (IEEE Std 80-2013, 3, step voltage). */
 export const PACE_M = 1;
@@ -16,8 +16,8 @@ export interface WorstStep extends WorstPlace {
 
 /** Directions tried on the map over half a turn: the worst falls between two by at most 1 − cos 7.5° = 0.9 %. */
 const MAP_DIRECTIONS = 12;
-const STARTS = 6;
-const FINEST_STEP = 1 / 256;
+const STARTS = 3;
+const FINEST_STEP = 1 / 64;
 /** First turn of the search, rad. */
 const TURN = Math.PI / 12;
 
@@ -31,7 +31,10 @@ export function stepLattice(potential: Lattice): Lattice {
       let most = 0;
       for (let d = 0; d < MAP_DIRECTIONS; d++) {
         const [ex, ey] = halfPace((Math.PI * d) / MAP_DIRECTIONS);
-        most = Math.max(most, Math.abs(latticeValue(potential, x + ex, y + ey) - latticeValue(potential, x - ex, y - ey)));
+        most = Math.max(
+          most,
+          Math.abs(latticeValue(potential, x + ex, y + ey) - latticeValue(potential, x - ex, y - ey)),
+        );
       }
       values[j * potential.nx + i] = most;
     }
@@ -39,20 +42,27 @@ export function stepLattice(potential: Lattice): Lattice {
 }
 
 /** The largest step voltage whose midpoint lies in an area: maxima of the map, then a search on the exact field. */
-export function worstStep(step: Lattice, surface: SurfacePotential, area: readonly Polygon[]): WorstStep {
+export function worstStep(
+  step: Lattice,
+  within: Uint8Array,
+  surface: SurfacePotential,
+  area: readonly Polygon[],
+): WorstStep {
   const inside = (x: number, y: number): boolean => insideArea(area, x, y);
   const voltage = (at: readonly number[]): number => {
     const [ex, ey] = halfPace(at[2]!);
     return Math.abs(surface(at[0]! + ex, at[1]! + ey) - surface(at[0]! - ex, at[1]! - ey));
   };
-  const f = (at: readonly number[]): number => (inside(at[0]!, at[1]!) ? voltage(at) : Number.NEGATIVE_INFINITY);
+  const f = (at: readonly number[]): number =>
+    inside(at[0]!, at[1]!) ? voltage(at) : Number.NEGATIVE_INFINITY;
   const s = step.spacing;
   const directions = (at: readonly number[]): readonly (readonly number[])[] => {
     const [, , tx, ty] = nearestOnBoundary(area, at[0]!, at[1]!);
     return [[s, 0, 0], [-s, 0, 0], [0, s, 0], [0, -s, 0], [0, 0, TURN], [0, 0, -TURN], [s * tx, s * ty, 0], [-s * tx, -s * ty, 0]];
   }; // biome-ignore format: moves
   let worst = { at: [Number.NaN, Number.NaN, 0] as readonly number[], value: Number.NEGATIVE_INFINITY };
-  for (const [x, y] of latticeMaxima(step, inside).slice(0, STARTS)) {
+  const height = (at: readonly [number, number]): number => latticeValue(step, at[0], at[1]);
+  for (const [x, y] of worthwhile(latticeMaxima(step, within), height, STARTS)) {
     let start = [x, y, 0];
     for (let d = 1; d < MAP_DIRECTIONS; d++) {
       const turned = [x, y, (Math.PI * d) / MAP_DIRECTIONS];

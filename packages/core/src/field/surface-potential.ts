@@ -11,6 +11,13 @@ import { potentialAt } from './potential.ts';
 /** Surface potential at a place, V (or Ω for a leakage per ampere). */
 export type SurfacePotential = (x: number, y: number) => number;
 
+/** Surface potentials of several leakages of one mesh, for hardly more than the price of one. */
+export interface SurfacePotentials {
+  readonly count: number;
+  /** writes the potential of each leakage at a place; `into` shape [count] */
+  at(x: number, y: number, into: Float64Array): void;
+}
+
 /** Segments of one depth class that leak; coordinates and currents packed, shape [count] each. */
 interface ClassGroup {
   readonly vertical: boolean;
@@ -24,7 +31,7 @@ interface ClassGroup {
   readonly hy: Float64Array;
   readonly length: Float64Array;
   readonly radiusSquared: Float64Array;
-  /** leakage times the list's factor */
+  /** leakages times the list's factor, shape [count × leakages] */
   readonly strength: Float64Array;
   /** weight of the images at the metal's own distance: the source and its reflection in the surface */
   readonly ownWeight: number;
@@ -35,8 +42,8 @@ interface ClassGroup {
 }
 
 /** Ratio of distance to length past which two, and three, Gauss points are enough (see gaussOrder). */
-const TWO_POINTS = 8;
-const THREE_POINTS = 3.2;
+const TWO_POINTS = 7.93;
+const THREE_POINTS = 3.187;
 /** Gauss points of a near horizontal segment on the table of its farther images, per length over the table's smoothness. */
 const NEAR_ORDER_LEAST = 4;
 const NEAR_ORDER_MOST = 12;
@@ -45,37 +52,54 @@ const NEAR_ORDER_MOST = 12;
 const NO_OFFSET = 1e-12;
 
 /**
- * Prepares the evaluation of the surface potential of a leakage.
- * @param leakage current into the soil by segment, A; shape [mesh.count]
+ * Prepares the evaluation of the surface potentials of leakages.
+ * @param leakages current into the soil by segment, A; shape [mesh.count] each
  * @param reach largest horizontal distance from metal to a place that will be asked for, m
  */
-export function surfacePotential(
+export function surfacePotentials(
   mesh: SegmentMesh,
   images: SoilImages,
-  leakage: Float64Array,
+  leakages: readonly Float64Array[],
   reach: number,
-): SurfacePotential {
+): SurfacePotentials {
   const classes = depthClasses(mesh);
-  const groups = classes.classes.map((c, at) => classGroup(mesh, images, leakage, c, at, classes.of, reach));
-  const sloped = leakage.map((current, i) => (classes.of[i]! < 0 ? current : 0));
-  const anySloped = sloped.some((current) => current !== 0);
+  const groups = classes.classes.map((c, at) => classGroup(mesh, images, leakages, c, at, classes.of, reach));
+  const sloped = leakages.map((leakage) => leakage.map((current, i) => (classes.of[i]! < 0 ? current : 0)));
+  const anySloped = sloped.some((leakage) => leakage.some((current) => current !== 0));
+  return {
+    count: leakages.length,
+    at(x, y, into) {
+      for (let u = 0; u < leakages.length; u++)
+        into[u] = anySloped ? potentialAt(mesh, images, sloped[u]!, x, y, 0) : 0;
+      for (const group of groups) {
+        if (group.vertical) addUpright(group, x, y, into);
+        else addLevel(group, x, y, into);
+      }
+    },
+  };
+}
+
+/** The potential of one of several leakages, alone. */
+export function onePotential(potentials: SurfacePotentials, u: number): SurfacePotential {
+  const values = new Float64Array(potentials.count);
   return (x, y) => {
-    let sum = anySloped ? potentialAt(mesh, images, sloped, x, y, 0) : 0;
-    for (const group of groups) sum += group.vertical ? uprightSum(group, x, y) : levelSum(group, x, y);
-    return sum;
+    potentials.at(x, y, values);
+    return values[u]!;
   };
 }
 
 function classGroup(
   mesh: SegmentMesh,
   images: SoilImages,
-  leakage: Float64Array,
+  leakages: readonly Float64Array[],
   c: DepthClass,
   at: number,
   of: Int32Array,
   reach: number,
 ): ClassGroup {
-  const members = Array.from({ length: mesh.count }, (_, i) => i).filter((i) => of[i] === at && leakage[i] !== 0);
+  const members = Array.from({ length: mesh.count }, (_, i) => i).filter(
+    (i) => of[i] === at && mesh.leaking[i] === 1,
+  );
   const list = images.list(c.layer, 0);
   const pick = (value: (i: number) => number): Float64Array => Float64Array.from(members, value);
   const every = Array.from({ length: list.count }, (_, k) => k);
@@ -92,7 +116,7 @@ function classGroup(
     hy: pick((i) => (mesh.y2[i]! - mesh.y1[i]!) / 2),
     length: pick((i) => mesh.length[i]!),
     radiusSquared: pick((i) => mesh.radius[i]! ** 2),
-    strength: pick((i) => leakage[i]! * list.factor),
+    strength: Float64Array.from(members.flatMap((i) => leakages.map((leakage) => leakage[i]! * list.factor))),
     ownWeight: own.reduce((sum, k) => sum + list.weight[k]!, 0),
     all: c.vertical ? undefined : smoothKernel(list, every, c, 0, reach),
     rest: smoothKernel(list, others, c, 0, reach),
@@ -103,19 +127,17 @@ const TWO = Math.sqrt(1 / 3);
 const THREE = Math.sqrt(3 / 5);
 
 /** Horizontal metal: Gauss points on the table of all images when far, closed form and the rest's table when near. */
-function levelSum(group: ClassGroup, x: number, y: number): number {
+function addLevel(group: ClassGroup, x: number, y: number, into: Float64Array): void {
   const { cx, cy, hx, hy, length, strength, all } = group;
   const table = all!;
   const zz = group.z1 * group.z1;
-  let sum = 0;
   for (let j = 0; j < group.count; j++) {
     const dx = x - cx[j]!;
     const dy = y - cy[j]!;
     const ux = hx[j]!;
     const uy = hy[j]!;
-    const ll = length[j]! * length[j]!;
     const distance = dx * dx + dy * dy;
-    const ratio = (distance + zz) / ll;
+    const ratio = (distance + zz) / (length[j]! * length[j]!);
     let value: number;
     if (ratio > TWO_POINTS * TWO_POINTS) {
       const across = 2 * TWO * (dx * ux + dy * uy);
@@ -124,11 +146,16 @@ function levelSum(group: ClassGroup, x: number, y: number): number {
     } else if (ratio > THREE_POINTS * THREE_POINTS) {
       const across = 2 * THREE * (dx * ux + dy * uy);
       const base = distance + THREE * THREE * (ux * ux + uy * uy);
-      value = (5 * (radialValue(table, base + across) + radialValue(table, base - across)) + 8 * radialValue(table, distance)) / 18;
+      const outer = radialValue(table, base + across) + radialValue(table, base - across);
+      value = (5 * outer + 8 * radialValue(table, distance)) / 18;
     } else value = nearLevel(group, j, dx, dy);
-    sum += strength[j]! * value;
+    addScaled(strength, j, value, into);
   }
-  return sum;
+}
+
+function addScaled(strength: Float64Array, j: number, value: number, into: Float64Array): void {
+  const count = into.length;
+  for (let u = 0; u < count; u++) into[u]! += strength[j * count + u]! * value;
 }
 
 function nearLevel(group: ClassGroup, j: number, dx: number, dy: number): number {
@@ -136,7 +163,8 @@ function nearLevel(group: ClassGroup, j: number, dx: number, dy: number): number
   const uy = group.hy[j]!;
   const above = group.z1 * group.z1 + group.radiusSquared[j]!;
   const length = group.length[j]!;
-  const ends = Math.sqrt((dx - ux) ** 2 + (dy - uy) ** 2 + above) + Math.sqrt((dx + ux) ** 2 + (dy + uy) ** 2 + above);
+  const ends =
+    Math.sqrt((dx - ux) ** 2 + (dy - uy) ** 2 + above) + Math.sqrt((dx + ux) ** 2 + (dy + uy) ** 2 + above);
   const own = (group.ownWeight * Math.log((ends + length) / (ends - length))) / length;
   if (group.rest === undefined) return own;
   const wanted = Math.ceil((NEAR_ORDER_LEAST * length) / group.rest.smoothness);
@@ -152,9 +180,8 @@ function nearLevel(group: ClassGroup, j: number, dx: number, dy: number): number
 }
 
 /** Vertical metal is one place in plan: closed form for its own distance, the table's mean for the rest. */
-function uprightSum(group: ClassGroup, x: number, y: number): number {
+function addUpright(group: ClassGroup, x: number, y: number, into: Float64Array): void {
   const { z1, z2, ownWeight, rest } = group;
-  let sum = 0;
   for (let j = 0; j < group.count; j++) {
     const dx = x - group.cx[j]!;
     const dy = y - group.cy[j]!;
@@ -166,7 +193,6 @@ function uprightSum(group: ClassGroup, x: number, y: number): number {
       rr > (CLOSED_FORM_RATIO * 100 * length) ** 2
         ? ownWeight / Math.sqrt(rr + ((z1 + z2) / 2) ** 2)
         : (ownWeight * Math.log((ends + length) / (ends - length))) / length;
-    sum += group.strength[j]! * (own + (rest === undefined ? 0 : radialValue(rest, rr)));
+    addScaled(group.strength, j, own + (rest === undefined ? 0 : radialValue(rest, rr)), into);
   }
-  return sum;
 }

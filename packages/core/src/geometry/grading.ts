@@ -29,12 +29,27 @@ const TIP_GROWTH = 3;
  * @param radius m
  * @param level 0 for the coarsest mesh, one more for each refinement
  */
-export function spanCuts(length: number, radius: number, first: SpanEnd, last: SpanEnd, level: number): number[] {
+export function spanCuts(
+  length: number,
+  radius: number,
+  first: SpanEnd,
+  last: SpanEnd,
+  level: number,
+): number[] {
   if (first === 'tip' && last === 'tip') {
     const half = spanCuts(length / 2, radius, 'tip', 'surface', level);
-    return [...half, ...half.slice(0, -1).reverse().map((s) => length - s)];
+    return [
+      ...half,
+      ...half
+        .slice(0, -1)
+        .reverse()
+        .map((s) => length - s),
+    ];
   }
-  if (last === 'tip') return spanCuts(length, radius, 'tip', first, level).map((s) => length - s).reverse();
+  if (last === 'tip')
+    return spanCuts(length, radius, 'tip', first, level)
+      .map((s) => length - s)
+      .reverse();
   if (first === 'tip') return tipCuts(length, radius, last, level);
   return jointCuts(length, radius, first, last, level);
 }

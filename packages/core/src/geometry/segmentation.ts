@@ -40,7 +40,16 @@ export function segmentMesh(
     const last = joints.pieceNode2[piece]!;
     const cuts = insulated
       ? [start, end]
-      : pieceCuts(table, c, start, end, interfaces, level, endKind(table, c, start, joints, first), endKind(table, c, end, joints, last));
+      : pieceCuts(
+          table,
+          c,
+          start,
+          end,
+          interfaces,
+          level,
+          endKind(table, c, start, joints, first),
+          endKind(table, c, end, joints, last),
+        );
     let from = first;
     for (let k = 0; k + 1 < cuts.length; k++) {
       const t1 = cuts[k]!;

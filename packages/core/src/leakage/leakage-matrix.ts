@@ -19,7 +19,7 @@ export interface LeakageMatrix {
 /** Pairs of segments that make a table for their two depth classes worth its building. */
 const TABLE_PAIRS = 400;
 /** Gauss points for the smooth images of a near pair, by their distance over the longer length; below the last, image by image. */
-const NEAR_ORDERS: readonly (readonly [ratio: number, order: number])[] = [[2, 4], [1, 6], [0.5, 10]]; // biome-ignore format: one pair a step
+const NEAR_ORDERS: readonly (readonly [ratio: number, order: number])[] = [[1.987, 4], [0.993, 6], [0.497, 10]]; // biome-ignore format: one pair a step
 
 /**
  * Assembles the matrix: R_ij = factor·Σ_images weight·(1/L_i L_j)∬ ds dt/√(r² + a²), a the larger radius.
@@ -35,7 +35,8 @@ export function leakageMatrix(mesh: SegmentMesh, images: SoilImages): LeakageMat
   const points = gaussPoints(mesh);
   for (let i = 0; i < size; i++) {
     const row = (i * (i + 1)) / 2;
-    for (let j = 0; j <= i; j++) entries[row + j] = entry(mesh, images, classes, tables, points, segments[i]!, segments[j]!);
+    for (let j = 0; j <= i; j++)
+      entries[row + j] = entry(mesh, images, classes, tables, points, segments[i]!, segments[j]!);
   }
   return { segments, size, entries };
 }
@@ -67,14 +68,18 @@ function entry(
   const table = list.count === list.primaryCount ? undefined : tables.of(source, field, list);
   if (distance < CLOSED_FORM_RATIO * longer) {
     const primary = imagePairSum(mesh, field, source, list, 0, list.primaryCount);
-    const rest = list.count === list.primaryCount ? 0 : nearRest(mesh, classes, field, source, list, table, distance / longer, longer);
+    const rest =
+      list.count === list.primaryCount
+        ? 0
+        : nearRest(mesh, classes, field, source, list, table, distance / longer, longer);
     return list.factor * (primary + rest);
   }
   const orderF = gaussOrder(distance / mesh.length[field]!);
   const orderS = gaussOrder(distance / mesh.length[source]!);
   const radius = Math.max(mesh.radius[i]!, mesh.radius[j]!);
   const aa = radius * radius;
-  if (table === undefined) return list.factor * farSum(points, field, source, orderF, orderS, list, list.count, aa, undefined);
+  if (table === undefined)
+    return list.factor * farSum(points, field, source, orderF, orderS, list, list.count, aa, undefined);
   if (classes.classes[classes.of[source]!]!.vertical === classes.classes[classes.of[field]!]!.vertical)
     return list.factor * farSum(points, field, source, orderF, orderS, list, list.primaryCount, aa, table);
   return (
@@ -193,7 +198,8 @@ function tableCache(mesh: SegmentMesh, images: SoilImages, classes: DepthClasses
         table = f.vertical
           ? smoothKernel(images.list(f.layer, s.layer), chosen, f, s.z1, reach)
           : smoothKernel(list, chosen, s, f.z1, reach);
-        if (table !== undefined && f.vertical) table = scaled(table, images.list(f.layer, s.layer).factor / list.factor);
+        if (table !== undefined && f.vertical)
+          table = scaled(table, images.list(f.layer, s.layer).factor / list.factor);
       }
       made[cs * count + cf] = table;
       return table;
@@ -221,7 +227,10 @@ export function planReach(mesh: SegmentMesh): number {
 }
 
 /** Gauss points of every segment, by order (index 1 to 4): coordinates shape [count × order]. */
-type GaussPoints = readonly ({ x: Float64Array; y: Float64Array; z: Float64Array; weights: Float64Array } | undefined)[];
+type GaussPoints = readonly (
+  | { x: Float64Array; y: Float64Array; z: Float64Array; weights: Float64Array }
+  | undefined
+)[];
 
 function gaussPoints(mesh: SegmentMesh): GaussPoints {
   return [0, 1, 2, 3, 4].map((order) => {

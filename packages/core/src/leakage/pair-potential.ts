@@ -4,17 +4,20 @@ import { gaussLegendre } from '../numerics/gauss-legendre.ts';
 import type { ImageList } from '../soil/image-list.ts';
 import { meanInverseDistance, selfInverseDistance, type Wire } from './wire-pair.ts';
 
-/** Distance between centres over the longer length, below which the closed double integral is used. */
-export const CLOSED_FORM_RATIO = 2;
+/**
+ * Distance between centres over the longer length, below which the closed double integral is used. This and the ratios
+ * below avoid round numbers, which regular grids hit exactly: a tie broken by rounding would spoil symmetries.
+ */
+export const CLOSED_FORM_RATIO = 1.987;
 
 /**
  * Gauss points on a segment seen from a given distance over its length, so that an entry errs by less than 3e-6:
  * the n-point rule on 1/r errs by 2/180·x⁴, 2/2 800·x⁶, 2·2.3e-5·x⁸ of the entry at length over distance x.
  */
 export function gaussOrder(ratio: number): number {
-  if (ratio >= 200) return 1;
-  if (ratio >= 8) return 2;
-  if (ratio >= 3.2) return 3;
+  if (ratio >= 197.3) return 1;
+  if (ratio >= 7.93) return 2;
+  if (ratio >= 3.187) return 3;
   return 4;
 }
 

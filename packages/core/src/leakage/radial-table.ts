@@ -20,7 +20,10 @@ const BINS_PER_UNIT = 6;
 const TERMS = 6;
 
 /** Chebyshev points on [−1, 1] and the matrix from values there to coefficients of powers. */
-const POINTS: readonly number[] = Array.from({ length: TERMS }, (_, k) => -Math.cos((Math.PI * (k + 0.5)) / TERMS));
+const POINTS: readonly number[] = Array.from(
+  { length: TERMS },
+  (_, k) => -Math.cos((Math.PI * (k + 0.5)) / TERMS),
+);
 const TO_POWERS: readonly (readonly number[])[] = inverse(
   new Matrix(POINTS.map((point) => Array.from({ length: TERMS }, (_, power) => point ** power))),
 ).to2DArray();
@@ -58,8 +61,5 @@ export function radialValue(table: RadialTable, rr: number): number {
   const u = 2 * (y - bin) - 1;
   const c = table.coefficients;
   const at = bin * TERMS;
-  return (
-    c[at]! +
-    u * (c[at + 1]! + u * (c[at + 2]! + u * (c[at + 3]! + u * (c[at + 4]! + u * c[at + 5]!))))
-  );
+  return c[at]! + u * (c[at + 1]! + u * (c[at + 2]! + u * (c[at + 3]! + u * (c[at + 4]! + u * c[at + 5]!))));
 }

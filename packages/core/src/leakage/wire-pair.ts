@@ -61,7 +61,10 @@ export function meanInverseDistance(p: Wire, q: Wire, radius: number): number {
     const from = Math.min(along, y2);
     const to = Math.max(along, y2);
     return (
-      (parallelTerm(lp - from, gap) - parallelTerm(-from, gap) - parallelTerm(lp - to, gap) + parallelTerm(-to, gap)) /
+      (parallelTerm(lp - from, gap) -
+        parallelTerm(-from, gap) -
+        parallelTerm(lp - to, gap) +
+        parallelTerm(-to, gap)) /
       (lp * lq)
     );
   }

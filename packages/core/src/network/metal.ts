@@ -42,6 +42,13 @@ export function drawnFromNodes(mesh: SegmentMesh, segments: Int32Array, leakage:
 }
 
 /** B Φ: potential of each leaking segment, the mean of its end nodes; shape [segments]. */
-export function segmentPotentials(mesh: SegmentMesh, segments: Int32Array, nodePotential: Float64Array): Float64Array {
-  return Float64Array.from(segments, (i) => 0.5 * (nodePotential[mesh.node1[i]!]! + nodePotential[mesh.node2[i]!]!));
+export function segmentPotentials(
+  mesh: SegmentMesh,
+  segments: Int32Array,
+  nodePotential: Float64Array,
+): Float64Array {
+  return Float64Array.from(
+    segments,
+    (i) => 0.5 * (nodePotential[mesh.node1[i]!]! + nodePotential[mesh.node2[i]!]!),
+  );
 }

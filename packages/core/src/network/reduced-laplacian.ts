@@ -18,7 +18,11 @@ export interface ReducedLaplacian {
  * @param grounded nodes held at zero potential besides remote earth
  * @throws NotPositiveDefinite when a part of the network touches no grounded node
  */
-export function reducedLaplacian(branches: Branches, nodeCount: number, grounded: readonly number[]): ReducedLaplacian {
+export function reducedLaplacian(
+  branches: Branches,
+  nodeCount: number,
+  grounded: readonly number[],
+): ReducedLaplacian {
   const place = new Int32Array(nodeCount);
   for (const node of grounded) place[node] = -1;
   let size = 0;

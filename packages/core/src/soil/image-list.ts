@@ -75,7 +75,8 @@ export function soilImages(soil: SoilModel, tolerance: number = IMAGE_TOLERANCE)
     const key = `${source},${field}`;
     let images = known.get(key);
     if (images === undefined) {
-      images = field >= source ? fitImages(soil, depths, source, field, tolerance) : reversed(list(field, source));
+      images =
+        field >= source ? fitImages(soil, depths, source, field, tolerance) : reversed(list(field, source));
       known.set(key, images);
     }
     return images;
@@ -143,7 +144,8 @@ function fitImages(
       const at = limit[term.amplitude]!;
       if (at !== 0) (term.primary ? primary : smooth).push([sign, offset, at]);
       weights?.forEach((weight, j) => {
-        if (Math.abs(weight) > NEGLIGIBLE_WEIGHT) smooth.push([sign, offset + growth * fits!.distances[j]!, weight]);
+        if (Math.abs(weight) > NEGLIGIBLE_WEIGHT)
+          smooth.push([sign, offset + growth * fits!.distances[j]!, weight]);
       });
     }
   }
@@ -224,7 +226,8 @@ function fitWithNodes(
     const solution = Float64Array.from(factor.solve(right).to1DArray());
     between.wavenumbers.forEach((wavenumber, i) => {
       let value = limit[q]!;
-      for (let j = 0; j < distances.length; j++) value += solution[j]! * Math.exp(-distances[j]! * wavenumber);
+      for (let j = 0; j < distances.length; j++)
+        value += solution[j]! * Math.exp(-distances[j]! * wavenumber);
       const exact = between.values[q]![i]!;
       error = Math.max(error, Math.abs(value - exact) / Math.max(1, Math.abs(exact)));
     });
@@ -234,7 +237,11 @@ function fitWithNodes(
 }
 
 /** QR of the basis e^{−β_j λ_i}, rows scaled, with the Tikhonov rows below. */
-function factorBasis(wavenumbers: Float64Array, scale: Float64Array, distances: Float64Array): QrDecomposition {
+function factorBasis(
+  wavenumbers: Float64Array,
+  scale: Float64Array,
+  distances: Float64Array,
+): QrDecomposition {
   const rows = wavenumbers.length;
   const columns = distances.length;
   const basis = Matrix.zeros(rows + columns, columns);

@@ -61,8 +61,12 @@ export function linearSolver(operator: LeakageOperator, rightHandSides: number):
   return {
     method: 'conjugate-gradients',
     solve(b) {
-      const result = conjugateGradients(multiply, diagonal, b, { tolerance: RESIDUAL, limit: ITERATION_LIMIT });
-      if (result.outcome !== 'converged' && !(result.residual <= ACCEPTED_RESIDUAL)) throw new SolverStalled(result.residual);
+      const result = conjugateGradients(multiply, diagonal, b, {
+        tolerance: RESIDUAL,
+        limit: ITERATION_LIMIT,
+      });
+      if (result.outcome !== 'converged' && !(result.residual <= ACCEPTED_RESIDUAL))
+        throw new SolverStalled(result.residual);
       return { x: result.x, iterations: result.iterations };
     },
   };

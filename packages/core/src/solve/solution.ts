@@ -59,7 +59,8 @@ export function solveGraph(
   };
   const component = Int32Array.from(segments, (i) => mesh.nodeComponent[mesh.node1[i]!]!);
   const pieces = piecesThatLeak(component, mesh.componentCount);
-  const offReference = model === 'resistive' ? injectionNodes.filter((node) => !references.includes(node)).length : 0;
+  const offReference =
+    model === 'resistive' ? injectionNodes.filter((node) => !references.includes(node)).length : 0;
   const solver = linearSolver(
     model === 'resistive' ? { size, entries, addMetal } : { size, entries },
     pieces.length + offReference,
@@ -80,7 +81,8 @@ export function solveGraph(
     const own = pieces.indexOf(mesh.nodeComponent[node]!);
     const away = model === 'resistive' && !references.includes(node);
     const fromInjection = away ? laplacian.solve(injection) : undefined;
-    const extra = fromInjection === undefined ? undefined : solve(segmentPotentials(mesh, segments, fromInjection));
+    const extra =
+      fromInjection === undefined ? undefined : solve(segmentPotentials(mesh, segments, fromInjection));
     const level = new Float64Array(pieces.length);
     level[own] = 1;
     if (extra !== undefined) net(extra).forEach((sum, p) => { level[p]! -= sum; }); // biome-ignore format: one line of algebra
@@ -92,7 +94,9 @@ export function solveGraph(
     const drawn = drawnFromNodes(mesh, segments, current);
     const relative = laplacian.solve(injection.map((j, at) => j - drawn[at]!));
     const levelOf = new Map(pieces.map((c, p) => [c, level[p]!]));
-    const nodePotential = relative.map((v, at) => (levelOf.get(mesh.nodeComponent[at]!) ?? 0) + (model === 'resistive' ? v : 0));
+    const nodePotential = relative.map(
+      (v, at) => (levelOf.get(mesh.nodeComponent[at]!) ?? 0) + (model === 'resistive' ? v : 0),
+    );
     const along = branchCurrents(branches, relative);
     const leakage = new Float64Array(mesh.count);
     segments.forEach((i, k) => {
@@ -144,7 +148,10 @@ function packPieces(nets: readonly Float64Array[]): Float64Array {
 
 /** Largest |outflow along the metal + leakage drawn − injection| over the nodes. */
 function kirchhoffFailure(outflow: Float64Array, drawn: Float64Array, injection: Float64Array): number {
-  return outflow.reduce((most, out, node) => Math.max(most, Math.abs(out + drawn[node]! - injection[node]!)), 0);
+  return outflow.reduce(
+    (most, out, node) => Math.max(most, Math.abs(out + drawn[node]! - injection[node]!)),
+    0,
+  );
 }
 
 function leakageResidual(matrix: LeakageMatrix, current: Float64Array, potential: Float64Array): number {

@@ -15,6 +15,19 @@ describe('conductors on top of each other', () => {
     ]);
   });
 
+  test('up to two contact distances past the joint is still the joint', () => {
+    // 5 mm wires: contact distance 15 mm
+    expect(faults(wire(0, 0, 10.029, 0), wire(10, 0, 20, 0))).toEqual([]);
+    expect(faults(wire(0, 0, 10.031, 0), wire(10, 0, 20, 0)).map(([, code]) => code)).toEqual(['overlap']);
+  });
+
+  test('a conductor that spreads from another tells the largest distance within contact', () => {
+    // 10 mm a metre: 15 mm after 1.5 m
+    expect(faults(wire(0, 0, 10, 0), wire(0, 0, 10, 0.1))[0]![3]).toMatch(
+      /^runs within 15 mm of c1 over 1\.50 m/,
+    );
+  });
+
   test('a conductor beside another within contact tells the distance', () => {
     expect(faults(wire(0, 0, 10, 0), wire(2, 0.004, 9, 0.004))).toEqual([
       [1, 'overlap', 0, 'runs within 4 mm of c1 over 7.00 m, from (2.00, 0.00) m to (9.00, 0.00) m'],

@@ -81,6 +81,23 @@ describe('metal that touches is one node', () => {
     expect(joints.nodeDegree[1]).toBe(6);
   });
 
+  test('three conductors in a triangle as small as the contact distance make one node', () => {
+    // sides 10 mm, 14.9 mm and 20 mm; the 20 mm side is longer than the contact distance, but its ends are one by way of the others
+    const cosine = (0.02 ** 2 + 0.01 ** 2 - 0.0149 ** 2) / (2 * 0.02 * 0.01);
+    const corner = [0.01 * cosine, 0.01 * Math.sqrt(1 - cosine ** 2)] as const;
+    const first = wire(-100 * corner[0], -100 * corner[1], 100 * corner[0], 100 * corner[1]);
+    const third = wire(
+      0.02 + 100 * (0.02 - corner[0]),
+      -100 * corner[1],
+      corner[0] - 100 * (0.02 - corner[0]),
+      101 * corner[1],
+    );
+    expect(counts(join(first, wire(-2, 0, 2, 0), third))).toEqual([7, 6, 1]);
+    expect(counts(join(first, wire(0, 0, 2, 0), third))).toEqual([6, 5, 1]);
+    expect(counts(join(first, wire(2, 0, 0, 0), third))).toEqual([6, 5, 1]);
+    expect(counts(join(first, wire(0.02, 0, -2, 0), third))).toEqual([6, 5, 1]);
+  });
+
   test('a tail that overshoots by less than the contact distance is no piece of its own', () => {
     const joints = join(wire(0, 0, 10, 0), wire(4, -0.01, 4, 8));
     expect(counts(joints)).toEqual([4, 3, 1]);
@@ -127,6 +144,19 @@ describe('metal that misses', () => {
     expect(joints.nearMisses).toHaveLength(1);
     expect(joints.nearMisses[0]).toMatchObject({ conductor: 1, other: 0, x: 5, y: 0.03, depth: 0.5 });
     expect(joints.nearMisses[0]!.distance).toBeCloseTo(0.03, 12);
+  });
+
+  test('either end of a conductor may miss', () => {
+    const misses = join(wire(0, 0, 10, 0), wire(5, 5, 5, 0.03)).nearMisses;
+    expect(misses.map(({ conductor, other, y }) => [conductor, other, y])).toEqual([[1, 0, 0.03]]);
+  });
+
+  test('thick metal touches by its radius', () => {
+    const pipe: Row = { ...wire(0, 0, 10, 0), radius: 0.15 };
+    expect(join(pipe, wire(5, 0.159, 5, 5)).componentCount).toBe(1);
+    expect(join(wire(5, 0.159, 5, 5), pipe).componentCount).toBe(1);
+    expect(join(pipe, wire(5, 0.161, 5, 5)).componentCount).toBe(2);
+    expect(join(pipe, wire(5, 0.304, 5, 5)).nearMisses).toHaveLength(1);
   });
 
   test('a gap of 0.15 m or more is no near miss', () => {

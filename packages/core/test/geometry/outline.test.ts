@@ -65,6 +65,22 @@ describe('the outer boundary of closed meshes', () => {
     ]);
   });
 
+  test('of small, slanting meshes is their outside', () => {
+    // a fan of triangles around (0, 0), less than a metre across
+    const spokes = [
+      [0.5, 0.1],
+      [0.2, 0.4],
+      [-0.3, 0.3],
+      [-0.4, -0.1],
+      [0.1, -0.5],
+    ] as const;
+    const fan = spokes.flatMap(([x, y], i) => {
+      const [nextX, nextY] = spokes[(i + 1) % spokes.length]!;
+      return [wire(0, 0, x, y), wire(x, y, nextX, nextY)];
+    });
+    expect(outlines(...fan)).toEqual([[...spokes.slice(4), ...spokes.slice(0, 4)]]);
+  });
+
   test('of two blocks joined by one conductor is two', () => {
     expect(outlines(...square(30, 5, 8), ...square(0, 0, 10), wire(10, 6, 30, 6))).toEqual([
       rectangle(0, 0, 10, 10),

@@ -8,7 +8,14 @@ import {
 import { gaussLegendre } from '../../src/numerics/gauss-legendre.ts';
 import { randomNumbers } from '../support/random.ts';
 
-const wire = (x1: number, y1: number, z1: number, x2: number, y2: number, z2: number): Wire => ({ x1, y1, z1, x2, y2, z2 });
+const wire = (x1: number, y1: number, z1: number, x2: number, y2: number, z2: number): Wire => ({
+  x1,
+  y1,
+  z1,
+  x2,
+  y2,
+  z2,
+});
 
 /** The same mean by fine composite integration over the first wire. */
 function integrated(p: Wire, q: Wire, radius: number): number {

@@ -62,7 +62,8 @@ describe('reduced Laplacian', () => {
     const injection = Float64Array.from([2, 0, -0.5, 0, 1, 0, 0, 0]);
     const potential = reducedLaplacian(cube, 8, [7]).solve(injection);
     const outflow = nodeOutflow(cube, 8, branchCurrents(cube, potential));
-    for (let node = 0; node < 7; node++) expect(Math.abs(outflow[node]! - injection[node]!)).toBeLessThan(1e-14);
+    for (let node = 0; node < 7; node++)
+      expect(Math.abs(outflow[node]! - injection[node]!)).toBeLessThan(1e-14);
     expect(Math.abs(outflow[7]! + 2.5)).toBeLessThan(1e-14);
   });
 

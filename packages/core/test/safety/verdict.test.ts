@@ -20,6 +20,8 @@ describe('verdict', () => {
 
   test('a voltage at its limit is within it', () => {
     expect(judge(840, 0, 840)).toEqual({ outcome: 'within', withinLimit: true, marginPercent: 0 });
+    expect(judge(0.5, 0.2, 0.5)).toMatchObject({ outcome: 'undecided', withinLimit: true });
+    expect(judge(0, 0, 0.5)).toEqual({ outcome: 'within', withinLimit: true, marginPercent: 100 });
   });
 
   test('numbers from which no verdict can be had are refused', () => {

@@ -18,10 +18,12 @@ function twoLayerSeries(r1: number, r2: number, h: number, d: number, z: number,
     const weight = k ** n;
     if (Math.abs(weight) < 1e-18) break;
     const far = 2 * n * h;
-    if (d <= h && z <= h) sum += n === 0 ? inverse(d) + inverse(-d) : weight * (inverse(d + far) + inverse(d - far) + inverse(-d + far) + inverse(-d - far)); // biome-ignore format: four images
+    if (d <= h && z <= h)
+      sum += n === 0 ? inverse(d) + inverse(-d) : weight * (inverse(d + far) + inverse(d - far) + inverse(-d + far) + inverse(-d - far)); // biome-ignore format: four images
     else if (d <= h) sum += weight * (1 + k) * (inverse(d - far) + inverse(-d - far));
     else if (z <= h) sum += weight * (1 - k) * (inverse(d + far) + inverse(-d - far));
-    else sum += (n === 0 ? inverse(d) - k * inverse(2 * h - d) : 0) + (1 - k * k) * weight * inverse(-d - far);
+    else
+      sum += (n === 0 ? inverse(d) - k * inverse(2 * h - d) : 0) + (1 - k * k) * weight * inverse(-d - far);
   }
   return ((d <= h ? r1 : r2) / (4 * Math.PI)) * sum;
 }
@@ -40,7 +42,10 @@ describe('image lists', () => {
       for (const [d, z] of [[0.5, 0], [0.5, 1.9], [0.5, 3], [3, 0.5], [2.1, 2.2], [5, 9]] as const) // biome-ignore format: pairs of depths
         for (const r of [0.1, 1, 7, 40, 300]) {
           const exact = twoLayerSeries(100, lower, 2, d, z, r);
-          expect(Math.abs(pointPotential(images, d, z, r) / exact - 1), `K ${k} d ${d} z ${z} r ${r}`).toBeLessThan(1e-6);
+          expect(
+            Math.abs(pointPotential(images, d, z, r) / exact - 1),
+            `K ${k} d ${d} z ${z} r ${r}`,
+          ).toBeLessThan(1e-6);
         }
     }
   });
@@ -56,7 +61,9 @@ describe('image lists', () => {
       [9, 0, 4, 0.24598],
       [6, 7, 10, 0.456373],
     ] as const)
-      expect(Math.abs(pointPotential(images, d, z, r) / expected - 1), `d ${d} z ${z} r ${r}`).toBeLessThan(1e-5);
+      expect(Math.abs(pointPotential(images, d, z, r) / expected - 1), `d ${d} z ${z} r ${r}`).toBeLessThan(
+        1e-5,
+      );
   });
 
   it('match numerical Hankel integration of random soils of 2 to 8 layers, contrast to 10⁴, to 1e-6 of the kernel’s scale', () => {
@@ -77,12 +84,23 @@ describe('image lists', () => {
     const layered = soilImages(soil([130, 0.4], [130, 2], [130, 7], [130]));
     const uniform = soilImages(soil([130]));
     for (const [d, z, r] of [[0.2, 0, 1], [0.2, 5, 3], [12, 1, 8], [1, 1.5, 0.3]] as const) // biome-ignore format: places
-      expect(Math.abs(pointPotential(layered, d, z, r) / pointPotential(uniform, d, z, r) - 1)).toBeLessThan(1e-9);
+      expect(Math.abs(pointPotential(layered, d, z, r) / pointPotential(uniform, d, z, r) - 1)).toBeLessThan(
+        1e-9,
+      );
   });
 
   it('are reciprocal to 1e-9 between any two layers', () => {
     const images = soilImages(soil([200, 1], [50, 3], [800, 4], [20]));
-    for (const [d, z] of [[0.3, 2], [0.3, 6], [0.3, 12], [2, 6], [2, 12], [6, 12], [0.3, 0.9]] as const) { // biome-ignore format: pairs
+    for (const [d, z] of [
+      [0.3, 2],
+      [0.3, 6],
+      [0.3, 12],
+      [2, 6],
+      [2, 12],
+      [6, 12],
+      [0.3, 0.9],
+    ] as const) {
+      // biome-ignore format: pairs
       const there = pointPotential(images, d, z, 3);
       expect(Math.abs(pointPotential(images, z, d, 3) / there - 1)).toBeLessThan(1e-9);
     }
@@ -92,7 +110,9 @@ describe('image lists', () => {
     const base = soilImages(soil([100, 1.5], [700, 2], [30]));
     const scaled = soilImages(soil([300, 15], [2100, 20], [90]));
     for (const [d, z, r] of [[0.5, 0, 2], [2, 0.5, 4], [6, 3, 9]] as const) // biome-ignore format: places
-      expect(Math.abs(pointPotential(scaled, 10 * d, 10 * z, 10 * r) / pointPotential(base, d, z, r) / 0.3 - 1)).toBeLessThan(1e-9);
+      expect(
+        Math.abs(pointPotential(scaled, 10 * d, 10 * z, 10 * r) / pointPotential(base, d, z, r) / 0.3 - 1),
+      ).toBeLessThan(1e-9);
   });
 
   it('report the error that their fit reached', () => {
@@ -115,7 +135,10 @@ function errorAtRandomPlace(model: SoilModel, random: () => number): number {
     const r = stack * 10 ** (2 * random() - 1);
     // in place of a stated decay: one in a hundred of the thinnest layer, or the distance from the source's own level
     const exact = potentialByHankel(model, d, z, r, Math.max(0.01 * thinnest, leastDistance(model, d, z)));
-    const scale = Math.max(Math.abs(exact), model.layers[0]!.resistivity / (4 * Math.PI * Math.hypot(r, z - d)));
+    const scale = Math.max(
+      Math.abs(exact),
+      model.layers[0]!.resistivity / (4 * Math.PI * Math.hypot(r, z - d)),
+    );
     worst = Math.max(worst, Math.abs(pointPotential(images, d, z, r) - exact) / scale);
   }
   return worst;

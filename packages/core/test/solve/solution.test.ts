@@ -15,15 +15,30 @@ const yard: Bar[] = [
 ];
 const ground = soil([100, 1.5], [900]);
 
-function solved(bars: readonly Bar[], nodes: (mesh: { nodeX: Float64Array; nodeY: Float64Array }) => number[], ohmPerMetre: number) {
+function solved(
+  bars: readonly Bar[],
+  nodes: (mesh: { nodeX: Float64Array; nodeY: Float64Array }) => number[],
+  ohmPerMetre: number,
+) {
   const table = conductorTable(bars);
   const mesh = segmentMesh(table, joinConductors(table), [1.5], 1);
   const matrix = leakageMatrix(mesh, soilImages(ground));
-  return { mesh, graph: solveGraph(mesh, matrix, nodes(mesh), new Float64Array(table.count).fill(ohmPerMetre), 'resistive') };
+  return {
+    mesh,
+    graph: solveGraph(
+      mesh,
+      matrix,
+      nodes(mesh),
+      new Float64Array(table.count).fill(ohmPerMetre),
+      'resistive',
+    ),
+  };
 }
 
-const nodeAt = (x: number, y: number) => (mesh: { nodeX: Float64Array; nodeY: Float64Array }): number =>
-  mesh.nodeX.findIndex((nx, n) => Math.hypot(nx - x, mesh.nodeY[n]! - y) < 1e-6);
+const nodeAt =
+  (x: number, y: number) =>
+  (mesh: { nodeX: Float64Array; nodeY: Float64Array }): number =>
+    mesh.nodeX.findIndex((nx, n) => Math.hypot(nx - x, mesh.nodeY[n]! - y) < 1e-6);
 
 describe('the graph', () => {
   it('returns at remote earth what was injected, at every node and in all, to 1e-9', () => {
@@ -46,7 +61,9 @@ describe('the graph', () => {
 
   it('approaches the equipotential solution as the metal’s resistance vanishes, in proportion to it', () => {
     const ideal = solveBars(yard, ground, 1, 'equipotential').unit.resistance;
-    const excess = [1e-4, 1e-5, 1e-6].map((ohm) => solved(yard, (m) => [nodeAt(0, 0)(m)], ohm).graph.units[0]!.resistance - ideal);
+    const excess = [1e-4, 1e-5, 1e-6].map(
+      (ohm) => solved(yard, (m) => [nodeAt(0, 0)(m)], ohm).graph.units[0]!.resistance - ideal,
+    );
     expect(excess[0]! / excess[1]!).toBeCloseTo(10, 1);
     expect(excess[1]! / excess[2]!).toBeCloseTo(10, 1);
     expect(excess[2]! / ideal).toBeLessThan(1e-5);
@@ -54,18 +71,22 @@ describe('the graph', () => {
 
   it('scales: lengths × s divide resistance by s, resistivity × q multiplies it by q, to 1e-9', () => {
     const s = 3;
-    const grown = yard.map((b): Bar => ({
-      from: [b.from[0] * s, b.from[1] * s, b.from[2] * s],
-      to: [b.to[0] * s, b.to[1] * s, b.to[2] * s],
-      radius: b.radius * s,
-    }));
+    const grown = yard.map(
+      (b): Bar => ({
+        from: [b.from[0] * s, b.from[1] * s, b.from[2] * s],
+        to: [b.to[0] * s, b.to[1] * s, b.to[2] * s],
+        radius: b.radius * s,
+      }),
+    );
     const base = solveBars(yard, ground, 1).unit.resistance;
     const scaled = solveBars(grown, soil([700, 4.5], [6300]), 1).unit.resistance;
     expect(Math.abs((scaled * s) / 7 / base - 1)).toBeLessThan(1e-9);
   });
 
   it('is mirrored by a mirrored electrode to 1e-9', () => {
-    const mirrored = yard.map((b): Bar => ({ ...b, from: [-b.from[0], b.from[1], b.from[2]], to: [-b.to[0], b.to[1], b.to[2]] }));
+    const mirrored = yard.map(
+      (b): Bar => ({ ...b, from: [-b.from[0], b.from[1], b.from[2]], to: [-b.to[0], b.to[1], b.to[2]] }),
+    );
     const reversed = [...mirrored].reverse().map((b): Bar => ({ ...b, from: b.to, to: b.from }));
     const base = solveBars(yard, ground, 1).unit.resistance;
     expect(Math.abs(solveBars(reversed, ground, 1).unit.resistance / base - 1)).toBeLessThan(1e-9);
@@ -76,7 +97,13 @@ describe('the graph', () => {
     const mesh = segmentMesh(table, joinConductors(table), [1.5], 1);
     const flat = { ...mesh, layer: new Int32Array(mesh.count) };
     const ohm = new Float64Array(table.count).fill(1e-4);
-    const layered = solveGraph(mesh, leakageMatrix(mesh, soilImages(soil([80, 1.5], [80]))), [0], ohm, 'resistive');
+    const layered = solveGraph(
+      mesh,
+      leakageMatrix(mesh, soilImages(soil([80, 1.5], [80]))),
+      [0],
+      ohm,
+      'resistive',
+    );
     const uniform = solveGraph(flat, leakageMatrix(flat, soilImages(soil([80]))), [0], ohm, 'resistive');
     expect(Math.abs(layered.units[0]!.resistance / uniform.units[0]!.resistance - 1)).toBeLessThan(1e-9);
   });

@@ -4,7 +4,7 @@ import { joinConductors } from '../../src/geometry/joints.ts';
 import { segmentMesh } from '../../src/geometry/segmentation.ts';
 import type { SegmentMesh } from '../../src/geometry/segments.ts';
 import { leakageMatrix } from '../../src/leakage/leakage-matrix.ts';
-import { soilImages, type SoilImages } from '../../src/soil/image-list.ts';
+import { type SoilImages, soilImages } from '../../src/soil/image-list.ts';
 import type { SoilModel } from '../../src/soil/soil-model.ts';
 import { type MetalModel, solveGraph, type UnitSolution } from '../../src/solve/solution.ts';
 
@@ -35,7 +35,14 @@ export function conductorTable(bars: readonly Bar[]): ConductorTable {
 }
 
 /** A rectangular grid with its corner at the origin, one bar a line. */
-export function gridBars(width: number, height: number, across: number, up: number, depth: number, radius: number): Bar[] {
+export function gridBars(
+  width: number,
+  height: number,
+  across: number,
+  up: number,
+  depth: number,
+  radius: number,
+): Bar[] {
   const bars: Bar[] = [];
   for (let i = 0; i <= across; i++) {
     const x = (width * i) / across;

@@ -5,7 +5,12 @@ import { gaussLegendre } from '../../src/numerics/gauss-legendre.ts';
 import type { SoilModel } from '../../src/soil/soil-model.ts';
 
 /** Kernel at one wavenumber for a unit source, without ρ/4π of its layer, less the direct term when in its own layer. */
-export function kernelByInterfaceConditions(soil: SoilModel, d: number, z: number, wavenumber: number): number {
+export function kernelByInterfaceConditions(
+  soil: SoilModel,
+  d: number,
+  z: number,
+  wavenumber: number,
+): number {
   const n = soil.layers.length;
   const top: number[] = [];
   const bottom: number[] = [];
@@ -29,7 +34,12 @@ export function kernelByInterfaceConditions(soil: SoilModel, d: number, z: numbe
   const system = Matrix.zeros(size, size);
   const right = Matrix.zeros(size, 1);
   const source = (i: number, at: number): [value: number, slope: number] =>
-    i !== s ? [0, 0] : [Math.exp(-wavenumber * Math.abs(at - d)), -Math.sign(at - d) * Math.exp(-wavenumber * Math.abs(at - d))];
+    i !== s
+      ? [0, 0]
+      : [
+          Math.exp(-wavenumber * Math.abs(at - d)),
+          -Math.sign(at - d) * Math.exp(-wavenumber * Math.abs(at - d)),
+        ];
   const decay = (i: number): number => (i === n - 1 ? 0 : Math.exp(-wavenumber * soil.layers[i]!.thickness));
   // slope (over λ) at the surface is zero; a source on the surface counts as just below it
   system.set(0, a(0), -1);
@@ -83,7 +93,10 @@ export function potentialByHankel(soil: SoilModel, d: number, z: number, r: numb
   while (layer < soil.layers.length - 1 && d > depth) depth += soil.layers[++layer]!.thickness;
   const factor = soil.layers[layer]!.resistivity / (4 * Math.PI);
   const reach = soil.layers.slice(0, -1).reduce((sum, l) => sum + l.thickness, 1);
-  const contrast = soil.layers.reduce((most, l) => Math.max(most, ...soil.layers.map((m) => m.resistivity / l.resistivity)), 1);
+  const contrast = soil.layers.reduce(
+    (most, l) => Math.max(most, ...soil.layers.map((m) => m.resistivity / l.resistivity)),
+    1,
+  );
   const from = 1e-7 / (reach * contrast + r);
   const to = 45 / least;
   const { points, weights } = gaussLegendre(10);
@@ -93,7 +106,11 @@ export function potentialByHankel(soil: SoilModel, d: number, z: number, r: numb
     const high = Math.min(to, Math.min(low * 1.35, low + Math.PI / Math.max(r, 1e-9)));
     for (let k = 0; k < points.length; k++) {
       const wavenumber = low + points[k]! * (high - low);
-      sum += weights[k]! * (high - low) * kernelByInterfaceConditions(soil, d, z, wavenumber) * besselJ0(wavenumber * r);
+      sum +=
+        weights[k]! *
+        (high - low) *
+        kernelByInterfaceConditions(soil, d, z, wavenumber) *
+        besselJ0(wavenumber * r);
     }
     low = high;
   }

@@ -1,5 +1,5 @@
 // One fault case: current into the ground, rise, and the worst touch and step voltages against their limits.
-import { decrementFactor, gridCurrent, type SegmentMesh, type Verdict, judge } from '@ohmstead/core';
+import { decrementFactor, gridCurrent, judge, type SegmentMesh, type Verdict } from '@ohmstead/core';
 import type { CaseResult, LimitsResult, ResultsWarning, WorstTouch } from '../results.ts';
 import type { CaseInput } from '../study.ts';
 import type { UnitField } from './levels.ts';
@@ -15,12 +15,13 @@ export function caseResult(
   limits: LimitsResult,
 ): { readonly result: CaseResult; readonly warnings: readonly ResultsWarning[] } {
   const frequency = input.frequency_hz ?? DEFAULT_FREQUENCY_HZ;
-  const decrement = decrementFactor(input.x_over_r ?? 0, frequency, input.duration_s);
+  const decrement = decrementFactor(input.x_over_r, frequency, input.duration_s);
   const division = input.division_factor ?? 1;
-  const current =
+  const current = gridCurrent(
     input.grid_current_A === undefined
-      ? gridCurrent(input.fault_current_A!, division, decrement)
-      : gridCurrent(input.grid_current_A, 1, decrement);
+      ? { faultCurrent: input.fault_current_A!, divisionFactor: division, decrementFactor: decrement }
+      : { faultCurrent: input.grid_current_A, divisionFactor: 1, decrementFactor: decrement },
+  );
   const limit = caseLimits(limits, input.duration_s);
   const touch = judge(current * unit.worstTouch.value, current * unit.touchUncertainty, limit.touch);
   const step = judge(current * unit.worstStep.value, current * unit.stepUncertainty, limit.step);
@@ -41,9 +42,21 @@ export function caseResult(
       resistance_uncertainty_ohm: unit.resistanceUncertainty,
       gpr_V: current * unit.resistance,
       gpr_uncertainty_V: current * unit.resistanceUncertainty,
-      touch: worst(touch, current * unit.worstTouch.value, current * unit.touchUncertainty, limit.touch, unit.worstTouch),
+      touch: worst(
+        touch,
+        current * unit.worstTouch.value,
+        current * unit.touchUncertainty,
+        limit.touch,
+        unit.worstTouch,
+      ),
       step: {
-        ...worst(step, current * unit.worstStep.value, current * unit.stepUncertainty, limit.step, unit.worstStep),
+        ...worst(
+          step,
+          current * unit.worstStep.value,
+          current * unit.stepUncertainty,
+          limit.step,
+          unit.worstStep,
+        ),
         from: { x_m: from[0], y_m: from[1] },
         to: { x_m: to[0], y_m: to[1] },
       },
@@ -65,15 +78,17 @@ function worst(
     x_m: place.x,
     y_m: place.y,
     limit_V: limit,
-    within_limit: verdict.within,
+    within_limit: verdict.withinLimit,
     margin_percent: verdict.marginPercent,
   };
 }
 
 function undecided(name: string, quantity: string, verdict: Verdict): ResultsWarning[] {
-  if (!verdict.undecided) return [];
-  return [{
-    code: 'margin-below-uncertainty',
-    message: `case ${name}: the worst ${quantity} voltage lies nearer to its limit than its numerical uncertainty`,
-  }];
+  if (verdict.outcome !== 'undecided') return [];
+  return [
+    {
+      code: 'margin-below-uncertainty',
+      message: `case ${name}: the worst ${quantity} voltage lies nearer to its limit than its numerical uncertainty`,
+    },
+  ];
 }

@@ -1,6 +1,7 @@
 // What figures are drawn from: conductors, joints and areas in metres, and leakage and current by segment.
-import type { CaseFigures, CaseMap, Plan, SegmentTable } from '../outcome.ts';
+
 import { type Box, type Lattice, lineProfile } from '@ohmstead/core';
+import type { CaseFigures, CaseMap, Plan, SegmentTable } from '../outcome.ts';
 import type { Solved, UnitField } from './levels.ts';
 import type { Prepared } from './prepare.ts';
 import { isEnergised, isRod } from './roles.ts';

@@ -13,8 +13,10 @@ export function assessedBox(prepared: Prepared): Box {
     xs.push(x);
     ys.push(y);
   }
-  const least = (values: readonly number[]): number => values.reduce((a, b) => Math.min(a, b), Number.POSITIVE_INFINITY);
-  const most = (values: readonly number[]): number => values.reduce((a, b) => Math.max(a, b), Number.NEGATIVE_INFINITY);
+  const least = (values: readonly number[]): number =>
+    values.reduce((a, b) => Math.min(a, b), Number.POSITIVE_INFINITY);
+  const most = (values: readonly number[]): number =>
+    values.reduce((a, b) => Math.max(a, b), Number.NEGATIVE_INFINITY);
   return {
     west: least(xs) - MARGIN_M,
     south: least(ys) - MARGIN_M,

@@ -1,7 +1,7 @@
 // Potential and touch voltage of one case at places the user names.
 import { potentialAt } from '@ohmstead/core';
-import type { LoadedStudy } from '../study.ts';
 import { type Fault, InputFaults } from '../fault.ts';
+import type { LoadedStudy } from '../study.ts';
 import { caseResult } from './case-results.ts';
 import { type Progress, solveLevels } from './levels.ts';
 import { limitsOf } from './limits-of.ts';
@@ -34,15 +34,26 @@ export function fieldAt(
   const prepared = prepare(loaded);
   const solved = solveLevels(prepared, onProgress);
   const unit = solved.units[solved.unitOfCase[at]!]!;
-  const current = caseResult(loaded.study.cases[at]!, unit, solved.mesh, limitsOf(loaded.study)).result.grid_current_A;
+  const current = caseResult(loaded.study.cases[at]!, unit, solved.mesh, limitsOf(loaded.study)).result
+    .grid_current_A;
   const { leakage } = solved.graph.units[solved.unitOfCase[at]!]!;
   return points.map((point) => {
-    const potential = current * potentialAt(solved.mesh, solved.images, leakage, point.x_m, point.y_m, point.depth_m);
-    return { ...point, potential_V: potential, touch_V: current * unit.metal(point.x_m, point.y_m) - potential };
+    const potential =
+      current * potentialAt(solved.mesh, solved.images, leakage, point.x_m, point.y_m, point.depth_m);
+    return {
+      ...point,
+      potential_V: potential,
+      touch_V: current * unit.metal(point.x_m, point.y_m) - potential,
+    };
   });
 }
 
 function unknownCase(loaded: LoadedStudy, name: string): Fault {
   const known = loaded.study.cases.map((c) => c.name).join(', ');
-  return { file: 'study.json', place: 'cases', code: 'unknown-case', message: `no case is named ${name}; the study has ${known}` };
+  return {
+    file: 'study.json',
+    place: 'cases',
+    code: 'unknown-case',
+    message: `no case is named ${name}; the study has ${known}`,
+  };
 }

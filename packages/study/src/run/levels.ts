@@ -1,22 +1,27 @@
 // Solves the graph on ever finer meshes until refinement moves the headline numbers little enough.
 import {
-  adaptiveLattice,
+  adaptiveLattices,
+  areaMask,
   type Box,
   type GraphSolution,
   type Lattice,
   leakageMatrix,
   type MetalPotential,
   MODEL_FLOOR,
+  type NearestNode,
   nearestNode,
+  nodesReached,
+  onePotential,
   refinementUncertainty,
   type SegmentMesh,
-  segmentMesh,
   type SoilImages,
+  type SurfacePotential,
+  type SurfacePotentials,
+  segmentMesh,
   soilImages,
   solveGraph,
-  type SurfacePotential,
   stepLattice,
-  surfacePotential,
+  surfacePotentials,
   touchLattice,
   type WorstPlace,
   type WorstStep,
@@ -24,8 +29,8 @@ import {
   worstTouch,
 } from '@ohmstead/core';
 import type { MeshLevel } from '../results.ts';
-import type { Prepared } from './prepare.ts';
 import { assessedBox, lineReach } from './extent.ts';
+import type { Prepared } from './prepare.ts';
 
 /** The response to one ampere at one place of injection: fields in Ω (V/A). */
 export interface UnitField {
@@ -59,8 +64,8 @@ export interface Solved {
 export type Progress = (stage: string, share: number) => void;
 
 /** Refinement goes on while the uncertainty is above these: of the resistance, of the touch voltage. */
-const RESISTANCE_TARGET = 1e-3;
-const TOUCH_TARGET = 5e-3;
+const RESISTANCE_TARGET = 2e-3;
+const TOUCH_TARGET = 1e-2;
 /** A next level is not begun when it would need more segments than this: about a second of one core. */
 const SEGMENT_CEILING = 4000;
 const LAST_LEVEL = 5;
@@ -76,24 +81,27 @@ export function solveLevels(prepared: Prepared, progress: Progress): Solved {
   const images = soilImages(prepared.soil);
   const distinct = [...new Set(prepared.injectionNodes)];
   const box = assessedBox(prepared);
-  const spacing = Math.max(SPACING_M, (box.east - box.west) / MOST_POINTS, (box.north - box.south) / MOST_POINTS);
+  const spacing = Math.max(
+    SPACING_M,
+    (box.east - box.west) / MOST_POINTS,
+    (box.north - box.south) / MOST_POINTS,
+  );
   const at = (level: number): Level => {
     progress('solving the graph', level / (LAST_LEVEL + 2));
     const mesh = segmentMesh(prepared.loaded.conductors, prepared.joints, prepared.interfaces, level);
     const model = prepared.loaded.study.metal_model ?? 'resistive';
     const graph = solveGraph(mesh, leakageMatrix(mesh, images), distinct, prepared.resistancePerMetre, model);
-    return { mesh, graph, fields: fieldsOf(prepared, images, graph, box) };
+    return levelOf(images, graph, box);
   };
   let coarse = at(0);
   let fine = at(1);
-  let found = look(prepared, fine, box, spacing * SCOUT);
-  const levels = [summary(coarse, found), summary(fine, found)];
+  const scouted = look(prepared, fine, box, spacing * SCOUT);
+  const levels = [summary(coarse, scouted), summary(fine, scouted)];
   for (let level = 2; level <= LAST_LEVEL; level++) {
-    if (wellResolved(coarse, fine, found) || 2 * fine.mesh.count > SEGMENT_CEILING) break;
+    if (wellResolved(coarse, fine, scouted) || 2 * fine.mesh.count > SEGMENT_CEILING) break;
     coarse = fine;
     fine = at(level);
-    found = look(prepared, fine, box, spacing * SCOUT);
-    levels.push(summary(fine, found));
+    levels.push(summary(fine, scouted));
   }
   progress('mapping the surface', (LAST_LEVEL + 1) / (LAST_LEVEL + 2));
   const units = look(prepared, fine, box, spacing).map((unit, u): UnitField => {
@@ -120,6 +128,7 @@ export function solveLevels(prepared: Prepared, progress: Progress): Solved {
 interface Level {
   readonly mesh: SegmentMesh;
   readonly graph: GraphSolution;
+  readonly surfaces: SurfacePotentials;
   /** one a unit of the graph */
   readonly fields: readonly Field[];
 }
@@ -127,30 +136,46 @@ interface Level {
 interface Field {
   readonly surface: SurfacePotential;
   readonly metal: MetalPotential;
+  /** piece of metal that is energised */
+  readonly component: number;
+  readonly nearest: NearestNode;
 }
 
 type Found = Omit<UnitField, 'resistanceUncertainty' | 'touchUncertainty' | 'stepUncertainty'>;
 
-function fieldsOf(prepared: Prepared, images: SoilImages, graph: GraphSolution, box: Box): Field[] {
-  const reach = lineReach(graph.mesh, box);
-  return graph.units.map((unit) => {
-    const nearest = nearestNode(graph.mesh, graph.mesh.nodeComponent[unit.injectionNode]!);
+function levelOf(images: SoilImages, graph: GraphSolution, box: Box): Level {
+  const { mesh, units } = graph;
+  const leakages = units.map((unit) => unit.leakage);
+  const surfaces = surfacePotentials(mesh, images, leakages, lineReach(mesh, box));
+  const nearestOf = new Map<number, NearestNode>();
+  const fields = units.map((unit, u): Field => {
+    const component = mesh.nodeComponent[unit.injectionNode]!;
+    const nearest = nearestOf.get(component) ?? nearestNode(mesh, component);
+    nearestOf.set(component, nearest);
     return {
-      surface: surfacePotential(graph.mesh, images, unit.leakage, reach),
-      metal:
-        prepared.loaded.study.metal_model === 'equipotential'
-          ? () => unit.resistance
-          : (x, y) => unit.nodePotential[nearest(x, y)]!,
+      surface: onePotential(surfaces, u),
+      metal: (x, y) => unit.nodePotential[nearest(x, y)]!,
+      component,
+      nearest,
     };
   });
+  return { mesh, graph, surfaces, fields };
 }
 
 /** Maps and worst places of every unit on one mesh. */
 function look(prepared: Prepared, level: Level, box: Box, spacing: number): Found[] {
-  return level.fields.map(({ surface, metal }, u) => {
-    const { resistance, injectionNode } = level.graph.units[u]!;
-    const potential = adaptiveLattice(surface, box, spacing, MAP_TOLERANCE * resistance);
-    const touch = touchLattice(potential, metal);
+  const { surfaces, fields, graph } = level;
+  const tolerances = graph.units.map((unit) => MAP_TOLERANCE * unit.resistance);
+  const maps = adaptiveLattices(surfaces.at, tolerances, box, spacing);
+  const touchMask = areaMask(maps[0]!, prepared.touchArea);
+  const stepMask = areaMask(maps[0]!, prepared.stepArea);
+  const reached = new Map<number, Int32Array>();
+  return fields.map(({ surface, metal, component, nearest }, u) => {
+    const potential = maps[u]!;
+    const { resistance, injectionNode, nodePotential } = graph.units[u]!;
+    const nodes = reached.get(component) ?? nodesReached(potential, nearest);
+    reached.set(component, nodes);
+    const touch = touchLattice(potential, (place) => nodePotential[nodes[place]!]!);
     const step = stepLattice(potential);
     return {
       injectionNode,
@@ -159,8 +184,8 @@ function look(prepared: Prepared, level: Level, box: Box, spacing: number): Foun
       potential,
       touch,
       step,
-      worstTouch: worstTouch(touch, surface, metal, prepared.touchArea),
-      worstStep: worstStep(step, surface, prepared.stepArea),
+      worstTouch: worstTouch(touch, touchMask, surface, metal, prepared.touchArea),
+      worstStep: worstStep(step, stepMask, surface, prepared.stepArea),
       resistance,
     };
   });

@@ -1,5 +1,5 @@
 // The tolerable voltages that the study's basis gives a case.
-import { coveringDerating, tolerableStepVoltage, tolerableTouchVoltage } from '@ohmstead/core';
+import { coveringDeratingFactor, tolerableStepVoltage, tolerableTouchVoltage } from '@ohmstead/core';
 import type { LimitsResult } from '../results.ts';
 import type { Study } from '../study.ts';
 
@@ -12,8 +12,12 @@ export function limitsOf(study: Study): LimitsResult {
     soil_resistivity_ohm_m: soil,
     surfacing_resistivity_ohm_m: covering?.resistivity_ohm_m ?? null,
     surfacing_thickness_m: covering?.thickness_m ?? null,
-    covering_factor:
-      covering === undefined ? 1 : coveringDerating(soil, covering.resistivity_ohm_m, covering.thickness_m),
+    covering_factor: coveringDeratingFactor(
+      soil,
+      covering === undefined
+        ? undefined
+        : { resistivity: covering.resistivity_ohm_m, thickness: covering.thickness_m },
+    ),
   };
 }
 
@@ -24,10 +28,12 @@ export interface CaseLimits {
 
 /** @param duration of the shock, s */
 export function caseLimits(limits: LimitsResult, duration: number): CaseLimits {
-  const standing = limits.surfacing_resistivity_ohm_m ?? limits.soil_resistivity_ohm_m;
-  const effective = limits.covering_factor * standing;
+  const footing = {
+    resistivity: limits.surfacing_resistivity_ohm_m ?? limits.soil_resistivity_ohm_m,
+    coveringFactor: limits.covering_factor,
+  };
   return {
-    touch: tolerableTouchVoltage(limits.body_mass_kg, effective, duration),
-    step: tolerableStepVoltage(limits.body_mass_kg, effective, duration),
+    touch: tolerableTouchVoltage(limits.body_mass_kg, duration, footing),
+    step: tolerableStepVoltage(limits.body_mass_kg, duration, footing),
   };
 }

@@ -47,11 +47,15 @@ export function prepare(loaded: LoadedStudy): Prepared {
   const assumptions: ResultsWarning[] = [];
   const warnings: ResultsWarning[] = [];
   const candidates = energisedNodes(joints, componentOf, conductors, floating);
-  const injectionNodes = study.cases.map((_, c) => injectionNode(loaded, joints, candidates, c, assumptions, warnings));
+  const injectionNodes = study.cases.map((_, c) =>
+    injectionNode(loaded, joints, candidates, c, assumptions, warnings),
+  );
   const energised = new Set(injectionNodes.map((node) => joints.nodeComponent[node]!));
   warnings.push(...unjoined(conductors, componentOf, energised, floating), ...nearMisses(conductors, joints));
 
-  const members = Array.from({ length: conductors.count }, (_, i) => i).filter((i) => energised.has(componentOf[i]!));
+  const members = Array.from({ length: conductors.count }, (_, i) => i).filter((i) =>
+    energised.has(componentOf[i]!),
+  );
   const areas = defaultAreas(conductors, members);
   if (study.areas?.touch === undefined)
     assumptions.push({
@@ -60,7 +64,10 @@ export function prepare(loaded: LoadedStudy): Prepared {
         'touch is assessed inside the outer boundary of the closed meshes (without meshes: within 1 m of the conductors), supposing no accessible metal within arm’s reach outside it',
     });
   if (study.areas?.step === undefined)
-    assumptions.push({ code: 'step-area-default', message: 'step is assessed inside the same boundary grown by 3 m' });
+    assumptions.push({
+      code: 'step-area-default',
+      message: 'step is assessed inside the same boundary grown by 3 m',
+    });
   return {
     loaded,
     soil: soilOf(study),
@@ -79,7 +86,13 @@ export function prepare(loaded: LoadedStudy): Prepared {
 
 function located(fault: ConductorFault, loaded: LoadedStudy): Fault {
   const origin = loaded.origins[fault.conductor]!;
-  return { file: origin.file, line: origin.line, place: loaded.conductors.id[fault.conductor]!, code: fault.code, message: fault.message };
+  return {
+    file: origin.file,
+    line: origin.line,
+    place: loaded.conductors.id[fault.conductor]!,
+    code: fault.code,
+    message: fault.message,
+  };
 }
 
 function soilOf(study: Study): SoilModel {
@@ -117,7 +130,9 @@ function energisedNodes(
 ): readonly number[] {
   const may = new Set<number>();
   for (let i = 0; i < table.count; i++) if (!floating.has(table.electrode[i]!)) may.add(componentOf[i]!);
-  return Array.from({ length: joints.nodeCount }, (_, node) => node).filter((node) => may.has(joints.nodeComponent[node]!));
+  return Array.from({ length: joints.nodeCount }, (_, node) => node).filter((node) =>
+    may.has(joints.nodeComponent[node]!),
+  );
 }
 
 function injectionNode(
@@ -145,7 +160,10 @@ function injectionNode(
   }
   const where = `(${joints.nodeX[best]!.toFixed(2)}, ${joints.nodeY[best]!.toFixed(2)}) m`;
   if (given.inject === undefined)
-    assumptions.push({ code: 'injection-at-centroid', message: `case ${given.name}: the fault enters at the node nearest the centroid, ${where}` });
+    assumptions.push({
+      code: 'injection-at-centroid',
+      message: `case ${given.name}: the fault enters at the node nearest the centroid, ${where}`,
+    });
   else if (least > INJECTION_DISTANCE_M)
     warnings.push({
       code: 'injection-moved',

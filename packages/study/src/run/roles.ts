@@ -11,7 +11,11 @@ export function isRod(table: ConductorTable, i: number): boolean {
 }
 
 export function conductorLength(table: ConductorTable, i: number): number {
-  return Math.hypot(table.x2[i]! - table.x1[i]!, table.y2[i]! - table.y1[i]!, table.depth2[i]! - table.depth1[i]!);
+  return Math.hypot(
+    table.x2[i]! - table.x1[i]!,
+    table.y2[i]! - table.y1[i]!,
+    table.depth2[i]! - table.depth1[i]!,
+  );
 }
 
 export function isEnergised(prepared: Prepared, i: number): boolean {

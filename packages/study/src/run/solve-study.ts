@@ -111,8 +111,10 @@ function usedImages(solved: Solved): { count: number; error: number } {
 
 function doubts(loaded: LoadedStudy): ResultsWarning[] {
   if (loaded.study.surfacing === undefined) return [];
-  return [{
-    code: 'surfacing-assumed-wet',
-    message: `the covering is taken at ${loaded.study.surfacing.resistivity_ohm_m} Ω·m in its worst, wet state and present over the whole assessed area`,
-  }];
+  return [
+    {
+      code: 'surfacing-assumed-wet',
+      message: `the covering is taken at ${loaded.study.surfacing.resistivity_ohm_m} Ω·m in its worst, wet state and present over the whole assessed area`,
+    },
+  ];
 }
