@@ -156,6 +156,14 @@ describe('metal that misses', () => {
     expect(join(pipe, wire(5, 0.159, 5, 5)).componentCount).toBe(1);
     expect(join(wire(5, 0.159, 5, 5), pipe).componentCount).toBe(1);
     expect(join(pipe, wire(5, 0.161, 5, 5)).componentCount).toBe(2);
+    const upright: Row = { ...wire(0, 0, 0, 10), radius: 0.15 };
+    for (const [x, y] of [
+      [0.159, 0],
+      [-0.159, 0],
+    ] as const) {
+      expect(join(wire(x, y + 5, 30 * x, 5), upright).componentCount).toBe(1);
+      expect(join(wire(y + 5, x, 5, 30 * x), pipe).componentCount).toBe(1);
+    }
     expect(join(pipe, wire(5, 0.304, 5, 5)).nearMisses).toHaveLength(1);
   });
 

@@ -65,6 +65,16 @@ describe('the outer boundary of closed meshes', () => {
     ]);
   });
 
+  test('of one small triangle is that triangle', () => {
+    expect(outlines(wire(0, 0, 0.5, 0), wire(0.5, 0, 0, 0.5), wire(0, 0.5, 0, 0))).toEqual([
+      [
+        [0, 0],
+        [0.5, 0],
+        [0, 0.5],
+      ],
+    ]);
+  });
+
   test('of small, slanting meshes is their outside', () => {
     // a fan of triangles around (0, 0), less than a metre across
     const spokes = [
