@@ -5,7 +5,7 @@ import type { PackedLower } from '../numerics/packed-cholesky.ts';
 import type { ImageList, SoilImages } from '../soil/image-list.ts';
 import { type DepthClasses, depthClasses } from './depth-classes.ts';
 import { CLOSED_FORM_RATIO, gaussOrder, imagePairSum } from './pair-potential.ts';
-import { type RadialTable, radialValue } from './radial-table.ts';
+import { type RadialTable, radialValue, scaledTable } from './radial-table.ts';
 import { smoothImages, smoothKernel } from './smooth-kernel.ts';
 
 export interface LeakageMatrix {
@@ -199,16 +199,12 @@ function tableCache(mesh: SegmentMesh, images: SoilImages, classes: DepthClasses
           ? smoothKernel(images.list(f.layer, s.layer), chosen, f, s.z1, reach)
           : smoothKernel(list, chosen, s, f.z1, reach);
         if (table !== undefined && f.vertical)
-          table = scaled(table, images.list(f.layer, s.layer).factor / list.factor);
+          table = scaledTable(table, images.list(f.layer, s.layer).factor / list.factor);
       }
       made[cs * count + cf] = table;
       return table;
     },
   };
-}
-
-function scaled(table: RadialTable, by: number): RadialTable {
-  return by === 1 ? table : { ...table, coefficients: table.coefficients.map((c) => c * by) };
 }
 
 /** Diagonal of the mesh's bounding box in plan, m. */

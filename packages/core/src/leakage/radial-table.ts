@@ -1,23 +1,26 @@
-// A smooth function of horizontal distance as a table: polynomials on bins even in the logarithm of its square.
+// A smooth function of horizontal distance as a table: polynomials on bins that part every doubling of r² + s² in eight.
 import { inverse, Matrix } from 'ml-matrix';
 
-/** f(r²) for 0 ≤ r² ≤ the square the table was built to; coefficients of degree 5, bin after bin, shape [bins × 6]. */
+/** f(r²) for 0 ≤ r² ≤ the square the table was built to. */
 export interface RadialTable {
-  /** squared length added to r² before the logarithm, m² */
+  /** squared length s² added to r², m²: keeps the bins off zero where the function is smooth anyway */
   readonly floor: number;
-  readonly start: number;
-  readonly binsPerUnit: number;
-  readonly coefficients: Float64Array;
+  /** number of the first bin */
+  readonly first: number;
+  /** bin after bin: centre, reciprocal half width, six coefficients; shape [bins × 8] */
+  readonly bins: Float64Array;
   /** the function stays smooth on distances down to this, m */
   readonly smoothness: number;
 }
 
 /**
- * Bins per unit of ln(r² + s²). A sum of 1/√(r² + h²), h ≥ s, is analytic in this variable within π of the real axis,
- * so degree 5 on half-bins of 1/12 leaves (1/12/π)⁶/2⁵ ≈ 1e-11 of the function.
+ * Leading bits of the fraction that number a bin within its octave: 2³ = 8 bins. A sum of 1/√(r² + h²), h ≥ s, has its
+ * nearest singularity 17 half widths from a bin's centre, so degree 5 leaves 34⁻⁶ = 6e-10 of each image.
  */
-const BINS_PER_UNIT = 6;
+const BIN_BITS = 3;
+const SHIFT = 20 - BIN_BITS;
 const TERMS = 6;
+const STRIDE = 8;
 
 /** Chebyshev points on [−1, 1] and the matrix from values there to coefficients of powers. */
 const POINTS: readonly number[] = Array.from(
@@ -28,6 +31,23 @@ const TO_POWERS: readonly (readonly number[])[] = inverse(
   new Matrix(POINTS.map((point) => Array.from({ length: TERMS }, (_, power) => point ** power))),
 ).to2DArray();
 
+/** One double seen as its bits: exponent and leading fraction stand in the upper word, which numbers the bins in order. */
+const asNumber = new Float64Array(1);
+const asWords = new Uint32Array(asNumber.buffer);
+/** where the upper word is: 1 on little-endian machines */
+const UPPER = new Uint8Array(new Uint16Array([1]).buffer)[0] === 1 ? 1 : 0;
+
+function binOf(y: number): number {
+  asNumber[0] = y;
+  return asWords[UPPER]! >>> SHIFT;
+}
+
+function binStart(bin: number): number {
+  asWords[UPPER] = bin << SHIFT;
+  asWords[1 - UPPER] = 0;
+  return asNumber[0]!;
+}
+
 /**
  * Tabulates f.
  * @param f function of r², m²
@@ -36,30 +56,42 @@ const TO_POWERS: readonly (readonly number[])[] = inverse(
  */
 export function radialTable(f: (rr: number) => number, smoothness: number, reach: number): RadialTable {
   const floor = smoothness * smoothness;
-  const start = Math.log(floor);
-  const bins = Math.floor((Math.log(reach * reach + floor) - start) * BINS_PER_UNIT) + 2;
-  const coefficients = new Float64Array(bins * TERMS);
+  const first = binOf(floor);
+  const count = binOf(reach * reach + floor) - first + 2;
+  const bins = new Float64Array(count * STRIDE);
   const values = new Float64Array(TERMS);
-  for (let bin = 0; bin < bins; bin++) {
-    for (let k = 0; k < TERMS; k++) {
-      const y = start + (bin + 0.5 + 0.5 * POINTS[k]!) / BINS_PER_UNIT;
-      values[k] = f(Math.max(0, Math.exp(y) - floor));
-    }
+  for (let k = 0; k < count; k++) {
+    const low = binStart(first + k);
+    const high = binStart(first + k + 1);
+    const centre = (low + high) / 2;
+    const half = (high - low) / 2;
+    for (let p = 0; p < TERMS; p++) values[p] = f(Math.max(0, centre + half * POINTS[p]! - floor));
+    const at = k * STRIDE;
+    bins[at] = centre;
+    bins[at + 1] = 1 / half;
     for (let power = 0; power < TERMS; power++) {
       let sum = 0;
-      for (let k = 0; k < TERMS; k++) sum += TO_POWERS[power]![k]! * values[k]!;
-      coefficients[bin * TERMS + power] = sum;
+      for (let p = 0; p < TERMS; p++) sum += TO_POWERS[power]![p]! * values[p]!;
+      bins[at + 2 + power] = sum;
     }
   }
-  return { floor, start, binsPerUnit: BINS_PER_UNIT, coefficients, smoothness };
+  return { floor, first, bins, smoothness };
 }
 
 /** f(r²) from its table. */
 export function radialValue(table: RadialTable, rr: number): number {
-  const y = (Math.log(rr + table.floor) - table.start) * table.binsPerUnit;
-  const bin = y < 0 ? 0 : y | 0;
-  const u = 2 * (y - bin) - 1;
-  const c = table.coefficients;
-  const at = bin * TERMS;
-  return c[at]! + u * (c[at + 1]! + u * (c[at + 2]! + u * (c[at + 3]! + u * (c[at + 4]! + u * c[at + 5]!))));
+  const y = rr + table.floor;
+  asNumber[0] = y;
+  const at = ((asWords[UPPER]! >>> SHIFT) - table.first) * STRIDE;
+  const b = table.bins;
+  const u = (y - b[at]!) * b[at + 1]!;
+  return (
+    b[at + 2]! + u * (b[at + 3]! + u * (b[at + 4]! + u * (b[at + 5]! + u * (b[at + 6]! + u * b[at + 7]!))))
+  );
+}
+
+/** The table of a multiple of the function. */
+export function scaledTable(table: RadialTable, by: number): RadialTable {
+  if (by === 1) return table;
+  return { ...table, bins: table.bins.map((value, k) => (k % STRIDE < 2 ? value : value * by)) };
 }

@@ -72,10 +72,11 @@ const LAST_LEVEL = 5;
 /** Lattice spacing, m: half a metre shows a mesh of 3 m; larger plans get at most this many points a side. */
 const SPACING_M = 0.5;
 const MOST_POINTS = 400;
-/** The first map only finds where to look: it may be this much coarser. */
+/** The first map, of one unit, only finds where to look: it may be this much coarser. */
 const SCOUT = 2;
 /** Largest interpolation error of a map, of the rise. */
-const MAP_TOLERANCE = 1e-3;
+const MAP_TOLERANCE = 2e-3;
+const SCOUT_TOLERANCE = 1e-2;
 
 export function solveLevels(prepared: Prepared, progress: Progress): Solved {
   const images = soilImages(prepared.soil);
@@ -95,7 +96,7 @@ export function solveLevels(prepared: Prepared, progress: Progress): Solved {
   };
   let coarse = at(0);
   let fine = at(1);
-  const scouted = look(prepared, fine, box, spacing * SCOUT);
+  const scouted = look(prepared, fine, box, spacing * SCOUT, SCOUT_TOLERANCE, 1)[0]!;
   const levels = [summary(coarse, scouted), summary(fine, scouted)];
   for (let level = 2; level <= LAST_LEVEL; level++) {
     if (wellResolved(coarse, fine, scouted) || 2 * fine.mesh.count > SEGMENT_CEILING) break;
@@ -104,16 +105,18 @@ export function solveLevels(prepared: Prepared, progress: Progress): Solved {
     levels.push(summary(fine, scouted));
   }
   progress('mapping the surface', (LAST_LEVEL + 1) / (LAST_LEVEL + 2));
-  const units = look(prepared, fine, box, spacing).map((unit, u): UnitField => {
-    const coarser = coarse.fields[u]!;
-    const r = unit.resistance;
-    return {
-      ...unit,
-      resistanceUncertainty: refinementUncertainty(coarse.graph.units[u]!.resistance, r, r),
-      touchUncertainty: refinementUncertainty(touchAt(coarser, unit.worstTouch), unit.worstTouch.value, r),
-      stepUncertainty: refinementUncertainty(stepAt(coarser, unit.worstStep), unit.worstStep.value, r),
-    };
-  });
+  const units = look(prepared, fine, box, spacing, MAP_TOLERANCE, distinct.length).map(
+    (unit, u): UnitField => {
+      const coarser = coarse.fields[u]!;
+      const r = unit.resistance;
+      return {
+        ...unit,
+        resistanceUncertainty: refinementUncertainty(coarse.graph.units[u]!.resistance, r, r),
+        touchUncertainty: refinementUncertainty(touchAt(coarser, unit.worstTouch), unit.worstTouch.value, r),
+        stepUncertainty: refinementUncertainty(stepAt(coarser, unit.worstStep), unit.worstStep.value, r),
+      };
+    },
+  );
   return {
     images,
     mesh: fine.mesh,
@@ -162,10 +165,18 @@ function levelOf(images: SoilImages, graph: GraphSolution, box: Box): Level {
   return { mesh, graph, surfaces, fields };
 }
 
-/** Maps and worst places of every unit on one mesh. */
-function look(prepared: Prepared, level: Level, box: Box, spacing: number): Found[] {
-  const { surfaces, fields, graph } = level;
-  const tolerances = graph.units.map((unit) => MAP_TOLERANCE * unit.resistance);
+/** Maps and worst places of the first units on one mesh. */
+function look(
+  prepared: Prepared,
+  level: Level,
+  box: Box,
+  spacing: number,
+  tolerance: number,
+  count: number,
+): Found[] {
+  const { surfaces, graph } = level;
+  const fields = level.fields.slice(0, count);
+  const tolerances = graph.units.map((unit) => tolerance * unit.resistance);
   const maps = adaptiveLattices(surfaces.at, tolerances, box, spacing);
   const touchMask = areaMask(maps[0]!, prepared.touchArea);
   const stepMask = areaMask(maps[0]!, prepared.stepArea);
@@ -199,23 +210,30 @@ function stepAt(field: Field, place: WorstStep): number {
   return Math.abs(field.surface(place.from[0], place.from[1]) - field.surface(place.to[0], place.to[1]));
 }
 
-function wellResolved(coarse: Level, fine: Level, found: readonly Found[]): boolean {
-  return found.every((unit, u) => {
-    const r = unit.resistance;
-    const change = refinementUncertainty(coarse.graph.units[u]!.resistance, r, r);
-    const touch = touchAt(fine.fields[u]!, unit.worstTouch);
-    const touchChange = refinementUncertainty(touchAt(coarse.fields[u]!, unit.worstTouch), touch, r);
-    return change <= RESISTANCE_TARGET * r && touchChange <= TOUCH_TARGET * touch + MODEL_FLOOR * r;
+/** Whether the last refinement moved every unit's resistance, and its touch voltage at the place found, little enough. */
+function wellResolved(coarse: Level, fine: Level, found: Found): boolean {
+  return fine.graph.units.every(({ resistance }, u) => {
+    const change = refinementUncertainty(coarse.graph.units[u]!.resistance, resistance, resistance);
+    const touch = touchAt(fine.fields[u]!, found.worstTouch);
+    const touchChange = refinementUncertainty(
+      touchAt(coarse.fields[u]!, found.worstTouch),
+      touch,
+      resistance,
+    );
+    return (
+      change <= RESISTANCE_TARGET * resistance &&
+      touchChange <= TOUCH_TARGET * touch + MODEL_FLOOR * resistance
+    );
   });
 }
 
 /** What the first place of injection reads on one mesh, at the worst places found. */
-function summary(level: Level, found: readonly Found[]): MeshLevel {
+function summary(level: Level, found: Found): MeshLevel {
   const resistance = level.graph.units[0]!.resistance;
   return {
     segment_count: level.mesh.count,
     resistance_ohm: resistance,
-    worst_touch_ratio: touchAt(level.fields[0]!, found[0]!.worstTouch) / resistance,
-    worst_step_ratio: stepAt(level.fields[0]!, found[0]!.worstStep) / resistance,
+    worst_touch_ratio: touchAt(level.fields[0]!, found.worstTouch) / resistance,
+    worst_step_ratio: stepAt(level.fields[0]!, found.worstStep) / resistance,
   };
 }
