@@ -155,8 +155,8 @@ export function exampleSolve({ study }: LoadedStudy): Outcome {
 
 export const exampleRenderer: Renderer = {
   sheetHtml: ({ results }) => `<!doctype html><title>${results.title}</title>${results.program_version}`,
-  figures: ({ results }) => [{ name: 'touch', svg: `<svg>${results.cases[0].touch.worst_V}</svg>` }],
-  tables: ({ results }) => [{ name: 'cases', csv: `gpr_V\n${results.cases[0].gpr_V}\n` }],
+  figures: ({ results }) => [{ name: 'touch.svg', svg: `<svg>${results.cases[0].touch.worst_V}</svg>` }],
+  tables: ({ results }) => [{ name: 'cases.csv', csv: `gpr_V\n${results.cases[0].gpr_V}\n` }],
 };
 
 export const exampleOptions: VerifyOptions = { file: 'a.zip', load: exampleLoad, renderer: exampleRenderer };

@@ -53,7 +53,7 @@ test('a number that JSON cannot hold, or a name that leaves the pack, is a fault
   await expect(writePack(loaded, infinite, '1', exampleRenderer)).rejects.toThrow(
     'resistance_ohm is Infinity',
   );
-  const stray = { ...exampleRenderer, figures: () => [{ name: '../x', svg: '' }] };
+  const stray = { ...exampleRenderer, figures: () => [{ name: '../x.svg', svg: '' }] };
   await expect(writePack(loaded, outcome, '1', stray)).rejects.toThrow('figures/../x.svg');
   const twice = {
     ...exampleRenderer,
