@@ -1,10 +1,17 @@
 // Times the main job beside a plain dense LU of the same system, as ratios in one run: `npm run bench`.
 import { resolve } from 'node:path';
-import { joinConductors, leakageMatrix, segmentMesh, soilImages, solveGraph, type SoilModel } from '@ohmstead/core';
+import {
+  joinConductors,
+  leakageMatrix,
+  type SoilModel,
+  segmentMesh,
+  soilImages,
+  solveGraph,
+} from '@ohmstead/core';
 import { type LoadedStudy, loadStudy, solveStudy } from '@ohmstead/study';
 import { LuDecomposition, Matrix } from 'ml-matrix';
-import { folderSource } from './folder-source.ts';
 import { benchCases } from './bench-cases.ts';
+import { folderSource } from './folder-source.ts';
 
 /** Rounds of every arm, in the order A B C A B C; medians are printed. */
 const ROUNDS = 3;

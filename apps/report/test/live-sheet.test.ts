@@ -51,7 +51,7 @@ describe('the live sheet', () => {
     ]);
     const alert = page.getByRole('alert');
     await alert.waitFor();
-    expect(await alert.innerText()).toMatch(/conductors\.csv:4: diameter_mm: .*-1[26].*positive length/);
+    expect(await alert.textContent()).toMatch(/conductors\.csv:4: diameter_mm: .*-1[26].*positive length/);
     await page.close();
   });
 
@@ -74,7 +74,7 @@ describe('the live sheet', () => {
     await page.goto(sheet.url);
     await page.getByRole('button', { name: 'Try the demonstration study' }).click();
     await page.getByRole('button', { name: 'Cancel' }).click();
-    expect(await page.getByRole('status').innerText()).toMatch(/cancelled/);
+    expect(await page.getByRole('status').textContent()).toMatch(/cancelled/);
     await page.close();
   });
 

@@ -31,10 +31,8 @@ export function packEntries(
   };
   const encoder = new TextEncoder();
   add(SHEET_NAME, encoder.encode(renderer.sheetHtml(outcome)));
-  for (const { name, svg } of renderer.figures(outcome))
-    add(`${FIGURE_FOLDER}${name}`, encoder.encode(svg));
-  for (const { name, csv } of renderer.tables(outcome))
-    add(`${TABLE_FOLDER}${name}`, encoder.encode(csv));
+  for (const { name, svg } of renderer.figures(outcome)) add(`${FIGURE_FOLDER}${name}`, encoder.encode(svg));
+  for (const { name, csv } of renderer.tables(outcome)) add(`${TABLE_FOLDER}${name}`, encoder.encode(csv));
   add(RESULTS_NAME, encoder.encode(jsonText(outcome.results)));
   for (const [path, content] of loaded.files) add(`${STUDY_FOLDER}${path}`, content);
   return entries;

@@ -107,7 +107,9 @@ export interface Results {
     readonly image_error: number;
     readonly image_count: number;
   };
-  readonly soil: { readonly layers: readonly { readonly resistivity_ohm_m: number; readonly thickness_m: number | null }[] };
+  readonly soil: {
+    readonly layers: readonly { readonly resistivity_ohm_m: number; readonly thickness_m: number | null }[];
+  };
   readonly limits: LimitsResult;
   readonly mesh: readonly MeshLevel[];
   readonly cases: readonly CaseResult[];

@@ -31,10 +31,14 @@ export interface Study {
   readonly surfacing?: { readonly resistivity_ohm_m: number; readonly thickness_m: number } | undefined;
   readonly metal_model?: 'resistive' | 'equipotential' | undefined;
   readonly conductors: readonly string[];
-  readonly electrodes?: readonly { readonly name: string; readonly role: 'energised' | 'floating' }[] | undefined;
+  readonly electrodes?:
+    | readonly { readonly name: string; readonly role: 'energised' | 'floating' }[]
+    | undefined;
   readonly cases: readonly CaseInput[];
   readonly limits: { readonly basis: 'IEEE 80'; readonly body_mass_kg: 50 | 70 };
-  readonly areas?: { readonly touch?: readonly Polygon[] | undefined; readonly step?: readonly Polygon[] | undefined } | undefined;
+  readonly areas?:
+    | { readonly touch?: readonly Polygon[] | undefined; readonly step?: readonly Polygon[] | undefined }
+    | undefined;
 }
 
 /** Where a row of the conductor table was read. */

@@ -69,7 +69,9 @@ export function adaptiveLattices(
   };
   const places = new Int32Array(9);
   const nine = new Float64Array(9);
-  const take = (of: Float64Array): void => places.forEach((place, k) => void (nine[k] = of[place]!));
+  const take = (of: Float64Array): void => {
+    for (let k = 0; k < 9; k++) nine[k] = of[places[k]!]!;
+  };
   const fill = (i0: number, j0: number, side: number): void => {
     const half = side / 2;
     for (let b = 0; b < 3; b++)
