@@ -1,0 +1,90 @@
+// Every table of a sheet as a CSV file.
+import type { MeshLevel, Outcome } from '@ohmstead/study';
+import { uniqueSlugs } from '../format/slug.ts';
+import { casesCsv, limitsCsv, profileCsv } from './case-tables.ts';
+import { type Column, csvOf } from './csv.ts';
+import { conductorsCsv, electrodesCsv, segmentsCsv, snapsCsv } from './electrode-tables.ts';
+
+export interface TableFile {
+  /** ends in `.csv`, unique within the list */
+  readonly name: string;
+  readonly csv: string;
+}
+
+interface LayerRow {
+  readonly layer: number;
+  readonly top: number;
+  readonly resistivity: number;
+  readonly thickness: number | null;
+}
+
+function layerRows(outcome: Outcome): readonly LayerRow[] {
+  let top = 0;
+  return outcome.results.soil.layers.map(({ resistivity_ohm_m, thickness_m }, k) => {
+    const row: LayerRow = { layer: k + 1, top, resistivity: resistivity_ohm_m, thickness: thickness_m };
+    top += thickness_m ?? 0;
+    return row;
+  });
+}
+
+const LAYER_COLUMNS: readonly Column<LayerRow>[] = [
+  { name: 'layer', value: (l) => l.layer },
+  { name: 'top_depth_m', value: (l) => l.top },
+  { name: 'thickness_m', value: (l) => l.thickness },
+  { name: 'resistivity_ohm_m', value: (l) => l.resistivity },
+];
+
+const MESH_COLUMNS: readonly Column<MeshLevel>[] = [
+  { name: 'segment_count', value: (m) => m.segment_count },
+  { name: 'resistance_ohm', value: (m) => m.resistance_ohm },
+  { name: 'worst_touch_ratio', value: (m) => m.worst_touch_ratio },
+  { name: 'worst_step_ratio', value: (m) => m.worst_step_ratio },
+];
+
+interface Remark {
+  readonly kind: 'assumption' | 'warning';
+  readonly code: string;
+  readonly message: string;
+}
+
+const REMARK_COLUMNS: readonly Column<Remark>[] = [
+  { name: 'kind', value: (r) => r.kind },
+  { name: 'code', value: (r) => r.code },
+  { name: 'message', value: (r) => r.message },
+];
+
+function remarks({ results }: Outcome): readonly Remark[] {
+  return [
+    ...results.assumptions.map((a): Remark => ({ kind: 'assumption', ...a })),
+    ...results.warnings.map((w): Remark => ({ kind: 'warning', ...w })),
+  ];
+}
+
+/**
+ * Every table as CSV (RFC 4180, units in the column names, numbers in full precision), sorted by name. Text cells that
+ * begin with = + - @ carry a leading apostrophe, so that no spreadsheet evaluates them; take it off when reading back.
+ * @param outcome of a solved study
+ * @returns files such as `cases.csv` and `profile-33-kv-bus.csv`; the same outcome gives the same bytes
+ */
+export function tables(outcome: Outcome): readonly TableFile[] {
+  const { results, cases } = outcome;
+  const profiles = uniqueSlugs(cases.map((c) => c.name)).map(
+    (of, k): TableFile => ({
+      name: `profile-${of}.csv`,
+      csv: profileCsv(outcome, k),
+    }),
+  );
+  const files: TableFile[] = [
+    { name: 'assumptions.csv', csv: csvOf(REMARK_COLUMNS, remarks(outcome)) },
+    { name: 'cases.csv', csv: casesCsv(outcome) },
+    { name: 'conductors.csv', csv: conductorsCsv(outcome) },
+    { name: 'electrodes.csv', csv: electrodesCsv(outcome) },
+    { name: 'limits.csv', csv: limitsCsv(outcome) },
+    { name: 'mesh.csv', csv: csvOf(MESH_COLUMNS, results.mesh) },
+    { name: 'segments.csv', csv: segmentsCsv(outcome) },
+    { name: 'snaps.csv', csv: snapsCsv(outcome) },
+    { name: 'soil.csv', csv: csvOf(LAYER_COLUMNS, layerRows(outcome)) },
+    ...profiles,
+  ];
+  return files.sort((a, b) => (a.name < b.name ? -1 : 1));
+}
