@@ -1,0 +1,74 @@
+// Assumed: what was taken for granted, which contacts were bridged, and where an engineer should doubt.
+import type { Outcome, ResultsWarning } from '@ohmstead/study';
+import type { VNode } from 'preact';
+import { given, place } from '../format/number.ts';
+import { capital, tally } from '../format/words.ts';
+import { DataTable, Part, Say } from './parts.tsx';
+
+function sentence(message: string): string {
+  const text = capital(message);
+  return /[.!?]$/.test(text) ? text : `${text}.`;
+}
+
+function Remarks({ title, remarks }: { title: string; remarks: readonly ResultsWarning[] }): VNode {
+  return (
+    <>
+      <h3>{title}</h3>
+      <ul class="remarks">
+        {remarks.map((remark, k) => (
+          <li key={k}>
+            {sentence(remark.message)} <code>{remark.code}</code>
+          </li>
+        ))}
+      </ul>
+    </>
+  );
+}
+
+function Snaps({ outcome }: { outcome: Outcome }): VNode {
+  const { snaps } = outcome.results;
+  return (
+    <>
+      <h3>Contacts bridged</h3>
+      <Say>Metal that touches without its axes meeting is joined as one node.</Say>
+      <DataTable
+        caption="Joined as one node"
+        columns={[
+          { label: 'conductor' },
+          { label: 'joined to' },
+          { label: 'at', align: 'right' },
+          { label: 'depth, m', align: 'right' },
+          { label: 'between axes, mm', align: 'right' },
+        ]}
+        rows={snaps.map((snap) => [
+          snap.id,
+          snap.other_id,
+          place(snap.x_m, snap.y_m),
+          given(snap.depth_m),
+          given(Number((snap.distance_m * 1000).toPrecision(3))),
+        ])}
+      />
+    </>
+  );
+}
+
+/** Assumptions, doubts, bridged contacts. */
+export function Assumed({ outcome }: { outcome: Outcome }): VNode {
+  const { assumptions, warnings, snaps } = outcome.results;
+  const facts = [
+    tally(assumptions.length, 'assumption'),
+    tally(warnings.length, 'doubt'),
+    `${tally(snaps.length, 'contact')} bridged`,
+  ];
+  return (
+    <Part id="assumed" title="Assumed" facts={facts}>
+      {warnings.length > 0 && <Remarks title="Doubts" remarks={warnings} />}
+      {assumptions.length > 0 ? (
+        <Remarks title="Taken for granted" remarks={assumptions} />
+      ) : (
+        <Say>Nothing beyond what the study states was taken for granted.</Say>
+      )}
+      {snaps.length > 0 && <Snaps outcome={outcome} />}
+    </Part>
+  );
+}

@@ -1,0 +1,128 @@
+// Ground: the layers of the soil and what covers them.
+import type { Outcome } from '@ohmstead/study';
+import type { VNode } from 'preact';
+import { GroundFigure } from '../figure/ground.tsx';
+import { titles } from '../figure/titles.ts';
+import { fixed, given, givenQuantity, significant } from '../format/number.ts';
+import { capital, countWord, tally } from '../format/words.ts';
+import { CLAUSES, CoveringFormula, S } from './formulas.tsx';
+import { How } from './how.tsx';
+import { DataTable, FigureBlock, Input, Part, Result, Say } from './parts.tsx';
+
+function Layers({ outcome }: { outcome: Outcome }): VNode {
+  const { layers } = outcome.results.soil;
+  if (layers.length === 1) {
+    return (
+      <Say>
+        The soil is taken as uniform,{' '}
+        <Input path="soil.layers[0].resistivity_ohm_m" value={layers[0].resistivity_ohm_m} unit="Ω·m" /> at
+        every depth.
+      </Say>
+    );
+  }
+  return (
+    <Say>
+      {capital(countWord(layers.length))} layers:{' '}
+      {layers.map((layer, k) => (
+        <span key={k}>
+          {k > 0 && ', then '}
+          <Input path={`soil.layers[${k}].resistivity_ohm_m`} value={layer.resistivity_ohm_m} unit="Ω·m" />
+          {layer.thickness_m !== null && (
+            <>
+              {' '}
+              for {k === 0 ? 'the first ' : ''}
+              <Input path={`soil.layers[${k}].thickness_m`} value={layer.thickness_m} unit="m" />
+            </>
+          )}
+          {layer.thickness_m === null && ' below'}
+        </span>
+      ))}
+      .
+    </Say>
+  );
+}
+
+function Covering({ outcome }: { outcome: Outcome }): VNode {
+  const { limits } = outcome.results;
+  const { surfacing_resistivity_ohm_m: resistivity, surfacing_thickness_m: thickness } = limits;
+  if (resistivity === null || thickness === null) {
+    return <Say>No covering is stated: people stand on the soil itself, and the covering factor is 1.</Say>;
+  }
+  return (
+    <Say>
+      A covering of <Input path="surfacing.resistivity_ohm_m" value={resistivity} unit="Ω·m" />,{' '}
+      <Input path="surfacing.thickness_m" value={thickness} unit="m" /> thick, lies on it. It bears on what
+      people tolerate by the factor <Result>{fixed(limits.covering_factor, 3)}</Result>, not on the rise.
+      <How
+        of="the covering factor is found"
+        formula={<CoveringFormula />}
+        clause={CLAUSES.covering}
+        inputs={[
+          {
+            symbol: <S of="ρ" />,
+            name: 'soil under the covering',
+            value: givenQuantity(limits.soil_resistivity_ohm_m, 'Ω·m'),
+          },
+          { symbol: <S of="ρ" index="s" />, name: 'covering', value: givenQuantity(resistivity, 'Ω·m') },
+          {
+            symbol: <S of="h" index="s" />,
+            name: 'thickness of the covering',
+            value: givenQuantity(thickness, 'm'),
+          },
+        ]}
+        value={significant(limits.covering_factor, 4)}
+      />
+    </Say>
+  );
+}
+
+function layerTable(outcome: Outcome): VNode {
+  let top = 0;
+  const rows = outcome.results.soil.layers.map((layer, k) => {
+    const row = [
+      String(k + 1),
+      given(top),
+      layer.thickness_m === null ? 'to any depth' : given(layer.thickness_m),
+      given(layer.resistivity_ohm_m),
+    ];
+    top += layer.thickness_m ?? 0;
+    return row;
+  });
+  return (
+    <DataTable
+      caption="Layers of the soil"
+      columns={[
+        { label: 'layer' },
+        { label: 'top, m', align: 'right' },
+        { label: 'thickness, m', align: 'right' },
+        { label: 'resistivity, Ω·m', align: 'right' },
+      ]}
+      rows={rows}
+    />
+  );
+}
+
+/** Soil layers and covering. */
+export function Ground({ outcome }: { outcome: Outcome }): VNode {
+  const { soil, limits } = outcome.results;
+  const facts = [
+    soil.layers.length === 1 ? 'uniform soil' : tally(soil.layers.length, 'layer'),
+    limits.surfacing_thickness_m === null
+      ? 'no covering'
+      : `covering ${givenQuantity(limits.surfacing_thickness_m, 'm')}`,
+  ];
+  return (
+    <Part id="ground" title="Ground" facts={facts}>
+      <Layers outcome={outcome} />
+      <Covering outcome={outcome} />
+      <FigureBlock
+        name="ground-section"
+        title={titles.ground}
+        caption="The electrode seen from the side, every conductor projected on the section. Floating metal is dashed."
+        table={layerTable(outcome)}
+      >
+        <GroundFigure outcome={outcome} name="ground-section" title={titles.ground} />
+      </FigureBlock>
+    </Part>
+  );
+}

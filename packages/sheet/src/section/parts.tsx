@@ -1,0 +1,169 @@
+// The pieces sections are written with: a part with its margin, inputs and results in a sentence, folds, tables.
+import type { ComponentChildren, VNode } from 'preact';
+import { givenQuantity } from '../format/number.ts';
+
+export interface PartProps {
+  /** anchor of the part, and prefix of identifiers in it */
+  readonly id: string;
+  readonly title: string;
+  /** short facts for the margin */
+  readonly facts: readonly string[];
+  readonly children?: ComponentChildren;
+}
+
+/** One step of the reasoning, with its name and facts in the margin. */
+export function Part({ id, title, facts, children }: PartProps): VNode {
+  return (
+    <section class="part" id={id} aria-labelledby={`${id}-name`}>
+      <div class="margin">
+        <h2 id={`${id}-name`}>{title}</h2>
+        {facts.length > 0 && (
+          <ul class="facts">
+            {facts.map((fact) => (
+              <li key={fact}>{fact}</li>
+            ))}
+          </ul>
+        )}
+      </div>
+      <div class="body">{children}</div>
+    </section>
+  );
+}
+
+/** A statement: a sentence or a few, with folds at its end. Paragraphs cannot hold folds, so it is a division. */
+export function Say({ children }: { children: ComponentChildren }): VNode {
+  return <div class="say">{children}</div>;
+}
+
+/**
+ * An input in a sentence. `path` is its place in study.json, so that a live sheet can make it editable.
+ * @param value number with unit, or a text such as a name of a material
+ */
+export function Input({
+  path,
+  value,
+  unit = '',
+}: {
+  path: string;
+  value: number | string;
+  unit?: string;
+}): VNode {
+  const text = typeof value === 'number' ? givenQuantity(value, unit) : value;
+  return (
+    <data class="in" value={String(value)} data-input={path}>
+      {text}
+    </data>
+  );
+}
+
+/** A result in a sentence. */
+export function Result({ children }: { children: ComponentChildren }): VNode {
+  return <b class="res">{children}</b>;
+}
+
+/** Name of a case at the head of its sentence. */
+export function CaseName({ name }: { name: string }): VNode {
+  return <span class="case-name">{name}</span>;
+}
+
+/** What unfolds on demand; print shows it unfolded. `of` completes the label for those who hear or print it. */
+export function Fold({
+  label,
+  of,
+  children,
+}: {
+  label: string;
+  of: string;
+  children: ComponentChildren;
+}): VNode {
+  return (
+    <details class="fold">
+      <summary>
+        {label}
+        <span class="unseen">{of}</span>
+      </summary>
+      <div class="folded">{children}</div>
+    </details>
+  );
+}
+
+export interface TableColumn {
+  readonly label: ComponentChildren;
+  /** words to the left, numbers to the right */
+  readonly align?: 'left' | 'right';
+}
+
+export interface DataTableProps {
+  readonly caption: string;
+  readonly columns: readonly TableColumn[];
+  /** first cell of a row is its header */
+  readonly rows: readonly (readonly ComponentChildren[])[];
+}
+
+function side(column: TableColumn): string | undefined {
+  return column.align === 'right' ? 'num' : undefined;
+}
+
+/** A table that scrolls within itself where it is wider than the page. */
+export function DataTable({ caption, columns, rows }: DataTableProps): VNode {
+  return (
+    // biome-ignore lint/a11y/noNoninteractiveTabindex: a box that scrolls has to be reachable by keyboard
+    <section class="scroll" aria-label={caption} tabIndex={0}>
+      <table>
+        <caption>{caption}</caption>
+        <thead>
+          <tr>
+            {columns.map((column, k) => (
+              <th key={k} scope="col" class={side(column)}>
+                {column.label}
+              </th>
+            ))}
+          </tr>
+        </thead>
+        <tbody>
+          {rows.map((cells, r) => (
+            <tr key={r}>
+              {cells.map((cell, k) =>
+                k === 0 ? (
+                  <th key={k} scope="row" class={side(columns[k])}>
+                    {cell}
+                  </th>
+                ) : (
+                  <td key={k} class={side(columns[k])}>
+                    {cell}
+                  </td>
+                ),
+              )}
+            </tr>
+          ))}
+        </tbody>
+      </table>
+    </section>
+  );
+}
+
+export interface FigureBlockProps {
+  /** name of the drawing inside, which identifiers begin with */
+  readonly name: string;
+  readonly title: string;
+  readonly caption: ComponentChildren;
+  /** the same as a table */
+  readonly table: ComponentChildren;
+  readonly children: ComponentChildren;
+}
+
+/** A figure with its title, caption and the same content as a table. */
+export function FigureBlock({ name, title, caption, table, children }: FigureBlockProps): VNode {
+  return (
+    <div class="figure">
+      <figure aria-labelledby={`${name}-heading`}>
+        <h3 id={`${name}-heading`}>{title}</h3>
+        {children}
+        <figcaption>{caption}</figcaption>
+      </figure>
+      <Fold label="as a table" of={`: ${title}`}>
+        {table}
+      </Fold>
+    </div>
+  );
+}

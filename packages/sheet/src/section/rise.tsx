@@ -1,0 +1,166 @@
+// Rise: resistance to remote earth, rise of the metal, floating metal, and where the current leaves.
+import type { ElectrodeResult, Outcome } from '@ohmstead/study';
+import type { VNode } from 'preact';
+import { LeakageFigure } from '../figure/leakage.tsx';
+import { titles } from '../figure/titles.ts';
+import { fixed, measured, percent, place, powerOfTen, quantity, significant } from '../format/number.ts';
+import { capital } from '../format/words.ts';
+import { conductorCurrents } from '../geometry/leakage.ts';
+import { MOST_CONDUCTOR_ROWS } from './electrode.tsx';
+import { RiseFormula, S } from './formulas.tsx';
+import { How } from './how.tsx';
+import { CaseName, DataTable, FigureBlock, Input, Part, Result, Say } from './parts.tsx';
+
+function Resistance({ outcome }: { outcome: Outcome }): VNode {
+  const { electrode, metal_model, cases } = outcome.results;
+  const where =
+    cases.length > 1
+      ? `, seen where the current of ${cases[0].name} enters`
+      : ', seen where the current enters';
+  return (
+    <Say>
+      The resistance to remote earth{where}, is{' '}
+      <Result>{measured(electrode.resistance_ohm, electrode.resistance_uncertainty_ohm, 'Ω')}</Result>, with
+      the metal taken as{' '}
+      <Input
+        path="metal_model"
+        value={metal_model === 'resistive' ? 'resistive along its length' : 'one potential throughout'}
+      />
+      .
+      <How
+        of="the resistance is found"
+        formula={
+          <>
+            <S of="R" /> = <S of="V" index="injection" />/<S of="I" index="injected" />
+          </>
+        }
+        clause="Leakage equations of thin wires in layered soil (Galerkin, constant leakage per segment), joined with the conductors as one network whose node at remote earth is grounded."
+        inputs={[
+          { symbol: <i>n</i>, name: 'segments', value: String(electrode.segment_count) },
+          { symbol: <i>m</i>, name: 'nodes of the metal', value: String(electrode.node_count) },
+        ]}
+        value={measured(electrode.resistance_ohm, electrode.resistance_uncertainty_ohm, 'Ω')}
+      />
+    </Say>
+  );
+}
+
+function Rises({ outcome }: { outcome: Outcome }): VNode {
+  return (
+    <>
+      {outcome.results.cases.map((of, index) => (
+        <Say key={index}>
+          <CaseName name={of.name} />: with {quantity(of.grid_current_A, 'A')} entering the ground the metal
+          rises to <Result>{measured(of.gpr_V, of.gpr_uncertainty_V, 'V')}</Result>.
+          <How
+            of={`the rise of ${of.name} is found`}
+            formula={<RiseFormula />}
+            clause="Ohm’s law between the place of injection and remote earth."
+            inputs={[
+              {
+                symbol: <S of="R" />,
+                name: 'resistance seen by this case',
+                value: measured(of.resistance_ohm, of.resistance_uncertainty_ohm, 'Ω'),
+              },
+              {
+                symbol: <S of="I" index="G" />,
+                name: 'current into the ground',
+                value: quantity(of.grid_current_A, 'A'),
+              },
+            ]}
+            value={measured(of.gpr_V, of.gpr_uncertainty_V, 'V')}
+          />
+        </Say>
+      ))}
+    </>
+  );
+}
+
+function Floating({ outcome, metal }: { outcome: Outcome; metal: ElectrodeResult }): VNode {
+  const first = outcome.results.cases[0];
+  const own = metal.potential_ratio * first.gpr_V;
+  return (
+    <Say>
+      {capital(metal.name)}
+      {metal.piece_count > 1
+        ? `, ${metal.piece_count} pieces that no joint connects, floats at most at`
+        : ' floats at'}{' '}
+      <Result>{percent(metal.potential_ratio)}</Result> of the rise
+      {`, ${measured(own, metal.potential_uncertainty_ratio * first.gpr_V + metal.potential_ratio * first.gpr_uncertainty_V, 'V')} for ${first.name}`}
+      .
+      {metal.touch_ratio !== null && metal.touch_x_m !== null && metal.touch_y_m !== null && (
+        <>
+          {' '}
+          Between it and the soil within 1{'\u202f'}m of it stands at most{' '}
+          {quantity(Math.abs(metal.touch_ratio) * first.gpr_V, 'V', 3)}, at{' '}
+          {place(metal.touch_x_m, metal.touch_y_m)}, where the metal is the{' '}
+          {metal.touch_ratio < 0 ? 'lower' : 'higher'} of the two.
+        </>
+      )}
+    </Say>
+  );
+}
+
+function leakageTable(outcome: Outcome): VNode {
+  const { conductors } = outcome.plan;
+  const currents = conductorCurrents(outcome);
+  const order = [...conductors.keys()].sort(
+    (a, b) => Math.abs(currents[b].leakage) - Math.abs(currents[a].leakage) || a - b,
+  );
+  const shown = order.slice(0, MOST_CONDUCTOR_ROWS);
+  /* floating metal sums to nothing but rounding */
+  const share = (value: number): string =>
+    Math.abs(value) < 1e-9 ? '0' : Math.abs(value) < 1e-4 ? powerOfTen(value) : significant(value, 3);
+  return (
+    <>
+      <DataTable
+        caption="Leakage and current by conductor, per ampere injected by the first case, largest leakage first"
+        columns={[
+          { label: 'id' },
+          { label: 'electrode' },
+          { label: 'length, m', align: 'right' },
+          { label: 'into the soil, A/A', align: 'right' },
+          { label: 'mean, mA/m per A', align: 'right' },
+          { label: 'largest current along, A/A', align: 'right' },
+        ]}
+        rows={shown.map((k) => [
+          conductors[k].id,
+          conductors[k].electrode,
+          fixed(currents[k].length, 2),
+          share(currents[k].leakage),
+          significant((1000 * currents[k].leakage) / currents[k].length, 3),
+          share(currents[k].along),
+        ])}
+      />
+      {order.length > shown.length && <p>{order.length - shown.length} more are in conductors.csv.</p>}
+    </>
+  );
+}
+
+/** Resistance, rise, floating metal, leakage. */
+export function Rise({ outcome }: { outcome: Outcome }): VNode {
+  const { electrode, electrodes, checks } = outcome.results;
+  const facts = [
+    `${electrode.segment_count} segments`,
+    `balance at remote earth ${powerOfTen(Math.abs(checks.current_balance))}`,
+  ];
+  return (
+    <Part id="rise" title="Rise" facts={facts}>
+      <Resistance outcome={outcome} />
+      <Rises outcome={outcome} />
+      {electrodes
+        .filter((metal) => metal.role === 'floating')
+        .map((metal) => (
+          <Floating key={metal.name} outcome={outcome} metal={metal} />
+        ))}
+      <FigureBlock
+        name="leakage"
+        title={titles.leakage}
+        caption="Thickness shows the current that a metre of conductor passes to the soil, against the mean of the energised metal; the disc of a rod shows its mean along the rod. Hollow lines take current from the soil; floating metal gives back elsewhere what it takes."
+        table={leakageTable(outcome)}
+      >
+        <LeakageFigure outcome={outcome} name="leakage" title={titles.leakage} />
+      </FigureBlock>
+    </Part>
+  );
+}
