@@ -68,11 +68,11 @@ export const LARGEST_COVERING_RESISTIVITY_OHM_M = 1e10;
 export const LARGEST_COVERING_THICKNESS_M = 1;
 
 /** Smallest and largest thickness of a soil layer, m. Reason: thinner has no effect, thicker has no bottom. */
-export const SMALLEST_LAYER_THICKNESS_M = 0.001;
+export const SMALLEST_LAYER_THICKNESS_M = 0.01;
 export const LARGEST_LAYER_THICKNESS_M = 100_000;
 
-/** Most soil layers that can be solved for now. */
-export const MOST_SOIL_LAYERS = 2;
+/** Most soil layers: the image lists are tested to ten; no survey resolves more than five. */
+export const MOST_SOIL_LAYERS = 10;
 
 /** Largest fault current, A. Reason: ten times the largest of any power system. */
 export const LARGEST_CURRENT_A = 1e6;

@@ -107,6 +107,19 @@ describe('a loaded study', () => {
     ]);
   });
 
+  test('takes a lone row with a cell too many for what it is, not for decimal commas', () => {
+    expect(studyFaultLines(memorySource(smallStudy, `${header}\nA,0,0,0.5,10,0,0.5,10,x\n`))).toEqual([
+      'conductors.csv:2: the row has 9 cells, the header 8; expected as many',
+    ]);
+  });
+
+  test('does not look for crossings in an outline of too many corners', () => {
+    const corners = Array.from({ length: 1001 }, (_, i) => [i % 2, i % 3]);
+    const lines = studyFaultLines(memorySource({ ...smallStudy, areas: { touch: [corners] } }));
+    expect(lines).toHaveLength(1);
+    expect(lines[0]).toContain('areas.touch[0]: area has 1001 items; expected 3 to 1000 corners');
+  });
+
   test('tells quotation marks that do not pair, wherever they stand', () => {
     const table = (cell: string): string => `note,${header}\n${cell},A,0,0,0.5,1,0,0.5,10\n`;
     const lines = (cell: string): readonly string[] => studyFaultLines(memorySource(smallStudy, table(cell)));
@@ -174,11 +187,11 @@ describe('a loaded study', () => {
     expect(studyFaultLines(memorySource(withCase({ duration_s })))).toEqual([]);
   });
 
-  test('refuses three soil layers for now', () => {
-    const layers = [1, 2].map(() => ({ resistivity_ohm_m: 100, thickness_m: 1 }));
+  test('refuses more soil layers than are solved', () => {
+    const layers = Array.from({ length: 10 }, () => ({ resistivity_ohm_m: 100, thickness_m: 1 }));
     const study = { ...smallStudy, soil: { layers: [...layers, { resistivity_ohm_m: 10 }] } };
     expect(studyFaultLines(memorySource(study))).toEqual([
-      'study.json:6: soil.layers: list of soil layers has 3 items; expected 1 to 2 layers, the top one first',
+      'study.json:6: soil.layers: list of soil layers has 11 items; expected 1 to 10 layers, the top one first',
     ]);
   });
 

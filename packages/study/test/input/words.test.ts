@@ -2,6 +2,7 @@
 import { describe, expect, test } from 'vitest';
 import type { Fault } from '../../src/fault.ts';
 import { orderedFaults } from '../../src/input/fault-order.ts';
+import { placeOf } from '../../src/input/json-value.ts';
 import { nearestName } from '../../src/input/nearest-name.ts';
 import { figure, invisibleCharacter, listed, shown } from '../../src/input/shown-value.ts';
 
@@ -44,6 +45,16 @@ describe('nearestName', () => {
   ])('%s means %s', (name, meant) => {
     expect(nearestName(name, known)).toBe(meant);
   });
+});
+
+test('names of a page in length are not compared', () => {
+  expect(nearestName('y'.repeat(100), ['y'.repeat(100)])).toBeUndefined();
+});
+
+test('places are paths as people write them, odd and endless keys in quotation marks', () => {
+  expect(placeOf(placeOf('cases', 0), 'duration_s')).toBe('cases[0].duration_s');
+  expect(placeOf('', 'odd key')).toBe('["odd key"]');
+  expect(placeOf('soil', 'k'.repeat(50))).toBe(`soil["${'k'.repeat(40)}…"]`);
 });
 
 describe('orderedFaults', () => {
