@@ -49,7 +49,9 @@ export {
 } from './safety/tolerable-voltage.ts';
 export { judge, type Verdict } from './safety/verdict.ts';
 export { IMAGE_TOLERANCE, type ImageList, type SoilImages, soilImages } from './soil/image-list.ts';
+export { interfaceDepths } from './soil/layer-kernel.ts';
 export { pointPotential } from './soil/point-potential.ts';
+export { type SeasonalChange, seasonalSoil } from './soil/season.ts';
 export type * from './soil/soil-model.ts';
 export { type GraphSolution, type MetalModel, solveGraph, type UnitSolution } from './solve/solution.ts';
 export { MODEL_FLOOR, refinementUncertainty } from './solve/uncertainty.ts';

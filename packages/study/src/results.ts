@@ -72,6 +72,36 @@ export interface LimitsResult {
   readonly covering_factor: number;
 }
 
+/** One case in one season. */
+export interface SeasonCase {
+  readonly name: string;
+  readonly grid_current_A: number;
+  readonly gpr_V: number;
+  readonly gpr_uncertainty_V: number;
+  readonly touch: WorstTouch;
+  readonly step: WorstStep;
+}
+
+/** The study solved in another season's soil; same order of cases as the study. */
+export interface SeasonResult {
+  readonly name: string;
+  readonly layers: readonly { readonly resistivity_ohm_m: number; readonly thickness_m: number | null }[];
+  readonly covering_factor: number;
+  readonly resistance_ohm: number;
+  readonly resistance_uncertainty_ohm: number;
+  readonly segment_count: number;
+  readonly cases: readonly SeasonCase[];
+}
+
+/** Over the soil as given and every season, by case: the value that governs and the season it comes from. */
+export interface EnvelopeCase {
+  readonly name: string;
+  readonly gpr: { readonly season: string; readonly gpr_V: number };
+  /** smallest margin, not largest voltage: limits change with the season too */
+  readonly touch: WorstTouch & { readonly season: string };
+  readonly step: WorstStep & { readonly season: string };
+}
+
 export interface MeshLevel {
   readonly segment_count: number;
   readonly resistance_ohm: number;
@@ -112,6 +142,9 @@ export interface Results {
   };
   readonly limits: LimitsResult;
   readonly mesh: readonly MeshLevel[];
+  /** empty where the study names none */
+  readonly seasons: readonly SeasonResult[];
+  readonly envelope: readonly EnvelopeCase[];
   readonly cases: readonly CaseResult[];
   readonly snaps: readonly {
     readonly id: string;

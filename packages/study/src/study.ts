@@ -23,11 +23,23 @@ export interface CaseInput {
   readonly inject?: { readonly x_m: number; readonly y_m: number; readonly depth_m: number } | undefined;
 }
 
+/** A season: the whole soil anew, or the soil of the study with its top or its depth changed. */
+export interface SeasonInput {
+  readonly name: string;
+  readonly layers?: readonly LayerInput[] | undefined;
+  /** dried or frozen down to a depth */
+  readonly top?: { readonly depth_m: number; readonly resistivity_ohm_m: number } | undefined;
+  /** wet below a depth */
+  readonly below?: { readonly depth_m: number; readonly resistivity_ohm_m: number } | undefined;
+}
+
 export interface Study {
   readonly format: 'ohmstead-study';
   readonly version: 1;
   readonly title: string;
   readonly soil: { readonly layers: readonly LayerInput[] };
+  /** variants of the soil, each solved; the worst of all seasons governs */
+  readonly seasons?: readonly SeasonInput[] | undefined;
   readonly surfacing?: { readonly resistivity_ohm_m: number; readonly thickness_m: number } | undefined;
   readonly metal_model?: 'resistive' | 'equipotential' | undefined;
   readonly conductors: readonly string[];

@@ -20,6 +20,11 @@ export function layerDepths(soil: SoilModel): LayerDepths {
   return { top, bottom };
 }
 
+/** Depths of the interfaces, m, from the top; shape [layers − 1]. */
+export function interfaceDepths(soil: SoilModel): number[] {
+  return Array.from(layerDepths(soil).bottom.subarray(0, soil.layers.length - 1));
+}
+
 /** Layer that holds a depth; on an interface, the upper one. */
 export function layerAt(depths: LayerDepths, depth: number): number {
   let layer = 0;

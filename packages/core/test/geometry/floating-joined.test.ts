@@ -29,6 +29,11 @@ test('every conductor of the fence that touches the grid is told once', () => {
   ]);
 });
 
+test('a fence whose end touches the grid is told, in the first row too', () => {
+  const end = { ...wire(5, 0, 5, -2), electrode: 'fence' };
+  expect(told([end, ...grid], ['fence']).map((line) => line.slice(0, 19))).toEqual(['floating-joined 0 1']);
+});
+
 test('a fence clear of the grid, and electrodes that may be joined, are not told', () => {
   expect(told([...grid, { ...wire(5, 2, 5, 4), electrode: 'fence' }], ['fence'])).toEqual([]);
   expect(told([...grid, fence], [])).toEqual([]);

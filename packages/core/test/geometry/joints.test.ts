@@ -81,6 +81,19 @@ describe('metal that touches is one node', () => {
     expect(joints.nodeDegree[1]).toBe(6);
   });
 
+  test('a conductor shorter than the contact distance keeps two ends, and a middle where it is touched there', () => {
+    const short = wire(0, 0, 0.014, 0);
+    // both wires touch each other too, so the short one begins and ends at one node
+    const loop = join(short, wire(0, 0, 0, 5), wire(0.014, 0, 0.014, -5));
+    expect(counts(loop)).toEqual([3, 3, 1]);
+    expect([loop.pieceNode1[0], loop.pieceNode2[0]]).toEqual([0, 0]);
+    expect(counts(join(short, wire(0.005, 0, 0.005, 5)))).toEqual([3, 2, 1]);
+    expect(counts(join(short, wire(0.009, 0, 0.009, 5)))).toEqual([3, 2, 1]);
+    expect(join(short, wire(0.005, 0, 0.005, 5)).nodeDegree[0]).toBe(2);
+    expect(join(short, wire(0.009, 0, 0.009, 5)).nodeDegree[1]).toBe(2);
+    expect(counts(join(short, wire(0.007, 0, 0.007, 5)))).toEqual([4, 3, 1]);
+  });
+
   test('three conductors in a triangle as small as the contact distance make one node', () => {
     // sides 10 mm, 14.9 mm and 20 mm; the 20 mm side is longer than the contact distance, but its ends are one by way of the others
     const cosine = (0.02 ** 2 + 0.01 ** 2 - 0.0149 ** 2) / (2 * 0.02 * 0.01);

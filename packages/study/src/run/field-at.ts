@@ -34,8 +34,12 @@ export function fieldAt(
   const prepared = prepare(loaded);
   const solved = solveLevels(prepared, onProgress);
   const unit = solved.units[solved.unitOfCase[at]!]!;
-  const current = caseResult(loaded.study.cases[at]!, unit, solved.mesh, limitsOf(loaded.study)).result
-    .grid_current_A;
+  const current = caseResult(
+    loaded.study.cases[at]!,
+    unit,
+    solved.mesh,
+    limitsOf(loaded.study, prepared.soil.layers[0]!.resistivity),
+  ).result.grid_current_A;
   const { leakage } = solved.graph.units[solved.unitOfCase[at]!]!;
   return points.map((point) => {
     const potential =

@@ -4,6 +4,7 @@ import {
   areaMask,
   type Box,
   type GraphSolution,
+  interfaceDepths,
   type Lattice,
   leakageMatrix,
   type MetalPotential,
@@ -80,6 +81,7 @@ const SCOUT_TOLERANCE = 1e-2;
 
 export function solveLevels(prepared: Prepared, progress: Progress): Solved {
   const images = soilImages(prepared.soil);
+  const interfaces = interfaceDepths(prepared.soil);
   const distinct = [...new Set(prepared.injectionNodes)];
   const box = assessedBox(prepared);
   const spacing = Math.max(
@@ -89,7 +91,7 @@ export function solveLevels(prepared: Prepared, progress: Progress): Solved {
   );
   const at = (level: number): Level => {
     progress('solving the graph', level / (LAST_LEVEL + 2));
-    const mesh = segmentMesh(prepared.loaded.conductors, prepared.joints, prepared.interfaces, level);
+    const mesh = segmentMesh(prepared.loaded.conductors, prepared.joints, interfaces, level);
     const model = prepared.loaded.study.metal_model ?? 'resistive';
     const graph = solveGraph(mesh, leakageMatrix(mesh, images), distinct, prepared.resistancePerMetre, model);
     return levelOf(images, graph, box);

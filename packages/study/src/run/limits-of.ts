@@ -3,8 +3,8 @@ import { coveringDeratingFactor, tolerableStepVoltage, tolerableTouchVoltage } f
 import type { LimitsResult } from '../results.ts';
 import type { Study } from '../study.ts';
 
-export function limitsOf(study: Study): LimitsResult {
-  const soil = study.soil.layers[0]!.resistivity_ohm_m;
+/** @param soil resistivity of the top layer, Ω·m */
+export function limitsOf(study: Study, soil: number): LimitsResult {
   const covering = study.surfacing;
   return {
     basis: 'IEEE 80',

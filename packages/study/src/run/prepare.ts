@@ -11,12 +11,11 @@ import {
 } from '@ohmstead/core';
 import { type Fault, InputFaults } from '../fault.ts';
 import type { ResultsWarning } from '../results.ts';
-import type { LoadedStudy, Polygon, Study } from '../study.ts';
+import type { LayerInput, LoadedStudy, Polygon } from '../study.ts';
 
 export interface Prepared {
   readonly loaded: LoadedStudy;
   readonly soil: SoilModel;
-  readonly interfaces: readonly number[];
   readonly joints: Joints;
   /** piece of metal of each conductor */
   readonly componentOf: Int32Array;
@@ -70,8 +69,7 @@ export function prepare(loaded: LoadedStudy): Prepared {
     });
   return {
     loaded,
-    soil: soilOf(study),
-    interfaces: interfacesOf(study),
+    soil: layeredSoil(study.soil.layers),
     joints,
     componentOf,
     injectionNodes,
@@ -95,23 +93,14 @@ function located(fault: ConductorFault, loaded: LoadedStudy): Fault {
   };
 }
 
-function soilOf(study: Study): SoilModel {
+/** The soil that layers of a study describe. */
+export function layeredSoil(layers: readonly LayerInput[]): SoilModel {
   return {
-    layers: study.soil.layers.map((layer) => ({
+    layers: layers.map((layer) => ({
       resistivity: layer.resistivity_ohm_m,
       thickness: layer.thickness_m ?? Number.POSITIVE_INFINITY,
     })),
   };
-}
-
-function interfacesOf(study: Study): number[] {
-  const depths: number[] = [];
-  let depth = 0;
-  for (const layer of study.soil.layers.slice(0, -1)) {
-    depth += layer.thickness_m!;
-    depths.push(depth);
-  }
-  return depths;
 }
 
 function componentsOfConductors(table: ConductorTable, joints: Joints): Int32Array {

@@ -1,6 +1,6 @@
 // The chain from a loaded study to everything that the sheet, the pack and the command line show.
 import type { Outcome } from '../outcome.ts';
-import type { Results, ResultsWarning } from '../results.ts';
+import type { Results, ResultsWarning, SeasonResult } from '../results.ts';
 import type { LoadedStudy } from '../study.ts';
 import { programVersion } from '../version.ts';
 import { caseResult } from './case-results.ts';
@@ -11,6 +11,8 @@ import { type Progress, type Solved, solveLevels } from './levels.ts';
 import { limitsOf } from './limits-of.ts';
 import { type Prepared, prepare } from './prepare.ts';
 import { conductorLength, isEnergised, isRod } from './roles.ts';
+import { envelope, seasonResults } from './seasons.ts';
+import { layersOf } from './soil-results.ts';
 
 export interface SolveOptions {
   /** told of long work: a stage in words and the share done, 0 to 1 */
@@ -23,13 +25,13 @@ export function solveStudy(loaded: LoadedStudy, options: SolveOptions = {}): Out
   progress('joining conductors', 0);
   const prepared = prepare(loaded);
   const solved = solveLevels(prepared, progress);
-  const limits = limitsOf(loaded.study);
+  const limits = limitsOf(loaded.study, prepared.soil.layers[0]!.resistivity);
   const unitOf = (c: number) => solved.units[solved.unitOfCase[c]!]!;
   const cases = loaded.study.cases.map((input, c) => caseResult(input, unitOf(c), solved.mesh, limits));
   const box = assessedBox(prepared);
   return {
     study: loaded.study,
-    results: resultsOf(prepared, solved, limits, cases),
+    results: resultsOf(prepared, solved, limits, cases, seasonResults(prepared, progress)),
     plan: planOf(prepared),
     segments: segmentTable(solved),
     cases: cases.map(({ result }, c) => caseFigures(result.name, result.grid_current_A, unitOf(c), box)),
@@ -41,7 +43,9 @@ function resultsOf(
   solved: Solved,
   limits: Results['limits'],
   cases: readonly ReturnType<typeof caseResult>[],
+  seasons: readonly SeasonResult[],
 ): Results {
+  const base = cases.map(({ result }) => result);
   const { loaded, joints } = prepared;
   const table = loaded.conductors;
   const energised = Array.from({ length: table.count }, (_, i) => i).filter((i) => isEnergised(prepared, i));
@@ -73,15 +77,12 @@ function resultsOf(
       image_error: images.error,
       image_count: images.count,
     },
-    soil: {
-      layers: prepared.soil.layers.map((layer) => ({
-        resistivity_ohm_m: layer.resistivity,
-        thickness_m: Number.isFinite(layer.thickness) ? layer.thickness : null,
-      })),
-    },
+    soil: { layers: layersOf(prepared.soil) },
     limits,
     mesh: solved.levels,
-    cases: cases.map(({ result }) => result),
+    seasons,
+    envelope: seasons.length === 0 ? [] : envelope(base, seasons),
+    cases: base,
     snaps: joints.snaps.map((snap) => ({
       id: table.id[snap.conductor]!,
       other_id: table.id[snap.other]!,

@@ -8,6 +8,7 @@ export interface StudyChoices {
   readonly cases?: readonly CaseInput[];
   readonly metal?: 'resistive' | 'equipotential';
   readonly areas?: Study['areas'];
+  readonly seasons?: Study['seasons'];
   /** electrode of each bar; main where undefined */
   readonly electrodes?: readonly (string | undefined)[];
   readonly floating?: readonly string[];
@@ -31,6 +32,7 @@ export function studyOf(bars: readonly Bar[], layers: Layers, choices: StudyChoi
       cases: choices.cases ?? [{ name: 'one ampere', grid_current_A: 1, duration_s: 0.5 }],
       limits: { basis: 'IEEE 80', body_mass_kg: 70 },
       areas: choices.areas,
+      seasons: choices.seasons,
     },
     conductors: { ...table, electrode: bars.map((_, i) => choices.electrodes?.[i] ?? 'main') },
     origins: bars.map((_, i) => ({ file: 'conductors.csv', line: i + 2 })),
