@@ -29,6 +29,7 @@ import {
   worstStep,
   worstTouch,
 } from '@ohmstead/core';
+import { InputFaults } from '../fault.ts';
 import type { MeshLevel } from '../results.ts';
 import { assessedBox, lineReach } from './extent.ts';
 import type { Prepared } from './prepare.ts';
@@ -70,6 +71,8 @@ const TOUCH_TARGET = 1e-2;
 /** A next level is not begun when it would need more segments than this: about a second of one core. */
 const SEGMENT_CEILING = 4000;
 const LAST_LEVEL = 5;
+/** Most segments of the second mesh, which every study needs: a leakage matrix of 0.6 GB and half a minute of one core. */
+const MOST_SEGMENTS = 12_000;
 /** Lattice spacing, m: half a metre shows a mesh of 3 m; larger plans get at most this many points a side. */
 const SPACING_M = 0.5;
 const MOST_POINTS = 400;
@@ -89,9 +92,12 @@ export function solveLevels(prepared: Prepared, progress: Progress): Solved {
     (box.east - box.west) / MOST_POINTS,
     (box.north - box.south) / MOST_POINTS,
   );
+  const meshAt = (level: number): SegmentMesh =>
+    segmentMesh(prepared.loaded.conductors, prepared.joints, interfaces, level);
+  refuseBeyondMemory(meshAt(1).count);
   const at = (level: number): Level => {
     progress('solving the graph', level / (LAST_LEVEL + 2));
-    const mesh = segmentMesh(prepared.loaded.conductors, prepared.joints, interfaces, level);
+    const mesh = meshAt(level);
     const model = prepared.loaded.study.metal_model ?? 'resistive';
     const graph = solveGraph(mesh, leakageMatrix(mesh, images), distinct, prepared.resistancePerMetre, model);
     return levelOf(images, graph, box);
@@ -128,6 +134,20 @@ export function solveLevels(prepared: Prepared, progress: Progress): Solved {
     coarse: coarse.graph,
     levels,
   };
+}
+
+/** @throws InputFaults when the two meshes that every study needs cannot be held */
+function refuseBeyondMemory(segments: number): void {
+  if (segments <= MOST_SEGMENTS) return;
+  const gigabytes = (4e-9 * segments * segments).toFixed(1);
+  throw new InputFaults([
+    {
+      file: 'study.json',
+      place: 'conductors',
+      code: 'too-large',
+      message: `the electrode needs ${segments} segments and a leakage matrix of ${gigabytes} GB; at most ${MOST_SEGMENTS} segments are solved`,
+    },
+  ]);
 }
 
 interface Level {

@@ -31,7 +31,9 @@ describe('seasons of a study', () => {
     const [governing] = results.envelope;
     expect(governing!.gpr.season).toBe('frozen to 0.8 m');
     expect(governing!.gpr.gpr_V).toBe(results.seasons[0]!.cases[0]!.gpr_V);
-    const margins = [results.cases[0]!, ...results.seasons.map((season) => season.cases[0]!)].map((c) => c.touch.margin_percent);
+    const margins = [results.cases[0]!, ...results.seasons.map((season) => season.cases[0]!)].map(
+      (c) => c.touch.margin_percent,
+    );
     expect(governing!.touch.margin_percent).toBe(Math.min(...margins));
     expect(results.cases[0]!.gpr_V).toBeLessThan(governing!.gpr.gpr_V);
   });
