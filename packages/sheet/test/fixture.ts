@@ -262,6 +262,8 @@ function resultsOf({ title, cases, f, conductors, fenceName, covering, touch, st
     version: 1,
     program_version: '0.1.0',
     title,
+    seasons: [],
+    envelope: [],
     metal_model: 'resistive',
     electrode: {
       resistance_ohm: r,

@@ -17,8 +17,9 @@ h3{font-size:8.6pt;margin-top:4mm}
 .part{grid-template-columns:25mm minmax(0,1fr);column-gap:6mm}
 .body{padding-bottom:6mm}
 .say{margin-bottom:2mm}
-h2,h3,caption{break-after:avoid}
-.margin,figure,tr,.say,.inputs,.caution,.remarks li,.cautions li{break-inside:avoid}
+h2,h3,caption,thead,summary{break-after:avoid}
+.margin{align-self:start}
+.verdicts,.margin,figure,tr,.say,.inputs,.caution,.remarks li,.cautions li{break-inside:avoid}
 .figure{margin:5mm 0 2mm}
 figure>svg{width:auto;max-width:100%;max-height:122mm;margin-left:0}
 figcaption{font-size:8.4pt}

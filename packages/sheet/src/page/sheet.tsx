@@ -8,6 +8,7 @@ import { Fault } from '../section/fault.tsx';
 import { Ground } from '../section/ground.tsx';
 import { People } from '../section/people.tsx';
 import { Rise } from '../section/rise.tsx';
+import { Season } from '../section/season.tsx';
 import { Surface } from '../section/surface.tsx';
 import { TitleBlock } from '../section/title.tsx';
 import { Trust } from '../section/trust.tsx';
@@ -26,6 +27,7 @@ export function Sheet({ outcome }: { outcome: Outcome }): VNode {
       <Rise outcome={outcome} />
       <Surface outcome={outcome} />
       <People outcome={outcome} />
+      <Season outcome={outcome} />
       <Trust outcome={outcome} />
       <Assumed outcome={outcome} />
       <Cautions />

@@ -8,7 +8,7 @@ const CAUTIONS: readonly string[] = [
   'Measure before energising: the resistance of the electrode, touch and step voltage at the places ringed above, and the continuity of every joint that a hand can reach.',
   'A voltage within its limit is tolerable for the body and the time assumed. It is felt, and it may throw a person off a ladder.',
   'The covering counts only where it lies, at its full thickness, clean and drained. Walked in, silted up or dug over, it is soil.',
-  'Soil changes with drought, rain and frost. The layers stated here are one state of it.',
+  'Soil changes with drought, rain and frost. The layers stated here are states of it that somebody chose.',
   'Metal that is not listed – pipes, rails, cable sheaths, telephone lines, a neighbour’s fence – can carry the rise away from the site or bring remote earth into it. Nothing is said of it here.',
   'Clearing times are those of the protection as stated. A breaker that fails and a second shot after reclosing lengthen them.',
 ];

@@ -4,7 +4,7 @@ import type { Outcome, PlanConductor } from '@ohmstead/study';
 import type { VNode } from 'preact';
 import { PlanFigure } from '../figure/plan.tsx';
 import { titles } from '../figure/titles.ts';
-import { fixed, given, givenQuantity } from '../format/number.ts';
+import { given, givenQuantity } from '../format/number.ts';
 import { capital, counted, listed, tally } from '../format/words.ts';
 import { DataTable, FigureBlock, Input, Part, Say } from './parts.tsx';
 
@@ -107,9 +107,8 @@ function conductorTable(outcome: Outcome): VNode {
         caption="Conductors; ends as x, y, depth in metres"
         columns={[
           { label: 'id' },
-          { label: 'from, m' },
-          { label: 'to, m' },
-          { label: 'length, m', align: 'right' },
+          { label: 'from, m', align: 'right' },
+          { label: 'to, m', align: 'right' },
           { label: 'diameter, mm', align: 'right' },
           { label: 'material' },
           { label: 'electrode' },
@@ -118,7 +117,6 @@ function conductorTable(outcome: Outcome): VNode {
           c.id,
           end(c.x1, c.y1, c.depth1),
           end(c.x2, c.y2, c.depth2),
-          fixed(lengthOf(c), 2),
           given(c.diameter * 1000),
           c.insulated ? `${c.material}, insulated` : c.material,
           c.role === 'floating' ? `${c.electrode}, floating` : c.electrode,

@@ -4,43 +4,11 @@ import type { VNode } from 'preact';
 import { GroundFigure } from '../figure/ground.tsx';
 import { titles } from '../figure/titles.ts';
 import { fixed, given, givenQuantity, significant } from '../format/number.ts';
-import { capital, countWord, tally } from '../format/words.ts';
+import { tally } from '../format/words.ts';
 import { CLAUSES, CoveringFormula, S } from './formulas.tsx';
 import { How } from './how.tsx';
+import { Layers } from './layers.tsx';
 import { DataTable, FigureBlock, Input, Part, Result, Say } from './parts.tsx';
-
-function Layers({ outcome }: { outcome: Outcome }): VNode {
-  const { layers } = outcome.results.soil;
-  if (layers.length === 1) {
-    return (
-      <Say>
-        The soil is taken as uniform,{' '}
-        <Input path="soil.layers[0].resistivity_ohm_m" value={layers[0].resistivity_ohm_m} unit="Ω·m" /> at
-        every depth.
-      </Say>
-    );
-  }
-  return (
-    <Say>
-      {capital(countWord(layers.length))} layers:{' '}
-      {layers.map((layer, k) => (
-        <span key={k}>
-          {k > 0 && ', then '}
-          <Input path={`soil.layers[${k}].resistivity_ohm_m`} value={layer.resistivity_ohm_m} unit="Ω·m" />
-          {layer.thickness_m !== null && (
-            <>
-              {' '}
-              for {k === 0 ? 'the first ' : ''}
-              <Input path={`soil.layers[${k}].thickness_m`} value={layer.thickness_m} unit="m" />
-            </>
-          )}
-          {layer.thickness_m === null && ' below'}
-        </span>
-      ))}
-      .
-    </Say>
-  );
-}
 
 function Covering({ outcome }: { outcome: Outcome }): VNode {
   const { limits } = outcome.results;
@@ -113,7 +81,9 @@ export function Ground({ outcome }: { outcome: Outcome }): VNode {
   ];
   return (
     <Part id="ground" title="Ground" facts={facts}>
-      <Layers outcome={outcome} />
+      <Say>
+        <Layers layers={soil.layers} path="soil.layers" />.
+      </Say>
       <Covering outcome={outcome} />
       <FigureBlock
         name="ground-section"

@@ -5,13 +5,14 @@ import { counted } from '../format/words.ts';
 import { answerOf, answerSentences } from '../verdict/answer.ts';
 
 /** Anchors and names of the parts, in order. */
-export const PARTS: readonly (readonly [id: string, name: string])[] = [
+const PARTS: readonly (readonly [id: string, name: string])[] = [
   ['ground', 'Ground'],
   ['electrode', 'Electrode'],
   ['fault', 'Fault'],
   ['rise', 'Rise'],
   ['surface', 'Surface'],
   ['people', 'People'],
+  ['season', 'Season'],
   ['trust', 'Trust'],
   ['assumed', 'Assumed'],
   ['cautions', 'Cautions'],
@@ -51,7 +52,7 @@ export function TitleBlock({ outcome }: { outcome: Outcome }): VNode {
       </div>
       <nav aria-label="Parts of the sheet">
         <ol>
-          {PARTS.map(([id, name]) => (
+          {PARTS.filter(([id]) => id !== 'season' || results.seasons.length > 0).map(([id, name]) => (
             <li key={id}>
               <a href={`#${id}`}>{name}</a>
             </li>

@@ -1,5 +1,5 @@
 // Tables of the fault cases: currents, rise and worst voltages; limits; profiles.
-import type { CaseResult, Outcome } from '@ohmstead/study';
+import type { CaseResult, Outcome, SeasonCase } from '@ohmstead/study';
 import { type VerdictRow, verdictRows } from '../verdict/rows.ts';
 import { type Column, csvOf } from './csv.ts';
 
@@ -42,6 +42,7 @@ export function limitsCsv(outcome: Outcome): string {
   const columns: readonly Column<VerdictRow>[] = [
     { name: 'case', value: (r) => r.caseName },
     { name: 'quantity', value: (r) => r.subject },
+    { name: 'season', value: (r) => r.season ?? 'as given' },
     { name: 'worst_V', value: (r) => r.worst },
     { name: 'uncertainty_V', value: (r) => r.uncertainty },
     { name: 'x_m', value: (r) => r.x },
@@ -58,6 +59,51 @@ export function limitsCsv(outcome: Outcome): string {
     { name: 'covering_factor', value: () => limits.covering_factor },
   ];
   return csvOf(columns, verdictRows(outcome.results));
+}
+
+interface SeasonRow {
+  readonly season: string;
+  readonly resistance: readonly [value: number, uncertainty: number];
+  readonly covering: number;
+  readonly of: SeasonCase;
+}
+
+const SEASON_COLUMNS: readonly Column<SeasonRow>[] = [
+  { name: 'season', value: (r) => r.season },
+  { name: 'case', value: (r) => r.of.name },
+  { name: 'resistance_ohm', value: (r) => r.resistance[0] },
+  { name: 'resistance_uncertainty_ohm', value: (r) => r.resistance[1] },
+  { name: 'covering_factor', value: (r) => r.covering },
+  { name: 'grid_current_A', value: (r) => r.of.grid_current_A },
+  { name: 'gpr_V', value: (r) => r.of.gpr_V },
+  { name: 'gpr_uncertainty_V', value: (r) => r.of.gpr_uncertainty_V },
+  { name: 'touch_worst_V', value: (r) => r.of.touch.worst_V },
+  { name: 'touch_uncertainty_V', value: (r) => r.of.touch.uncertainty_V },
+  { name: 'touch_x_m', value: (r) => r.of.touch.x_m },
+  { name: 'touch_y_m', value: (r) => r.of.touch.y_m },
+  { name: 'touch_limit_V', value: (r) => r.of.touch.limit_V },
+  { name: 'touch_margin_percent', value: (r) => r.of.touch.margin_percent },
+  { name: 'step_worst_V', value: (r) => r.of.step.worst_V },
+  { name: 'step_uncertainty_V', value: (r) => r.of.step.uncertainty_V },
+  { name: 'step_x_m', value: (r) => r.of.step.x_m },
+  { name: 'step_y_m', value: (r) => r.of.step.y_m },
+  { name: 'step_limit_V', value: (r) => r.of.step.limit_V },
+  { name: 'step_margin_percent', value: (r) => r.of.step.margin_percent },
+];
+
+/** One row a case and season other than the soil as given. */
+export function seasonsCsv({ results }: Outcome): string {
+  const rows = results.seasons.flatMap((season) =>
+    season.cases.map(
+      (of): SeasonRow => ({
+        season: season.name,
+        resistance: [season.resistance_ohm, season.resistance_uncertainty_ohm],
+        covering: season.covering_factor,
+        of,
+      }),
+    ),
+  );
+  return csvOf(SEASON_COLUMNS, rows);
 }
 
 /** One row a point of the profile through the worst touch voltage of a case. */

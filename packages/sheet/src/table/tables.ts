@@ -1,7 +1,7 @@
 // Every table of a sheet as a CSV file.
 import type { MeshLevel, Outcome } from '@ohmstead/study';
 import { uniqueSlugs } from '../format/slug.ts';
-import { casesCsv, limitsCsv, profileCsv } from './case-tables.ts';
+import { casesCsv, limitsCsv, profileCsv, seasonsCsv } from './case-tables.ts';
 import { type Column, csvOf } from './csv.ts';
 import { conductorsCsv, electrodesCsv, segmentsCsv, snapsCsv } from './electrode-tables.ts';
 
@@ -12,22 +12,35 @@ export interface TableFile {
 }
 
 interface LayerRow {
+  readonly season: string;
   readonly layer: number;
   readonly top: number;
   readonly resistivity: number;
   readonly thickness: number | null;
 }
 
-function layerRows(outcome: Outcome): readonly LayerRow[] {
+function layersIn(season: string, layers: Outcome['results']['soil']['layers']): readonly LayerRow[] {
   let top = 0;
-  return outcome.results.soil.layers.map(({ resistivity_ohm_m, thickness_m }, k) => {
-    const row: LayerRow = { layer: k + 1, top, resistivity: resistivity_ohm_m, thickness: thickness_m };
+  return layers.map(({ resistivity_ohm_m, thickness_m }, k) => {
+    const row: LayerRow = {
+      season,
+      layer: k + 1,
+      top,
+      resistivity: resistivity_ohm_m,
+      thickness: thickness_m,
+    };
     top += thickness_m ?? 0;
     return row;
   });
 }
 
+function layerRows({ results }: Outcome): readonly LayerRow[] {
+  const seasons = results.seasons.flatMap((season) => layersIn(season.name, season.layers));
+  return [...layersIn('as given', results.soil.layers), ...seasons];
+}
+
 const LAYER_COLUMNS: readonly Column<LayerRow>[] = [
+  { name: 'season', value: (l) => l.season },
   { name: 'layer', value: (l) => l.layer },
   { name: 'top_depth_m', value: (l) => l.top },
   { name: 'thickness_m', value: (l) => l.thickness },
@@ -85,6 +98,7 @@ export function tables(outcome: Outcome): readonly TableFile[] {
     { name: 'snaps.csv', csv: snapsCsv(outcome) },
     { name: 'soil.csv', csv: csvOf(LAYER_COLUMNS, layerRows(outcome)) },
     ...profiles,
+    ...(results.seasons.length > 0 ? [{ name: 'seasons.csv', csv: seasonsCsv(outcome) }] : []),
   ];
   return files.sort((a, b) => (a.name < b.name ? -1 : 1));
 }

@@ -1,5 +1,5 @@
-// Lists every comparison of a voltage with its limit: touch, step and floating metal of each case.
-import type { CaseResult, ElectrodeResult, Results } from '@ohmstead/study';
+// Lists every comparison of a voltage with its limit: touch, step and floating metal of each case, and other seasons.
+import type { CaseResult, ElectrodeResult, Results, WorstTouch } from '@ohmstead/study';
 import { type Compared, findingOf } from './finding.ts';
 
 export interface VerdictRow extends Compared {
@@ -7,15 +7,17 @@ export interface VerdictRow extends Compared {
   readonly caseIndex: number;
   readonly caseName: string;
   readonly kind: 'touch' | 'step' | 'floating';
-  /** `touch`, `step`, `touch at fence` */
+  /** `touch`, `step`, `touch at fence`, `touch, dry summer` */
   readonly subject: string;
+  /** where another season than the soil as given governs, its name */
+  readonly season: string | undefined;
   /** worst/limit */
   readonly share: number;
   readonly x: number;
   readonly y: number;
 }
 
-type Place = Pick<VerdictRow, 'kind' | 'subject' | 'x' | 'y'>;
+type Place = Pick<VerdictRow, 'kind' | 'subject' | 'season' | 'x' | 'y'>;
 type Voltages = Pick<VerdictRow, 'worst' | 'uncertainty' | 'limit'>;
 
 function row(caseIndex: number, caseName: string, place: Place, volts: Voltages): VerdictRow {
@@ -40,6 +42,7 @@ function floatingRow(index: number, of: CaseResult, metal: ElectrodeResult): Ver
   const place: Place = {
     kind: 'floating',
     subject: `touch at ${metal.name}`,
+    season: undefined,
     x: metal.touch_x_m ?? Number.NaN,
     y: metal.touch_y_m ?? Number.NaN,
   };
@@ -50,22 +53,43 @@ function floatingRow(index: number, of: CaseResult, metal: ElectrodeResult): Ver
   });
 }
 
-/** Every comparison, case by case in the order of the results: touch, step, then floating metal. */
+function measuredRow(
+  index: number,
+  caseName: string,
+  of: WorstTouch,
+  place: Pick<Place, 'kind' | 'season'>,
+): VerdictRow {
+  const subject = place.season === undefined ? place.kind : `${place.kind}, ${place.season}`;
+  const volts: Voltages = { worst: of.worst_V, uncertainty: of.uncertainty_V, limit: of.limit_V };
+  return row(index, caseName, { ...place, subject, x: of.x_m, y: of.y_m }, volts);
+}
+
+/** What governs in another season than the soil as given, which has its own rows. */
+function seasonRows(results: Results, index: number): readonly VerdictRow[] {
+  const governing = results.envelope[index];
+  if (governing === undefined) return [];
+  const names = new Set(results.seasons.map((season) => season.name));
+  return (['touch', 'step'] as const)
+    .filter((kind) => names.has(governing[kind].season))
+    .map((kind) =>
+      measuredRow(index, governing.name, governing[kind], { kind, season: governing[kind].season }),
+    );
+}
+
+/** Every comparison, case by case in the order of the results: touch, step, floating metal, governing seasons. */
 export function verdictRows(results: Results): readonly VerdictRow[] {
   return results.cases.flatMap((of, index) => {
-    const direct = (['touch', 'step'] as const).map((kind) => {
-      const { worst_V, uncertainty_V, limit_V, x_m, y_m } = of[kind];
-      const place: Place = { kind, subject: kind, x: x_m, y: y_m };
-      return row(index, of.name, place, { worst: worst_V, uncertainty: uncertainty_V, limit: limit_V });
-    });
+    const direct = (['touch', 'step'] as const).map((kind) =>
+      measuredRow(index, of.name, of[kind], { kind, season: undefined }),
+    );
     const floating = results.electrodes.flatMap((metal) => floatingRow(index, of, metal) ?? []);
-    return [...direct, ...floating];
+    return [...direct, ...floating, ...seasonRows(results, index)];
   });
 }
 
-/** Place of the case that comes nearest to or farthest beyond a limit; the first where two are equal. */
+/** Place of the case that, in the soil as given, comes nearest to or farthest beyond a limit; the first of equals. */
 export function governingCase(results: Results): number {
-  const rows = verdictRows(results).filter((r) => r.kind !== 'floating');
+  const rows = verdictRows(results).filter((r) => r.kind !== 'floating' && r.season === undefined);
   const worst = rows.reduce((a, b) => (b.share > a.share ? b : a), rows[0]);
   return worst.caseIndex;
 }

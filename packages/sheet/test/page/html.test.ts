@@ -3,6 +3,7 @@ import type { Outcome } from '@ohmstead/study';
 import { describe, expect, it } from 'vitest';
 import { sheetCss, sheetHtml } from '../../src/index.ts';
 import { fixtureOutcome } from '../fixture.ts';
+import { withSeason } from '../fixture-season.ts';
 
 const outcome = fixtureOutcome({ spacing: 2 });
 const html = sheetHtml(outcome);
@@ -258,6 +259,25 @@ describe('other studies', () => {
       'only case: 950 A enter the ground, as given, for 0.5 s; no X/R is given, so the direct-current offset is left out',
     );
     expect(text).toContain('It enters at the node nearest the centroid of the metal, (24, 18) m.');
+  });
+
+  it('other seasons, of which one governs', () => {
+    const page = sheetHtml(
+      withSeason(fixtureOutcome({ spacing: 6, currents: [2000, 300, 200] }), {
+        name: 'dry summer',
+        times: 1.5,
+      }),
+    );
+    const season = textOf(partOf(page, 'season'));
+    expect(season).toContain(
+      'dry summer: Two layers: 900 Ω·m for the first 1.5 m, then 100 Ω·m below. The resistance is 3.200 ± 0.010 Ω',
+    );
+    expect(season).toContain(
+      '33 kV bus: dry summer governs touch and step; the rise is highest in dry summer',
+    );
+    expect(textOf(partOf(page, 'people'))).toContain('touch, dry summer');
+    expect(page).toContain('<a href="#season">');
+    expect(html).not.toContain('#season');
   });
 
   it('floating metal in several pieces, areas given', () => {

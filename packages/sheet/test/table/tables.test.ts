@@ -4,6 +4,7 @@ import { describe, expect, it } from 'vitest';
 import { tables } from '../../src/index.ts';
 import { csvCell, csvOf } from '../../src/table/csv.ts';
 import { fixtureOutcome } from '../fixture.ts';
+import { withSeason } from '../fixture-season.ts';
 
 const outcome = fixtureOutcome({ spacing: 2 });
 const files = tables(outcome);
@@ -111,10 +112,19 @@ describe('table files', () => {
 
   it('tell the depth of each layer, and nothing for the thickness of the last', () => {
     expect(table('soil.csv')).toEqual([
-      ['layer', 'top_depth_m', 'thickness_m', 'resistivity_ohm_m'],
-      ['1', '0', '2', '300'],
-      ['2', '2', '', '100'],
+      ['season', 'layer', 'top_depth_m', 'thickness_m', 'resistivity_ohm_m'],
+      ['as given', '1', '0', '2', '300'],
+      ['as given', '2', '2', '', '100'],
     ]);
+  });
+
+  it('tell every case in every other season', () => {
+    const seasonal = tables(withSeason(outcome, { name: 'dry summer', times: 1.3 }));
+    const seasons = parse(seasonal.find((f) => f.name === 'seasons.csv')?.csv ?? '');
+    expect(seasons).toHaveLength(1 + outcome.results.cases.length);
+    expect(seasons[1][0]).toBe('dry summer');
+    expect(seasonal.find((f) => f.name === 'soil.csv')?.csv).toContain('dry summer,1,0,1.5,900\r\n');
+    expect(seasonal.find((f) => f.name === 'limits.csv')?.csv).toContain('"touch, dry summer",dry summer,');
   });
 
   it('protect names from the study', () => {

@@ -5,6 +5,7 @@ import { answerOf, answerSentences } from '../../src/verdict/answer.ts';
 import { findingOf, findingWords, undecidedReason } from '../../src/verdict/finding.ts';
 import { governingCase, verdictRows } from '../../src/verdict/rows.ts';
 import { fixtureOutcome } from '../fixture.ts';
+import { withSeason } from '../fixture-season.ts';
 
 const plain = (text: string): string => text.replace(/[\u202f\u00a0]/g, ' ');
 
@@ -119,6 +120,25 @@ describe('rows of the comparison', () => {
       electrodes: base.electrodes.map((e) => (e.role === 'floating' ? { ...e, touch_ratio: -0.9 } : e)),
     };
     expect(answerOf(results).predicate).toBe('exceeds a limit');
+  });
+
+  it('let another season govern: a case within in the soil as given exceeds a limit when it does in a dry one', () => {
+    const base = { ...fixtureOutcome({ spacing: 6 }), results: touching(700, 300) };
+    const dry = withSeason(base, { name: 'dry summer', times: 1.3 }).results;
+    expect(answerOf(base.results).finding).toBe('within');
+    expect(answerOf(dry).subject).toBe('one of two cases');
+    expect(plain(answerSentences(dry)[0])).toMatch(
+      /^case 1: the worst touch voltage, dry summer, 910 ± 10 V/,
+    );
+    const rows = verdictRows(dry).filter((r) => r.season !== undefined);
+    expect(rows.map((r) => r.subject)).toEqual([
+      'touch, dry summer',
+      'step, dry summer',
+      'touch, dry summer',
+      'step, dry summer',
+    ]);
+    const wet = withSeason(base, { name: 'wet', times: 0.7 }).results;
+    expect(verdictRows(wet).every((r) => r.season === undefined)).toBe(true);
   });
 
   it('choose the case that comes nearest to a limit or farthest beyond', () => {
