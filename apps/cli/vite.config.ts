@@ -8,7 +8,12 @@ export default defineConfig({
     outDir: 'dist',
     emptyOutDir: false,
     rollupOptions: {
-      input: { ohmstead: 'src/ohmstead.ts', bench: 'src/bench.ts', agreement: 'src/agreement.ts', schema: 'src/schema.ts' },
+      input: {
+        ohmstead: 'src/ohmstead.ts',
+        bench: 'src/bench.ts',
+        agreement: 'src/agreement.ts',
+        schema: 'src/schema.ts',
+      },
       output: { entryFileNames: '[name].js', chunkFileNames: 'chunks/[name].js' },
     },
   },

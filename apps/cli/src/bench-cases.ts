@@ -10,6 +10,11 @@ export interface BenchCase {
 }
 
 export const benchCases: readonly BenchCase[] = [
-  { name: 'demo station, two layers, three cases', folder: 'test-data/aldermoor', level: 0, small: true },
-  { name: '70 × 70 m, 100 meshes, two layers', folder: 'test-data/square-70m', level: 2, small: false },
+  {
+    name: '70 × 70 m, 100 meshes, two layers, coarsest mesh',
+    folder: 'test-data/square-70m',
+    level: 0,
+    small: true,
+  },
+  { name: 'the same, as refined by the study', folder: 'test-data/square-70m', level: 2, small: false },
 ];

@@ -65,6 +65,7 @@ function round(loaded: LoadedStudy, level: number): Arms {
       full.set(i, j, matrix.entries[(i * (i + 1)) / 2 + j]!);
       full.set(j, i, matrix.entries[(i * (i + 1)) / 2 + j]!);
     }
+  // all metal at one volt: for an electrode in one piece the same system, so that the resistances must agree
   const [lu, leakage] = milliseconds(() => new LuDecomposition(full).solve(Matrix.ones(matrix.size, 1)));
   return { study, ours, lu, segments: matrix.size, difference: solved.resistance * leakage.sum() - 1 };
 }

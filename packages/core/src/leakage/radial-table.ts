@@ -1,12 +1,10 @@
-// A smooth function of horizontal distance as a table: polynomials on bins that part every doubling of r² + s² in eight.
+// A smooth function of horizontal distance as a table: polynomials on bins that part every doubling of 1 + r²/s² in eight.
 import { inverse, Matrix } from 'ml-matrix';
 
 /** f(r²) for 0 ≤ r² ≤ the square the table was built to. */
 export interface RadialTable {
-  /** squared length s² added to r², m²: keeps the bins off zero where the function is smooth anyway */
-  readonly floor: number;
-  /** number of the first bin */
-  readonly first: number;
+  /** 1/s², 1/m²: bins count in units of s, so that electrodes of one shape get the same bins whatever their size */
+  readonly perSquare: number;
   /** bin after bin: centre, reciprocal half width, six coefficients; shape [bins × 8] */
   readonly bins: Float64Array;
   /** the function stays smooth on distances down to this, m */
@@ -42,6 +40,9 @@ function binOf(y: number): number {
   return asWords[UPPER]! >>> SHIFT;
 }
 
+/** Number of the bin that begins at 1, the least value of 1 + r²/s². */
+const FIRST = binOf(1);
+
 function binStart(bin: number): number {
   asWords[UPPER] = bin << SHIFT;
   asWords[1 - UPPER] = 0;
@@ -55,17 +56,16 @@ function binStart(bin: number): number {
  * @param reach largest r, m
  */
 export function radialTable(f: (rr: number) => number, smoothness: number, reach: number): RadialTable {
-  const floor = smoothness * smoothness;
-  const first = binOf(floor);
-  const count = binOf(reach * reach + floor) - first + 2;
+  const square = smoothness * smoothness;
+  const count = binOf(1 + (reach * reach) / square) - FIRST + 2;
   const bins = new Float64Array(count * STRIDE);
   const values = new Float64Array(TERMS);
   for (let k = 0; k < count; k++) {
-    const low = binStart(first + k);
-    const high = binStart(first + k + 1);
+    const low = binStart(FIRST + k);
+    const high = binStart(FIRST + k + 1);
     const centre = (low + high) / 2;
     const half = (high - low) / 2;
-    for (let p = 0; p < TERMS; p++) values[p] = f(Math.max(0, centre + half * POINTS[p]! - floor));
+    for (let p = 0; p < TERMS; p++) values[p] = f(square * Math.max(0, centre + half * POINTS[p]! - 1));
     const at = k * STRIDE;
     bins[at] = centre;
     bins[at + 1] = 1 / half;
@@ -75,14 +75,14 @@ export function radialTable(f: (rr: number) => number, smoothness: number, reach
       bins[at + 2 + power] = sum;
     }
   }
-  return { floor, first, bins, smoothness };
+  return { perSquare: 1 / square, bins, smoothness };
 }
 
 /** f(r²) from its table. */
 export function radialValue(table: RadialTable, rr: number): number {
-  const y = rr + table.floor;
+  const y = 1 + rr * table.perSquare;
   asNumber[0] = y;
-  const at = ((asWords[UPPER]! >>> SHIFT) - table.first) * STRIDE;
+  const at = ((asWords[UPPER]! >>> SHIFT) - FIRST) * STRIDE;
   const b = table.bins;
   const u = (y - b[at]!) * b[at + 1]!;
   return (

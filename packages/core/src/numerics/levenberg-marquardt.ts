@@ -33,7 +33,7 @@ export interface LeastSquaresOptions {
 export const LEAST_SQUARES_DEFAULTS: LeastSquaresOptions = {
   limit: 200,
   reduction: 1e-8,
-  negligible: 1e-8,
+  negligible: 1e-6,
   step: 1e-9,
   difference: 1e-5,
 };

@@ -180,6 +180,13 @@ describe('metal that misses', () => {
     expect(join(pipe, wire(5, 0.304, 5, 5)).nearMisses).toHaveLength(1);
   });
 
+  test('what touches a wire beside thick metal is one node with it', () => {
+    // 0.12 m apart along the wire, within the contact distance of 0.16 m of the pipe, which does not touch the branch
+    const pipe: Row = { ...rod(5.12, -0.12, 0), radius: 0.15 };
+    const rows = [wire(0, 0, 10, 0), wire(5, 0, 5, 5), pipe];
+    expect(counts(join(...rows))).toEqual([6, 5, 1]);
+  });
+
   test('a gap of 0.15 m or more is no near miss', () => {
     expect(join(wire(0, 0, 10, 0), wire(5, 0.159, 5, 5)).nearMisses).toHaveLength(1);
     expect(join(wire(0, 0, 10, 0), wire(5, 0.161, 5, 5)).nearMisses).toEqual([]);

@@ -18,7 +18,9 @@ describe('a soil in another season', () => {
   });
 
   it('is wet below a water table, whatever lay there', () => {
-    expect(seasonalSoil(base, { kind: 'below', depth: 2, resistivity: 30 })).toEqual(soil([200, 1], [50, 1], [30]));
+    expect(seasonalSoil(base, { kind: 'below', depth: 2, resistivity: 30 })).toEqual(
+      soil([200, 1], [50, 1], [30]),
+    );
     expect(seasonalSoil(base, { kind: 'below', depth: 12, resistivity: 9 })).toEqual(
       soil([200, 1], [50, 3], [800, 4], [20, 4], [9]),
     );

@@ -138,3 +138,15 @@ describe('the graph', () => {
     expect(Math.abs(same.resistance / graph.units[0]!.resistance - 1)).toBeLessThan(1e-9);
   });
 });
+
+describe('refinement', () => {
+  it('converges to second order in the number of segments between joints, grids with rods included', () => {
+    const resistances = [0, 1, 2, 3].map((level) => solveBars(yard, ground, level).unit.resistance);
+    const changes = [1, 2, 3].map((level) => resistances[level - 1]! - resistances[level]!);
+    // halving the segments divides the change by four for a smooth leakage; interfaces and joints cost part of it
+    expect(changes[0]! / changes[1]!).toBeGreaterThan(2.5);
+    expect(changes[1]! / changes[2]!).toBeGreaterThan(2.5);
+    expect(changes[2]! / resistances[3]!).toBeLessThan(5e-4);
+    expect(changes[2]!).toBeGreaterThan(0);
+  });
+});
