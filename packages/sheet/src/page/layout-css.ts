@@ -41,7 +41,9 @@ figcaption{max-width:46em;margin:8px 0 0}
 .sheet{margin:0;padding:36px 32px 48px}
 .part{grid-template-columns:112px minmax(0,1fr);column-gap:22px}
 }
-@media (max-width:700px){
+@media screen and (max-width:700px){
+.scroll th,.scroll td{white-space:nowrap}
+.scroll caption{max-width:calc(100vw - 40px)}
 .sheet{padding:24px 18px 40px}
 .headline{grid-template-columns:minmax(0,1fr);row-gap:14px}
 .part{grid-template-columns:minmax(0,1fr)}

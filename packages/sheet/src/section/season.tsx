@@ -1,9 +1,9 @@
 // Season: the soil in its other states, and which of them governs.
 import type { EnvelopeCase, Outcome, SeasonCase, SeasonResult, WorstTouch } from '@ohmstead/study';
 import type { VNode } from 'preact';
-import { fixed, measured, quantity } from '../format/number.ts';
+import { fixed, measured, percent, quantity } from '../format/number.ts';
 import { countWord, tally } from '../format/words.ts';
-import { findingWords, voltageFinding } from '../verdict/finding.ts';
+import { voltageFinding } from '../verdict/finding.ts';
 import { Layers } from './layers.tsx';
 import { CaseName, DataTable, Part, Result, Say } from './parts.tsx';
 
@@ -26,12 +26,15 @@ function governs(given: EnvelopeCase): string {
 }
 
 function compared(of: WorstTouch): string {
-  return findingWords({
-    worst: of.worst_V,
-    uncertainty: of.uncertainty_V,
-    limit: of.limit_V,
-    finding: voltageFinding(of),
-  });
+  const share = of.worst_V / of.limit_V;
+  switch (voltageFinding(of)) {
+    case 'beyond':
+      return `beyond by ${percent(share - 1)}`;
+    case 'within':
+      return `${percent(1 - share)} margin`;
+    case 'undecided':
+      return 'undecided';
+  }
 }
 
 function cells(season: string, of: SeasonCase): readonly string[] {
@@ -73,9 +76,9 @@ export function Season({ outcome }: { outcome: Outcome }): VNode | null {
           { label: 'season' },
           { label: 'rise', align: 'right' },
           { label: 'worst touch', align: 'right' },
-          { label: 'touch' },
+          { label: 'against its limit' },
           { label: 'worst step', align: 'right' },
-          { label: 'step' },
+          { label: 'against its limit' },
         ]}
         rows={cases.flatMap((of, k) => [
           cells('as given', of),

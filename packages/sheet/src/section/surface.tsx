@@ -140,8 +140,9 @@ export function Surface({ outcome }: { outcome: Outcome }): VNode {
         {results.cases[governing].touch.within_limit && results.cases[governing].step.within_limit
           ? 'nearest to'
           : 'farthest beyond'}{' '}
-        a limit. Between computed points they are good to about {quantity(error, 'V', 2)}; the worst places
-        are searched for apart and not read from the map.
+        a limit{results.seasons.length > 0 ? ' in the soil as given' : ''}. Between computed points they are
+        good to about {quantity(error, 'V', 2)}; the worst places are searched for apart and not read from the
+        map.
       </Say>
       <MapBlock {...shared} kind="touch" />
       <ProfileBlock {...shared} />
