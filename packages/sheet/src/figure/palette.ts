@@ -63,7 +63,8 @@ function encoded(value: number): number {
 type Triple = readonly [number, number, number];
 
 function channels(hex: string): Triple {
-  return [1, 3, 5].map((at) => linear(Number.parseInt(hex.slice(at, at + 2), 16))) as unknown as Triple;
+  const channel = (at: number): number => linear(Number.parseInt(hex.slice(at, at + 2), 16));
+  return [channel(1), channel(3), channel(5)];
 }
 
 /** Relative luminance of a colour, 0 to 1 (WCAG 2.2, definition of relative luminance). */

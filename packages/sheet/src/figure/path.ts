@@ -21,12 +21,12 @@ export function onPlate(plate: Plate, points: readonly Point[]): readonly Point[
 
 /** An open line through points in drawing units. */
 export function linePath(points: readonly Point[]): string {
-  return open(points as Point[]) ?? '';
+  return open(points) ?? '';
 }
 
 /** Closed outlines in drawing units, to be filled even–odd. */
 export function ringPath(rings: readonly (readonly Point[])[]): string {
-  return rings.map((ring) => closed(ring as Point[]) ?? '').join('');
+  return rings.map((ring) => closed(ring) ?? '').join('');
 }
 
 /** Outlines on the ground. */

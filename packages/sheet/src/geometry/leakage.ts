@@ -73,13 +73,18 @@ function meanLeakage(outcome: Outcome, currents: readonly ConductorCurrent[]): n
   return length > 0 ? current / length : 0;
 }
 
+interface GrowingClass extends LeakageClass {
+  readonly out: Piece[];
+  readonly in: Piece[];
+}
+
 /** Segments by class of leakage, and the rods, which in plan are points. */
 export function leakageDrawing(outcome: Outcome): LeakageDrawing {
   const { segments, plan } = outcome;
   const currents = conductorCurrents(outcome);
   const mean = meanLeakage(outcome, currents);
   const times = (leakage: number): number => (mean > 0 ? leakage / mean : 0);
-  const classes = LEAKAGE_STEPS.map((upTo) => ({ upTo, out: [] as Piece[], in: [] as Piece[] }));
+  const classes = LEAKAGE_STEPS.map((upTo): GrowingClass => ({ upTo, out: [], in: [] }));
   for (let s = 0; s < segments.count; s += 1) {
     const { rod, insulated } = plan.conductors[segments.conductor[s]];
     if (rod || insulated) continue;
