@@ -2,8 +2,8 @@
 import { describe, expect, test } from 'vitest';
 import { LARGEST_TABLE_BYTES, MOST_ALIKE_FAULTS } from '../../src/input/limits.ts';
 import { loadStudy } from '../../src/input/load-study.ts';
-import type { StudySource } from '../../src/input/source.ts';
-import { memorySource, smallStudy, smallTable, studyFaultLines } from './folder-source.ts';
+import { type StudySource, sourceFromMap } from '../../src/input/source.ts';
+import { bytesOf, memorySource, smallStudy, smallTable, studyFaultLines } from './folder-source.ts';
 
 const header = 'id,x1_m,y1_m,depth1_m,x2_m,y2_m,depth2_m,diameter_mm';
 
@@ -120,6 +120,53 @@ describe('a loaded study', () => {
     expect(lines[0]).toContain('areas.touch[0]: area has 1001 items; expected 3 to 1000 corners');
   });
 
+  test('refuses a name that fills a page and a resistance beyond any conductor', () => {
+    const table = `${header},resistance_ohm_per_m\n${'n'.repeat(121)},0,0,0.5,1,0,0.5,10,2e6\n`;
+    expect(studyFaultLines(memorySource(smallStudy, table))).toEqual([
+      `conductors.csv:2: id: ${'n'.repeat(40)}… has 121 characters; at most 120 are read`,
+      'conductors.csv:2: resistance_ohm_per_m: 2e6 is out of range; expected a resistance per length from 0 to 1e6 ohm/m',
+    ]);
+  });
+
+  test('takes a conductor for bare where nothing is said of its insulation', () => {
+    const table = `${header},insulated\nA,0,0,0.5,1,0,0.5,10,\nB,2,0,0.5,3,0,0.5,10,no\n`;
+    expect([...loadStudy(memorySource(smallStudy, table)).conductors.insulated]).toEqual([0, 0]);
+    expect([...loadStudy(memorySource()).conductors.insulated]).toEqual([0, 0, 0, 0]);
+  });
+
+  test('takes words in a later row for faulty values, not for a second header', () => {
+    const table = 'x1_m,y1_m,depth1_m,x2_m,y2_m,depth2_m,diameter_mm\n0,0,0.5,1,0,0.5,10\na,b,c,d,e,f,g\n';
+    const lines = studyFaultLines(memorySource(smallStudy, table));
+    expect(lines).toHaveLength(7);
+    expect(lines[0]).toBe(
+      'conductors.csv:3: x1_m: a is not a number; expected a plain decimal number such as 12.5',
+    );
+  });
+
+  test('passes over a column near to one that is there', () => {
+    const table = `${header},material,materials\nA,0,0,0.5,1,0,0.5,10,steel-1020,two\n`;
+    expect(noteMessage(memorySource(smallStudy, table), 'columns-unused')).toBe(
+      'columns passed over, not part of the format: conductors.csv: "materials"',
+    );
+  });
+
+  test('refuses tables that have too many conductors together, and reads none beyond', () => {
+    const half = `${header}\n${',0,0,0.5,1,0,0.5,10\n'.repeat(60_000)}`;
+    const names = ['a.csv', 'b.csv', 'c.csv'];
+    const study = JSON.stringify({ ...smallStudy, conductors: names });
+    const tables = names.map((name) => [name, bytesOf(half)] as const);
+    expect(studyFaultLines(sourceFromMap(new Map([['study.json', bytesOf(study)], ...tables])))).toEqual([
+      'b.csv: with this table the study has 120000 conductors; at most 1e5 are read',
+    ]);
+  });
+
+  test('judges no electrode while a table is unread', () => {
+    const study = { ...smallStudy, electrodes: [{ name: 'fence', role: 'floating' }] };
+    expect(studyFaultLines(memorySource(study, ''))).toEqual([
+      'conductors.csv:1: the table is empty; expected a header row and rows under it',
+    ]);
+  });
+
   test('tells quotation marks that do not pair, wherever they stand', () => {
     const table = (cell: string): string => `note,${header}\n${cell},A,0,0,0.5,1,0,0.5,10\n`;
     const lines = (cell: string): readonly string[] => studyFaultLines(memorySource(smallStudy, table(cell)));
@@ -152,11 +199,14 @@ describe('a loaded study', () => {
   });
 
   test('refuses numbers whose unit must be wrong', () => {
-    const table = `${header}\nA,2e8,0,0.5,10,0,0.5,10\nB,0,0,20000,0,0,0.5,10000\n`;
+    const rows = ['A,2e8,-2e8,0.5,10,0,0.5,10', 'B,0,0,20000,0,0,0.5,10000', 'C,0,0,1,0,0,2,0.001'];
+    const table = `${header}\n${rows.join('\n')}\n`;
     expect(studyFaultLines(memorySource(smallStudy, table))).toEqual([
       'conductors.csv:2: x1_m: 2e8 is beyond 1e8 m; check the unit in the column name',
+      'conductors.csv:2: y1_m: -2e8 is beyond 1e8 m; check the unit in the column name',
       'conductors.csv:3: depth1_m: 20000 is beyond 10000 m; check the unit in the column name',
       'conductors.csv:3: diameter_mm: 10000 is 10 m; expected a diameter from 0.00001 to 5 m, check the unit in the column name',
+      'conductors.csv:4: diameter_mm: 0.001 is 0.000001 m; expected a diameter from 0.00001 to 5 m, check the unit in the column name',
     ]);
   });
 
