@@ -98,6 +98,30 @@ describe('the outer boundary of closed meshes', () => {
     ]);
   });
 
+  test('of two blocks side by side tells the left one first, whichever was drawn first', () => {
+    expect(outlines(...square(30, 0, 8), ...square(0, 0, 10))).toEqual([
+      rectangle(0, 0, 10, 10),
+      rectangle(30, 0, 38, 8),
+    ]);
+  });
+
+  test('of a grid turned out of the axes has four corners', () => {
+    // turned by the angle of a 3–4–5 triangle
+    const turned = lattice(3, 2, 10).map((r): Row => {
+      const turn = ([x, y, z]: Row['from']): Row['from'] => [(4 * x - 3 * y) / 5, (3 * x + 4 * y) / 5, z];
+      return { from: turn(r.from), to: turn(r.to) };
+    });
+    const [outline, ...others] = outlines(...turned);
+    expect(others).toEqual([]);
+    const rounded = outline!.map(([x, y]) => [Math.round(x * 1e9) / 1e9, Math.round(y * 1e9) / 1e9]);
+    expect(rounded).toEqual([
+      [0, 0],
+      [24, 18],
+      [12, 34],
+      [-12, 16],
+    ]);
+  });
+
   test('of two blocks joined by two conductors is one', () => {
     const joined = outlines(
       ...square(0, 0, 10),
