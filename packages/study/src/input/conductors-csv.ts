@@ -80,8 +80,16 @@ const diameterRule: QuantityRule = (value, text) => {
 };
 
 const resistanceRule: QuantityRule = (value, text) => {
-  if (value >= 0 && value <= limits.LARGEST_RESISTANCE_OHM_PER_M) return undefined;
-  const expected = `expected a resistance per length from 0 to ${figure(limits.LARGEST_RESISTANCE_OHM_PER_M)} ohm/m`;
+  const { SMALLEST_RESISTANCE_OHM_PER_M: least, LARGEST_RESISTANCE_OHM_PER_M: most } = limits;
+  if (value >= least && value <= most) return undefined;
+  if (value >= 0 && value < least) {
+    const instead = 'for metal without resistance use "metal_model": "equipotential" in study.json';
+    return {
+      code: 'no-resistance',
+      message: `${shown(text)} is no resistance that a branch of metal can have; ${instead}`,
+    };
+  }
+  const expected = `expected a resistance per length above 0 and at most ${figure(most)} ohm/m`;
   return { code: 'range', message: `${shown(text)} is out of range; ${expected}` };
 };
 

@@ -7,3 +7,5 @@ export const DEFAULT_METAL_MODEL = 'resistive';
 export const DEFAULT_DIVISION_FACTOR = 1;
 /** Hz; matters only with `x_over_r`, and there it must be given */
 export const DEFAULT_FREQUENCY_HZ = 50;
+/** name of the soil of the study itself among the seasons */
+export const SOIL_AS_GIVEN = 'as given';

@@ -54,7 +54,8 @@ export const THIN_DIAMETER_M = 1e-3;
 /** Extent in plan above which a note asks to check the unit, m. Reason: millimetres read as metres. */
 export const WIDE_EXTENT_M = 10_000;
 
-/** Largest series resistance, Ω/m. Reason: beyond any conductor. */
+/** Smallest and largest series resistance, Ω/m. Reason: a copper bar 5 m thick has 9e-10; beyond any conductor. */
+export const SMALLEST_RESISTANCE_OHM_PER_M = 1e-10;
 export const LARGEST_RESISTANCE_OHM_PER_M = 1e6;
 
 /** Smallest and largest resistivity of soil, Ω·m. Reason: sea water has 0.2, dry or frozen rock up to 1e6. */
@@ -73,6 +74,19 @@ export const LARGEST_LAYER_THICKNESS_M = 100_000;
 
 /** Most soil layers: the image lists are tested to ten; no survey resolves more than five. */
 export const MOST_SOIL_LAYERS = 10;
+
+/** Most layers fitted to a survey. Reason: one more would have as many numbers as a usual survey has readings. */
+export const MOST_FITTED_LAYERS = 5;
+
+/** Most seasons of a study. Reason: one a month; each is solved as the study is. */
+export const MOST_SEASONS = 12;
+
+/** Most readings of a survey. Reason: ten days in the field; the family of soils is drawn from all of them. */
+export const MOST_READINGS = 1000;
+
+/** Smallest and largest distance of pins, m. Reason: soil boxes have some centimetres, soundings end at kilometres. */
+export const SMALLEST_PIN_DISTANCE_M = 0.01;
+export const LARGEST_PIN_DISTANCE_M = 20_000;
 
 /** Largest fault current, A. Reason: ten times the largest of any power system. */
 export const LARGEST_CURRENT_A = 1e6;

@@ -1,6 +1,6 @@
-// A study folder to a checked study with its conductors, or all faults of all its files together.
+// A study folder to a checked study with its tables, or all faults of all its files together.
 import { type Fault, InputFaults } from '../fault.ts';
-import type { LoadedStudy } from '../study.ts';
+import type { LoadedStudy, LoadedSurvey } from '../study.ts';
 import { conductorTable, idFaults } from './conductor-table.ts';
 import { type ConductorRow, type ConductorRows, readConductorsCsv } from './conductors-csv.ts';
 import { electrodeFaults } from './electrode-rules.ts';
@@ -8,15 +8,17 @@ import { orderedFaults } from './fault-order.ts';
 import { LARGEST_TABLE_BYTES, MOST_CONDUCTORS } from './limits.ts';
 import { readStudyJson, STUDY_FILE } from './read-study-json.ts';
 import { figure } from './shown-value.ts';
+import { surveyPath } from './soil-rules.ts';
 import type { StudySource } from './source.ts';
 import { readStudyFile } from './study-file.ts';
 import { studyNotes } from './study-notes.ts';
 import { conductorTables } from './study-rules.ts';
+import { readSurveyCsv, type SurveyTable, surveyNotes } from './survey-csv.ts';
 
 /**
  * Loads a study: study.json and the tables that it names.
  * @param source the files of the study
- * @returns the study as written, its conductors in SI units, where each was read, notes on what was assumed or
+ * @returns the study as written, its conductors and readings in SI units, where each was read, notes on what was assumed or
  * converted, and the files as read
  * @throws InputFaults with every fault of every file, study.json first, then by file and line
  */
@@ -43,6 +45,7 @@ export function loadStudy(source: StudySource): LoadedStudy {
     break;
   }
   for (const fault of idFaults(rows)) faults.push(fault);
+  const survey = readSurvey(source, surveyPath(reading.document.value), files, faults);
   // with a table unread, which electrodes have conductors is not known
   if (paths.length > 0 && tables.length === paths.length) {
     const used = [...new Set(rows.map(({ electrode }) => electrode))];
@@ -54,7 +57,27 @@ export function loadStudy(source: StudySource): LoadedStudy {
     study,
     conductors: conductorTable(rows),
     origins: rows.map(({ file, line }) => ({ file, line })),
-    notes: studyNotes(study, rows, tables),
+    ...(survey === undefined ? {} : { survey: surveyOf(survey) }),
+    notes: [
+      ...studyNotes(study, rows, survey === undefined ? tables : [...tables, survey]),
+      ...(survey === undefined ? [] : surveyNotes(survey)),
+    ],
     files: new Map([...files].sort(([a], [b]) => (a < b ? -1 : 1))),
   };
+}
+
+function readSurvey(
+  source: StudySource,
+  path: string | undefined,
+  files: Map<string, Uint8Array>,
+  faults: Fault[],
+): SurveyTable | undefined {
+  const file = path === undefined ? undefined : readStudyFile(source, path, LARGEST_TABLE_BYTES, faults);
+  if (path === undefined || file === undefined) return undefined;
+  files.set(path, file.bytes);
+  return readSurveyCsv(path, file.text, faults);
+}
+
+function surveyOf({ file, readings, cautions }: SurveyTable): LoadedSurvey {
+  return { file, readings, cautions };
 }

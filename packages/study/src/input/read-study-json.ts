@@ -3,9 +3,10 @@ import type { Fault } from '../fault.ts';
 import type { Study } from '../study.ts';
 import { studyJsonSchema } from './json-schema.ts';
 import { readJson } from './json-text.ts';
-import { type JsonDocument, member } from './json-value.ts';
+import type { JsonDocument } from './json-value.ts';
 import { LARGEST_STUDY_BYTES } from './limits.ts';
 import { schemaFaults } from './schema-faults.ts';
+import { soilInput } from './soil-rules.ts';
 import type { StudySource } from './source.ts';
 import { readStudyFile } from './study-file.ts';
 import { ruleFaults } from './study-rules.ts';
@@ -16,13 +17,10 @@ export const STUDY_FILE = 'study.json';
 export interface StudyReading {
   /** the file as JSON, faulty or not */
   readonly document: JsonDocument;
-  /** absent where the schema refuses the file */
+  /** absent where the schema or the rules of the soil refuse the file */
   readonly study?: Study;
   readonly bytes: Uint8Array;
 }
-
-/** Keys of a soil fitted to a survey: where one stands, only that is told, not what its absence of layers makes. */
-const surveyPlaces: ReadonlySet<string> = new Set(['soil.survey', 'soil.layer_count', 'soil.layers']);
 
 /**
  * Reads and judges study.json.
@@ -45,12 +43,13 @@ export function readStudyJson(source: StudySource, faults: Fault[]): StudyReadin
 
   const parsed = studySchema.safeParse(document.value);
   const issues = parsed.success ? [] : parsed.error.issues;
-  const survey = member(member(document.value, 'soil'), 'survey') !== undefined;
   // a number out of range is told once, where its text was read
   const toldBefore = new Set(textFaults.map((fault) => fault.place));
   const judged = schemaFaults(STUDY_FILE, document, issues, studyJsonSchema()).filter(
-    ({ place }) => !toldBefore.has(place) && !(survey && place !== undefined && surveyPlaces.has(place)),
+    ({ place }) => !toldBefore.has(place),
   );
   for (const fault of [...judged, ...ruleFaults(STUDY_FILE, document)]) faults.push(fault);
-  return { document, bytes: file.bytes, ...(parsed.success ? { study: parsed.data } : {}) };
+  const soil = parsed.success ? soilInput(parsed.data.soil) : undefined;
+  const study = parsed.success && soil !== undefined ? { study: { ...parsed.data, soil } } : {};
+  return { document, bytes: file.bytes, ...study };
 }

@@ -4,41 +4,10 @@ import type { Point } from '../study.ts';
 import { isList, isObject, items, type JsonDocument, type JsonValue, member, placeOf } from './json-value.ts';
 import { MOST_CORNERS } from './limits.ts';
 import { polygonFault } from './polygon-faults.ts';
-import { quoted, shown } from './shown-value.ts';
+import { type Finding, has } from './rule-finding.ts';
+import { quoted } from './shown-value.ts';
+import { groundFindings } from './soil-rules.ts';
 import { pathFault } from './study-path.ts';
-
-/** A finding before it is located: the place in study.json, a code and what to tell. */
-type Finding = readonly [place: string, code: string, message: string];
-
-function has(value: JsonValue, key: string): boolean {
-  return member(value, key) !== undefined;
-}
-
-function layerFindings(study: JsonValue): readonly Finding[] {
-  const layers = items(member(study, 'soil'), 'layers');
-  return layers.flatMap((layer, i): readonly Finding[] => {
-    if (!isObject(layer)) return [];
-    const place = placeOf(placeOf('soil.layers', i), 'thickness_m');
-    const last = i === layers.length - 1;
-    if (last && has(layer, 'thickness_m')) {
-      const value = String(member(layer, 'thickness_m'));
-      const way = 'leave it out, or add the layer below';
-      const message = `layer thickness ${shown(value)} is given for the last layer, which has no bottom; ${way}`;
-      return [[place, 'last-layer-thickness', message]];
-    }
-    if (!last && !has(layer, 'thickness_m')) {
-      return [[place, 'missing', 'layer thickness is missing; every layer but the last one has a thickness']];
-    }
-    return [];
-  });
-}
-
-function surveyFindings(study: JsonValue): readonly Finding[] {
-  const soil = member(study, 'soil');
-  if (soil === undefined || !has(soil, 'survey')) return [];
-  const message = 'a soil fitted to a survey is not yet offered; expected layers, the top one first';
-  return [['soil.survey', 'not-yet-offered', message]];
-}
 
 function currentFindings(faultCase: JsonValue, place: string): readonly Finding[] {
   const fault = has(faultCase, 'fault_current_A');
@@ -152,8 +121,7 @@ function lineOf(document: JsonDocument, place: string): number | undefined {
 export function ruleFaults(file: string, document: JsonDocument): readonly Fault[] {
   const study = document.value;
   const findings = [
-    ...layerFindings(study),
-    ...surveyFindings(study),
+    ...groundFindings(study),
     ...caseFindings(study),
     ...electrodeFindings(study),
     ...tableFindings(study),

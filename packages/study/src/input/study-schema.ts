@@ -1,6 +1,6 @@
 // What study.json may hold: keys, kinds and ranges, each with its trade name and what is expected.
 import { z } from 'zod';
-import type { Study } from '../study.ts';
+import type { LayerInput, Study } from '../study.ts';
 import * as most from './limits.ts';
 import { figure } from './shown-value.ts';
 
@@ -13,6 +13,11 @@ const VISIBLE = /^(?=.*\S)[^\p{Cc}\p{Cs}\u2028\u2029\u200e\u200f\u202a-\u202e\u2
 /** `title` is the trade name that faults begin with, `description` ends the phrase "expected …". */
 function told<T extends z.ZodType>(schema: T, title: string, description: string): T {
   return schema.meta({ title, description });
+}
+
+/** One of these sets of keys, for editors: when a study is loaded, the rules between keys tell more. */
+function oneOf<T extends z.ZodType>(schema: T, ...keys: readonly (readonly string[])[]): T {
+  return schema.meta({ ...schema.meta(), oneOf: keys.map((required) => ({ required })) });
 }
 
 function label(title: string, longest: number): z.ZodString {
@@ -36,14 +41,16 @@ function coordinate(title: string): z.ZodNumber {
   return between(title, ' m', -most.LARGEST_COORDINATE_M, most.LARGEST_COORDINATE_M);
 }
 
+const resistivity = between(
+  'soil resistivity',
+  ' Ω·m',
+  most.SMALLEST_SOIL_RESISTIVITY_OHM_M,
+  most.LARGEST_SOIL_RESISTIVITY_OHM_M,
+);
+
 const layer = told(
   z.strictObject({
-    resistivity_ohm_m: between(
-      'soil resistivity',
-      ' Ω·m',
-      most.SMALLEST_SOIL_RESISTIVITY_OHM_M,
-      most.LARGEST_SOIL_RESISTIVITY_OHM_M,
-    ),
+    resistivity_ohm_m: resistivity,
     thickness_m: between(
       'layer thickness',
       ' m',
@@ -55,16 +62,50 @@ const layer = told(
   'an object with resistivity_ohm_m and, save the last layer, thickness_m',
 );
 
-const soil = told(
+const layers = told(
+  z.array(layer).min(1).max(most.MOST_SOIL_LAYERS),
+  'list of soil layers',
+  `1 to ${most.MOST_SOIL_LAYERS} layers, the top one first`,
+);
+
+const layerCounts: readonly (number | 'auto')[] = [
+  ...Array.from({ length: most.MOST_FITTED_LAYERS }, (_, i) => i + 1),
+  'auto',
+];
+
+const soil = oneOf(
+  told(
+    z.strictObject({
+      layers: layers.optional(),
+      survey: told(z.string().min(1), 'path of a survey', 'a path within the study folder').optional(),
+      layer_count: told(
+        z.literal(layerCounts),
+        'number of layers to fit',
+        `a whole number from 1 to ${most.MOST_FITTED_LAYERS}, or "auto"`,
+      ).optional(),
+    }),
+    'soil',
+    'an object with layers, or with survey and layer_count',
+  ),
+  ['layers'],
+  ['survey', 'layer_count'],
+);
+
+const change = z.strictObject({
+  depth_m: between('depth of the change', ' m', most.SMALLEST_LAYER_THICKNESS_M, most.LARGEST_DEPTH_M),
+  resistivity_ohm_m: resistivity,
+});
+const CHANGE = 'an object with depth_m and resistivity_ohm_m';
+
+const season = told(
   z.strictObject({
-    layers: told(
-      z.array(layer).min(1).max(most.MOST_SOIL_LAYERS),
-      'list of soil layers',
-      `1 to ${most.MOST_SOIL_LAYERS} layers, the top one first`,
-    ),
+    name: label('season name', most.LONGEST_NAME),
+    layers: layers.optional(),
+    top: told(change, 'dried or frozen top', CHANGE).optional(),
+    below: told(change, 'ground under the water table', CHANGE).optional(),
   }),
-  'soil',
-  'an object with layers',
+  'season',
+  'an object with name and layers, top or below',
 );
 
 const surfacing = told(
@@ -152,13 +193,27 @@ const tables = told(
   `1 to ${most.MOST_TABLES} file names such as "conductors.csv"`,
 );
 
+/** A study whose keys are known, but not yet what they mean to each other. */
+export interface StudyAsWritten extends Omit<Study, 'soil'> {
+  readonly soil: {
+    readonly layers?: readonly LayerInput[] | undefined;
+    readonly survey?: string | undefined;
+    readonly layer_count?: number | 'auto' | undefined;
+  };
+}
+
 /** study.json, version 1, as this program can solve it; what keys mean to each other is judged apart. */
-export const studySchema: z.ZodType<Study> = told(
+export const studySchema: z.ZodType<StudyAsWritten> = told(
   z.strictObject({
     format: told(z.literal('ohmstead-study'), 'format', '"ohmstead-study"'),
     version: told(z.literal(1), 'version of the format', 'the number 1'),
     title: label('title', most.LONGEST_TITLE),
     soil,
+    seasons: told(
+      z.array(season).max(most.MOST_SEASONS),
+      'list of seasons',
+      `at most ${most.MOST_SEASONS} seasons, each an object with name and layers, top or below`,
+    ).optional(),
     surfacing: surfacing.optional(),
     metal_model: told(
       z.enum(['resistive', 'equipotential']),

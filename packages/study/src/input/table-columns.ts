@@ -67,6 +67,10 @@ function unitWords(kind: UnitKind): string {
       return 'a unit of length';
     case 'resistance-per-length':
       return 'a unit of resistance per length';
+    case 'resistivity':
+      return 'a unit of resistivity';
+    case 'resistance':
+      return 'a unit of resistance';
   }
 }
 

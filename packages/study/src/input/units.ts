@@ -11,7 +11,7 @@ export interface Unit {
   readonly denominator: number;
 }
 
-export type UnitKind = 'length' | 'resistance-per-length';
+export type UnitKind = 'length' | 'resistance-per-length' | 'resistivity' | 'resistance';
 
 type Row = readonly [name: string, label: string, numerator: number, denominator: number];
 
@@ -45,6 +45,20 @@ const resistancePerLengthUnits = byName([
   ['ohm_per_mi', 'ohm per mile of 5280 ft', 1000, 1_609_344],
 ]);
 
+const resistivityUnits = byName([
+  ['ohm_m', 'ohm metre', 1, 1],
+  ['ohm_cm', 'ohm centimetre', 1, 100],
+  ['ohm_ft', 'ohm foot', 3048, 10_000],
+  ['kohm_m', 'kilohm metre', 1000, 1],
+  ['kohm_cm', 'kilohm centimetre', 10, 1],
+]);
+
+const resistanceUnits = byName([
+  ['ohm', 'ohm', 1, 1],
+  ['milliohm', 'milliohm', 1, 1000],
+  ['kohm', 'kilohm', 1000, 1],
+]);
+
 /** Units of a kind by the name that columns give them. */
 export function unitsOf(kind: UnitKind): ReadonlyMap<string, Unit> {
   switch (kind) {
@@ -52,10 +66,14 @@ export function unitsOf(kind: UnitKind): ReadonlyMap<string, Unit> {
       return lengthUnits;
     case 'resistance-per-length':
       return resistancePerLengthUnits;
+    case 'resistivity':
+      return resistivityUnits;
+    case 'resistance':
+      return resistanceUnits;
   }
 }
 
-/** A value in SI units: value·numerator/denominator, metres or Ω/m. */
+/** A value in SI units: value·numerator/denominator: metres, Ω/m, Ω·m or Ω. */
 export function toSi(value: number, unit: Unit): number {
   return (value * unit.numerator) / unit.denominator;
 }

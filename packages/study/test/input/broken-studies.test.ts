@@ -10,6 +10,9 @@ const materials =
 const lengthUnits = 'known are _m, _dm, _cm, _mm, _km, _in, _ft, _yd and _us_ft';
 const inside = 'expected a path within the study folder such as conductors.csv';
 const dialect = 'expected commas between columns and a decimal point, as in 1.5';
+const eitherSoil = 'expected either layers, the top one first, or survey with layer_count';
+const wholeOrChanged = 'expected the whole soil as layers, or the soil of the study with top, below or both';
+const resistivities = 'expected one from 0.01 to 1e7 Ω·m, check the unit in the column name';
 const plain = 'expected a plain decimal number such as 12.5';
 
 const broken: Readonly<Record<string, readonly string[]>> = {
@@ -79,7 +82,8 @@ const broken: Readonly<Record<string, readonly string[]>> = {
   ],
   'insulation-and-resistance': [
     'conductors.csv:2: insulated: "true" is not accepted; expected yes or no',
-    'conductors.csv:2: resistance_ohm_per_m: -0.001 is out of range; expected a resistance per length from 0 to 1e6 ohm/m',
+    'conductors.csv:2: resistance_ohm_per_m: -0.001 is out of range; expected a resistance per length above 0 and at most 1e6 ohm/m',
+    'conductors.csv:4: resistance_ohm_per_m: 0 is no resistance that a branch of metal can have; for metal without resistance use "metal_model": "equipotential" in study.json',
   ],
   'json-comment': ['study.json:3: a comment stands here; JSON has none, delete it'],
   'json-cut-off': [
@@ -108,6 +112,7 @@ const broken: Readonly<Record<string, readonly string[]>> = {
   'no-last-layer': [
     'study.json:13: soil.layers[1].thickness_m: layer thickness 5 is given for the last layer, which has no bottom; leave it out, or add the layer below',
   ],
+  'no-soil': [`study.json:5: soil: the soil is not described; ${eitherSoil}`],
   'no-study': ['study.json: no such file in the study folder'],
   'nothing-energised': [
     'study.json:26: electrodes: no electrode is energised: "main" is floating',
@@ -133,8 +138,60 @@ const broken: Readonly<Record<string, readonly string[]>> = {
   semicolons: [
     `conductors.csv:1: columns are separated by semicolons and numbers have a decimal comma (0,5); ${dialect}`,
   ],
-  survey: [
-    'study.json:6: soil.survey: a soil fitted to a survey is not yet offered; expected layers, the top one first',
+  seasons: [
+    `study.json:27: seasons[0]: the season changes nothing; ${wholeOrChanged}`,
+    'study.json:31: seasons[1].name: season name "frozen" is also that of seasons[0]',
+    'study.json:40: seasons[2].layers[0].thickness_m: layer thickness is missing; every layer but the last one has a thickness',
+    'study.json:45: seasons[2].layers[1].thickness_m: layer thickness 2 is given for the last layer, which has no bottom; leave it out, or add the layer below',
+    `study.json:48: seasons[2].top: the season has layers and top; ${wholeOrChanged}`,
+    'study.json:60: seasons[3].below.depth_m: depth 1.5 m of what is wet below is not deeper than the top, 2 m',
+    'study.json:65: seasons[4].name: season name "as given" is kept for the soil of the study itself',
+    'study.json:67: seasons[4].below.depth_m: depth of the change 0 is not accepted; expected a number from 0.01 to 10000 m',
+    'study.json:72: seasons[5].name: season name "dry" is also that of seasons[2]',
+    'study.json:73: seasons[5].topp: there is no such key here; known are name, layers, top and below',
+    'study.json:80: seasons[6].top.resistivity_ohm_m: soil resistivity is missing; expected a number from 0.01 to 1e7 Ω·m',
+  ],
+  'survey-and-layers': [`study.json:11: soil.survey: the soil has layers already; ${eitherSoil}`],
+  'survey-columns': [
+    `survey.csv:1: spacing: the column name has no unit; expected one such as spacing_m, ${lengthUnits}`,
+    'survey.csv:1: resistance_ohm_m: ohm_m is not a unit of resistance known here; known are _ohm, _milliohm and _kohm',
+    'survey.csv:1: aparent_resistivity_ohm_m: no column of this table goes by this name; apparent_resistivity_ohm_m is probably meant',
+    'survey.csv:3: ab_half_m: 0 is not a positive length',
+  ],
+  'survey-incomplete': [
+    'survey.csv:1: mn_half_m: the column is missing; expected half the distance between the potential pins, beside ab_half_m',
+    'survey.csv:1: c2_x_m: the column is missing; expected place along the line of the pin where current leaves, beside c1_x_m and p2_x_m',
+    'survey.csv:1: p1_x_m: the column is missing; expected place along the line of the first potential pin, beside c1_x_m and p2_x_m',
+    'survey.csv:1: no column holds readings; expected apparent_resistivity_ohm_m or resistance_ohm; not read: "resistivity" and "operator"',
+  ],
+  'survey-missing': ['survey.csv: no such file in the study folder'],
+  'survey-path': [
+    `study.json:6: soil.survey: path "../survey.csv" leaves the study folder; ${inside}`,
+    'study.json:7: soil.layer_count: number of layers to fit 7 is not accepted; expected a whole number from 1 to 5, or "auto"',
+  ],
+  'survey-rows': [
+    'survey.csv:3: apparent_resistivity_ohm_m: apparent resistivity: -110 Ω·m is not positive',
+    'survey.csv:4: spacing_m: 0 is not a positive length',
+    'survey.csv:5: spacing_m: -3 is not a positive length',
+    'survey.csv:6: the row has no reading; expected apparent_resistivity_ohm_m or resistance_ohm',
+    'survey.csv:7: the row has two readings; expected either apparent_resistivity_ohm_m or resistance_ohm',
+    'survey.csv:8: the row tells no place of the pins; expected spacing_m, or ab_half_m and mn_half_m, or c1_x_m, c2_x_m, p1_x_m and p2_x_m',
+    'survey.csv:9: the row gives spacing_m, ab_half_m and mn_half_m; expected the distances of one array',
+    'survey.csv:10: mn_half_m: MN/2: 5 m is not less than AB/2, 5 m',
+    `survey.csv:11: mn_half_m: the cell is empty; ${plain}`,
+    'survey.csv:12: resistance_ohm: resistance: -2.5 Ω is not positive, as the places of the pins ask',
+    'survey.csv:13: pin positions: 0, 30, 10, 10 m are not four different places',
+    'survey.csv:14: pin_depth_cm: pin depth: 6 m is not less than the distance between pins, 5 m',
+    `survey.csv:15: p2_x_m: the cell is empty; ${plain}`,
+    'survey.csv:16: potential pins stand where uniform ground has one potential: the reading tells nothing',
+    `survey.csv:17: apparent_resistivity_ohm_m: the reading is an apparent resistivity of 7e9 Ω·m; ${resistivities}`,
+    `survey.csv:18: resistance_ohm: resistance 2e8 Ω gives an apparent resistivity of 1.006e10 Ω·m; ${resistivities}`,
+    'survey.csv:19: spacing_m: two pins stand 0.005 m from each other; expected at least 0.01 m, check the unit in the column name',
+    'survey.csv:20: spacing_m: 8 m has text after the number; expected the number alone',
+    `survey.csv:20: apparent_resistivity_ohm_m: about 70 is not a number; ${plain}`,
+    'survey.csv:20: pin_depth_cm: -20 is above the soil surface; depths are positive downward',
+    'survey.csv:20: traverse: nor<U+0007>th has the invisible character U+0007; expected visible text',
+    'survey.csv:21: pin_depth_cm: pin depth: 7 m is not less than the distance between pins, 6 m',
   ],
   tabs: [`conductors.csv:1: columns are separated by tabs; ${dialect}`],
   'title-above-header': [
@@ -166,7 +223,7 @@ const broken: Readonly<Record<string, readonly string[]>> = {
     'study.json:27: limits.body_mass_kg: body mass 60 is not accepted; expected the number 50 or 70, kg',
     'study.json:29: titel: there is no such key here; title is probably meant',
     'study.json:30: metal_model: model of the metal "inductive" is not yet offered; expected "resistive" or "equipotential"',
-    'study.json:31: colour: there is no such key here; known are format, version, title, soil, surfacing, metal_model, conductors, electrodes, cases, limits and areas',
+    'study.json:31: colour: there is no such key here; known are format, version, title, soil, seasons, surfacing, metal_model, conductors, electrodes, cases, limits and areas',
     'study.json:34: surfacing.thickness_m: covering thickness 100 is not accepted; expected a number above 0 and at most 1 m',
   ],
 };

@@ -3,6 +3,7 @@ import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import { InputFaults } from '../../src/fault.ts';
 import { loadStudy } from '../../src/input/load-study.ts';
+import { loadSurvey } from '../../src/input/load-survey.ts';
 import { loadPoints } from '../../src/input/points-csv.ts';
 import { sourceFromMap } from '../../src/input/source.ts';
 import { bytesOf, smallStudy, smallTable } from './folder-source.ts';
@@ -112,6 +113,7 @@ describe('random bytes', () => {
       ...Object.keys(smallStudy),
       'areas',
       'electrodes',
+      'seasons',
       'surfacing',
       'metal_model',
     );
@@ -121,6 +123,35 @@ describe('random bytes', () => {
       }),
       { seed: SEED, numRuns: 2000 },
     );
+  });
+
+  test('as survey.csv', () => {
+    const good = [
+      'spacing_m,ab_half_m,mn_half_m,apparent_resistivity_ohm_m,resistance_ohm,pin_depth_m,traverse',
+      '1,,,100,,0.1,N',
+      '2,,,,5.5,,N',
+      ',10,1,80,,0.2,E',
+      '',
+    ].join('\n');
+    const outcomes = new Set<string>();
+    fc.assert(
+      fc.property(damaged(bytesOf(good)), (bytes) => {
+        try {
+          const { readings } = loadSurvey(sourceFromMap(new Map([['survey.csv', bytes]])), 'survey.csv');
+          expect(readings.length).toBeGreaterThan(0);
+          expect(readings.every(({ apparentResistivity }) => Number.isFinite(apparentResistivity))).toBe(
+            true,
+          );
+          outcomes.add('loaded');
+        } catch (error) {
+          if (!(error instanceof InputFaults)) throw error;
+          for (const { message } of error.faults) expect(message).not.toMatch(/undefined|NaN|\[object|\n/);
+          outcomes.add('refused');
+        }
+      }),
+      { seed: SEED, numRuns: 2000 },
+    );
+    expect(outcomes).toEqual(new Set(['loaded', 'refused']));
   });
 
   test('as points.csv', () => {

@@ -30,6 +30,7 @@ describe('published schema', () => {
       'version',
       'title',
       'soil',
+      'seasons',
       'surfacing',
       'metal_model',
       'conductors',
@@ -51,10 +52,18 @@ describe('published schema', () => {
     expect(member(schema, '$schema')).toBe('https://json-schema.org/draft/2020-12/schema');
   });
 
+  test('asks for layers, or for a survey with the number of layers', () => {
+    const soil = member(member(studyJsonSchema(), 'properties'), 'soil');
+    expect(member(soil, 'oneOf')).toEqual([
+      { required: ['layers'] },
+      { required: ['survey', 'layer_count'] },
+    ]);
+  });
+
   test('gives every part a trade name and an expectation', () => {
     const all = nodes(studyJsonSchema(), 'study');
     const bare = all.filter(([, node]) => !member(node, 'title') || !member(node, 'description'));
-    expect(all.length).toBeGreaterThan(35);
+    expect(all.length).toBeGreaterThan(50);
     expect(bare.map(([path]) => path)).toEqual([]);
   });
 });

@@ -124,8 +124,22 @@ describe('a loaded study', () => {
     const table = `${header},resistance_ohm_per_m\n${'n'.repeat(121)},0,0,0.5,1,0,0.5,10,2e6\n`;
     expect(studyFaultLines(memorySource(smallStudy, table))).toEqual([
       `conductors.csv:2: id: ${'n'.repeat(40)}… has 121 characters; at most 120 are read`,
-      'conductors.csv:2: resistance_ohm_per_m: 2e6 is out of range; expected a resistance per length from 0 to 1e6 ohm/m',
+      'conductors.csv:2: resistance_ohm_per_m: 2e6 is out of range; expected a resistance per length above 0 and at most 1e6 ohm/m',
     ]);
+  });
+
+  // a bar of copper 5 m thick has 9e-10 Ω/m: 1.724e-8 Ω·m (IEC 60028, from memory) over π/4·5² m²
+  test.each([
+    ['1e-10', []],
+    [
+      '9e-11',
+      [
+        'conductors.csv:2: resistance_ohm_per_m: 9e-11 is no resistance that a branch of metal can have; for metal without resistance use "metal_model": "equipotential" in study.json',
+      ],
+    ],
+  ])('takes a resistance from that of the thickest bar on: %s', (resistance, lines) => {
+    const table = `${header},resistance_ohm_per_m\nA,0,0,0.5,1,0,0.5,10,${resistance}\n`;
+    expect(studyFaultLines(memorySource(smallStudy, table))).toEqual(lines);
   });
 
   test('takes a conductor for bare where nothing is said of its insulation', () => {

@@ -30,6 +30,14 @@ describe('units', () => {
     ['resistance-per-length', 'ohm_per_ft', 1 / 0.3048],
     ['resistance-per-length', 'ohm_per_kft', 1 / 304.8],
     ['resistance-per-length', 'ohm_per_mi', 1 / 1609.344],
+    ['resistivity', 'ohm_m', 1],
+    ['resistivity', 'ohm_cm', 0.01],
+    ['resistivity', 'ohm_ft', 0.3048],
+    ['resistivity', 'kohm_m', 1000],
+    ['resistivity', 'kohm_cm', 10],
+    ['resistance', 'ohm', 1],
+    ['resistance', 'milliohm', 0.001],
+    ['resistance', 'kohm', 1000],
   ] as const)('%s: one %s is %f in SI units', (kind, name, value) => {
     expect(Math.abs(si(kind, name, 1) / value - 1)).toBeLessThanOrEqual(Number.EPSILON);
   });
@@ -37,6 +45,8 @@ describe('units', () => {
   test('the definitions above are all there are', () => {
     expect([...unitsOf('length').keys()]).toEqual(['m', 'dm', 'cm', 'mm', 'km', 'in', 'ft', 'yd', 'us_ft']);
     expect(unitsOf('resistance-per-length').size).toBe(7);
+    expect(unitsOf('resistivity').size).toBe(5);
+    expect(unitsOf('resistance').size).toBe(3);
   });
 
   test('metric lengths are the same number in any unit, to the last bit', () => {
