@@ -36,7 +36,7 @@ function milliseconds<T>(work: () => T): [ms: number, result: T] {
 
 function soilOf(loaded: LoadedStudy): SoilModel {
   return {
-    layers: loaded.study.soil.layers.map((layer) => ({
+    layers: (loaded.study.soil.layers ?? []).map((layer) => ({
       resistivity: layer.resistivity_ohm_m,
       thickness: layer.thickness_m ?? Number.POSITIVE_INFINITY,
     })),

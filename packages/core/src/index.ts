@@ -14,7 +14,14 @@ export {
   type SurfacePotentials,
   surfacePotentials,
 } from './field/surface-potential.ts';
-export { areaMask, type MetalPotential, touchLattice, type WorstPlace, worstTouch } from './field/touch.ts';
+export {
+  areaMask,
+  latticeMaxima,
+  type MetalPotential,
+  touchLattice,
+  type WorstPlace,
+  worstTouch,
+} from './field/touch.ts';
 export {
   areaSquareMetres,
   corridors,
@@ -55,3 +62,19 @@ export { type SeasonalChange, seasonalSoil } from './soil/season.ts';
 export type * from './soil/soil-model.ts';
 export { type GraphSolution, type MetalModel, solveGraph, type UnitSolution } from './solve/solution.ts';
 export { MODEL_FLOOR, refinementUncertainty } from './solve/uncertainty.ts';
+export { bandOf, type FamilyMember, type SoilFamily, soilFamily, soundingBand } from './survey/ambiguity.ts';
+export type { FourPinArray } from './survey/arrays.ts';
+export { spacingOf } from './survey/arrays.ts';
+export { type SurveyDoubt, spacingDoubts, surveyDoubts } from './survey/doubts.ts';
+export { type EquivalentResistivity, equivalentUniformResistivities } from './survey/equivalent-uniform.ts';
+export { apparentResistivity } from './survey/forward.ts';
+export { type FittedSurvey, invertSurvey, type RefusedSurvey } from './survey/inversion.ts';
+export { medianDepth } from './survey/investigation-depth.ts';
+export { type LayerProposal, proposeLayerCount } from './survey/layer-count.ts';
+export {
+  type CheckedRows,
+  checkRows,
+  type Reading,
+  type RowFinding,
+  type SurveyRow,
+} from './survey/readings.ts';

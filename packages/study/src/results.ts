@@ -1,5 +1,7 @@
 // The results file: headline numbers of a study with units in every key. Names are fixed by contract; adding is free.
 
+import type { EquivalentUniform, GroundResult } from './ground.ts';
+
 export interface ResultsWarning {
   readonly code: string;
   readonly message: string;
@@ -140,6 +142,10 @@ export interface Results {
   readonly soil: {
     readonly layers: readonly { readonly resistivity_ohm_m: number; readonly thickness_m: number | null }[];
   };
+  /** where the soil was fitted to field readings */
+  readonly ground: GroundResult | null;
+  /** hand values of an equivalent uniform soil; empty in uniform soil */
+  readonly equivalent_uniform: readonly EquivalentUniform[];
   readonly limits: LimitsResult;
   readonly mesh: readonly MeshLevel[];
   /** empty where the study names none */

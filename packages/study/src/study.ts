@@ -1,5 +1,5 @@
 // The study as its file writes it (contract names, units in the keys) and as it is read with its tables.
-import type { ConductorTable } from '@ohmstead/core';
+import type { ConductorTable, Reading, RowFinding } from '@ohmstead/core';
 
 export type Point = readonly [x: number, y: number];
 /** Corners in order, metres; closed without repeating the first. */
@@ -23,6 +23,11 @@ export interface CaseInput {
   readonly inject?: { readonly x_m: number; readonly y_m: number; readonly depth_m: number } | undefined;
 }
 
+/** The soil: layers from the surface down, or a table of field readings that layers are fitted to. */
+export type SoilInput =
+  | { readonly layers: readonly LayerInput[]; readonly survey?: undefined; readonly layer_count?: undefined }
+  | { readonly layers?: undefined; readonly survey: string; readonly layer_count: number | 'auto' };
+
 /** A season: the whole soil anew, or the soil of the study with its top or its depth changed. */
 export interface SeasonInput {
   readonly name: string;
@@ -37,7 +42,7 @@ export interface Study {
   readonly format: 'ohmstead-study';
   readonly version: 1;
   readonly title: string;
-  readonly soil: { readonly layers: readonly LayerInput[] };
+  readonly soil: SoilInput;
   /** variants of the soil, each solved; the worst of all seasons governs */
   readonly seasons?: readonly SeasonInput[] | undefined;
   readonly surfacing?: { readonly resistivity_ohm_m: number; readonly thickness_m: number } | undefined;
@@ -65,12 +70,23 @@ export interface Note {
   readonly message: string;
 }
 
+/** A survey table, checked. */
+export interface LoadedSurvey {
+  readonly file: string;
+  /** `row` is the line of the file */
+  readonly readings: readonly Reading[];
+  /** doubts about rows that are used */
+  readonly cautions: readonly RowFinding[];
+}
+
 /** A study with its tables, checked. */
 export interface LoadedStudy {
   readonly study: Study;
   readonly conductors: ConductorTable;
   /** one a conductor */
   readonly origins: readonly RowOrigin[];
+  /** field readings, where the soil is to be fitted to them */
+  readonly survey?: LoadedSurvey | undefined;
   /** assumed values and conversions, e.g. a material that was not given */
   readonly notes: readonly Note[];
   /** every file of the study, by its path, as read */

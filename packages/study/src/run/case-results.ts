@@ -1,12 +1,10 @@
 // One fault case: current into the ground, rise, and the worst touch and step voltages against their limits.
 import { decrementFactor, gridCurrent, judge, type SegmentMesh, type Verdict } from '@ohmstead/core';
+import { DEFAULT_DIVISION_FACTOR, DEFAULT_FREQUENCY_HZ } from '../input/defaults.ts';
 import type { CaseResult, LimitsResult, ResultsWarning, WorstTouch } from '../results.ts';
 import type { CaseInput } from '../study.ts';
 import type { UnitField } from './levels.ts';
 import { caseLimits } from './limits-of.ts';
-
-/** Frequency assumed where a case gives none, Hz. */
-export const DEFAULT_FREQUENCY_HZ = 50;
 
 export function caseResult(
   input: CaseInput,
@@ -16,7 +14,7 @@ export function caseResult(
 ): { readonly result: CaseResult; readonly warnings: readonly ResultsWarning[] } {
   const frequency = input.frequency_hz ?? DEFAULT_FREQUENCY_HZ;
   const decrement = decrementFactor(input.x_over_r, frequency, input.duration_s);
-  const division = input.division_factor ?? 1;
+  const division = input.division_factor ?? DEFAULT_DIVISION_FACTOR;
   const current = gridCurrent(
     input.grid_current_A === undefined
       ? { faultCurrent: input.fault_current_A!, divisionFactor: division, decrementFactor: decrement }

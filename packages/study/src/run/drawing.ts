@@ -1,10 +1,10 @@
 // What figures are drawn from: conductors, joints and areas in metres, and leakage and current by segment.
 
-import { type Box, type Lattice, lineProfile } from '@ohmstead/core';
+import { type Box, isRod, type Lattice, lineProfile } from '@ohmstead/core';
 import type { CaseFigures, CaseMap, Plan, SegmentTable } from '../outcome.ts';
 import type { Solved, UnitField } from './levels.ts';
 import type { Prepared } from './prepare.ts';
-import { isEnergised, isRod } from './roles.ts';
+import { isEnergised } from './roles.ts';
 
 /** Points of a profile: one every 20 cm on 80 m. */
 const PROFILE_POINTS = 401;

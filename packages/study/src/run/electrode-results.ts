@@ -1,9 +1,15 @@
 // Each electrode by name: its potential and net leakage per ampere injected, and the touch voltage on floating metal.
-import { type ConductorTable, nearestNode, refinementUncertainty, worstTouchNearLines } from '@ohmstead/core';
+import {
+  type ConductorTable,
+  isRod,
+  nearestNode,
+  refinementUncertainty,
+  worstTouchNearLines,
+} from '@ohmstead/core';
 import type { ElectrodeResult } from '../results.ts';
 import type { Solved } from './levels.ts';
 import type { Prepared } from './prepare.ts';
-import { conductorLength, isEnergised, isRod } from './roles.ts';
+import { conductorLength, isEnergised } from './roles.ts';
 
 /** Electrodes in the order in which the conductor table names them, for the first case's place of injection. */
 export function electrodeResults(prepared: Prepared, solved: Solved): ElectrodeResult[] {

@@ -1,8 +1,10 @@
 // Potential and touch voltage of one case at places the user names.
 import { potentialAt } from '@ohmstead/core';
 import { type Fault, InputFaults } from '../fault.ts';
+import { STUDY_FILE } from '../input/read-study-json.ts';
 import type { LoadedStudy } from '../study.ts';
 import { caseResult } from './case-results.ts';
+import { groundOf } from './ground-of.ts';
 import { type Progress, solveLevels } from './levels.ts';
 import { limitsOf } from './limits-of.ts';
 import { prepare } from './prepare.ts';
@@ -31,7 +33,7 @@ export function fieldAt(
 ): FieldValue[] {
   const at = caseName === undefined ? 0 : loaded.study.cases.findIndex((c) => c.name === caseName);
   if (at < 0) throw new InputFaults([unknownCase(loaded, caseName ?? '')]);
-  const prepared = prepare(loaded);
+  const prepared = prepare(loaded, groundOf(loaded).soil);
   const solved = solveLevels(prepared, onProgress);
   const unit = solved.units[solved.unitOfCase[at]!]!;
   const current = caseResult(
@@ -55,7 +57,7 @@ export function fieldAt(
 function unknownCase(loaded: LoadedStudy, name: string): Fault {
   const known = loaded.study.cases.map((c) => c.name).join(', ');
   return {
-    file: 'study.json',
+    file: STUDY_FILE,
     place: 'cases',
     code: 'unknown-case',
     message: `no case is named ${name}; the study has ${known}`,

@@ -30,6 +30,7 @@ import {
   worstTouch,
 } from '@ohmstead/core';
 import { InputFaults } from '../fault.ts';
+import { STUDY_FILE } from '../input/read-study-json.ts';
 import type { MeshLevel } from '../results.ts';
 import { assessedBox, lineReach } from './extent.ts';
 import type { Prepared } from './prepare.ts';
@@ -142,7 +143,7 @@ function refuseBeyondMemory(segments: number): void {
   const gigabytes = (4e-9 * segments * segments).toFixed(1);
   throw new InputFaults([
     {
-      file: 'study.json',
+      file: STUDY_FILE,
       place: 'conductors',
       code: 'too-large',
       message: `the electrode needs ${segments} segments and a leakage matrix of ${gigabytes} GB; at most ${MOST_SEGMENTS} segments are solved`,

@@ -10,6 +10,7 @@ import {
   type SoilModel,
 } from '@ohmstead/core';
 import { type Fault, InputFaults } from '../fault.ts';
+import { STUDY_FILE } from '../input/read-study-json.ts';
 import type { ResultsWarning } from '../results.ts';
 import type { LayerInput, LoadedStudy, Polygon } from '../study.ts';
 
@@ -35,7 +36,7 @@ export interface Prepared {
 const INJECTION_DISTANCE_M = 1;
 
 /** @throws InputFaults with every fault of the drawing */
-export function prepare(loaded: LoadedStudy): Prepared {
+export function prepare(loaded: LoadedStudy, soil: SoilModel): Prepared {
   const { study, conductors } = loaded;
   const joints = joinConductors(conductors);
   const floating = new Set(study.electrodes?.filter((e) => e.role === 'floating').map((e) => e.name) ?? []);
@@ -46,6 +47,15 @@ export function prepare(loaded: LoadedStudy): Prepared {
   const assumptions: ResultsWarning[] = [];
   const warnings: ResultsWarning[] = [];
   const candidates = energisedNodes(joints, componentOf, conductors, floating);
+  if (candidates.length === 0)
+    throw new InputFaults([
+      {
+        file: STUDY_FILE,
+        place: 'conductors',
+        code: 'nothing-leaks',
+        message: 'no conductor of an energised electrode is bare: no current can enter the ground',
+      },
+    ]);
   const injectionNodes = study.cases.map((_, c) =>
     injectionNode(loaded, joints, candidates, c, assumptions, warnings),
   );
@@ -69,7 +79,7 @@ export function prepare(loaded: LoadedStudy): Prepared {
     });
   return {
     loaded,
-    soil: layeredSoil(study.soil.layers),
+    soil,
     joints,
     componentOf,
     injectionNodes,
@@ -110,7 +120,7 @@ function componentsOfConductors(table: ConductorTable, joints: Joints): Int32Arr
   return of;
 }
 
-/** Nodes of metal that may take a fault: every piece with a conductor of an electrode that is not floating. */
+/** Nodes of metal that may take a fault: every piece with a bare conductor of an electrode that is not floating. */
 function energisedNodes(
   joints: Joints,
   componentOf: Int32Array,
@@ -118,7 +128,8 @@ function energisedNodes(
   floating: ReadonlySet<string>,
 ): readonly number[] {
   const may = new Set<number>();
-  for (let i = 0; i < table.count; i++) if (!floating.has(table.electrode[i]!)) may.add(componentOf[i]!);
+  for (let i = 0; i < table.count; i++)
+    if (!floating.has(table.electrode[i]!) && table.insulated[i] !== 1) may.add(componentOf[i]!);
   return Array.from({ length: joints.nodeCount }, (_, node) => node).filter((node) =>
     may.has(joints.nodeComponent[node]!),
   );

@@ -1,16 +1,20 @@
 // The chain from a loaded study to everything that the sheet, the pack and the command line show.
+import { isRod, spacingDoubts } from '@ohmstead/core';
 import type { Outcome } from '../outcome.ts';
 import type { Results, ResultsWarning, SeasonResult } from '../results.ts';
 import type { LoadedStudy } from '../study.ts';
 import { programVersion } from '../version.ts';
 import { caseResult } from './case-results.ts';
+import { consequenceOf } from './consequence.ts';
 import { caseFigures, planOf, segmentTable } from './drawing.ts';
 import { electrodeResults } from './electrode-results.ts';
+import { equivalentUniform } from './equivalent-uniform.ts';
 import { assessedBox } from './extent.ts';
+import { type Ground, groundOf } from './ground-of.ts';
 import { type Progress, type Solved, solveLevels } from './levels.ts';
 import { limitsOf } from './limits-of.ts';
 import { type Prepared, prepare } from './prepare.ts';
-import { conductorLength, isEnergised, isRod } from './roles.ts';
+import { conductorLength, isEnergised } from './roles.ts';
 import { envelope, seasonResults } from './seasons.ts';
 import { layersOf } from './soil-results.ts';
 
@@ -23,7 +27,8 @@ export interface SolveOptions {
 export function solveStudy(loaded: LoadedStudy, options: SolveOptions = {}): Outcome {
   const progress = options.onProgress ?? (() => {});
   progress('joining conductors', 0);
-  const prepared = prepare(loaded);
+  const ground = groundOf(loaded);
+  const prepared = prepare(loaded, ground.soil);
   const solved = solveLevels(prepared, progress);
   const limits = limitsOf(loaded.study, prepared.soil.layers[0]!.resistivity);
   const unitOf = (c: number) => solved.units[solved.unitOfCase[c]!]!;
@@ -31,7 +36,7 @@ export function solveStudy(loaded: LoadedStudy, options: SolveOptions = {}): Out
   const box = assessedBox(prepared);
   return {
     study: loaded.study,
-    results: resultsOf(prepared, solved, limits, cases, seasonResults(prepared, progress)),
+    results: resultsOf(prepared, solved, limits, cases, seasonResults(prepared, progress), ground, progress),
     plan: planOf(prepared),
     segments: segmentTable(solved),
     cases: cases.map(({ result }, c) => caseFigures(result.name, result.grid_current_A, unitOf(c), box)),
@@ -44,6 +49,8 @@ function resultsOf(
   limits: Results['limits'],
   cases: readonly ReturnType<typeof caseResult>[],
   seasons: readonly SeasonResult[],
+  ground: Ground,
+  progress: Progress,
 ): Results {
   const base = cases.map(({ result }) => result);
   const { loaded, joints } = prepared;
@@ -78,6 +85,14 @@ function resultsOf(
       image_count: images.count,
     },
     soil: { layers: layersOf(prepared.soil) },
+    ground:
+      ground.fitted === undefined
+        ? null
+        : {
+            fit: ground.fitted.fit,
+            consequence: consequenceOf(prepared, solved, base, ground.fitted.members, progress),
+          },
+    equivalent_uniform: equivalentUniform(prepared, solved),
     limits,
     mesh: solved.levels,
     seasons,
@@ -92,7 +107,12 @@ function resultsOf(
       distance_m: snap.distance,
     })),
     assumptions: [...loaded.notes, ...prepared.assumptions],
-    warnings: [...prepared.warnings, ...doubts(loaded), ...cases.flatMap(({ warnings }) => warnings)],
+    warnings: [
+      ...prepared.warnings,
+      ...groundDoubts(prepared),
+      ...doubts(loaded),
+      ...cases.flatMap(({ warnings }) => warnings),
+    ],
   };
 }
 
@@ -108,6 +128,14 @@ function usedImages(solved: Solved): { count: number; error: number } {
       error = Math.max(error, list.error);
     }
   return { count, error };
+}
+
+/** Doubts about the survey against the electrode that it is used for. */
+function groundDoubts({ loaded, joints }: Prepared): readonly ResultsWarning[] {
+  if (loaded.survey === undefined) return [];
+  const extent = (values: Float64Array): number =>
+    values.reduce((a, b) => Math.max(a, b)) - values.reduce((a, b) => Math.min(a, b));
+  return spacingDoubts(loaded.survey.readings, Math.hypot(extent(joints.nodeX), extent(joints.nodeY)));
 }
 
 function doubts(loaded: LoadedStudy): ResultsWarning[] {

@@ -101,6 +101,14 @@ describe('solving a study', () => {
     expect(lines[0]).toMatch(/^conductors\.csv:8: 7: /);
   });
 
+  it('refuses a study in which nothing bare is energised', () => {
+    const loaded = studyOf(grid, [[100]]);
+    loaded.conductors.insulated.fill(1);
+    expect(faultsOf(() => solveStudy(loaded))).toEqual([
+      'study.json: conductors: no conductor of an energised electrode is bare: no current can enter the ground',
+    ]);
+  });
+
   it('refuses an electrode too large to hold, with the figure', () => {
     const lines = faultsOf(() => solveStudy(studyOf(gridBars(600, 600, 45, 45, 0.5, 0.005), [[100]])));
     expect(lines[0]).toMatch(/needs \d+ segments and a leakage matrix of \d\.\d GB; at most 12000/);

@@ -1,0 +1,37 @@
+// The uniform soil that a hand calculation would use, and how far off it is.
+import {
+  equivalentUniformResistivities,
+  leakageMatrix,
+  segmentMesh,
+  soilImages,
+  solveGraph,
+} from '@ohmstead/core';
+import type { EquivalentUniform } from '../ground.ts';
+import type { Solved } from './levels.ts';
+import type { Prepared } from './prepare.ts';
+
+/** Mesh level of the uniform soil: its error is a hundredth of what hand values are off by. */
+const LEVEL = 1;
+
+/** Empty in uniform soil, and in soils of more layers than the hand rules are made for. */
+export function equivalentUniform(prepared: Prepared, solved: Solved): EquivalentUniform[] {
+  const values = equivalentUniformResistivities(prepared.soil);
+  if (values.length === 0) return [];
+  const { resistance, injectionNode } = solved.units[solved.unitOfCase[0]!]!;
+  const perOhmMetre = resistanceInUniformSoil(prepared, injectionNode);
+  return values.map(({ name, source, resistivity }) => ({
+    name,
+    source,
+    resistivity_ohm_m: resistivity,
+    resistance_ohm: perOhmMetre * resistivity,
+    deviation_percent: 100 * ((perOhmMetre * resistivity) / resistance - 1),
+  }));
+}
+
+/** Resistance in uniform soil of 1 Ω·m, perfect metal, Ω: it grows in proportion to the resistivity. */
+function resistanceInUniformSoil(prepared: Prepared, node: number): number {
+  const mesh = segmentMesh(prepared.loaded.conductors, prepared.joints, [], LEVEL);
+  const images = soilImages({ layers: [{ resistivity: 1, thickness: Number.POSITIVE_INFINITY }] });
+  const matrix = leakageMatrix(mesh, images);
+  return solveGraph(mesh, matrix, [node], prepared.resistancePerMetre, 'equipotential').units[0]!.resistance;
+}
