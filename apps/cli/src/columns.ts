@@ -2,11 +2,13 @@
 
 export interface Column {
   readonly align: 'left' | 'right';
-  /** characters; longer cells are cut with an ellipsis */
-  readonly most: number;
+  /** characters, longer cells are cut with an ellipsis; `rest`: what other columns leave of the line */
+  readonly most: number | 'rest';
 }
 
 const GAP = '  ';
+/** A column that takes the rest of the line keeps this many characters, however wide the others are. */
+const LEAST_REST = 12;
 
 /** Characters as a terminal counts them, near enough: code points. */
 function width(text: string): number {
@@ -23,11 +25,22 @@ export function clipped(text: string, most: number): string {
  * Lines of a table.
  * @param columns how each column stands
  * @param rows cells, one a column
+ * @param line characters of a line, for the column that takes the rest
  * @returns one line a row, each column as wide as its widest cell
  */
-export function aligned(columns: readonly Column[], rows: readonly (readonly string[])[]): readonly string[] {
-  const cut = rows.map((row) => row.map((cell, c) => clipped(cell, columns[c].most)));
-  const widths = columns.map((_, c) => Math.max(0, ...cut.map((row) => width(row[c]))));
+export function aligned(
+  columns: readonly Column[],
+  rows: readonly (readonly string[])[],
+  line: number = Infinity,
+): readonly string[] {
+  const widest = (c: number): number => rows.reduce((most, row) => Math.max(most, width(row[c])), 0);
+  const others = columns.reduce(
+    (sum, { most }, c) => sum + (most === 'rest' ? 0 : Math.min(most, widest(c))),
+    GAP.length * (columns.length - 1),
+  );
+  const limits = columns.map(({ most }) => (most === 'rest' ? Math.max(LEAST_REST, line - others) : most));
+  const cut = rows.map((row) => row.map((cell, c) => clipped(cell, limits[c])));
+  const widths = columns.map((_, c) => Math.min(limits[c], widest(c)));
   return cut.map((row) => {
     const cells = row.map((cell, c) => {
       const blank = ' '.repeat(widths[c] - width(cell));

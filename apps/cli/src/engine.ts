@@ -4,19 +4,26 @@ import {
   type FieldPoint,
   type FieldValue,
   fieldAt,
+  fitSurvey,
   type LoadedStudy,
+  type LoadedSurvey,
   loadPoints,
   loadStudy,
+  loadSurvey,
   type Outcome,
   type PointTable,
   programVersion,
+  type SoilFit,
   type StudySource,
+  type SurveyFile,
   solveStudy,
 } from '@ohmstead/study';
 
 export interface Engine {
   readonly loadStudy: (source: StudySource) => LoadedStudy;
   readonly loadPoints: (source: StudySource, path: string) => PointTable;
+  readonly loadSurvey: (source: StudySource, path: string) => SurveyFile;
+  readonly fitSurvey: (survey: LoadedSurvey, layerCount: number | 'auto') => { readonly fit: SoilFit };
   readonly solveStudy: (
     loaded: LoadedStudy,
     options?: { readonly onProgress?: (stage: string, share: number) => void },
@@ -34,6 +41,8 @@ export interface Engine {
 export const engine: Engine = {
   loadStudy,
   loadPoints,
+  loadSurvey,
+  fitSurvey,
   solveStudy,
   fieldAt,
   renderer: sheetRenderer,

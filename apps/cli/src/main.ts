@@ -9,14 +9,15 @@ import { commandHelp, overview, studyHelp } from './help.ts';
 import type { Io } from './io.ts';
 import { ExplainedFaults } from './open-study.ts';
 import { printable } from './printable.ts';
+import { soil } from './soil.ts';
 import { solve } from './solve.ts';
 import { suggestion } from './suggestion.ts';
 import { verify } from './verify.ts';
 
-const COMMANDS: readonly Command[] = [solve, field, verify];
+const COMMANDS: readonly Command[] = [solve, field, soil, verify];
 
 /** Names kept for commands to come. */
-const LATER: readonly string[] = ['soil', 'probe'];
+const LATER: readonly string[] = ['probe'];
 
 /** Faults listed at most; beyond that a list is not read but scrolled past. */
 const MOST_FAULTS = 500;

@@ -1,51 +1,42 @@
-// Numbers as a terminal shows them: digits from the uncertainty, plain signs and blanks that copy well.
+// Numbers as a terminal shows them: those of the sheet, with plain signs and blanks that copy well.
+import * as sheet from '@ohmstead/sheet';
 
-/** Digits of a number that has no uncertainty of its own. */
-const USUAL_DIGITS = 4;
-/** No more digits than this are shown, however small the uncertainty. */
-const MOST_DIGITS = 6;
-/** Share of the last place below which rounding up an uncertainty sees only a rounding error of its own. */
-const ROUND_UP_SLACK = 1e-6;
-
-function exponentOf(value: number): number {
-  return value === 0 ? 0 : Number(value.toExponential().split('e')[1]);
+/** Thin blanks group digits and stand before units; no-break blanks keep pairs together. */
+function plain(text: string): string {
+  return text
+    .replace(/(?<=\d)\u202f(?=\d)/g, '')
+    .replace(/[\u202f\u00a0]/g, ' ')
+    .replace(/\u2212/g, '-');
 }
 
-/** Decimals as asked for; negative ones round to tens and hundreds. */
-function fixed(value: number, decimals: number): string {
-  const unit = 10 ** Math.max(0, -decimals);
-  const text = (Math.round(value / unit) * unit).toFixed(0);
-  const shown = decimals > 0 ? value.toFixed(Math.min(decimals, 100)) : text;
-  return Number(shown) === 0 ? shown.replace('-', '') : shown;
+/** A number without an uncertainty of its own, and its unit. */
+export function quantity(value: number, unit: string, digits?: number): string {
+  return plain(sheet.quantity(value, unit, digits));
 }
 
-/** A number with so many significant digits, and its unit. */
-export function quantity(value: number, unit: string, digits: number = USUAL_DIGITS): string {
-  return `${fixed(value, digits - 1 - exponentOf(Number(value.toPrecision(digits))))} ${unit}`;
+/** Digits of a range that readings allow: more than they tell. */
+const RANGE_DIGITS = 3;
+
+/** A range of values: 98.8 to 185 Ω·m. */
+export function range({ low, high }: { readonly low: number; readonly high: number }, unit: string): string {
+  const [from, to] = [low, high].map((value) => quantity(value, unit, RANGE_DIGITS));
+  const same = from.slice(from.lastIndexOf(' ')) === to.slice(to.lastIndexOf(' '));
+  return `${same ? from.slice(0, from.lastIndexOf(' ')) : from} to ${to}`;
 }
 
-/**
- * A result and its uncertainty at one common place: 975 ± 4 V. One digit of the uncertainty is kept, two where it
- * begins with 1; it is rounded up, so that rounding never claims more than was computed.
- */
+/** A result and its uncertainty at one common place: 975 ± 4 V. */
 export function measured(value: number, uncertainty: number, unit: string): string {
-  if (!(uncertainty > 0)) return `${quantity(value, '')}± 0 ${unit}`;
-  const exponent = exponentOf(uncertainty);
-  const wanted = uncertainty / 10 ** exponent < 2 ? 1 - exponent : -exponent;
-  const decimals = Math.min(wanted, MOST_DIGITS - 1 - exponentOf(value));
-  const place = 10 ** -decimals;
-  const up = Math.max(1, Math.ceil(uncertainty / place - ROUND_UP_SLACK)) * place;
-  return `${fixed(value, decimals)} ± ${fixed(up, decimals)} ${unit}`;
+  return plain(sheet.measured(value, uncertainty, unit));
 }
 
-/** A share as a whole per cent, one decimal below ten. */
+/** A share as per cent. */
 export function percent(share: number): string {
-  return `${fixed(100 * share, Math.abs(share) < 0.0995 ? 1 : 0)} %`;
+  return plain(sheet.percent(share));
 }
 
-/** A place on the surface, to a centimetre. */
+/** A place on the surface. */
 export function place(x: number, y: number): string {
-  return `(${fixed(x, 2)}, ${fixed(y, 2)}) m`;
+  return plain(sheet.place(x, y));
 }
 
 /** A small number by its order of size: 3e-13. */

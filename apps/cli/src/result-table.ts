@@ -1,20 +1,21 @@
 // Results → the table for people: the answer first, then the electrode, each case against its limits, what to mind.
+
+import { answerOf, subjectVoltage, type VerdictRow, verdictRows } from '@ohmstead/sheet';
 import type { CaseResult, Results } from '@ohmstead/study';
 import { aligned, type Column, wrapped } from './columns.ts';
+import { groundLines, seasonLines } from './ground-lines.ts';
+import { labelled, WIDTH } from './lines.ts';
 import { measured, order, percent, place, quantity } from './number-text.ts';
 import { printable } from './printable.ts';
-import { answer, type VerdictRow, verdictRows } from './verdict.ts';
 
-/** Characters of a line. */
-const WIDTH = 100;
-const LABEL = 12;
+const INDENT = 2;
 
-/** The widest cells together with the gaps and the indent stay within WIDTH. */
+/** Numbers are never cut; what they are about gives way. */
 const COLUMNS: readonly Column[] = [
-  { align: 'left', most: 20 },
-  { align: 'right', most: 16 },
-  { align: 'left', most: 23 },
-  { align: 'right', most: 9 },
+  { align: 'left', most: 'rest' },
+  { align: 'right', most: 24 },
+  { align: 'left', most: 26 },
+  { align: 'right', most: 12 },
   { align: 'right', most: 8 },
   { align: 'left', most: 10 },
 ];
@@ -33,31 +34,32 @@ export function resultTable(results: Results, emphasised: (text: string) => stri
   const rows = verdictRows(results);
   const lines = [
     ...wrapped(printable(results.title), WIDTH).map(emphasised),
-    ...wrapped(`${answer(results)} ${governing(results, rows)}`, WIDTH),
+    ...wrapped(`${answer(results)} ${governing(rows)}`, WIDTH),
     '',
     ...about(results),
     '',
     ...voltages(results, rows, emphasised),
     '',
+    ...seasonLines(results),
     ...closing(results),
   ];
   return `${lines.join('\n')}\n`;
 }
 
-/** What comes nearest to its limit, or farthest beyond it. */
-function governing({ cases }: Results, rows: readonly VerdictRow[]): string {
-  const row = rows.reduce((a, b) => (b.worst / b.limit > a.worst / a.limit ? b : a));
-  const subject = printable(row.subject).replace(/^(touch|step)/, '$1 voltage');
-  const share = `${percent(row.worst / row.limit)} of the limit of ${quantity(row.limit, 'V')}`;
-  const name = printable(cases[row.at].name);
-  const lead = row.worst > row.limit ? 'Farthest beyond' : 'Nearest to its limit';
-  return `${lead}: ${subject}, ${name}, ${measured(row.worst, row.uncertainty, 'V')}, ${share}.`;
+/** The answer for the whole study in one sentence. */
+function answer(results: Results): string {
+  const { subject, predicate, rest } = answerOf(results);
+  const words = `${subject} ${predicate}${rest === undefined ? '' : `; ${rest}`}.`;
+  return words.charAt(0).toUpperCase() + words.slice(1);
 }
 
-function labelled(label: string, text: string): readonly string[] {
-  return wrapped(text, WIDTH - LABEL).map(
-    (line, index) => `${(index === 0 ? label : '').padEnd(LABEL)}${line}`,
-  );
+/** What comes nearest to its limit, or farthest beyond it. */
+function governing(rows: readonly VerdictRow[]): string {
+  const row = rows.reduce((a, b) => (b.share > a.share ? b : a));
+  const share = `${percent(row.share)} of the limit of ${quantity(row.limit, 'V')}`;
+  const lead = row.worst > row.limit ? 'Farthest beyond' : 'Nearest to its limit';
+  const what = `${printable(subjectVoltage(row))}, ${printable(row.caseName)}`;
+  return `${lead}: ${what}, ${measured(row.worst, row.uncertainty, 'V')}, ${share}.`;
 }
 
 function about(results: Results): readonly string[] {
@@ -67,6 +69,7 @@ function about(results: Results): readonly string[] {
   const metal = `${quantity(electrode.conductor_length_m, 'm')} of metal, ${electrode.rod_count} ${electrode.rod_count === 1 ? 'rod' : 'rods'}`;
   return [
     ...labelled('Soil', soil(results)),
+    ...groundLines(results),
     ...labelled(
       'Electrode',
       `${measured(resistance, uncertainty, 'Ω')} to remote earth; ${metal}, ${electrode.segment_count} segments`,
@@ -79,10 +82,14 @@ function about(results: Results): readonly string[] {
   ];
 }
 
-function soil({ soil: { layers }, limits }: Results): string {
-  const parts = layers.map(({ resistivity_ohm_m: resistivity, thickness_m: thickness }) => {
-    if (thickness !== null) return `${thickness} m of ${resistivity} Ω·m`;
-    return layers.length === 1 ? `uniform, ${resistivity} Ω·m` : `${resistivity} Ω·m below`;
+/** Layers as given; those of a fit to three digits, more than readings tell. */
+function soil({ soil: { layers }, limits, ground }: Results): string {
+  const told = (value: number, unit: string): string =>
+    ground === null ? `${value} ${unit}` : quantity(value, unit, 3);
+  const parts = layers.map(({ resistivity_ohm_m, thickness_m }) => {
+    const resistivity = told(resistivity_ohm_m, 'Ω·m');
+    if (thickness_m !== null) return `${told(thickness_m, 'm')} of ${resistivity}`;
+    return layers.length === 1 ? `uniform, ${resistivity}` : `${resistivity} below`;
   });
   const { surfacing_resistivity_ohm_m: covering, surfacing_thickness_m: depth } = limits;
   const covered = covering === null || depth === null ? '' : `; covered by ${depth} m of ${covering} Ω·m`;
@@ -100,15 +107,17 @@ function voltages(
     measured(row.worst, row.uncertainty, 'V'),
     place(row.x, row.y),
     quantity(row.limit, 'V'),
-    percent(row.worst / row.limit),
+    percent(row.share),
     FINDING_WORDS[row.finding],
   ]);
-  const [header, ...body] = aligned(COLUMNS, [HEADER, ...cells]).map((line) => `  ${line}`);
+  const [header, ...body] = aligned(COLUMNS, [HEADER, ...cells], WIDTH - INDENT).map(
+    (line) => `${' '.repeat(INDENT)}${line}`,
+  );
   return cases.flatMap((one, at) => [
     ...(at === 0 ? [] : ['']),
     ...wrapped(caseLine(one), WIDTH, 2),
     header,
-    ...body.filter((_, r) => rows[r].at === at).map((line) => line.replace(/EXCEEDS$/, emphasised)),
+    ...body.filter((_, r) => rows[r].caseIndex === at).map((line) => line.replace(/EXCEEDS$/, emphasised)),
   ]);
 }
 

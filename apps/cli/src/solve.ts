@@ -1,6 +1,7 @@
 // `ohmstead solve`: every case of a study, as a table or as JSON, and a review pack where one is asked for.
 import { realpathSync } from 'node:fs';
 import { jsonText, writePack } from '@ohmstead/pack';
+import { verdictRows } from '@ohmstead/sheet';
 import { type Fault, InputFaults } from '@ohmstead/study';
 import type { Arguments, Command } from './command.ts';
 import type { Engine } from './engine.ts';
@@ -10,7 +11,6 @@ import { openStudy } from './open-study.ts';
 import { printable } from './printable.ts';
 import { withProgress } from './progress.ts';
 import { resultTable } from './result-table.ts';
-import { verdictRows } from './verdict.ts';
 import { outputFault, writeWhole } from './write-whole.ts';
 
 export const solve: Command = {
@@ -24,7 +24,10 @@ export const solve: Command = {
       value: 'FILE.zip',
       help: 'write a review pack: the calculation sheet, its figures and tables, the inputs',
     },
-    { name: 'strict', help: 'end with exit status 3 where a limit is exceeded' },
+    {
+      name: 'strict',
+      help: 'end with exit status 3 where a limit is exceeded, in any season or at floating metal',
+    },
   ],
   details: [
     'STUDY is a folder with a study.json in it, a zip of such a folder, the path of the study.json, or a review pack. See: ohmstead help study',

@@ -62,6 +62,31 @@ describe('--strict', () => {
     expect((await solve([folder.at('study'), '--strict'], fenced(-0.2))).status).toBe(0);
   });
 
+  test('another season counts', async () => {
+    const seasonal = (worst_V: number) =>
+      doubleEngine((results) => {
+        const [one] = within(results).cases;
+        const touch = { ...one.touch, worst_V, limit_V: 1000 };
+        const season = { name: 'dry', layers: [], covering_factor: 1, segment_count: 1 };
+        return {
+          ...within(results),
+          seasons: [
+            { ...season, resistance_ohm: 1, resistance_uncertainty_ohm: 0.1, cases: [{ ...one, touch }] },
+          ],
+          envelope: [
+            {
+              name: one.name,
+              gpr: { season: 'dry', gpr_V: 1 },
+              touch: { ...touch, season: 'dry' },
+              step: { ...one.step, season: 'as given' },
+            },
+          ],
+        };
+      });
+    expect((await solve([folder.at('study'), '--strict'], seasonal(1001))).status).toBe(3);
+    expect((await solve([folder.at('study'), '--strict'], seasonal(999))).status).toBe(0);
+  });
+
   test('without it, 0 even where a limit is exceeded', async () => {
     expect((await solve([folder.at('study')])).status).toBe(0);
   });

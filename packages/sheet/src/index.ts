@@ -1,6 +1,10 @@
 // Results → figures (SVG), tables (CSV) and the sheet (HTML); the same code in Node and in the browser.
 export { type FigureFile, figures } from './figure/figures.tsx';
+export { measured, percent, place, quantity } from './format/number.ts';
 export { sheetCss } from './page/css.ts';
 export { sheetHtml } from './page/html.tsx';
 export { Sheet } from './page/sheet.tsx';
 export { type TableFile, tables } from './table/tables.ts';
+export { answerOf, subjectVoltage } from './verdict/answer.ts';
+export type { Finding } from './verdict/finding.ts';
+export { type VerdictRow, verdictRows } from './verdict/rows.ts';
