@@ -28,7 +28,7 @@ export interface ImageList {
   readonly offset: Float64Array;
   /** shape [count] */
   readonly weight: Float64Array;
-  /** largest error of the fitted amplitudes at wavenumbers between the fitted ones, of max(1, |amplitude|) */
+  /** largest error of the fitted amplitudes at wavenumbers between the fitted ones, of the amplitude or of its own largest up to 1 */
   readonly error: number;
 }
 
@@ -41,8 +41,16 @@ export interface SoilImages {
 
 /** Amplitude error asked of a fit when the caller names none; three orders below the mesh's own error. */
 export const IMAGE_TOLERANCE = 2e-8;
-/** Image distances per decade tried in turn until the tolerance is met. */
-const NODES_PER_DECADE = [6, 8, 10, 12] as const;
+/**
+ * Image distances per decade tried in turn until the tolerance is met, and the error that each reaches at best (seen
+ * over random soils); those that cannot meet the tolerance are not tried.
+ */
+const NODES_PER_DECADE: readonly (readonly [perDecade: number, best: number])[] = [
+  [5, 1e-6],
+  [8, 1e-9],
+  [10, 0],
+  [12, 0],
+];
 /** Wavenumber samples per decade: well past two a node. */
 const SAMPLES_PER_DECADE = 30;
 /** Nearest image, in thicknesses of the thinnest layer: the first exact one stands at 2 thicknesses. */
@@ -176,8 +184,9 @@ function fitAmplitudes(
   limit: Float64Array,
   tolerance: number,
 ): AmplitudeFits {
-  let fits = fitWithNodes(soil, k, source, field, limit, NODES_PER_DECADE[0]);
-  for (const perDecade of NODES_PER_DECADE.slice(1)) {
+  const densities = NODES_PER_DECADE.filter(([, best]) => best <= tolerance).map(([perDecade]) => perDecade);
+  let fits = fitWithNodes(soil, k, source, field, limit, densities[0]!);
+  for (const perDecade of densities.slice(1)) {
     if (fits.error <= tolerance) break;
     const finer = fitWithNodes(soil, k, source, field, limit, perDecade);
     if (finer.error < fits.error) fits = finer;
@@ -201,7 +210,8 @@ function fitWithNodes(
     layers: full.layers.map((layer) => ({ ...layer, thickness: layer.thickness / thinnest })),
   };
   const stack = soil.layers.slice(0, -1).reduce((sum, layer) => sum + layer.thickness, 0);
-  const contrast = k.reduce((most, x) => Math.max(most, (1 + Math.abs(x)) / (1 - Math.abs(x))), 1);
+  const resistivities = soil.layers.map((layer) => layer.resistivity);
+  const contrast = Math.max(...resistivities) / Math.min(...resistivities);
   const near = NEAREST;
   const far = stack * Math.max(FARTHEST_LEAST, FARTHEST * contrast);
   const distances = logSpaced(near, far, perDecade, 0);
@@ -215,6 +225,11 @@ function fitWithNodes(
   const weights = [0, 1, 2, 3].map((q): Float64Array | undefined => {
     const values = fitted.values[q]!;
     if (values.every((value) => Math.abs(value - limit[q]!) < FLAT)) return undefined;
+    // a small amplitude counts against its own size: seen the other way round it is multiplied by the resistivities' ratio
+    const own = Math.min(
+      1,
+      values.reduce((most, value) => Math.max(most, Math.abs(value)), 0),
+    );
     const scale = values.map((value) => 1 / Math.max(1, Math.abs(value)));
     const plain = scale.every((s) => s === 1);
     const factor = plain && shared !== undefined ? shared : factorBasis(fitted.wavenumbers, scale, distances);
@@ -229,7 +244,7 @@ function fitWithNodes(
       for (let j = 0; j < distances.length; j++)
         value += solution[j]! * Math.exp(-distances[j]! * wavenumber);
       const exact = between.values[q]![i]!;
-      error = Math.max(error, Math.abs(value - exact) / Math.max(1, Math.abs(exact)));
+      error = Math.max(error, Math.abs(value - exact) / Math.max(own, Math.abs(exact)));
     });
     return solution;
   });

@@ -108,6 +108,16 @@ describe('the graph', () => {
     expect(Math.abs(layered.units[0]!.resistance / uniform.units[0]!.resistance - 1)).toBeLessThan(1e-9);
   });
 
+  it('takes conductors that lie exactly on an interface, between those just above and just below', () => {
+    const flat = gridBars(20, 20, 2, 2, 0.5, 0.005);
+    const [above, on, below] = [0.501, 0.5, 0.499].map(
+      (h) => solveBars(flat, soil([100, h], [300]), 1).unit.resistance,
+    );
+    expect(on!).toBeGreaterThan(Math.min(above!, below!));
+    expect(on!).toBeLessThan(Math.max(above!, below!));
+    expect(Math.abs(above! / below! - 1)).toBeLessThan(1e-2);
+  });
+
   it('gives floating metal no net leakage and a potential between the soil’s and the electrode’s', () => {
     const fence: Bar = { from: [-2, -2, 0.4], to: [32, -2, 0.4], radius: 0.005 };
     const { mesh, graph } = solved([...yard, fence], (m) => [nodeAt(0, 0)(m)], 1e-4);
