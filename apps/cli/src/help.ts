@@ -66,6 +66,14 @@ rod,0,10,0.5,0,10,3.5,16
 
 ${paragraph(`The unit is read from the column's name (x1_ft, diameter_in). Depths are positive downward from the
 soil surface. Metal that touches is joined. Optional columns: material, electrode, insulated, resistance_ohm_per_m.`)}
+
+${paragraph(`Instead of layers the soil may name a table of field readings, to which layers are fitted (its
+columns: ohmstead help soil). Other states of the soil are solved too where the study names them; the worst of all
+governs.`)}
+
+  "soil": { "survey": "survey.csv", "layer_count": "auto" },
+  "seasons": [ { "name": "frozen", "top": { "depth_m": 0.8, "resistivity_ohm_m": 1000 } },
+               { "name": "wet", "below": { "depth_m": 1.5, "resistivity_ohm_m": 40 } } ]
 `;
 }
 

@@ -14,12 +14,17 @@ export function quantity(value: number, unit: string, digits?: number): string {
   return plain(sheet.quantity(value, unit, digits));
 }
 
-/** Digits of a range that readings allow: more than they tell. */
-const RANGE_DIGITS = 3;
+/** Digits of what is fitted to readings: more than they tell. */
+const FITTED_DIGITS = 3;
 
-/** A range of values: 98.8 to 185 Ω·m. */
+/** A number that readings were fitted with, and its unit. */
+export function fitted(value: number, unit: string): string {
+  return quantity(Number(value.toPrecision(FITTED_DIGITS)), unit, FITTED_DIGITS);
+}
+
+/** A range of fitted values: 98.8 to 185 Ω·m. */
 export function range({ low, high }: { readonly low: number; readonly high: number }, unit: string): string {
-  const [from, to] = [low, high].map((value) => quantity(value, unit, RANGE_DIGITS));
+  const [from, to] = [low, high].map((value) => fitted(value, unit));
   const same = from.slice(from.lastIndexOf(' ')) === to.slice(to.lastIndexOf(' '));
   return `${same ? from.slice(0, from.lastIndexOf(' ')) : from} to ${to}`;
 }

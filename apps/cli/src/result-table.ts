@@ -5,8 +5,9 @@ import type { CaseResult, Results } from '@ohmstead/study';
 import { aligned, type Column, wrapped } from './columns.ts';
 import { groundLines, seasonLines } from './ground-lines.ts';
 import { labelled, WIDTH } from './lines.ts';
-import { measured, order, percent, place, quantity } from './number-text.ts';
+import { fitted, measured, order, percent, place, quantity } from './number-text.ts';
 import { printable } from './printable.ts';
+import { toldWarnings } from './told-warnings.ts';
 
 const INDENT = 2;
 
@@ -85,7 +86,7 @@ function about(results: Results): readonly string[] {
 /** Layers as given; those of a fit to three digits, more than readings tell. */
 function soil({ soil: { layers }, limits, ground }: Results): string {
   const told = (value: number, unit: string): string =>
-    ground === null ? `${value} ${unit}` : quantity(value, unit, 3);
+    ground === null ? `${value} ${unit}` : fitted(value, unit);
   const parts = layers.map(({ resistivity_ohm_m, thickness_m }) => {
     const resistivity = told(resistivity_ohm_m, 'Ω·m');
     if (thickness_m !== null) return `${told(thickness_m, 'm')} of ${resistivity}`;
@@ -126,13 +127,9 @@ function caseLine(one: CaseResult): string {
   return `${printable(one.name)}: ${current}; ground potential rise (GPR) ${measured(one.gpr_V, one.gpr_uncertainty_V, 'V')}`;
 }
 
-function closing({
-  checks,
-  warnings,
-  assumptions,
-  snaps,
-  program_version: version,
-}: Results): readonly string[] {
+function closing(results: Results): readonly string[] {
+  const { checks, assumptions, snaps, program_version: version } = results;
+  const warnings = toldWarnings(results);
   const codes = [...new Set(warnings.map(({ code }) => printable(code)))].join(', ');
   const told = warnings.length === 0 ? 'none' : `${warnings.length}, told on standard error: ${codes}`;
   return [

@@ -3,12 +3,10 @@ import type { FittedLayer, GroundReading, SoilFit } from '@ohmstead/study';
 import { aligned, type Column, wrapped } from './columns.ts';
 import { fitEnding } from './fit-ending.ts';
 import { labelled, WIDTH } from './lines.ts';
-import { percent, quantity, range } from './number-text.ts';
+import { fitted, percent, range } from './number-text.ts';
 import { printable } from './printable.ts';
 
 const INDENT = 2;
-/** Digits of what is fitted: more than readings tell. */
-const DIGITS = 3;
 /** Digits of a distance as it was given. */
 const GIVEN_DIGITS = 4;
 
@@ -21,7 +19,7 @@ const LAYER_COLUMNS: readonly Column[] = [
 ];
 const TRIAL_COLUMNS: readonly Column[] = [
   { align: 'right', most: 6 },
-  { align: 'right', most: 10 },
+  { align: 'right', most: 16 },
   { align: 'right', most: 10 },
   { align: 'left', most: 20 },
 ];
@@ -36,12 +34,14 @@ const READING_COLUMNS: readonly Column[] = [
 ];
 
 /** What no reading tells; said with every fit. */
-const FIELD_CAUTIONS: readonly string[] = [
-  'Buried metal beside a traverse (pipes, cables, fences, the electrode itself) carries part of the current and makes the ground look better than it is. Readings taken along it and across it differ.',
-  'The ground near the surface decides touch and step voltages: readings at spacings as short as the electrode is deep are needed, and as long as it is wide.',
-  'The readings hold for the day of the survey. Dry, frozen and wet ground differ by several times in the top metre or two; solve other seasons too.',
-  'A pin in poor contact, or current and potential leads that lie side by side, falsify a reading without a trace in the table. Repeat what stands out.',
-];
+function fieldCautions(shortest: number, longest: number): readonly string[] {
+  return [
+    'Buried metal beside a traverse (pipes, cables, fences, the electrode itself) carries part of the current and makes the ground look better than it is. Readings taken along it and across it differ.',
+    `The ground near the surface decides touch and step voltages: spacings as short as the electrode is deep are needed, and as long as it is wide. Here the shortest is ${distance(shortest)}, the longest ${distance(longest)}.`,
+    'The readings hold for the day of the survey. Dry, frozen and wet ground differ by several times in the top metre or two; solve other seasons too.',
+    'A pin in poor contact, or current and potential leads that lie side by side, falsify a reading without a trace in the table. Repeat what stands out.',
+  ];
+}
 
 /**
  * The table that `soil` prints.
@@ -50,8 +50,10 @@ const FIELD_CAUTIONS: readonly string[] = [
  * @returns lines of at most 100 characters
  */
 export function soilTable(fit: SoilFit, version: string): string {
+  const spacings = fit.readings.map(({ spacing_m }) => spacing_m);
+  const [shortest, longest] = [Math.min(...spacings), Math.max(...spacings)];
   const lines = [
-    ...wrapped(heading(fit), WIDTH),
+    ...wrapped(heading(fit, shortest, longest), WIDTH),
     ...wrapped(sentence(fit), WIDTH),
     '',
     ...layerLines(fit.layers),
@@ -66,7 +68,7 @@ export function soilTable(fit: SoilFit, version: string): string {
     ),
     ...labelled(
       'Depth',
-      `resolved to ${quantity(fit.resolved_depth_m, 'm', DIGITS)}: ${printable(fit.resolved_depth_rule)}`,
+      `resolved to ${fitted(fit.resolved_depth_m, 'm')}: ${printable(fit.resolved_depth_rule)}`,
     ),
     ...labelled(
       'Doubts',
@@ -74,7 +76,7 @@ export function soilTable(fit: SoilFit, version: string): string {
         ? ['none']
         : fit.doubts.map(({ code, message }) => `${printable(message)} (${printable(code)})`)),
     ),
-    ...labelled('Field', ...FIELD_CAUTIONS),
+    ...labelled('Field', ...fieldCautions(shortest, longest)),
     ...labelled(
       'Mind',
       `A soil of flat layers is a model (Ohmstead ${printable(version)}). How many readings a site needs is for local codes and licensed practice to decide.`,
@@ -87,12 +89,14 @@ function counted(count: number, one: string): string {
   return `${count} ${one}${count === 1 ? '' : 's'}`;
 }
 
-function heading({ survey_file, readings }: SoilFit): string {
+function heading({ survey_file, readings }: SoilFit, shortest: number, longest: number): string {
   const traverses = new Set(readings.map(({ traverse }) => traverse)).size;
-  const spacings = readings.map(({ spacing_m }) => spacing_m);
-  const [from, to] = [Math.min(...spacings), Math.max(...spacings)].map(distance);
   const lines = traverses > 1 ? ` on ${counted(traverses, 'traverse')}` : '';
-  return `${printable(survey_file)}: ${counted(readings.length, 'reading')}${lines}, spacings ${from} to ${to}`;
+  const reach =
+    shortest === longest
+      ? `spacing ${distance(shortest)}`
+      : `spacings ${distance(shortest)} to ${distance(longest)}`;
+  return `${printable(survey_file)}: ${counted(readings.length, 'reading')}${lines}, ${reach}`;
 }
 
 function sentence({ layer_count, layer_count_proposed, rms_percent, outcome }: SoilFit): string {
@@ -115,9 +119,9 @@ function misfit(percents: number): string {
 function layerLines(layers: readonly FittedLayer[]): readonly string[] {
   const rows = layers.map(({ resistivity_ohm_m: rho, thickness_m: thick }, i) => [
     `layer ${i + 1}`,
-    quantity(rho.best, 'Ω·m', DIGITS),
+    fitted(rho.best, 'Ω·m'),
     range(rho, 'Ω·m'),
-    thick === null ? '' : quantity(thick.best, 'm', DIGITS),
+    thick === null ? '' : fitted(thick.best, 'm'),
     thick === null ? 'to any depth' : range(thick, 'm'),
   ]);
   return indented(
@@ -148,8 +152,8 @@ function readingLines({ readings }: SoilFit): readonly string[] {
     String(reading.line),
     printable(reading.traverse),
     distance(reading.spacing_m),
-    quantity(reading.apparent_resistivity_ohm_m, 'Ω·m', DIGITS),
-    quantity(reading.model_ohm_m, 'Ω·m', DIGITS),
+    fitted(reading.apparent_resistivity_ohm_m, 'Ω·m'),
+    fitted(reading.model_ohm_m, 'Ω·m'),
     misfit(reading.misfit_percent),
     reading.outlier ? 'OUTLIER' : '',
   ]);

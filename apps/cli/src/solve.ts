@@ -11,6 +11,7 @@ import { openStudy } from './open-study.ts';
 import { printable } from './printable.ts';
 import { withProgress } from './progress.ts';
 import { resultTable } from './result-table.ts';
+import { toldWarnings } from './told-warnings.ts';
 import { outputFault, writeWhole } from './write-whole.ts';
 
 export const solve: Command = {
@@ -51,7 +52,7 @@ async function runSolve(given: Arguments, io: Io, engine: Engine): Promise<ExitS
     return outcome;
   });
   io.out(given.switches.has('json') ? jsonText(results) : resultTable(results, emphasis(io)));
-  for (const { code, message } of results.warnings) io.err(`warning: ${printable(message)} (${code})\n`);
+  for (const { code, message } of toldWarnings(results)) io.err(`warning: ${printable(message)} (${code})\n`);
   if (pack !== undefined) io.err(`review pack written: ${printable(pack)}\n`);
   return given.switches.has('strict') && verdictRows(results).some(({ worst, limit }) => worst > limit)
     ? FINDING

@@ -70,6 +70,12 @@ describe('help', () => {
     ]);
     const bytes = new Map([...files].map(([path, text]) => [path, new TextEncoder().encode(text)]));
     expect(loadStudy(sourceFromMap(bytes)).conductors.count).toBe(3);
+    const lists = /"soil": (\{ "survey"[^}]*\}).*"seasons": (\[.*\])\n$/s.exec(out);
+    const [, soil, seasons] = lists ?? [];
+    const more = { ...JSON.parse(json), soil: JSON.parse(soil), seasons: JSON.parse(seasons) };
+    const survey = new TextEncoder().encode('spacing_m,resistance_ohm\n1,20\n');
+    const seasonal = new Map([...bytes, ['study.json', new TextEncoder().encode(JSON.stringify(more))]]);
+    expect(loadStudy(sourceFromMap(seasonal.set('survey.csv', survey))).study.seasons).toHaveLength(2);
     const table = out.slice(out.indexOf('id,x1_m'), out.indexOf('\n\n', out.indexOf('id,x1_m')) + 1);
     bytes.set('conductors.csv', new TextEncoder().encode(table));
     expect(loadStudy(sourceFromMap(bytes)).conductors.count).toBe(2);

@@ -31,5 +31,6 @@ test('orders of size', () => {
 
 test('ranges name their unit once where both ends have the same', () => {
   expect(range({ low: 98.76, high: 185.4 }, 'Ω·m')).toBe('98.8 to 185 Ω·m');
-  expect(range({ low: 9876, high: 12345 }, 'V')).toBe('9876 V to 12.3 kV');
+  expect(range({ low: 9876, high: 12345 }, 'V')).toBe('9880 V to 12.3 kV');
+  expect(range({ low: 1234.5, high: 18593 }, 'Ω·m')).toBe('1230 to 18600 Ω·m');
 });

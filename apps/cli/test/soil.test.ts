@@ -113,8 +113,9 @@ Doubts      survey.csv:2: pins are deep<U+0007> (deep-pins)
 Field       Buried metal beside a traverse (pipes, cables, fences, the electrode itself) carries
             part of the current and makes the ground look better than it is. Readings taken along it
             and across it differ.
-            The ground near the surface decides touch and step voltages: readings at spacings as
-            short as the electrode is deep are needed, and as long as it is wide.
+            The ground near the surface decides touch and step voltages: spacings as short as the
+            electrode is deep are needed, and as long as it is wide. Here the shortest is 0.5 m, the
+            longest 12 m.
             The readings hold for the day of the survey. Dry, frozen and wet ground differ by
             several times in the top metre or two; solve other seasons too.
             A pin in poor contact, or current and potential leads that lie side by side, falsify a
@@ -122,6 +123,17 @@ Field       Buried metal beside a traverse (pipes, cables, fences, the electrode
 Mind        A soil of flat layers is a model (Ohmstead 1.2.3). How many readings a site needs is for
             local codes and licensed practice to decide.
 `);
+});
+
+test('one reading, met exactly', () => {
+  const [reading] = exampleFit.readings;
+  const exact = { ...reading, traverse: '', spacing_m: 3.04800001, misfit_percent: -0.004 };
+  const trials = [{ layer_count: 1, rms_percent: 1e-9, criterion: -15.9 }];
+  const table = soilTable({ ...exampleFit, readings: [exact], trials, doubts: [] }, '1');
+  expect(table).toMatch(/^survey\.csv: 1 reading, spacing 3\.048 m\n/);
+  expect(table).toMatch(/^ +1 {2}less than 0\.1 % +-15\.9$/m);
+  expect(table).toMatch(/ 0\.0 %$/m);
+  expect(table).toMatch(/^Doubts +none$/m);
 });
 
 test('a fit that did not end well says so, and no line is wider than 100', () => {

@@ -3,7 +3,7 @@ import { readFileSync, symlinkSync } from 'node:fs';
 import { describe, expect, test } from 'vitest';
 import { rawZip } from '../../../packages/pack/test/raw-zip.ts';
 import { main } from '../src/main.ts';
-import { doubleEngine, fence, within } from './double.ts';
+import { doubleEngine, exampleFit, fence, within } from './double.ts';
 import { RODS_CSV, STUDY_JSON, studyFolder } from './study-folder.ts';
 import { testIo } from './test-io.ts';
 
@@ -38,6 +38,20 @@ describe('output', () => {
     expect(out).toContain('near-miss');
     expect(err).toContain('warning: bar ends 3 mm short of left');
   });
+});
+
+test('doubts about a soil fitted to readings are told too, each once', async () => {
+  const engine = doubleEngine((results) => ({
+    ...results,
+    warnings: exampleFit.doubts,
+    ground: {
+      fit: { ...exampleFit, doubts: [...exampleFit.doubts, { code: 'outliers', message: 'row 3' }] },
+      consequence: { resistance_ohm: { best: 1, low: 1, median: 1, high: 1 }, cases: [] },
+    },
+  }));
+  const { out, err } = await solve([folder.at('study')], engine);
+  expect(err).toBe('warning: survey.csv:2: pins are deep<U+0007> (deep-pins)\nwarning: row 3 (outliers)\n');
+  expect(out).toContain('2, told on standard error: deep-pins, outliers');
 });
 
 describe('--strict', () => {

@@ -58,6 +58,36 @@ describe('Aldermoor', () => {
   });
 });
 
+describe('Brackwater', () => {
+  const loaded = loadStudy(folderSource('brackwater'));
+  const { conductors, study, survey } = loaded;
+
+  test('is a ring of 25 by 15 m with six rods of 4 m', () => {
+    expect([Math.max(...conductors.x1, ...conductors.x2), Math.min(...conductors.x1)]).toEqual([25, 0]);
+    expect([Math.max(...conductors.y1, ...conductors.y2), Math.min(...conductors.y1)]).toEqual([15, 0]);
+    const rods = rows(loaded, (i) => conductors.depth2[i] > conductors.depth1[i]);
+    expect(rods).toHaveLength(6);
+    for (const i of rods) expect(conductors.depth2[i] - conductors.depth1[i]).toBeCloseTo(4, 12);
+  });
+
+  test('has its soil from a survey of two traverses, and two seasons', () => {
+    expect(study.soil).toEqual({ survey: 'survey.csv', layer_count: 'auto' });
+    const traverses = new Set(survey?.readings.map(({ traverse }) => traverse));
+    expect([...traverses]).toEqual(['north fence', 'field']);
+    expect(survey?.readings).toHaveLength(14);
+    expect(survey?.readings.every(({ array }) => array.kind === 'wenner' && array.pinDepth > 0)).toBe(true);
+    expect(study.seasons?.map(({ name }) => name)).toEqual(['frozen to 0.5 m', 'dry to 1 m']);
+  });
+
+  test('leaves nothing to assume, and two readings to doubt', () => {
+    expect(loaded.notes).toEqual([]);
+    expect(survey?.cautions.map(({ row, code }) => [row, code])).toEqual([
+      [2, 'deep-pins'],
+      [9, 'deep-pins'],
+    ]);
+  });
+});
+
 describe('square of 70 m', () => {
   const { conductors, study } = loadStudy(folderSource('square-70m'));
 
