@@ -3,7 +3,7 @@
 export interface Fault {
   /** file as the study names it */
   readonly file: string;
-  /** line of the file, the first being 1, for tables */
+  /** line of the file, the first being 1 */
   readonly line?: number;
   /** column of a table, or path into a JSON file such as `cases[0].duration_s` */
   readonly place?: string;
