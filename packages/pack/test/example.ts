@@ -128,6 +128,10 @@ export function exampleSolve({ study }: LoadedStudy): Outcome {
     ],
     snaps: [],
     assumptions: [],
+    ground: null,
+    equivalent_uniform: [],
+    seasons: [],
+    envelope: [],
     warnings: [],
   };
   const plan = {

@@ -1,5 +1,5 @@
 // What field readings make of the ground: the fit, the family of models they allow, and what that does to the answer.
-import type { ResultsWarning } from './results.ts';
+import type { ResultsWarning } from './results-warning.ts';
 
 /** 5 %, 50 % and 95 % of a family of models beside the best fit. */
 export interface Spread {

@@ -1,11 +1,9 @@
 // The results file: headline numbers of a study with units in every key. Names are fixed by contract; adding is free.
 
 import type { EquivalentUniform, GroundResult } from './ground.ts';
+import type { ResultsWarning } from './results-warning.ts';
 
-export interface ResultsWarning {
-  readonly code: string;
-  readonly message: string;
-}
+export type { ResultsWarning };
 
 export interface WorstTouch {
   readonly worst_V: number;
