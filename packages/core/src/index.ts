@@ -62,15 +62,43 @@ export { type SeasonalChange, seasonalSoil } from './soil/season.ts';
 export type * from './soil/soil-model.ts';
 export { type GraphSolution, type MetalModel, solveGraph, type UnitSolution } from './solve/solution.ts';
 export { MODEL_FLOOR, refinementUncertainty } from './solve/uncertainty.ts';
-export { bandOf, type FamilyMember, type SoilFamily, soilFamily, soundingBand } from './survey/ambiguity.ts';
-export type { FourPinArray } from './survey/arrays.ts';
-export { spacingOf } from './survey/arrays.ts';
-export { type SurveyDoubt, spacingDoubts, surveyDoubts } from './survey/doubts.ts';
+export {
+  bandOf,
+  FAMILY_METHOD,
+  type FamilyBand,
+  type FamilyMember,
+  type ParameterBand,
+  RESOLVED_RATIO,
+  type SoilFamily,
+  type SoundingBand,
+  soilFamily,
+  soundingBand,
+} from './survey/ambiguity.ts';
+export {
+  apparentFromResistance,
+  type CollinearArray,
+  type FourPinArray,
+  geometricFactor,
+  resistanceFromApparent,
+  type SchlumbergerArray,
+  spacingOf,
+  type WennerArray,
+} from './survey/arrays.ts';
+export { type DegenerateLayer, degenerateLayers } from './survey/degeneracy.ts';
+export { investigationRange, type SurveyDoubt, spacingDoubts, surveyDoubts } from './survey/doubts.ts';
 export { type EquivalentResistivity, equivalentUniformResistivities } from './survey/equivalent-uniform.ts';
 export { apparentResistivity } from './survey/forward.ts';
-export { type FittedSurvey, invertSurvey, type RefusedSurvey } from './survey/inversion.ts';
-export { medianDepth } from './survey/investigation-depth.ts';
-export { type LayerProposal, proposeLayerCount } from './survey/layer-count.ts';
+export {
+  type FittedParameter,
+  type FittedSurvey,
+  type InversionOptions,
+  invertSurvey,
+  type ReadingFit,
+  type RefusedSurvey,
+} from './survey/inversion.ts';
+export { medianDepth, wennerEquivalent } from './survey/investigation-depth.ts';
+export { type LayerCandidate, type LayerProposal, proposeLayerCount } from './survey/layer-count.ts';
+export { MOST_LAYERS } from './survey/model-parameters.ts';
 export {
   type CheckedRows,
   checkRows,
@@ -78,3 +106,11 @@ export {
   type RowFinding,
   type SurveyRow,
 } from './survey/readings.ts';
+export {
+  type Sounding,
+  type SoundingPoint,
+  soundingOf,
+  type Traverse,
+  traversesOf,
+} from './survey/sounding.ts';
+export { type SurveyFilter, surveyFilter } from './survey/survey-filter.ts';

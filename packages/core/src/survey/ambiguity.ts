@@ -1,19 +1,14 @@
 // The family of soils that the readings allow within their scatter, drawn by chance in proportion to their likelihood.
-import { type EnsembleDraws, sampleEnsemble } from '../numerics/ensemble-sampler.ts';
 import { quantileOfSorted } from '../numerics/quantile.ts';
-import { type RandomNumbers, randomNumbers } from '../numerics/random.ts';
+import { randomNumbers } from '../numerics/random.ts';
+import { sampleTempered } from '../numerics/tempered-sampler.ts';
 import type { SoilModel } from '../soil/soil-model.ts';
 import type { FourPinArray } from './arrays.ts';
-import type { FittedSurvey } from './inversion.ts';
-import {
-  type ModelParameter,
-  modelParameters,
-  parameterBounds,
-  parametersOf,
-  soilOf,
-} from './model-parameters.ts';
+import { evidenceWeights, type FittedSurvey } from './inversion.ts';
+import { type ModelParameter, modelParameters, parameterBounds, soilOf } from './model-parameters.ts';
 import type { Reading } from './readings.ts';
-import { logLikelihood } from './scatter.ts';
+import { scatterFreedom, studentWidening } from './scatter.ts';
+import { shapesOfSoil } from './soil-shapes.ts';
 import { surveyFilter } from './survey-filter.ts';
 import { surveyMisfit } from './survey-misfit.ts';
 
@@ -22,11 +17,18 @@ export interface FamilyOptions {
   readonly seed: number;
   /** soils in the family */
   readonly members: number;
-  /** scatter of a reading, as standard deviation of ln ρ; unknown where undefined */
+  /** soils drawn for each parameter of the model; 160 repeat the bands of a degenerate soil within a tenth from seed to seed */
+  readonly drawsPerParameter: number;
+  /** scatter of a reading, as standard deviation of ln ρ; that of the fit, widened for few readings, where undefined */
   readonly scatter: number | undefined;
 }
 
-export const FAMILY_DEFAULTS: FamilyOptions = { seed: 1, members: 160, scatter: undefined };
+export const FAMILY_DEFAULTS: FamilyOptions = {
+  seed: 1,
+  members: 120,
+  drawsPerParameter: 160,
+  scatter: undefined,
+};
 
 export interface FamilyMember {
   readonly soil: SoilModel;
@@ -58,27 +60,27 @@ export interface SoilFamily {
   readonly parameters: readonly ParameterBand[];
   /** over the survey's different arrays */
   readonly band: readonly SoundingBand[];
-  /** `limit`: the draws still drifted when their number ran out, and the bands are too narrow rather than too wide */
+  /** every draw, ln of resistivities, then of thicknesses, shape [draws][2N − 1]; members are an even selection of them */
+  readonly draws: readonly Float64Array[];
+  /** `limit`: the draws hardly moved at some stage and may miss part of what the readings allow */
   readonly outcome: 'mixed' | 'limit';
+  /** least share of chance moves taken at any stage */
   readonly acceptance: number;
-  readonly scaleReduction: number;
-  readonly draws: number;
+  readonly stages: number;
   readonly seed: number;
+  /** standard deviation of ln ρ of one reading that the family allows */
+  readonly scatter: number;
   /** Σ weight·ln²(modelled/read) that 95 % of the draws stay below: the edge of the joint 95 % region of soils */
   readonly squaresLimit: number;
 }
 
-/** Walkers per parameter; Goodman and Weare ask for more than two. */
-const WALKERS_PER_PARAMETER = 6;
-const LEAST_WALKERS = 12;
-/** Sweeps before drift is looked at, a third of them thrown away; doubled until mixed, so often. */
-const SWEEPS = 3000;
-const DOUBLINGS = 3;
-/** Scale reduction that counts as mixed: drift adds less than a tenth to the spread (Gelman and Rubin 1992 take 1.2). */
-const MIXED = 1.1;
-/** First spread of the walkers, in ln: where the linear model knows none, and at most. */
-const FIRST_SPREAD = 0.5;
-/** Edges of the band. */
+/** How the family is drawn, in words for the reader. */
+export const FAMILY_METHOD =
+  'posterior density of log-parameters within bounds (Malinverno 2002), drawn by tempered particles (Del Moral, Doucet and Jasra 2006)';
+/** Moves that each draw takes on average at every stage, and at the last. */
+const TAKEN = 1;
+const LAST_TAKEN = 3;
+/** Edges of the bands. */
 const LOW = 0.05;
 const HIGH = 0.95;
 /** Edge of the joint region. */
@@ -87,10 +89,11 @@ const REGION = 0.95;
 export const RESOLVED_RATIO = 3;
 
 /**
- * Family of soils of the fit's layer count: draws from the posterior density of ln ρ and ln t, even within the bounds, with
- * Gaussian residuals ln(modelled/read) of unknown common scatter (see `logLikelihood`), repeated readings and traverses
- * each counting; weights of readings as the robust fit left them. Drawn by the ensemble sampler of Goodman and Weare (2010).
- * Bayesian sounding inversion in this form: Sambridge and Mosegaard, Rev. Geophys. 40 (2002) (from memory).
+ * Family of soils of the fit's layer count: draws from the posterior density of ln ρ and ln t, even within their bounds,
+ * with normal residuals ln(modelled/read). Their scatter is that of the fit, widened as Student's band is over the normal
+ * one, so that few readings allow more. Repeated readings and traverses each count; flagged readings count as far as the
+ * robust fit left them. Bayesian inversion of resistivity soundings in this form: Malinverno, Geophys. J. Int. 151 (2002)
+ * (from memory); drawn by tempered particles, see `sampleTempered`.
  * @param fit of these readings
  */
 export function soilFamily(
@@ -98,64 +101,50 @@ export function soilFamily(
   fit: FittedSurvey,
   options: Partial<FamilyOptions> = {},
 ): SoilFamily {
-  const { seed, members: size, scatter } = { ...FAMILY_DEFAULTS, ...options };
+  const { seed, members: size, drawsPerParameter, scatter: given } = { ...FAMILY_DEFAULTS, ...options };
   const misfit = surveyMisfit(readings);
-  const layers = fit.soil.layers.length;
-  const bounds = parameterBounds(readings, layers);
-  const weights = Float64Array.from(fit.fits, (reading) => reading.weight);
-  const count = weights.reduce((sum, w) => sum + w, 0);
-  const logDensity = (x: Float64Array): number => {
-    for (let j = 0; j < x.length; j++)
-      if (!(x[j]! >= bounds.lower[j]! && x[j]! <= bounds.upper[j]!)) return Number.NEGATIVE_INFINITY;
-    return logLikelihood(misfit.squares(x, weights), count, scatter);
-  };
-  const random = randomNumbers(seed);
-  let walkers = firstWalkers(fit, bounds.lower, bounds.upper, random);
-  let draws: EnsembleDraws | undefined;
-  for (let sweeps = SWEEPS, round = 0; round <= DOUBLINGS; sweeps *= 2, round++) {
-    draws = sampleEnsemble(logDensity, walkers, random, { sweeps, burnIn: Math.floor(sweeps / 3) });
-    if (draws.scaleReduction <= MIXED) break;
-    walkers = lastWalkers(draws, walkers.length, fit.x.length);
-  }
-  const last = draws!;
   const n = fit.x.length;
-  const drawn = Array.from({ length: size }, (_, i) => {
-    const draw = Math.floor(((i + 0.5) * last.count) / size);
-    return last.x.slice(draw * n, (draw + 1) * n);
-  });
-  const members = drawn
-    .map(
-      (x): FamilyMember => ({
-        soil: soilOf(x),
-        weight: 1 / size,
-        logRms: Math.sqrt(misfit.squares(x, weights) / count),
-      }),
-    )
-    .sort((p, q) => p.logRms - q.logRms);
-  const byDensity = Array.from(last.logDensity.keys()).sort(
-    (p, q) => last.logDensity[q]! - last.logDensity[p]!,
+  const bounds = parameterBounds(readings, fit.soil.layers.length);
+  const weights = evidenceWeights(fit.fits);
+  const count = weights.reduce((sum, w) => sum + w, 0);
+  const scatter = given ?? fit.scatter * studentWidening(scatterFreedom(count, n));
+  const random = randomNumbers(seed);
+  const shapes = shapesOfSoil(misfit, bounds, weights, scatter);
+  const sampled = sampleTempered(
+    {
+      draw: () => shapes.draw(random),
+      logLikelihood: (shape) => -shapes.squares(shape) / (2 * scatter * scatter),
+    },
+    random,
+    { particles: 2 * Math.ceil((drawsPerParameter * n) / 2), taken: TAKEN, lastTaken: LAST_TAKEN },
   );
-  const edge = byDensity[Math.floor(REGION * (last.count - 1))]!;
+  const draws = sampled.particles.map((shape) => shapes.scaled(shape, random));
+  const squares = draws.map((x) => misfit.squares(x, weights));
+  const members = Array.from({ length: size }, (_, i): FamilyMember => {
+    const draw = Math.floor(((i + 0.5) * draws.length) / size);
+    return { soil: soilOf(draws[draw]!), weight: 1 / size, logRms: Math.sqrt(squares[draw]! / count) };
+  }).sort((p, q) => p.logRms - q.logRms);
   return {
     members,
-    parameters: parameterBands(members, layers),
-    band: soundingBand(members, misfit.arrays),
-    outcome: last.scaleReduction <= MIXED ? 'mixed' : 'limit',
-    acceptance: last.acceptance,
-    scaleReduction: last.scaleReduction,
-    draws: last.count,
+    parameters: parameterBands(draws, fit.soil.layers.length),
+    band: soundingBand(draws.map(soilOf), misfit.arrays),
+    draws,
+    outcome: sampled.outcome,
+    acceptance: sampled.acceptance,
+    stages: sampled.stages,
     seed,
-    squaresLimit: misfit.squares(last.x.slice(edge * n, (edge + 1) * n), weights),
+    scatter,
+    squaresLimit: quantileOfSorted(Float64Array.from(squares).sort(), REGION),
   };
 }
 
-/** Sounding curves of the members as a band, over any arrays; shape [arrays]. */
+/** Sounding curves of soils as a band, over any arrays; shape [arrays]. */
 export function soundingBand(
-  members: readonly FamilyMember[],
+  soils: readonly SoilModel[],
   arrays: readonly FourPinArray[],
 ): readonly SoundingBand[] {
   const filter = surveyFilter(arrays);
-  const curves = members.map(({ soil }) => {
+  const curves = soils.map((soil) => {
     const curve = new Float64Array(arrays.length);
     filter.evaluate(soil, curve);
     return curve;
@@ -163,10 +152,9 @@ export function soundingBand(
   return arrays.map((array, i) => ({ array, ...bandOf(curves.map((curve) => curve[i]!)) }));
 }
 
-function parameterBands(members: readonly FamilyMember[], layers: number): readonly ParameterBand[] {
-  const values = members.map(({ soil }) => parametersOf(soil));
+function parameterBands(draws: readonly Float64Array[], layers: number): readonly ParameterBand[] {
   return modelParameters(layers).map((parameter, j): ParameterBand => {
-    const band = bandOf(values.map((x) => Math.exp(x[j]!)));
+    const band = bandOf(draws.map((x) => Math.exp(x[j]!)));
     return { ...parameter, ...band, resolved: band.high <= RESOLVED_RATIO * band.low };
   });
 }
@@ -179,33 +167,4 @@ export function bandOf(values: readonly number[]): FamilyBand {
     median: quantileOfSorted(sorted, 0.5),
     high: quantileOfSorted(sorted, HIGH),
   };
-}
-
-/** About the fit, as wide as the linear model says, inside the bounds. */
-function firstWalkers(
-  fit: FittedSurvey,
-  lower: Float64Array,
-  upper: Float64Array,
-  random: RandomNumbers,
-): Float64Array[] {
-  const n = fit.x.length;
-  const count = Math.max(LEAST_WALKERS, WALKERS_PER_PARAMETER * n);
-  return Array.from({ length: count }, () =>
-    fit.x.map((value, j) => {
-      const known = fit.parameters[j]!.standardDeviation;
-      const spread = known > 0 ? Math.min(FIRST_SPREAD, known) : FIRST_SPREAD;
-      // folded back at a bound, so that a parameter that stands there spreads inward
-      const moved = value + spread * random.normal();
-      const folded =
-        moved < lower[j]! ? 2 * lower[j]! - moved : moved > upper[j]! ? 2 * upper[j]! - moved : moved;
-      return Math.min(upper[j]!, Math.max(lower[j]!, folded));
-    }),
-  );
-}
-
-function lastWalkers(draws: EnsembleDraws, count: number, n: number): Float64Array[] {
-  return Array.from({ length: count }, (_, w) => {
-    const draw = draws.count - count + w;
-    return draws.x.slice(draw * n, (draw + 1) * n);
-  });
 }

@@ -242,12 +242,14 @@ function report(
       outlier: Math.abs(Math.log(modelled / read)) > OUTLIER_RATIO * best.scale,
     };
   });
-  const count = best.weights.reduce((sum, w) => sum + w, 0);
-  const scatter = how.scatter ?? scatterOf(best.fit.sum, count, x.length);
+  const evidence = evidenceWeights(fits);
+  const squares = best.residuals.reduce((sum, r, i) => sum + evidence[i]! * r * r, 0);
+  const count = evidence.reduce((sum, w) => sum + w, 0);
+  const scatter = how.scatter ?? scatterOf(squares, count, x.length);
   const side = (j: number): 'lower' | 'upper' | undefined =>
     x[j] === bounds.lower[j] ? 'lower' : x[j] === bounds.upper[j] ? 'upper' : undefined;
   const held = Array.from(x, (_, j) => side(j) !== undefined);
-  const spread = parameterSpread(misfit.residuals, x, best.weights, scatter, held);
+  const spread = parameterSpread(misfit.residuals, x, evidence, scatter, held);
   const parameters = modelParameters(soil.layers.length).map((parameter, j): FittedParameter => {
     const at = side(j);
     return {
@@ -272,6 +274,11 @@ function report(
     loss: how.loss,
     forwardError: exact.reduce((most, value, i) => Math.max(most, Math.abs(fast[i]! / value - 1)), 0),
   };
+}
+
+/** What each reading counts as evidence of the scatter: in full, save flagged ones, which count as the robust loss left them. */
+export function evidenceWeights(fits: readonly ReadingFit[]): Float64Array {
+  return Float64Array.from(fits, (fit) => (fit.outlier ? fit.weight : 1));
 }
 
 function rootMeanSquare(values: readonly number[]): number {

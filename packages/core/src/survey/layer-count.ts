@@ -25,7 +25,7 @@ export const BARE_MENTION = 2;
 
 /**
  * Proposes the number of layers by the Bayesian information criterion, −2 ln L + p ln n with p = 2N − 1 (Schwarz 1978); L
- * with the scatter integrated out over a prior of 3 %, so that fits closer than readings can be win nothing. Squares are
+ * with the scatter integrated out over a prior of 5 %, so that fits closer than readings can be win nothing. Squares are
  * Huber's losses at one scale, that of the most layers, so that outliers call for no layer. A candidate has fewer
  * parameters than there are different spacings.
  */

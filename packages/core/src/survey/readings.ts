@@ -48,7 +48,7 @@ export interface CheckedRows {
 }
 
 /** Pin depth over spacing up to which the short formula 2πaR holds within 0.5 % (IEEE Std 81: b ≤ a/20, from memory). */
-export const DEEP_PINS = 1 / 20;
+export const DEEP_PINS: number = 1 / 20;
 /** Σ±1/r over the largest 1/r, below which M and N see one potential and the reading tells nothing. */
 const NULL_ARRAY = 1e-6;
 

@@ -23,9 +23,9 @@ const NEAREST_IMAGE = 0.05;
 const FARTHEST_IMAGE = 100;
 const IMAGES_PER_DECADE = 9;
 /** Wavenumbers, over the longest and the shortest distance; ranges and densities that err by 2e-6 on soils of contrast 10³. */
-const LOWEST_WAVENUMBER = 0.03;
+const LOWEST_WAVENUMBER = 0.06;
 const HIGHEST_WAVENUMBER = 30;
-const WAVENUMBERS_PER_DECADE = 10;
+const WAVENUMBERS_PER_DECADE = 9;
 /** Keeps weights small, of the largest singular value; the error it adds is of the same size. */
 const TIKHONOV = 1e-9;
 
@@ -54,7 +54,8 @@ export function surveyFilter(arrays: readonly FourPinArray[]): SurveyFilter {
   const kernel = new Float64Array(wavenumbers.length);
   const evaluate = (soil: SoilModel, into: Float64Array): void => {
     depths.forEach((depth, d) => {
-      const layer = pinKernel(soil, depth, wavenumbers, kernel);
+      const layer =
+        depth === 0 ? surfaceKernel(soil, wavenumbers, kernel) : pinKernel(soil, depth, wavenumbers, kernel);
       for (const i of atDepth[d]!) {
         const row = weights[i]!;
         // with the pins in the top layer the pin and its image in the air together give exactly 1
@@ -65,6 +66,19 @@ export function surveyFilter(arrays: readonly FourPinArray[]): SurveyFilter {
     });
   };
   return { arrays, evaluate };
+}
+
+/** The kernel below for pins on the surface, where it is 4DE/(1 − DE) and needs the reflections from below alone. */
+function surfaceKernel(soil: SoilModel, wavenumbers: Float64Array, into: Float64Array): number {
+  const k = interfaceReflections(soil);
+  const thickness = soil.layers.map((layer) => -2 * layer.thickness);
+  for (let i = 0; i < wavenumbers.length; i++) {
+    let beyond = 0;
+    for (let q = k.length - 1; q >= 0; q--)
+      beyond = ((k[q]! + beyond) / (1 + k[q]! * beyond)) * Math.exp(wavenumbers[i]! * thickness[q]!);
+    into[i] = (4 * beyond) / (1 - beyond);
+  }
+  return 0;
 }
 
 /**
