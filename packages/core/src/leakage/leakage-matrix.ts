@@ -1,18 +1,29 @@
 // The leakage matrix: mutual resistance between every two leaking segments, Galerkin, symmetric positive definite.
 import type { SegmentMesh } from '../geometry/segments.ts';
 import { gaussLegendre } from '../numerics/gauss-legendre.ts';
-import type { PackedLower } from '../numerics/packed-cholesky.ts';
+import { multiplyPacked, type PackedLower } from '../numerics/packed-cholesky.ts';
 import type { ImageList, SoilImages } from '../soil/image-list.ts';
 import { type DepthClasses, depthClasses } from './depth-classes.ts';
 import { CLOSED_FORM_RATIO, gaussOrder, imagePairSum } from './pair-potential.ts';
 import { type RadialTable, radialValue, scaledTable } from './radial-table.ts';
 import { smoothImages, smoothKernel } from './smooth-kernel.ts';
 
+/** The leakage matrix behind one interface, however it is stored. */
 export interface LeakageMatrix {
   /** leaking segments, as indices into the mesh; shape [size] */
   readonly segments: Int32Array;
   readonly size: number;
-  /** R_ij, Ω: mean potential of segment i per ampere leaked evenly by segment j; packed lower triangle */
+  /** R_ii, Ω; shape [size] */
+  readonly diagonal: Float64Array;
+  /** writes R x, V */
+  multiply(x: Float64Array, into: Float64Array): void;
+  /** writes an approximate R⁻¹ r that keeps iterations few; symmetric positive definite */
+  precondition(r: Float64Array, into: Float64Array): void;
+  /** R_ij, Ω: mean potential of segment i per ampere leaked evenly by segment j; packed lower triangle, where it is stored whole */
+  readonly entries?: PackedLower;
+}
+
+export interface DenseLeakageMatrix extends LeakageMatrix {
   readonly entries: PackedLower;
 }
 
@@ -26,19 +37,37 @@ const NEAR_ORDERS: readonly (readonly [ratio: number, order: number])[] = [[1.98
  * Primary images: closed double integral when near, Gauss points chosen by distance over length when far. The smooth
  * rest: one table in horizontal distance for each pair of depths, so that the number of images costs nothing.
  */
-export function leakageMatrix(mesh: SegmentMesh, images: SoilImages): LeakageMatrix {
+export function leakageMatrix(mesh: SegmentMesh, images: SoilImages): DenseLeakageMatrix {
   const segments = leakingSegments(mesh);
   const size = segments.length;
   const entries = new Float64Array((size * (size + 1)) / 2);
+  const entryOf = leakageEntries(mesh, images);
+  for (let i = 0; i < size; i++) {
+    const row = (i * (i + 1)) / 2;
+    for (let j = 0; j <= i; j++) entries[row + j] = entryOf(segments[i]!, segments[j]!);
+  }
+  const diagonal = Float64Array.from({ length: size }, (_, i) => entries[(i * (i + 3)) / 2]!);
+  return {
+    segments,
+    size,
+    entries,
+    diagonal,
+    multiply: (x, into) => multiplyPacked(entries, size, x, into),
+    precondition: (r, into) => {
+      for (let i = 0; i < size; i++) into[i] = r[i]! / diagonal[i]!;
+    },
+  };
+}
+
+/** R_ij of two segments of the mesh, Ω. */
+export type LeakageEntry = (i: number, j: number) => number;
+
+/** Prepares the tables and points from which single entries of the leakage matrix are made. */
+export function leakageEntries(mesh: SegmentMesh, images: SoilImages): LeakageEntry {
   const classes = depthClasses(mesh);
   const tables = tableCache(mesh, images, classes);
   const points = gaussPoints(mesh);
-  for (let i = 0; i < size; i++) {
-    const row = (i * (i + 1)) / 2;
-    for (let j = 0; j <= i; j++)
-      entries[row + j] = entry(mesh, images, classes, tables, points, segments[i]!, segments[j]!);
-  }
-  return { segments, size, entries };
+  return (i, j) => entry(mesh, images, classes, tables, points, i, j);
 }
 
 export function leakingSegments(mesh: SegmentMesh): Int32Array {

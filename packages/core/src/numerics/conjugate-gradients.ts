@@ -20,13 +20,13 @@ export const CONJUGATE_GRADIENT_DEFAULTS: ConjugateGradientOptions = { tolerance
 const PATIENCE = 25;
 
 /**
- * Solves A x = b (Hestenes and Stiefel 1952), preconditioned by a diagonal.
+ * Solves A x = b (Hestenes and Stiefel 1952), preconditioned.
  * @param multiply writes A x into its second argument
- * @param diagonal of A, positive, shape [n]
+ * @param precondition writes an approximate A⁻¹ r into its second argument; symmetric positive definite
  */
 export function conjugateGradients(
   multiply: (x: Float64Array, into: Float64Array) => void,
-  diagonal: Float64Array,
+  precondition: (r: Float64Array, into: Float64Array) => void,
   b: Float64Array,
   options: ConjugateGradientOptions = CONJUGATE_GRADIENT_DEFAULTS,
 ): ConjugateGradientResult {
@@ -35,6 +35,7 @@ export function conjugateGradients(
   const r = Float64Array.from(b);
   const p = new Float64Array(n);
   const q = new Float64Array(n);
+  const z = new Float64Array(n);
   const target = options.tolerance * Math.sqrt(dot(b, b));
   let previous = 0;
   let iterations = 0;
@@ -54,10 +55,10 @@ export function conjugateGradients(
       outcome = 'stalled';
       break;
     }
-    let rho = 0;
-    for (let i = 0; i < n; i++) rho += (r[i]! * r[i]!) / diagonal[i]!;
+    precondition(r, z);
+    const rho = dot(r, z);
     const beta = iterations === 0 ? 0 : rho / previous;
-    for (let i = 0; i < n; i++) p[i] = r[i]! / diagonal[i]! + beta * p[i]!;
+    for (let i = 0; i < n; i++) p[i] = z[i]! + beta * p[i]!;
     multiply(p, q);
     const alpha = rho / dot(p, q);
     for (let i = 0; i < n; i++) {

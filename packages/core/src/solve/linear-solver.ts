@@ -1,11 +1,11 @@
 // Solves the coupled leakage equations (R + B Z Bᵀ) x = b by the method that suits their size.
+import type { LeakageMatrix } from '../leakage/leakage-matrix.ts';
 import { conjugateGradients } from '../numerics/conjugate-gradients.ts';
-import { factorPacked, multiplyPacked, type PackedLower, solvePacked } from '../numerics/packed-cholesky.ts';
+import { factorPacked, type PackedLower, solvePacked } from '../numerics/packed-cholesky.ts';
 
-/** A symmetric positive-definite operator: a packed matrix and, where the metal has resistance, a sparse addition. */
+/** The leakage matrix and, where the metal has resistance, what that adds to it. */
 export interface LeakageOperator {
-  readonly size: number;
-  readonly entries: PackedLower;
+  readonly matrix: LeakageMatrix;
   /** adds B Z Bᵀ x to `into`; absent for equipotential metal */
   readonly addMetal?: (x: Float64Array, into: Float64Array) => void;
 }
@@ -41,14 +41,17 @@ const FACTOR_IN_PRODUCTS = 1 / 7;
  * sides that their iterations would cost more.
  */
 export function chooseMethod(size: number, rightHandSides: number): LinearSolver['method'] {
-  return size <= SMALL || rightHandSides * TYPICAL_ITERATIONS > size * FACTOR_IN_PRODUCTS ? 'cholesky' : 'conjugate-gradients';
+  return size <= SMALL || rightHandSides * TYPICAL_ITERATIONS > size * FACTOR_IN_PRODUCTS
+    ? 'cholesky'
+    : 'conjugate-gradients';
 }
 
 /** @throws SolverStalled, NotPositiveDefinite */
 export function linearSolver(operator: LeakageOperator, rightHandSides: number): LinearSolver {
-  const { size, entries, addMetal } = operator;
-  if (chooseMethod(size, rightHandSides) === 'cholesky') {
-    const factor = coupled(operator);
+  const { matrix, addMetal } = operator;
+  const { size, entries } = matrix;
+  if (entries !== undefined && chooseMethod(size, rightHandSides) === 'cholesky') {
+    const factor = coupled(entries);
     factorPacked(factor, size);
     return {
       method: 'cholesky',
@@ -59,12 +62,14 @@ export function linearSolver(operator: LeakageOperator, rightHandSides: number):
       },
     };
   }
-  const multiply = (x: Float64Array, into: Float64Array): void => applyOperator(operator, x, into);
-  const diagonal = Float64Array.from({ length: size }, (_, i) => entries[(i * (i + 3)) / 2]!);
+  const multiply = (x: Float64Array, into: Float64Array): void => {
+    matrix.multiply(x, into);
+    addMetal?.(x, into);
+  };
   return {
     method: 'conjugate-gradients',
     solve(b) {
-      const result = conjugateGradients(multiply, diagonal, b, {
+      const result = conjugateGradients(multiply, matrix.precondition, b, {
         tolerance: RESIDUAL,
         limit: ITERATION_LIMIT,
       });
@@ -73,8 +78,8 @@ export function linearSolver(operator: LeakageOperator, rightHandSides: number):
       return { x: result.x, iterations: result.iterations };
     },
   };
-  function coupled(of: LeakageOperator): PackedLower {
-    const dense = Float64Array.from(of.entries);
+  function coupled(packed: PackedLower): PackedLower {
+    const dense = Float64Array.from(packed);
     if (addMetal === undefined) return dense;
     const unit = new Float64Array(size);
     const column = new Float64Array(size);
@@ -87,10 +92,4 @@ export function linearSolver(operator: LeakageOperator, rightHandSides: number):
     }
     return dense;
   }
-}
-
-/** Writes (R + B Z Bᵀ) x. */
-export function applyOperator(operator: LeakageOperator, x: Float64Array, into: Float64Array): void {
-  multiplyPacked(operator.entries, operator.size, x, into);
-  operator.addMetal?.(x, into);
 }

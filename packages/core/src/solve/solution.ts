@@ -3,7 +3,7 @@ import type { SegmentMesh } from '../geometry/segments.ts';
 import type { LeakageMatrix } from '../leakage/leakage-matrix.ts';
 import { branchCurrents, nodeOutflow } from '../network/branches.ts';
 import { drawnFromNodes, groundedMetal, metalBranches, segmentPotentials } from '../network/metal.ts';
-import { factorPacked, multiplyPacked, solvePacked } from '../numerics/packed-cholesky.ts';
+import { factorPacked, solvePacked } from '../numerics/packed-cholesky.ts';
 import { linearSolver } from './linear-solver.ts';
 
 export type MetalModel = 'resistive' | 'equipotential';
@@ -49,7 +49,7 @@ export function solveGraph(
   resistancePerMetre: Float64Array,
   model: MetalModel,
 ): GraphSolution {
-  const { segments, size, entries } = matrix;
+  const { segments, size } = matrix;
   const branches = metalBranches(mesh, resistancePerMetre);
   const { laplacian, references } = groundedMetal(mesh, branches, injectionNodes);
   const drop = (x: Float64Array): Float64Array => laplacian.solve(drawnFromNodes(mesh, segments, x));
@@ -62,7 +62,7 @@ export function solveGraph(
   const offReference =
     model === 'resistive' ? injectionNodes.filter((node) => !references.includes(node)).length : 0;
   const solver = linearSolver(
-    model === 'resistive' ? { size, entries, addMetal } : { size, entries },
+    model === 'resistive' ? { matrix, addMetal } : { matrix },
     pieces.length + offReference,
   );
   let iterations = 0;
@@ -156,7 +156,7 @@ function kirchhoffFailure(outflow: Float64Array, drawn: Float64Array, injection:
 
 function leakageResidual(matrix: LeakageMatrix, current: Float64Array, potential: Float64Array): number {
   const product = new Float64Array(matrix.size);
-  multiplyPacked(matrix.entries, matrix.size, current, product);
+  matrix.multiply(current, product);
   let error = 0;
   let scale = 0;
   for (let k = 0; k < matrix.size; k++) {
