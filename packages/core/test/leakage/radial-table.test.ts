@@ -3,7 +3,8 @@ import { radialTable, radialValue, scaledTable } from '../../src/leakage/radial-
 import { randomNumbers } from '../support/random.ts';
 
 describe('radial table', () => {
-  const images = (rr: number): number => 1 / Math.sqrt(rr + 0.25) - 0.7 / Math.sqrt(rr + 3) + 0.1 / Math.sqrt(rr + 1e4);
+  const images = (rr: number): number =>
+    1 / Math.sqrt(rr + 0.25) - 0.7 / Math.sqrt(rr + 3) + 0.1 / Math.sqrt(rr + 1e4);
   const table = radialTable(images, 0.5, 300);
 
   it('gives a sum of images to 1e-8 from no distance to its reach', () => {

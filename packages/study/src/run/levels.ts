@@ -6,7 +6,7 @@ import {
   type GraphSolution,
   interfaceDepths,
   type Lattice,
-  leakageMatrix,
+  leakageOperator,
   type MetalPotential,
   MODEL_FLOOR,
   type NearestNode,
@@ -72,8 +72,10 @@ const TOUCH_TARGET = 1e-2;
 /** A next level is not begun when it would need more segments than this: about a second of one core. */
 const SEGMENT_CEILING = 4000;
 const LAST_LEVEL = 5;
-/** Most segments of the second mesh, which every study needs: a leakage matrix of 0.6 GB and half a minute of one core. */
-const MOST_SEGMENTS = 12_000;
+/** Most segments of the second mesh, which every study needs: a compressed leakage matrix of 0.4 GB and about a minute of one core. */
+const MOST_SEGMENTS = 60_000;
+/** Memory that a large electrode takes, a segment: 5.5 kB of compressed matrix were seen at 52 000, and the mesh besides. */
+const BYTES_A_SEGMENT = 7000;
 /** Lattice spacing, m: half a metre shows a mesh of 3 m; larger plans get at most this many points a side. */
 const SPACING_M = 0.5;
 const MOST_POINTS = 400;
@@ -100,7 +102,13 @@ export function solveLevels(prepared: Prepared, progress: Progress): Solved {
     progress('solving the graph', level / (LAST_LEVEL + 2));
     const mesh = meshAt(level);
     const model = prepared.loaded.study.metal_model ?? 'resistive';
-    const graph = solveGraph(mesh, leakageMatrix(mesh, images), distinct, prepared.resistancePerMetre, model);
+    const graph = solveGraph(
+      mesh,
+      leakageOperator(mesh, images),
+      distinct,
+      prepared.resistancePerMetre,
+      model,
+    );
     return levelOf(images, graph, box);
   };
   let coarse = at(0);
@@ -140,13 +148,13 @@ export function solveLevels(prepared: Prepared, progress: Progress): Solved {
 /** @throws InputFaults when the two meshes that every study needs cannot be held */
 function refuseBeyondMemory(segments: number): void {
   if (segments <= MOST_SEGMENTS) return;
-  const gigabytes = (4e-9 * segments * segments).toFixed(1);
+  const gigabytes = ((segments * BYTES_A_SEGMENT) / 1e9).toFixed(1);
   throw new InputFaults([
     {
       file: STUDY_FILE,
       place: 'conductors',
       code: 'too-large',
-      message: `the electrode needs ${segments} segments and a leakage matrix of ${gigabytes} GB; at most ${MOST_SEGMENTS} segments are solved`,
+      message: `the electrode needs ${segments} segments, about ${gigabytes} GB; at most ${MOST_SEGMENTS} segments are solved`,
     },
   ]);
 }
