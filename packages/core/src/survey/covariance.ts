@@ -2,7 +2,7 @@
 import { Matrix, SVD } from 'ml-matrix';
 
 export interface ParameterSpread {
-  /** of the parameters, as logarithms; Infinity where the readings do not tell, 0 where held on a bound; shape [n] */
+  /** of the parameters, as logarithms; very large where the readings do not tell, 0 where held on a bound; shape [n] */
   readonly standardDeviation: Float64Array;
   /** 1 on the diagonal, 0 with a parameter that is held; shape [n][n] */
   readonly correlation: readonly Float64Array[];

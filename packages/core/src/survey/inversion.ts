@@ -1,12 +1,8 @@
 // A layered soil fitted to the readings of a survey: robust, within bounds, from several starts, saying how it ended.
-import {
-  LEAST_SQUARES_DEFAULTS,
-  type LeastSquaresResult,
-  leastSquares,
-} from '../numerics/levenberg-marquardt.ts';
 import { randomNumbers } from '../numerics/random.ts';
 import { soilImages } from '../soil/image-list.ts';
 import type { SoilModel } from '../soil/soil-model.ts';
+import { arrayKey } from './arrays.ts';
 import { parameterSpread } from './covariance.ts';
 import { apparentResistivity } from './forward.ts';
 import {
@@ -20,7 +16,8 @@ import {
   soilOf,
 } from './model-parameters.ts';
 import type { Reading } from './readings.ts';
-import { huberLoss, huberWeight, OUTLIER_RATIO, robustScale, scatterOf } from './scatter.ts';
+import { bestFit, type Loss, type SettledFit } from './robust-fit.ts';
+import { OUTLIER_RATIO, scatterOf } from './scatter.ts';
 import { startingParameters } from './starts.ts';
 import { type SurveyMisfit, surveyMisfit } from './survey-misfit.ts';
 
@@ -29,7 +26,7 @@ export interface InversionOptions {
   readonly seed: number;
   readonly starts: number;
   /** `huber` lets outliers pull less; `squares` is the plain least-squares optimum */
-  readonly loss: 'huber' | 'squares';
+  readonly loss: Loss;
   /** scatter of a reading, as standard deviation of ln ρ; found from the residuals where undefined */
   readonly scatter: number | undefined;
 }
@@ -92,19 +89,6 @@ export interface RefusedSurvey {
   readonly message: string;
 }
 
-/** A start's own fit: enough to tell valleys apart. */
-const SEARCH = { ...LEAST_SQUARES_DEFAULTS, limit: 40, reduction: 1e-4, negligible: 1e-5 };
-/** Valleys that are followed to their end. */
-const FOLLOWED = 3;
-/** Two starts agree when their sums differ by less than this share, or by less than 0.1 % a reading. */
-const AGREEING = 0.01;
-const AGREEING_RESIDUAL = 1e-3;
-/** Reweightings at most; the scale is settled after the first few, so that the rest cannot circle. */
-const REWEIGHTINGS = 60;
-const SCALE_REWEIGHTINGS = 8;
-/** Change of a weight that moves nothing. */
-const STEADY_WEIGHT = 1e-5;
-
 /**
  * Fits a soil of N layers to readings: ln ρ and ln t within bounds, logarithmic residuals, Huber's loss by iterated
  * reweighting, Levenberg–Marquardt from seeded starts.
@@ -123,7 +107,7 @@ export function invertSurvey(
       'layer-count',
       `layer count: ${layers} is not a whole number from ${FEWEST_LAYERS} to ${MOST_LAYERS}`,
     );
-  const different = new Set(readings.map((reading) => JSON.stringify(reading.array))).size;
+  const different = new Set(readings.map((reading) => arrayKey(reading.array))).size;
   const needed = parameterCount(layers);
   if (different < needed)
     return refuse(
@@ -132,92 +116,13 @@ export function invertSurvey(
     );
   const misfit = surveyMisfit(readings);
   const bounds = parameterBounds(readings, layers);
-  const unit = new Float64Array(readings.length).fill(1);
-  const searched = startingParameters(readings, layers, bounds, starts, randomNumbers(seed))
-    .map((start) => leastSquares(weighted(misfit, bounds, unit), start, SEARCH))
-    .sort((p, q) => p.sum - q.sum);
-  const least = searched[0]!.sum;
-  const near = (sum: number): boolean =>
-    sum <= (1 + AGREEING) * least + readings.length * AGREEING_RESIDUAL ** 2;
-  const ends = valleys(searched).map((valley) =>
-    loss === 'squares' ? settle(misfit, bounds, unit, valley.x) : reweight(misfit, bounds, valley.x),
-  );
-  const best = bestOf(ends, loss);
-  return report(misfit, bounds, best, {
-    scatter,
-    loss,
-    starts: { count: starts, agreeing: searched.filter((fit) => near(fit.sum)).length, seed },
-  });
+  const begin = startingParameters(readings, layers, bounds, starts, randomNumbers(seed));
+  const { best, agreeing } = bestFit(misfit, bounds, begin, loss);
+  return report(misfit, bounds, best, { scatter, loss, starts: { count: starts, agreeing, seed } });
 }
 
 function refuse(code: RefusedSurvey['code'], message: string): RefusedSurvey {
   return { kind: 'refused', code, message };
-}
-
-/** A fit with the weights that it was made with. */
-interface SettledFit {
-  readonly fit: LeastSquaresResult;
-  readonly weights: Float64Array;
-  /** ln(modelled/read), unweighted */
-  readonly residuals: Float64Array;
-  readonly scale: number;
-  readonly outcome: LeastSquaresResult['outcome'];
-}
-
-function weighted(misfit: SurveyMisfit, bounds: ParameterBounds, weights: Float64Array) {
-  const roots = weights.map(Math.sqrt);
-  return {
-    parameters: bounds.lower.length,
-    residuals: weights.length,
-    evaluate: (x: Float64Array, into: Float64Array): void => {
-      misfit.residuals(x, into);
-      for (let i = 0; i < into.length; i++) into[i]! *= roots[i]!;
-    },
-    lower: bounds.lower,
-    upper: bounds.upper,
-  };
-}
-
-/** The lowest fit of each valley, lowest first: fits whose sums are alike are one valley. */
-function valleys(searched: readonly LeastSquaresResult[]): readonly LeastSquaresResult[] {
-  const kept: LeastSquaresResult[] = [];
-  for (const fit of searched)
-    if (kept.length < FOLLOWED && !kept.some((other) => fit.sum <= (1 + AGREEING) * other.sum))
-      kept.push(fit);
-  return kept;
-}
-
-function settle(
-  misfit: SurveyMisfit,
-  bounds: ParameterBounds,
-  weights: Float64Array,
-  start: Float64Array,
-): SettledFit {
-  const fit = leastSquares(weighted(misfit, bounds, weights), start);
-  const residuals = new Float64Array(weights.length);
-  misfit.residuals(fit.x, residuals);
-  return { fit, weights, residuals, scale: robustScale(residuals, fit.x.length), outcome: fit.outcome };
-}
-
-/** Huber's loss: weights from the residuals, a fit with these weights, and so on until they stand still. */
-function reweight(misfit: SurveyMisfit, bounds: ParameterBounds, start: Float64Array): SettledFit {
-  let current = settle(misfit, bounds, new Float64Array(misfit.readings.length).fill(1), start);
-  let scale = current.scale;
-  for (let round = 0; round < REWEIGHTINGS; round++) {
-    if (round < SCALE_REWEIGHTINGS) scale = current.scale;
-    const weights = current.residuals.map((residual) => huberWeight(residual, scale));
-    const change = weights.reduce((most, w, i) => Math.max(most, Math.abs(w - current.weights[i]!)), 0);
-    if (change < STEADY_WEIGHT) return { ...current, scale };
-    current = settle(misfit, bounds, weights, current.fit.x);
-  }
-  return { ...current, scale, outcome: 'limit' };
-}
-
-function bestOf(ends: readonly SettledFit[], loss: InversionOptions['loss']): SettledFit {
-  const scale = Math.min(...ends.map((end) => end.scale));
-  const total = (end: SettledFit): number =>
-    loss === 'squares' ? end.fit.sum : end.residuals.reduce((sum, r) => sum + huberLoss(r, scale), 0);
-  return ends.reduce((best, end) => (total(end) < total(best) ? end : best));
 }
 
 function report(

@@ -8,7 +8,7 @@ const HALVINGS = 60;
  * Median depth of investigation, m: half of the reading over uniform ground comes from above it, half from below.
  * The part from above depth z of the signal between two points at distance r is 1 − r/√(r² + 4z²) of 1/r (Roy and Apparao,
  * Geophysics 36, 1971); the depth where the four together reach half is Edwards' (Geophysics 42, 1977), 0.519 a for
- * Wenner and 0.190 of AB for Schlumberger with close potential pins (both from memory). Pins count as on the surface.
+ * Wenner and 0.19 of AB for Schlumberger with close potential pins (both from memory). Pins count as on the surface.
  */
 export function medianDepth(array: FourPinArray): number {
   const whole = overPins(array, (r) => 1 / r);

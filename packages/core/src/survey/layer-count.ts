@@ -1,4 +1,5 @@
 // How many layers the readings call for, by an information criterion.
+import { arrayKey } from './arrays.ts';
 import { type FittedSurvey, type InversionOptions, invertSurvey } from './inversion.ts';
 import { MOST_LAYERS, parameterCount } from './model-parameters.ts';
 import type { Reading } from './readings.ts';
@@ -33,7 +34,7 @@ export function proposeLayerCount(
   readings: readonly Reading[],
   options: Partial<InversionOptions> = {},
 ): LayerProposal {
-  const spacings = new Set(readings.map((reading) => JSON.stringify(reading.array))).size;
+  const spacings = new Set(readings.map((reading) => arrayKey(reading.array))).size;
   const fits: FittedSurvey[] = [];
   for (let layers = 1; layers <= MOST_LAYERS; layers++) {
     if (parameterCount(layers) >= spacings && layers > 1) break;

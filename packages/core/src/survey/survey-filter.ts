@@ -33,7 +33,8 @@ const TIKHONOV = 1e-9;
  * The kernel's part F(λ) beyond the pins themselves enters a reading as ∫F(λ)·Σ±J0(λr) dλ. With F = Σ a_j e^{−β_j λ},
  * fitted on fixed wavenumbers λ_i as the image lists are, the integral is Σ a_j Σ±1/√(r² + β_j²), which is linear in
  * F(λ_i): a digital filter in the sense of Ghosh (1971), but made by least squares for these very distances. Agrees with
- * `apparentResistivity` over contrasts of 10³ to 1e-5 and costs microseconds. Pins are points at their depth, as there.
+ * `apparentResistivity` over contrasts of 10³ to 1e-5, to 1e-4 where long arrays have pins beneath a thin layer, and costs
+ * microseconds. Pins are points at their depth, as there.
  */
 export function surveyFilter(arrays: readonly FourPinArray[]): SurveyFilter {
   const distances = arrays.flatMap((array) => pinDistances(array).distance);
