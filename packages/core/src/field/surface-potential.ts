@@ -6,6 +6,7 @@ import { type RadialTable, radialValue } from '../leakage/radial-table.ts';
 import { smoothKernel } from '../leakage/smooth-kernel.ts';
 import { gaussLegendre } from '../numerics/gauss-legendre.ts';
 import type { SoilImages } from '../soil/image-list.ts';
+import { addFarField, clusterOrder, type FarCluster, farClusters } from './far-clusters.ts';
 import { potentialAt } from './potential.ts';
 
 /** Surface potential at a place, V (or Ω for a leakage per ampere). */
@@ -39,6 +40,8 @@ interface ClassGroup {
   readonly all: RadialTable | undefined;
   /** images other than those at the metal's own distance */
   readonly rest: RadialTable | undefined;
+  /** boxes of horizontal segments whose far field is that of a few points */
+  readonly clusters: FarCluster | undefined;
 }
 
 /** Ratio of distance to length past which two, and three, Gauss points are enough (see gaussOrder). */
@@ -97,26 +100,37 @@ function classGroup(
   of: Int32Array,
   reach: number,
 ): ClassGroup {
-  const members = Array.from({ length: mesh.count }, (_, i) => i).filter(
+  const unordered = Array.from({ length: mesh.count }, (_, i) => i).filter(
     (i) => of[i] === at && mesh.leaking[i] === 1,
+  );
+  const members = Array.from(
+    clusterOrder(
+      Float64Array.from(unordered, (i) => (mesh.x1[i]! + mesh.x2[i]!) / 2),
+      Float64Array.from(unordered, (i) => (mesh.y1[i]! + mesh.y2[i]!) / 2),
+    ),
+    (k) => unordered[k]!,
   );
   const list = images.list(c.layer, 0);
   const pick = (value: (i: number) => number): Float64Array => Float64Array.from(members, value);
   const every = Array.from({ length: list.count }, (_, k) => k);
   const own = every.filter((k) => Math.abs(list.offset[k]!) < NO_OFFSET);
   const others = every.filter((k) => Math.abs(list.offset[k]!) >= NO_OFFSET);
-  return {
-    vertical: c.vertical,
-    z1: c.z1,
-    z2: c.z2,
+  const segments = {
     count: members.length,
     cx: pick((i) => (mesh.x1[i]! + mesh.x2[i]!) / 2),
     cy: pick((i) => (mesh.y1[i]! + mesh.y2[i]!) / 2),
     hx: pick((i) => (mesh.x2[i]! - mesh.x1[i]!) / 2),
     hy: pick((i) => (mesh.y2[i]! - mesh.y1[i]!) / 2),
+    strength: Float64Array.from(members.flatMap((i) => leakages.map((leakage) => leakage[i]! * list.factor))),
+  };
+  return {
+    vertical: c.vertical,
+    z1: c.z1,
+    z2: c.z2,
+    ...segments,
     length: pick((i) => mesh.length[i]!),
     radiusSquared: pick((i) => mesh.radius[i]! ** 2),
-    strength: Float64Array.from(members.flatMap((i) => leakages.map((leakage) => leakage[i]! * list.factor))),
+    clusters: c.vertical ? undefined : farClusters(segments, leakages.length),
     ownWeight: own.reduce((sum, k) => sum + list.weight[k]!, 0),
     all: c.vertical ? undefined : smoothKernel(list, every, c, 0, reach),
     rest: smoothKernel(list, others, c, 0, reach),
@@ -126,12 +140,18 @@ function classGroup(
 const TWO = Math.sqrt(1 / 3);
 const THREE = Math.sqrt(3 / 5);
 
-/** Horizontal metal: Gauss points on the table of all images when far, closed form and the rest's table when near. */
+/** Horizontal metal: far boxes by their points, the rest segment by segment. */
 function addLevel(group: ClassGroup, x: number, y: number, into: Float64Array): void {
+  if (group.clusters === undefined) return;
+  addFarField(group.clusters, group.all!, x, y, into, (from, to) => addRun(group, from, to, x, y, into));
+}
+
+/** Segments one by one: Gauss points on the table of all images when far, closed form and the rest's table when near. */
+function addRun(group: ClassGroup, from: number, to: number, x: number, y: number, into: Float64Array): void {
   const { cx, cy, hx, hy, length, strength, all } = group;
   const table = all!;
   const zz = group.z1 * group.z1;
-  for (let j = 0; j < group.count; j++) {
+  for (let j = from; j < to; j++) {
     const dx = x - cx[j]!;
     const dy = y - cy[j]!;
     const ux = hx[j]!;
