@@ -157,7 +157,7 @@ function dampedStep(
   if (largest === 0) return step;
   for (let row = 0; row < size; row++) {
     const at = (row * (row + 3)) / 2;
-    normal[at] = normal[at]! + damping * Math.max(normal[at]!, LEAST_DIAGONAL * largest) + 1e-15 * largest;
+    normal[at] = normal[at]! + damping * Math.max(normal[at]!, LEAST_DIAGONAL * largest);
   }
   const right = Float64Array.from(free, (j) => -gradient[j]!);
   factorPacked(normal, size);

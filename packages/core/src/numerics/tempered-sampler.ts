@@ -33,7 +33,7 @@ const STAGE_LIMIT = 200;
 /** Halvings that find the next power: to 1e-15 of its range, as the first is that small where most soils are far off. */
 const HALVINGS = 50;
 /** Moves proposed to a particle at one temperature, at most. */
-const PROPOSAL_LIMIT = 60;
+const PROPOSAL_LIMIT = 120;
 /** Tries for a first place of a particle inside the region. */
 const DRAW_LIMIT = 10_000;
 /** Length of a difference move over that of the difference, for one coordinate; falls with the root of their number (ter Braak 2006). */

@@ -1,7 +1,13 @@
 import { describe, expect, it } from 'vitest';
 import { randomNumbers } from '../../src/numerics/random.ts';
 import type { SoilModel } from '../../src/soil/soil-model.ts';
-import { type FamilyOptions, type SoilFamily, soilFamily, soundingBand } from '../../src/survey/ambiguity.ts';
+import {
+  bandOf,
+  type FamilyOptions,
+  type SoilFamily,
+  soilFamily,
+  soundingBand,
+} from '../../src/survey/ambiguity.ts';
 import { degenerateLayers } from '../../src/survey/degeneracy.ts';
 import {
   evidenceWeights,
@@ -207,5 +213,25 @@ describe('degenerate layers', () => {
 
   it('are none where readings tell resistivity and thickness', () => {
     expect(degenerateLayers(familyOf(kindermann, 2).family)).toEqual([]);
+  });
+
+  it('are told only where a number is not resolved and the product is much better known than either', () => {
+    const { family } = familyOf(kindermann, 2);
+    /** A family whose top layer has ln ρ over `rho`, and ln t over −`share` of that. */
+    const made = (rho: number, share: number): SoilFamily => {
+      const draws = Array.from({ length: 101 }, (_, i) =>
+        Float64Array.of((rho * i) / 100, 0, (-share * rho * i) / 100),
+      );
+      const parameters = family.parameters.map((parameter, j) => {
+        const band = bandOf(draws.map((draw) => Math.exp(draw[j]!)));
+        return { ...parameter, ...band, resolved: band.high <= 3 * band.low };
+      });
+      return { ...family, draws, parameters };
+    };
+    expect(degenerateLayers(made(3, 0.9)).map((layer) => layer.known)).toEqual(['transverse resistance']);
+    // both resolved, however well the product is known
+    expect(degenerateLayers(made(1, 0.9))).toEqual([]);
+    // the product resolved, but thickness alone better
+    expect(degenerateLayers(made(1.5, 0.3))).toEqual([]);
   });
 });

@@ -156,9 +156,9 @@ describe('a fitted survey', () => {
     }));
     const [rho1, rho2, thickness] = numbersOf(fitted(scaled, 2));
     const base = numbersOf(fitted(fieldSet, 2));
-    expect(Math.abs(rho1! / base[0]! / 3 - 1)).toBeLessThan(1e-5);
-    expect(Math.abs(rho2! / base[1]! / 3 - 1)).toBeLessThan(1e-5);
-    expect(Math.abs(thickness! / base[2]! / 4 - 1)).toBeLessThan(1e-5);
+    expect(Math.abs(rho1! / base[0]! / 3 - 1)).toBeLessThan(1e-4);
+    expect(Math.abs(rho2! / base[1]! / 3 - 1)).toBeLessThan(1e-4);
+    expect(Math.abs(thickness! / base[2]! / 4 - 1)).toBeLessThan(1e-4);
   });
 
   it('is repeated by its seed, and the seed does not matter where the optimum is plain', () => {
