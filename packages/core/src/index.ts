@@ -7,6 +7,8 @@ export { adaptiveLattices, type Box, type Lattice, latticeValue } from './field/
 export { type LineProfile, lineProfile } from './field/line-profile.ts';
 export { type NearestNode, nearestNode, nodesReached } from './field/metal-nearby.ts';
 export { potentialAt } from './field/potential.ts';
+export { areaRegion, partOf, type Region, regionMask } from './field/region.ts';
+export { latticeSummits } from './field/starts.ts';
 export { PACE_M, stepLattice, type WorstStep, worstStep } from './field/step.ts';
 export {
   onePotential,
@@ -14,14 +16,7 @@ export {
   type SurfacePotentials,
   surfacePotentials,
 } from './field/surface-potential.ts';
-export {
-  areaMask,
-  latticeMaxima,
-  type MetalPotential,
-  touchLattice,
-  type WorstPlace,
-  worstTouch,
-} from './field/touch.ts';
+export { type MetalPotential, touchLattice, type WorstPlace, worstTouch } from './field/touch.ts';
 export {
   areaSquareMetres,
   corridors,

@@ -11,6 +11,8 @@ export interface WorstTouch {
   readonly uncertainty_V: number;
   readonly x_m: number;
   readonly y_m: number;
+  /** whether the feet stand on the covering there; the limit is that of the ground under them */
+  readonly on_covering: boolean;
   readonly limit_V: number;
   readonly within_limit: boolean;
   /** (limit − worst)/limit, % ; negative beyond the limit */
@@ -39,6 +41,9 @@ export interface CaseResult {
   readonly resistance_uncertainty_ohm: number;
   readonly gpr_V: number;
   readonly gpr_uncertainty_V: number;
+  /** limits on bare soil, for places without covering */
+  readonly bare_touch_limit_V: number;
+  readonly bare_step_limit_V: number;
   readonly touch: WorstTouch;
   readonly step: WorstStep;
 }
@@ -58,6 +63,8 @@ export interface ElectrodeResult {
   readonly conductor_length_m: number;
   /** floating metal: the worst voltage to the soil within 1 m of it, of the rise, signed, and where; null for energised */
   readonly touch_ratio: number | null;
+  readonly touch_uncertainty_ratio: number | null;
+  readonly touch_on_covering: boolean | null;
   readonly touch_x_m: number | null;
   readonly touch_y_m: number | null;
 }

@@ -45,7 +45,14 @@ export interface Study {
   readonly soil: SoilInput;
   /** variants of the soil, each solved; the worst of all seasons governs */
   readonly seasons?: readonly SeasonInput[] | undefined;
-  readonly surfacing?: { readonly resistivity_ohm_m: number; readonly thickness_m: number } | undefined;
+  readonly surfacing?:
+    | {
+        readonly resistivity_ohm_m: number;
+        readonly thickness_m: number;
+        /** where it lies; the touch area where undefined */
+        readonly areas?: readonly Polygon[] | undefined;
+      }
+    | undefined;
   readonly metal_model?: 'resistive' | 'equipotential' | undefined;
   readonly conductors: readonly string[];
   readonly electrodes?:

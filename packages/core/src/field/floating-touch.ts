@@ -1,13 +1,13 @@
 // Touch voltage on floating metal: its own potential against the soil within reach of it.
 
-import { corridors, insideArea, type PlanLine, type Polygon } from '../geometry/area.ts';
+import { corridors, type PlanLine } from '../geometry/area.ts';
 import { REACH_M } from '../geometry/default-areas.ts';
+import { areaRegion } from './region.ts';
 import type { SurfacePotential } from './surface-potential.ts';
-import { climbFromAll, type MetalPotential, type WorstPlace } from './touch.ts';
+import { climbFromBest, type MetalPotential, type WorstPlace } from './touch.ts';
 
 /** Spacing of the places that the search starts from, m. */
 const SPACING = 2;
-const STARTS = 8;
 
 /** Worst magnitude within reach of the given lines of metal, and the sign of metal minus soil there. */
 export function worstTouchNearLines(
@@ -15,17 +15,12 @@ export function worstTouchNearLines(
   surface: SurfacePotential,
   metal: MetalPotential,
 ): WorstPlace & { readonly signed: number } {
-  const area: Polygon[] = corridors(lines, REACH_M);
+  const region = areaRegion(corridors(lines, REACH_M));
   const voltage = (x: number, y: number): number => metal(x, y) - surface(x, y);
-  const f = (at: readonly number[]): number =>
-    insideArea(area, at[0]!, at[1]!) ? Math.abs(voltage(at[0]!, at[1]!)) : Number.NEGATIVE_INFINITY;
-  const starts = lines
-    .flatMap(placesBeside)
-    .map(([x, y]) => ({ x, y, value: Math.abs(voltage(x, y)) }))
-    .sort((a, b) => b.value - a.value)
-    .slice(0, STARTS)
-    .map(({ x, y }) => [x, y] as const);
-  const worst = climbFromAll(starts, f, area, REACH_M / 4);
+  const f = ([x, y]: readonly number[]): number =>
+    region.inside(x!, y!) ? Math.abs(voltage(x!, y!)) : Number.NEGATIVE_INFINITY;
+  const worst = climbFromBest(lines.flatMap(placesBeside), f, region, REACH_M / 4);
+  if (worst === undefined) throw new Error('no place lies within reach of the metal');
   return { ...worst, signed: voltage(worst.x, worst.y) };
 }
 

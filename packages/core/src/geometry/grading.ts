@@ -21,9 +21,13 @@ const COARSEST_PIECES = 2;
 /** Growth of segment length away from a free end on the coarsest mesh; halved in the logarithm by each refinement. */
 const TIP_GROWTH = 3;
 
+/** Share of a rod's last piece that is cut off toward a joint: a third leaves twice as much beside it. */
+const JOINT_SHARE = 3;
+
 /**
  * Cuts along a span, as distances from its first end, m, both ends included.
- * Between joints: cosine spacing s = L(1 − cos πk/n)/2, n = 2·2^level, so that every finer mesh contains the coarser.
+ * Between joints: cosine spacing s = L(1 − cos πk/n)/2, n = 2·2^level, so that every finer mesh contains the coarser
+ * unless pieces would fall below four radii.
  * From a free end: one segment of 1.5 radii, then growing geometrically up to the cosine spacing's largest segment.
  * @param length L, m
  * @param radius m
@@ -65,11 +69,13 @@ function jointCuts(length: number, radius: number, first: SpanEnd, last: SpanEnd
 }
 
 function tipCuts(length: number, radius: number, last: SpanEnd, level: number): number[] {
+  const shortest = SHORTEST_RADII * radius;
   const growth = TIP_GROWTH ** (1 / 2 ** level);
-  const largest = length / (COARSEST_PIECES * 2 ** level);
-  const tip = Math.min(TIP_SEGMENT_RADII * radius, length / 2);
+  const largest = Math.max(shortest, length / (COARSEST_PIECES * 2 ** level));
+  const tip = Math.min(TIP_SEGMENT_RADII * radius, length);
+  if (length - tip < shortest) return [0, length];
   const cuts = [0, tip];
-  let size = Math.max(tip * growth, SHORTEST_RADII * radius);
+  let size = Math.max(tip * growth, shortest);
   let at = tip;
   while (length - at > 2 * size && size < largest) {
     at += size;
@@ -77,12 +83,12 @@ function tipCuts(length: number, radius: number, last: SpanEnd, level: number): 
     size *= growth;
   }
   const rest = length - at;
-  const pieces = Math.max(1, Math.round(rest / Math.min(size, largest)));
-  const graded = last === 'joint' && rest / pieces > 2 * SHORTEST_RADII * radius;
+  const wanted = Math.round(rest / Math.min(size, largest));
+  const pieces = Math.max(1, Math.min(wanted, Math.floor(rest / shortest)));
   for (let k = 1; k <= pieces; k++) cuts.push(k === pieces ? length : at + (rest * k) / pieces);
-  if (graded && level > 0) {
-    const lastPiece = cuts[cuts.length - 1]! - cuts[cuts.length - 2]!;
-    cuts.splice(cuts.length - 1, 0, length - lastPiece / 3);
-  }
+  // toward a joint the last piece is graded once more, as the spacing between joints is
+  const lastPiece = rest / pieces;
+  if (last === 'joint' && level > 0 && lastPiece >= JOINT_SHARE * shortest)
+    cuts.splice(cuts.length - 1, 0, length - lastPiece / JOINT_SHARE);
   return cuts;
 }

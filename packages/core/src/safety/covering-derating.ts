@@ -27,7 +27,10 @@ export function coveringDeratingFactor(soilResistivity: number, covering: Coveri
   requirePositive(soilResistivity, 'soil resistivity', 'Ω·m');
   requirePositive(resistivity, 'covering resistivity', 'Ω·m');
   requirePositive(thickness, 'covering thickness', 'm');
-  return 1 - (FITTED_LENGTH_M * (1 - soilResistivity / resistivity)) / (2 * thickness + FITTED_LENGTH_M);
+  const factor =
+    1 - (FITTED_LENGTH_M * (1 - soilResistivity / resistivity)) / (2 * thickness + FITTED_LENGTH_M);
+  // soil more resistive than its covering is credited with no more than the covering (common practice, no source)
+  return Math.min(1, factor);
 }
 
 function requirePositive(value: number, name: string, unit: string): void {

@@ -2,11 +2,13 @@ import { describe, expect, it } from 'vitest';
 import { adaptiveLattices } from '../../src/field/lattice.ts';
 import { lineProfile } from '../../src/field/line-profile.ts';
 import { climb } from '../../src/field/local-search.ts';
+import { areaRegion } from '../../src/field/region.ts';
 import { stepLattice, worstStep } from '../../src/field/step.ts';
-import { areaMask, touchLattice, worstTouch } from '../../src/field/touch.ts';
+import { touchLattice, worstTouch } from '../../src/field/touch.ts';
 import type { Polygon } from '../../src/geometry/area.ts';
 
 const square: Polygon[] = [[[0, 0], [20, 0], [20, 20], [0, 20]]]; // biome-ignore format: four corners
+const region = areaRegion(square);
 const box = { west: -2, south: -2, east: 22, north: 22 };
 const latticeOf = (f: (x: number, y: number) => number) =>
   adaptiveLattices((x, y, into) => { into[0] = f(x, y); }, [1e-4], box, 0.5)[0]!; // biome-ignore format: one function
@@ -17,7 +19,7 @@ describe('the worst touch voltage', () => {
       0.7 - 0.3 * Math.exp(-((x - 7.13) ** 2 + (y - 11.61) ** 2) / 2);
     const lattice = latticeOf(surface);
     const touch = touchLattice(lattice, () => 1);
-    const worst = worstTouch(touch, areaMask(lattice, square), surface, () => 1, square);
+    const worst = worstTouch(touch, region, surface, () => 1, [])!;
     expect(Math.hypot(worst.x - 7.13, worst.y - 11.61)).toBeLessThan(0.02);
     expect(worst.value).toBeCloseTo(0.6, 4);
   });
@@ -28,11 +30,11 @@ describe('the worst touch voltage', () => {
     const lattice = latticeOf(away);
     const worst = worstTouch(
       touchLattice(lattice, () => 1),
-      areaMask(lattice, square),
+      region,
       away,
       () => 1,
-      square,
-    );
+      [],
+    )!;
     expect(worst.x).toBeCloseTo(20, 6);
     expect(worst.y).toBeCloseTo(13.37, 1);
   });
@@ -42,11 +44,11 @@ describe('the worst touch voltage', () => {
     const lattice = latticeOf(surface);
     const worst = worstTouch(
       touchLattice(lattice, () => 1),
-      areaMask(lattice, square),
+      region,
       surface,
       () => 1,
-      square,
-    );
+      [],
+    )!;
     expect(worst.value).toBeCloseTo(0.5, 3);
   });
 });
@@ -57,7 +59,7 @@ describe('the worst step voltage', () => {
       const plane = (x: number, y: number): number => 5 - 0.4 * (x * Math.cos(angle) + y * Math.sin(angle));
       const lattice = latticeOf(plane);
       const step = stepLattice(lattice);
-      const worst = worstStep(step, areaMask(lattice, square), plane, square);
+      const worst = worstStep(step, region, plane, [])!;
       expect(worst.value).toBeCloseTo(0.4, 3);
       expect(Math.hypot(worst.from[0] - worst.to[0], worst.from[1] - worst.to[1])).toBeCloseTo(1, 12);
       expect(plane(...worst.from)).toBeGreaterThan(plane(...worst.to));
@@ -67,9 +69,49 @@ describe('the worst step voltage', () => {
   it('is found where the potential falls steepest', () => {
     const surface = (x: number): number => 1 / (1 + Math.exp(3 * (x - 9.4)));
     const lattice = latticeOf(surface);
-    const worst = worstStep(stepLattice(lattice), areaMask(lattice, square), surface, square);
+    const worst = worstStep(stepLattice(lattice), region, surface, [])!;
     expect(worst.x).toBeCloseTo(9.4, 1);
     expect(worst.value).toBeCloseTo(surface(8.9) - surface(9.9), 3);
+  });
+});
+
+describe('the worst step voltage', () => {
+  it('is followed along a narrow ridge askew to the axes', () => {
+    // a ridge of potential along y = 0.577 x, falling slowly along it: the worst pace crosses it near its head
+    const ridge = (x: number, y: number): number => {
+      const along = (x - 10) * 0.866 + (y - 10) * 0.5;
+      const across = -(x - 10) * 0.5 + (y - 10) * 0.866;
+      return (1 + 0.004 * along) * Math.exp(-((across / 0.8) ** 2));
+    };
+    const lattice = latticeOf(ridge);
+    const worst = worstStep(stepLattice(lattice), region, ridge, [])!;
+    let probed = 0;
+    for (let x = 0; x <= 20; x += 0.25)
+      for (let y = 0; y <= 20; y += 0.25)
+        for (let d = 0; d < 36; d++) {
+          const [ex, ey] = [0.5 * Math.cos((Math.PI * d) / 36), 0.5 * Math.sin((Math.PI * d) / 36)];
+          probed = Math.max(probed, Math.abs(ridge(x + ex, y + ey) - ridge(x - ex, y - ey)));
+        }
+    expect(worst.value).toBeGreaterThan(0.999 * probed);
+  });
+
+  it('is found beside metal that the lattice steps over, and in areas between its points', () => {
+    const spike = (x: number, y: number): number => Math.exp(-((x - 3.26) ** 2 + (y - 8.24) ** 2) / 0.002);
+    const lattice = latticeOf(() => 0);
+    expect(worstStep(stepLattice(lattice), region, spike, [[3.26, 8.24]])!.value).toBeGreaterThan(0.99);
+    const small = areaRegion([[[5.1, 5.1], [5.3, 5.1], [5.3, 5.3], [5.1, 5.3]]]); // biome-ignore format: a square
+    const slope = (x: number, y: number): number => 0.2 * x - 0.1 * y;
+    const flat = latticeOf(slope);
+    expect(worstStep(stepLattice(flat), small, slope, [])!.value).toBeCloseTo(Math.hypot(0.2, 0.1), 4);
+    expect(
+      worstTouch(
+        touchLattice(flat, () => 1),
+        small,
+        slope,
+        () => 1,
+        [],
+      )!.value,
+    ).toBeCloseTo(1 - 0.2 * 5.1 + 0.1 * 5.3, 6);
   });
 });
 
@@ -77,8 +119,7 @@ describe('climbing', () => {
   it('reaches the top of a smooth hill and stays inside its region', () => {
     const hill = (at: readonly number[]): number =>
       at[0]! < 0 ? Number.NEGATIVE_INFINITY : -((at[0]! + 1) ** 2) - (at[1]! - 2) ** 2;
-    const moves = () => [[1, 0], [-1, 0], [0, 1], [0, -1]]; // biome-ignore format: four ways
-    const { at, value } = climb(hill, [4, 5], moves, 1 / 1024);
+    const { at, value } = climb(hill, [4, 5], [1, 1], () => [], 1 / 1024);
     expect(at[0]).toBeCloseTo(0, 2);
     expect(at[1]).toBeCloseTo(2, 2);
     expect(value).toBeCloseTo(-1, 2);

@@ -88,10 +88,16 @@ function pointOf(value: JsonValue): Point | undefined {
   return typeof x === 'number' && typeof y === 'number' ? [x, y] : undefined;
 }
 
+/** Lists of polygons in a study: what holds them, and under which key. */
+const POLYGON_LISTS = [
+  ['areas', 'touch'],
+  ['areas', 'step'],
+  ['surfacing', 'areas'],
+] as const;
+
 function areaFindings(study: JsonValue): readonly Finding[] {
-  const areas = member(study, 'areas');
-  return ['touch', 'step'].flatMap((kind) =>
-    items(areas, kind).flatMap((area, i): readonly Finding[] => {
+  return POLYGON_LISTS.flatMap(([owner, key]) =>
+    items(member(study, owner), key).flatMap((area, i): readonly Finding[] => {
       const corners = isList(area) ? area.map(pointOf).filter((point) => point !== undefined) : [];
       // corners that are no points, too few or too many are told by the schema
       if (
@@ -102,7 +108,7 @@ function areaFindings(study: JsonValue): readonly Finding[] {
       )
         return [];
       const wrong = polygonFault(corners);
-      return wrong === undefined ? [] : [[placeOf(placeOf('areas', kind), i), 'area', wrong]];
+      return wrong === undefined ? [] : [[placeOf(placeOf(owner, key), i), 'area', wrong]];
     }),
   );
 }

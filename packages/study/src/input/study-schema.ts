@@ -108,15 +108,6 @@ const season = told(
   'an object with name and layers, top or below',
 );
 
-const surfacing = told(
-  z.strictObject({
-    resistivity_ohm_m: above('covering resistivity', ' Ω·m', most.LARGEST_COVERING_RESISTIVITY_OHM_M),
-    thickness_m: above('covering thickness', ' m', most.LARGEST_COVERING_THICKNESS_M),
-  }),
-  'covering',
-  'an object with resistivity_ohm_m and thickness_m',
-);
-
 const electrode = told(
   z.strictObject({
     name: label('electrode name', most.LONGEST_NAME),
@@ -181,6 +172,16 @@ const areaList = told(
   'list of areas',
   `1 to ${most.MOST_AREAS} areas, each a list of corners`,
 );
+const surfacing = told(
+  z.strictObject({
+    resistivity_ohm_m: above('covering resistivity', ' Ω·m', most.LARGEST_COVERING_RESISTIVITY_OHM_M),
+    thickness_m: above('covering thickness', ' m', most.LARGEST_COVERING_THICKNESS_M),
+    areas: areaList.optional(),
+  }),
+  'covering',
+  'an object with resistivity_ohm_m, thickness_m and, where it does not lie in the touch area, areas',
+);
+
 const areas = told(
   z.strictObject({ touch: areaList.optional(), step: areaList.optional() }),
   'assessed areas',

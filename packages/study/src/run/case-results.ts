@@ -1,10 +1,18 @@
 // One fault case: current into the ground, rise, and the worst touch and step voltages against their limits.
-import { decrementFactor, gridCurrent, judge, type SegmentMesh, type Verdict } from '@ohmstead/core';
+import {
+  decrementFactor,
+  gridCurrent,
+  judge,
+  type SegmentMesh,
+  type Verdict,
+  type WorstPlace,
+} from '@ohmstead/core';
 import { DEFAULT_DIVISION_FACTOR, DEFAULT_FREQUENCY_HZ } from '../input/defaults.ts';
 import type { CaseResult, LimitsResult, ResultsWarning, WorstTouch } from '../results.ts';
 import type { CaseInput } from '../study.ts';
-import type { UnitField } from './levels.ts';
-import { caseLimits } from './limits-of.ts';
+import type { Uncertain, UnitField, ZoneWorst } from './levels.ts';
+import { type CaseLimits, caseLimits } from './limits-of.ts';
+import type { Footing } from './zones.ts';
 
 export function caseResult(
   input: CaseInput,
@@ -20,11 +28,23 @@ export function caseResult(
       ? { faultCurrent: input.fault_current_A!, divisionFactor: division, decrementFactor: decrement }
       : { faultCurrent: input.grid_current_A, divisionFactor: 1, decrementFactor: decrement },
   );
-  const limit = caseLimits(limits, input.duration_s);
-  const touch = judge(current * unit.worstTouch.value, current * unit.touchUncertainty, limit.touch);
-  const step = judge(current * unit.worstStep.value, current * unit.stepUncertainty, limit.step);
+  const bare = caseLimits(limits, input.duration_s, 'bare');
+  const covered = caseLimits(limits, input.duration_s, 'covering');
+  const on = (footing: Footing): CaseLimits => (footing === 'covering' ? covered : bare);
+  const touch = governing(
+    unit.zones,
+    current,
+    (zone) => zone.touch,
+    (footing) => on(footing).touch,
+  );
+  const step = governing(
+    unit.zones,
+    current,
+    (zone) => zone.step,
+    (footing) => on(footing).step,
+  );
   const node = unit.injectionNode;
-  const { from, to } = unit.worstStep;
+  const { from, to } = step.place;
   return {
     result: {
       name: input.name,
@@ -40,45 +60,51 @@ export function caseResult(
       resistance_uncertainty_ohm: unit.resistanceUncertainty,
       gpr_V: current * unit.resistance,
       gpr_uncertainty_V: current * unit.resistanceUncertainty,
-      touch: worst(
-        touch,
-        current * unit.worstTouch.value,
-        current * unit.touchUncertainty,
-        limit.touch,
-        unit.worstTouch,
-      ),
-      step: {
-        ...worst(
-          step,
-          current * unit.worstStep.value,
-          current * unit.stepUncertainty,
-          limit.step,
-          unit.worstStep,
-        ),
-        from: { x_m: from[0], y_m: from[1] },
-        to: { x_m: to[0], y_m: to[1] },
-      },
+      bare_touch_limit_V: bare.touch,
+      bare_step_limit_V: bare.step,
+      touch: touch.worst,
+      step: { ...step.worst, from: { x_m: from[0], y_m: from[1] }, to: { x_m: to[0], y_m: to[1] } },
     },
-    warnings: [...undecided(input.name, 'touch', touch), ...undecided(input.name, 'step', step)],
+    warnings: [
+      ...undecided(input.name, 'touch', touch.verdict),
+      ...undecided(input.name, 'step', step.verdict),
+    ],
   };
 }
 
-function worst(
-  verdict: Verdict,
-  value: number,
-  uncertainty: number,
-  limit: number,
-  place: { readonly x: number; readonly y: number },
-): WorstTouch {
-  return {
-    worst_V: value,
-    uncertainty_V: uncertainty,
-    x_m: place.x,
-    y_m: place.y,
-    limit_V: limit,
-    within_limit: verdict.withinLimit,
-    margin_percent: verdict.marginPercent,
-  };
+interface Governing<T> {
+  readonly worst: WorstTouch;
+  readonly verdict: Verdict;
+  readonly place: T;
+}
+
+/** The zone whose worst place comes nearest to, or farthest beyond, its own limit. */
+function governing<T extends WorstPlace>(
+  zones: readonly ZoneWorst[],
+  current: number,
+  pick: (zone: ZoneWorst) => Uncertain<T> | undefined,
+  limitOn: (footing: Footing) => number,
+): Governing<T> {
+  const judged = zones.flatMap((zone): Governing<T>[] => {
+    const place = pick(zone);
+    if (place === undefined) return [];
+    const limit = limitOn(zone.footing);
+    const value = current * place.value;
+    const uncertainty = current * place.uncertainty;
+    const verdict = judge(value, uncertainty, limit);
+    const worst: WorstTouch = {
+      worst_V: value,
+      uncertainty_V: uncertainty,
+      x_m: place.x,
+      y_m: place.y,
+      on_covering: zone.footing === 'covering',
+      limit_V: limit,
+      within_limit: verdict.withinLimit,
+      margin_percent: verdict.marginPercent,
+    };
+    return [{ place, verdict, worst }];
+  });
+  return judged.reduce((a, b) => (b.verdict.marginPercent < a.verdict.marginPercent ? b : a));
 }
 
 function undecided(name: string, quantity: string, verdict: Verdict): ResultsWarning[] {

@@ -1,11 +1,12 @@
 // What the soil's ignorance does to the answer: resistance, rise, touch and step voltage over the family of soils.
 import {
-  areaMask,
+  areaRegion,
   bandOf,
   type FamilyMember,
   interfaceDepths,
-  latticeMaxima,
+  latticeSummits,
   leakageMatrix,
+  regionMask,
   type SoilModel,
   segmentMesh,
   soilImages,
@@ -81,19 +82,17 @@ function strided<T>(list: readonly T[], count: number): T[] {
 }
 
 function placesOf(prepared: Prepared, solved: Solved): Places {
-  const { touch, worstTouch } = solved.units[0]!;
-  const mask = areaMask(touch, prepared.touchArea);
-  const height = ([x, y]: readonly [number, number]): number => {
-    const i = Math.round((x - touch.x0) / touch.spacing);
-    const j = Math.round((y - touch.y0) / touch.spacing);
-    return Math.abs(touch.values[j * touch.nx + i]!);
-  };
-  const highest = latticeMaxima(touch, mask)
-    .sort((a, b) => height(b) - height(a))
-    .slice(0, PLACES);
+  const units = solved.units.flatMap((unit) => unit.zones);
+  const summits = latticeSummits(
+    solved.units[0]!.touch,
+    regionMask(solved.units[0]!.touch, areaRegion(prepared.touchArea)),
+  );
   return {
-    touch: [[worstTouch.x, worstTouch.y], ...highest],
-    step: solved.units.map(({ worstStep }) => [worstStep.from, worstStep.to] as const),
+    touch: [
+      ...units.flatMap(({ touch }) => (touch === undefined ? [] : [[touch.x, touch.y] as const])),
+      ...summits.slice(0, PLACES),
+    ],
+    step: units.flatMap(({ step }) => (step === undefined ? [] : [[step.from, step.to] as const])),
   };
 }
 

@@ -54,8 +54,15 @@ export function segmentTable(solved: Solved): SegmentTable {
   };
 }
 
-export function caseFigures(name: string, current: number, unit: UnitField, box: Box): CaseFigures {
-  return { name, map: caseMap(current, unit), profile: caseProfile(current, unit, box) };
+/** @param through place of the worst touch voltage, m */
+export function caseFigures(
+  name: string,
+  current: number,
+  unit: UnitField,
+  box: Box,
+  through: { readonly x: number; readonly y: number },
+): CaseFigures {
+  return { name, map: caseMap(current, unit), profile: caseProfile(current, unit, box, through) };
 }
 
 function caseMap(current: number, unit: UnitField): CaseMap {
@@ -76,8 +83,13 @@ function caseMap(current: number, unit: UnitField): CaseMap {
 }
 
 /** Through the worst touch voltage, along the longer side of the plan. */
-function caseProfile(current: number, unit: UnitField, box: Box): CaseFigures['profile'] {
-  const { x, y } = unit.worstTouch;
+function caseProfile(
+  current: number,
+  unit: UnitField,
+  box: Box,
+  through: { readonly x: number; readonly y: number },
+): CaseFigures['profile'] {
+  const { x, y } = through;
   const eastward = box.east - box.west >= box.north - box.south;
   const from: [number, number] = eastward ? [box.west, y] : [x, box.south];
   const to: [number, number] = eastward ? [box.east, y] : [x, box.north];

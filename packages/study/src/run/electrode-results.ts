@@ -1,6 +1,7 @@
 // Each electrode by name: its potential and net leakage per ampere injected, and the touch voltage on floating metal.
 import {
   type ConductorTable,
+  insideArea,
   isRod,
   nearestNode,
   refinementUncertainty,
@@ -38,25 +39,25 @@ function electrodeResult(
   const levels = pieces.map((component) => {
     // nodes of the joints come first in every mesh, so that one index serves the coarse and the fine one
     const node = prepared.joints.nodeComponent.indexOf(component);
-    return {
-      component,
-      ratio: fine.nodePotential[node]! / fine.resistance,
-      coarse: solved.coarse.units[0]!.nodePotential[node]! / solved.coarse.units[0]!.resistance,
-    };
+    return solved.series.map(
+      ({ graph }) => graph.units[0]!.nodePotential[node]! / graph.units[0]!.resistance,
+    );
   });
-  const highest = levels.reduce((a, b) => (Math.abs(b.ratio) > Math.abs(a.ratio) ? b : a));
+  const highest = levels.reduce((a, b) => (Math.abs(b.at(-1)!) > Math.abs(a.at(-1)!) ? b : a));
   const touch = energised ? undefined : floatingTouch(prepared, solved, table, members, pieces);
   return {
     name: table.electrode[members[0]!]!,
     role: energised ? 'energised' : 'floating',
     piece_count: pieces.length,
-    potential_ratio: energised ? 1 : highest.ratio,
-    potential_uncertainty_ratio: energised ? 0 : refinementUncertainty(highest.coarse, highest.ratio, 1),
+    potential_ratio: highest.at(-1)!,
+    potential_uncertainty_ratio: refinementUncertainty(highest, 1),
     leakage_ratio: leakage,
     conductor_count: members.length,
     rod_count: members.filter((i) => isRod(table, i)).length,
     conductor_length_m: members.reduce((sum, i) => sum + conductorLength(table, i), 0),
     touch_ratio: touch?.ratio ?? null,
+    touch_uncertainty_ratio: touch?.uncertainty ?? null,
+    touch_on_covering: touch?.onCovering ?? null,
     touch_x_m: touch?.x ?? null,
     touch_y_m: touch?.y ?? null,
   };
@@ -69,15 +70,33 @@ function floatingTouch(
   table: ConductorTable,
   members: readonly number[],
   pieces: readonly number[],
-): { ratio: number; x: number; y: number } {
+): { ratio: number; uncertainty: number; x: number; y: number; onCovering: boolean } {
+  const voltageOn = (at: number, component: number): ((x: number, y: number) => number) => {
+    const { graph, fields } = solved.series.at(at)!;
+    const nearest = nearestNode(graph.mesh, component);
+    const { nodePotential, resistance } = graph.units[0]!;
+    return (x, y) => (nodePotential[nearest(x, y)]! - fields[0]!.surface(x, y)) / resistance;
+  };
   const fine = solved.graph.units[0]!;
   const worst = pieces.map((component) => {
     const nearest = nearestNode(solved.mesh, component);
     const lines = members
       .filter((i) => prepared.componentOf[i] === component)
       .map((i) => [table.x1[i]!, table.y1[i]!, table.x2[i]!, table.y2[i]!] as const);
-    return worstTouchNearLines(lines, solved.units[0]!.surface, (x, y) => fine.nodePotential[nearest(x, y)]!);
+    const place = worstTouchNearLines(
+      lines,
+      solved.units[0]!.surface,
+      (x, y) => fine.nodePotential[nearest(x, y)]!,
+    );
+    return { component, ...place };
   });
   const most = worst.reduce((a, b) => (b.value > a.value ? b : a));
-  return { ratio: most.signed / fine.resistance, x: most.x, y: most.y };
+  const seen = solved.series.map((_, level) => voltageOn(level, most.component)(most.x, most.y));
+  return {
+    ratio: most.signed / fine.resistance,
+    uncertainty: refinementUncertainty(seen, 1),
+    x: most.x,
+    y: most.y,
+    onCovering: prepared.coveringArea !== undefined && insideArea(prepared.coveringArea, most.x, most.y),
+  };
 }

@@ -1,54 +1,43 @@
 // Solves the graph on ever finer meshes until refinement moves the headline numbers little enough.
 import {
-  adaptiveLattices,
-  areaMask,
-  type Box,
   type GraphSolution,
   interfaceDepths,
-  type Lattice,
   leakageOperator,
-  type MetalPotential,
   MODEL_FLOOR,
-  type NearestNode,
-  nearestNode,
-  nodesReached,
-  onePotential,
   refinementUncertainty,
   type SegmentMesh,
   type SoilImages,
-  type SurfacePotential,
-  type SurfacePotentials,
   segmentMesh,
   soilImages,
   solveGraph,
-  stepLattice,
-  surfacePotentials,
-  touchLattice,
   type WorstPlace,
   type WorstStep,
-  worstStep,
-  worstTouch,
 } from '@ohmstead/core';
 import { InputFaults } from '../fault.ts';
+import { DEFAULT_METAL_MODEL } from '../input/defaults.ts';
 import { STUDY_FILE } from '../input/read-study-json.ts';
 import type { MeshLevel } from '../results.ts';
-import { assessedBox, lineReach } from './extent.ts';
+import { assessedBox } from './extent.ts';
+import { type Field, type Level, levelOf, stepAt, touchAt } from './level.ts';
+import { type Found, look } from './look.ts';
 import type { Prepared } from './prepare.ts';
+import type { Footing } from './zones.ts';
+
+/** A worst place with its numerical uncertainty. */
+export type Uncertain<T> = T & { readonly uncertainty: number };
+
+export interface ZoneWorst {
+  readonly footing: Footing;
+  readonly touch: Uncertain<WorstPlace> | undefined;
+  readonly step: Uncertain<WorstStep> | undefined;
+}
 
 /** The response to one ampere at one place of injection: fields in Ω (V/A). */
-export interface UnitField {
+export interface UnitField extends Omit<Found, 'zones'>, Field {
   readonly injectionNode: number;
-  readonly surface: SurfacePotential;
-  readonly metal: MetalPotential;
-  readonly potential: Lattice;
-  readonly touch: Lattice;
-  readonly step: Lattice;
-  readonly worstTouch: WorstPlace;
-  readonly worstStep: WorstStep;
   readonly resistance: number;
   readonly resistanceUncertainty: number;
-  readonly touchUncertainty: number;
-  readonly stepUncertainty: number;
+  readonly zones: readonly ZoneWorst[];
 }
 
 export interface Solved {
@@ -59,19 +48,22 @@ export interface Solved {
   readonly units: readonly UnitField[];
   /** case → index into units */
   readonly unitOfCase: readonly number[];
-  /** one coarser solution, kept for the uncertainty of other quantities */
-  readonly coarse: GraphSolution;
+  /** every mesh solved, coarse to fine, the last being the one above */
+  readonly series: readonly Level[];
   readonly levels: readonly MeshLevel[];
 }
 
 export type Progress = (stage: string, share: number) => void;
 
-/** Refinement goes on while the uncertainty is above these: of the resistance, of the touch voltage. */
+/** Refinement goes on while an uncertainty is above these: of the resistance, of touch and of step voltage. */
 const RESISTANCE_TARGET = 2e-3;
 const TOUCH_TARGET = 1e-2;
+const STEP_TARGET = 2e-2;
 /** A next level is not begun when it would need more segments than this: about a second of one core. */
 const SEGMENT_CEILING = 4000;
-const LAST_LEVEL = 5;
+/** Meshes that show a ratio of changes. */
+const WANTED_LEVELS = 3;
+const LAST_LEVEL = 6;
 /** Most segments of the second mesh, which every study needs: a compressed leakage matrix of 0.4 GB and about a minute of one core. */
 const MOST_SEGMENTS = 60_000;
 /** Memory that a large electrode takes, a segment: 5.5 kB of compressed matrix were seen at 52 000, and the mesh besides. */
@@ -84,6 +76,8 @@ const SCOUT = 2;
 /** Largest interpolation error of a map, of the rise. */
 const MAP_TOLERANCE = 2e-3;
 const SCOUT_TOLERANCE = 1e-2;
+/** The map must also show the worst touch and step voltage found by the scout, to this share of them. */
+const MAP_SHARE = 0.02;
 
 export function solveLevels(prepared: Prepared, progress: Progress): Solved {
   const images = soilImages(prepared.soil);
@@ -101,7 +95,7 @@ export function solveLevels(prepared: Prepared, progress: Progress): Solved {
   const at = (level: number): Level => {
     progress('solving the graph', level / (LAST_LEVEL + 2));
     const mesh = meshAt(level);
-    const model = prepared.loaded.study.metal_model ?? 'resistive';
+    const model = prepared.loaded.study.metal_model ?? DEFAULT_METAL_MODEL;
     const graph = solveGraph(
       mesh,
       leakageOperator(mesh, images),
@@ -111,37 +105,38 @@ export function solveLevels(prepared: Prepared, progress: Progress): Solved {
     );
     return levelOf(images, graph, box);
   };
-  let coarse = at(0);
-  let fine = at(1);
-  const scouted = look(prepared, fine, box, spacing * SCOUT, SCOUT_TOLERANCE, 1)[0]!;
-  const levels = [summary(coarse, scouted), summary(fine, scouted)];
-  for (let level = 2; level <= LAST_LEVEL; level++) {
-    if (wellResolved(coarse, fine, scouted) || 2 * fine.mesh.count > SEGMENT_CEILING) break;
-    coarse = fine;
-    fine = at(level);
-    levels.push(summary(fine, scouted));
+  const series = [at(0), at(1)];
+  const scouted = look(prepared, series[1]!, box, spacing * SCOUT, SCOUT_TOLERANCE, 1)[0]!;
+  while (series.length <= LAST_LEVEL && 2 * series.at(-1)!.graph.mesh.count <= SEGMENT_CEILING) {
+    if (series.length >= WANTED_LEVELS && wellResolved(series, scouted)) break;
+    series.push(at(series.length));
   }
+  const fine = series.at(-1)!;
   progress('mapping the surface', (LAST_LEVEL + 1) / (LAST_LEVEL + 2));
-  const units = look(prepared, fine, box, spacing, MAP_TOLERANCE, distinct.length).map(
-    (unit, u): UnitField => {
-      const coarser = coarse.fields[u]!;
-      const r = unit.resistance;
-      return {
-        ...unit,
-        resistanceUncertainty: refinementUncertainty(coarse.graph.units[u]!.resistance, r, r),
-        touchUncertainty: refinementUncertainty(touchAt(coarser, unit.worstTouch), unit.worstTouch.value, r),
-        stepUncertainty: refinementUncertainty(stepAt(coarser, unit.worstStep), unit.worstStep.value, r),
-      };
-    },
-  );
+  const tolerance = mapTolerance(scouted, fine.graph.units[0]!.resistance);
+  const units = look(prepared, fine, box, spacing, tolerance, distinct.length).map((found, u): UnitField => {
+    const { resistance, injectionNode } = fine.graph.units[u]!;
+    return {
+      ...fine.fields[u]!,
+      ...found,
+      injectionNode,
+      resistance,
+      resistanceUncertainty: refinementUncertainty(resistances(series, u), resistance),
+      zones: found.zones.map(({ footing, touch, step }) => ({
+        footing,
+        touch: touch && { ...touch, uncertainty: touchUncertainty(series, u, touch) },
+        step: step && { ...step, uncertainty: stepUncertainty(series, u, step) },
+      })),
+    };
+  });
   return {
     images,
-    mesh: fine.mesh,
+    mesh: fine.graph.mesh,
     graph: fine.graph,
     units,
     unitOfCase: prepared.injectionNodes.map((node) => distinct.indexOf(node)),
-    coarse: coarse.graph,
-    levels,
+    series,
+    levels: series.map((level) => summary(level, scouted)),
   };
 }
 
@@ -159,112 +154,56 @@ function refuseBeyondMemory(segments: number): void {
   ]);
 }
 
-interface Level {
-  readonly mesh: SegmentMesh;
-  readonly graph: GraphSolution;
-  readonly surfaces: SurfacePotentials;
-  /** one a unit of the graph */
-  readonly fields: readonly Field[];
+function resistances(series: readonly Level[], u: number): number[] {
+  return series.map((level) => level.graph.units[u]!.resistance);
 }
 
-interface Field {
-  readonly surface: SurfacePotential;
-  readonly metal: MetalPotential;
-  /** piece of metal that is energised */
-  readonly component: number;
-  readonly nearest: NearestNode;
+function touchUncertainty(series: readonly Level[], u: number, place: WorstPlace): number {
+  const values = series.map((level) => touchAt(level.fields[u]!, place));
+  return refinementUncertainty(values, series.at(-1)!.graph.units[u]!.resistance);
 }
 
-type Found = Omit<UnitField, 'resistanceUncertainty' | 'touchUncertainty' | 'stepUncertainty'>;
-
-function levelOf(images: SoilImages, graph: GraphSolution, box: Box): Level {
-  const { mesh, units } = graph;
-  const leakages = units.map((unit) => unit.leakage);
-  const surfaces = surfacePotentials(mesh, images, leakages, lineReach(mesh, box));
-  const nearestOf = new Map<number, NearestNode>();
-  const fields = units.map((unit, u): Field => {
-    const component = mesh.nodeComponent[unit.injectionNode]!;
-    const nearest = nearestOf.get(component) ?? nearestNode(mesh, component);
-    nearestOf.set(component, nearest);
-    return {
-      surface: onePotential(surfaces, u),
-      metal: (x, y) => unit.nodePotential[nearest(x, y)]!,
-      component,
-      nearest,
-    };
-  });
-  return { mesh, graph, surfaces, fields };
+function stepUncertainty(series: readonly Level[], u: number, place: WorstStep): number {
+  const values = series.map((level) => stepAt(level.fields[u]!, place));
+  return refinementUncertainty(values, series.at(-1)!.graph.units[u]!.resistance);
 }
 
-/** Maps and worst places of the first units on one mesh. */
-function look(
-  prepared: Prepared,
-  level: Level,
-  box: Box,
-  spacing: number,
-  tolerance: number,
-  count: number,
-): Found[] {
-  const { surfaces, graph } = level;
-  const fields = level.fields.slice(0, count);
-  const tolerances = graph.units.map((unit) => tolerance * unit.resistance);
-  const maps = adaptiveLattices(surfaces.at, tolerances, box, spacing);
-  const touchMask = areaMask(maps[0]!, prepared.touchArea);
-  const stepMask = areaMask(maps[0]!, prepared.stepArea);
-  const reached = new Map<number, Int32Array>();
-  return fields.map(({ surface, metal, component, nearest }, u) => {
-    const potential = maps[u]!;
-    const { resistance, injectionNode, nodePotential } = graph.units[u]!;
-    const nodes = reached.get(component) ?? nodesReached(potential, nearest);
-    reached.set(component, nodes);
-    const touch = touchLattice(potential, (place) => nodePotential[nodes[place]!]!);
-    const step = stepLattice(potential);
-    return {
-      injectionNode,
-      surface,
-      metal,
-      potential,
-      touch,
-      step,
-      worstTouch: worstTouch(touch, touchMask, surface, metal, prepared.touchArea),
-      worstStep: worstStep(step, stepMask, surface, prepared.stepArea),
-      resistance,
-    };
-  });
-}
-
-function touchAt(field: Field, place: WorstPlace): number {
-  return Math.abs(field.metal(place.x, place.y) - field.surface(place.x, place.y));
-}
-
-function stepAt(field: Field, place: WorstStep): number {
-  return Math.abs(field.surface(place.from[0], place.from[1]) - field.surface(place.to[0], place.to[1]));
-}
-
-/** Whether the last refinement moved every unit's resistance, and its touch voltage at the place found, little enough. */
-function wellResolved(coarse: Level, fine: Level, found: Found): boolean {
-  return fine.graph.units.every(({ resistance }, u) => {
-    const change = refinementUncertainty(coarse.graph.units[u]!.resistance, resistance, resistance);
-    const touch = touchAt(fine.fields[u]!, found.worstTouch);
-    const touchChange = refinementUncertainty(
-      touchAt(coarse.fields[u]!, found.worstTouch),
-      touch,
-      resistance,
-    );
+/** Whether every unit's resistance, and the voltages at the places found, are known well enough. */
+function wellResolved(series: readonly Level[], found: Found): boolean {
+  return series.at(-1)!.graph.units.every(({ resistance }, u) => {
+    const field = series.at(-1)!.fields[u]!;
+    const floor = MODEL_FLOOR * resistance;
     return (
-      change <= RESISTANCE_TARGET * resistance &&
-      touchChange <= TOUCH_TARGET * touch + MODEL_FLOOR * resistance
+      refinementUncertainty(resistances(series, u), resistance) <= RESISTANCE_TARGET * resistance &&
+      found.zones.every(
+        ({ touch, step }) =>
+          (touch === undefined ||
+            touchUncertainty(series, u, touch) <= TOUCH_TARGET * touchAt(field, touch) + floor) &&
+          (step === undefined ||
+            stepUncertainty(series, u, step) <= STEP_TARGET * stepAt(field, step) + floor),
+      )
     );
   });
+}
+
+/** Largest interpolation error of the final map, of the rise: small against the worst voltages too. */
+function mapTolerance(scouted: Found, resistance: number): number {
+  const voltages = scouted.zones
+    .flatMap(({ touch, step }) => [touch?.value, step?.value])
+    .filter((v) => v !== undefined);
+  return Math.min(MAP_TOLERANCE, (MAP_SHARE * Math.min(...voltages)) / resistance);
 }
 
 /** What the first place of injection reads on one mesh, at the worst places found. */
 function summary(level: Level, found: Found): MeshLevel {
-  const resistance = level.graph.units[0]!.resistance;
+  const { resistance } = level.graph.units[0]!;
+  const field = level.fields[0]!;
+  const most = (values: readonly (number | undefined)[]): number =>
+    Math.max(0, ...values.filter((v) => v !== undefined));
   return {
-    segment_count: level.mesh.count,
+    segment_count: level.graph.mesh.count,
     resistance_ohm: resistance,
-    worst_touch_ratio: touchAt(level.fields[0]!, found.worstTouch) / resistance,
-    worst_step_ratio: stepAt(level.fields[0]!, found.worstStep) / resistance,
+    worst_touch_ratio: most(found.zones.map(({ touch }) => touch && touchAt(field, touch))) / resistance,
+    worst_step_ratio: most(found.zones.map(({ step }) => step && stepAt(field, step))) / resistance,
   };
 }

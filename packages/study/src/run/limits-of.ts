@@ -2,6 +2,7 @@
 import { coveringDeratingFactor, tolerableStepVoltage, tolerableTouchVoltage } from '@ohmstead/core';
 import type { LimitsResult } from '../results.ts';
 import type { Study } from '../study.ts';
+import type { Footing } from './zones.ts';
 
 /** @param soil resistivity of the top layer, Ω·m */
 export function limitsOf(study: Study, soil: number): LimitsResult {
@@ -26,14 +27,14 @@ export interface CaseLimits {
   readonly step: number;
 }
 
-/** @param duration of the shock, s */
-export function caseLimits(limits: LimitsResult, duration: number): CaseLimits {
-  const footing = {
-    resistivity: limits.surfacing_resistivity_ohm_m ?? limits.soil_resistivity_ohm_m,
-    coveringFactor: limits.covering_factor,
-  };
+/** Tolerable voltages where people stand on the covering, or on bare soil. @param duration of the shock, s */
+export function caseLimits(limits: LimitsResult, duration: number, footing: Footing): CaseLimits {
+  const under =
+    footing === 'covering' && limits.surfacing_resistivity_ohm_m !== null
+      ? { resistivity: limits.surfacing_resistivity_ohm_m, coveringFactor: limits.covering_factor }
+      : { resistivity: limits.soil_resistivity_ohm_m, coveringFactor: 1 };
   return {
-    touch: tolerableTouchVoltage(limits.body_mass_kg, duration, footing),
-    step: tolerableStepVoltage(limits.body_mass_kg, duration, footing),
+    touch: tolerableTouchVoltage(limits.body_mass_kg, duration, under),
+    step: tolerableStepVoltage(limits.body_mass_kg, duration, under),
   };
 }

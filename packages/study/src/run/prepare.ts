@@ -13,6 +13,8 @@ import { type Fault, InputFaults } from '../fault.ts';
 import { STUDY_FILE } from '../input/read-study-json.ts';
 import type { ResultsWarning } from '../results.ts';
 import type { LayerInput, LoadedStudy, Polygon } from '../study.ts';
+import { drawingDoubts } from './drawing-doubts.ts';
+import { listed } from './listed.ts';
 
 export interface Prepared {
   readonly loaded: LoadedStudy;
@@ -28,6 +30,10 @@ export interface Prepared {
   readonly resistancePerMetre: Float64Array;
   readonly touchArea: readonly Polygon[];
   readonly stepArea: readonly Polygon[];
+  /** where the covering lies; undefined where there is none */
+  readonly coveringArea: readonly Polygon[] | undefined;
+  /** places by the metal where a map may miss a peak, free ends and shallow metal first */
+  readonly metalPlaces: readonly (readonly [number, number])[];
   readonly assumptions: readonly ResultsWarning[];
   readonly warnings: readonly ResultsWarning[];
 }
@@ -59,6 +65,7 @@ export function prepare(loaded: LoadedStudy, soil: SoilModel): Prepared {
   const injectionNodes = study.cases.map((_, c) =>
     injectionNode(loaded, joints, candidates, c, assumptions, warnings),
   );
+  refuseSeparateInjections(loaded, joints, injectionNodes);
   const energised = new Set(injectionNodes.map((node) => joints.nodeComponent[node]!));
   warnings.push(...unjoined(conductors, componentOf, energised, floating), ...nearMisses(conductors, joints));
 
@@ -77,6 +84,19 @@ export function prepare(loaded: LoadedStudy, soil: SoilModel): Prepared {
       code: 'step-area-default',
       message: 'step is assessed inside the same boundary grown by 3 m',
     });
+  const touchArea = study.areas?.touch ?? areas.touch;
+  const coveringArea = study.surfacing === undefined ? undefined : (study.surfacing.areas ?? touchArea);
+  if (study.surfacing !== undefined && study.surfacing.areas === undefined)
+    assumptions.push({
+      code: 'covering-area-default',
+      message:
+        'the covering is taken to lie in the touch area and nowhere else: beyond it people stand on bare soil',
+    });
+  warnings.push(...drawingDoubts(conductors, joints, energised, componentOf, touchArea));
+  assumptions.push({
+    code: 'metal-cold-direct-current',
+    message: 'metal has its direct-current resistance at 20 °C',
+  });
   return {
     loaded,
     soil,
@@ -85,11 +105,42 @@ export function prepare(loaded: LoadedStudy, soil: SoilModel): Prepared {
     injectionNodes,
     energised,
     resistancePerMetre: resistances(conductors),
-    touchArea: study.areas?.touch ?? areas.touch,
+    touchArea,
     stepArea: study.areas?.step ?? areas.step,
+    coveringArea,
+    metalPlaces: metalPlaces(joints),
     assumptions,
     warnings,
   };
+}
+
+/** Every case must enter the same piece of metal: areas and roles are those of one energised electrode. */
+function refuseSeparateInjections(loaded: LoadedStudy, joints: Joints, nodes: readonly number[]): void {
+  const [first] = nodes;
+  const faults = nodes.flatMap((node, c): Fault[] =>
+    joints.nodeComponent[node] === joints.nodeComponent[first!]
+      ? []
+      : [
+          {
+            file: STUDY_FILE,
+            place: `cases[${c}].inject`,
+            code: 'separate-injections',
+            message: `case ${loaded.study.cases[c]!.name} enters metal that nothing joins to that of case ${loaded.study.cases[0]!.name}; give each its own study, with the other electrode floating`,
+          },
+        ],
+  );
+  if (faults.length > 0) throw new InputFaults(faults);
+}
+
+/** Most places by the metal that a search looks at. */
+const MOST_METAL_PLACES = 300;
+
+function metalPlaces(joints: Joints): (readonly [number, number])[] {
+  const rank = (node: number): number => (joints.nodeDegree[node] === 1 ? -1 : joints.nodeDepth[node]!);
+  return Array.from({ length: joints.nodeCount }, (_, node) => node)
+    .sort((a, b) => rank(a) - rank(b) || a - b)
+    .slice(0, MOST_METAL_PLACES)
+    .map((node) => [joints.nodeX[node]!, joints.nodeY[node]!] as const);
 }
 
 function located(fault: ConductorFault, loaded: LoadedStudy): Fault {
@@ -144,10 +195,11 @@ function injectionNode(
   warnings: ResultsWarning[],
 ): number {
   const given = loaded.study.cases[at]!;
-  const place = given.inject ?? centroid(joints, candidates);
-  let best = candidates[0]!;
+  const allowed = given.inject === undefined ? ofLargestPiece(joints, candidates) : candidates;
+  const place = given.inject ?? centroid(joints, allowed);
+  let best = allowed[0]!;
   let least = Number.POSITIVE_INFINITY;
-  for (const node of candidates) {
+  for (const node of allowed) {
     const distance = Math.hypot(
       joints.nodeX[node]! - place.x_m,
       joints.nodeY[node]! - place.y_m,
@@ -170,6 +222,25 @@ function injectionNode(
       message: `case ${given.name}: the nearest node of the energised metal, ${where}, is ${least.toFixed(2)} m from the place of injection given`,
     });
   return best;
+}
+
+/** Nodes of the piece with the most metal: a loose scrap must not become the electrode. */
+function ofLargestPiece(joints: Joints, nodes: readonly number[]): readonly number[] {
+  const lengths = new Map<number, number>();
+  for (let piece = 0; piece < joints.pieceCount; piece++) {
+    const a = joints.pieceNode1[piece]!;
+    const b = joints.pieceNode2[piece]!;
+    const component = joints.nodeComponent[a]!;
+    const length = Math.hypot(
+      joints.nodeX[b]! - joints.nodeX[a]!,
+      joints.nodeY[b]! - joints.nodeY[a]!,
+      joints.nodeDepth[b]! - joints.nodeDepth[a]!,
+    );
+    lengths.set(component, (lengths.get(component) ?? 0) + length);
+  }
+  const lengthOf = (node: number): number => lengths.get(joints.nodeComponent[node]!) ?? 0;
+  const longest = nodes.reduce((most, node) => Math.max(most, lengthOf(node)), 0);
+  return nodes.filter((node) => lengthOf(node) === longest);
 }
 
 function centroid(joints: Joints, nodes: readonly number[]): { x_m: number; y_m: number; depth_m: number } {
@@ -215,13 +286,6 @@ function nearMisses(table: ConductorTable, joints: Joints): ResultsWarning[] {
     code: 'near-miss',
     message: `an end of ${table.id[miss.conductor]!} stops ${(1000 * miss.distance).toFixed(0)} mm short of ${table.id[miss.other]!} at (${miss.x.toFixed(2)}, ${miss.y.toFixed(2)}) m: taken as not joined`,
   }));
-}
-
-const LISTED_IDS = 8;
-
-function listed(ids: readonly string[]): string {
-  const shown = ids.slice(0, LISTED_IDS).join(', ');
-  return ids.length > LISTED_IDS ? `${shown} and ${ids.length - LISTED_IDS} more` : shown;
 }
 
 function resistances(table: ConductorTable): Float64Array {

@@ -39,7 +39,12 @@ export function solveStudy(loaded: LoadedStudy, options: SolveOptions = {}): Out
     results: resultsOf(prepared, solved, limits, cases, seasonResults(prepared, progress), ground, progress),
     plan: planOf(prepared),
     segments: segmentTable(solved),
-    cases: cases.map(({ result }, c) => caseFigures(result.name, result.grid_current_A, unitOf(c), box)),
+    cases: cases.map(({ result }, c) =>
+      caseFigures(result.name, result.grid_current_A, unitOf(c), box, {
+        x: result.touch.x_m,
+        y: result.touch.y_m,
+      }),
+    ),
   };
 }
 
@@ -109,8 +114,8 @@ function resultsOf(
     assumptions: [...loaded.notes, ...prepared.assumptions],
     warnings: [
       ...prepared.warnings,
-      ...groundDoubts(prepared),
-      ...doubts(loaded),
+      ...groundDoubts(prepared, ground),
+      ...doubts(loaded, prepared.soil.layers[0]!.resistivity),
       ...cases.flatMap(({ warnings }) => warnings),
     ],
   };
@@ -130,20 +135,43 @@ function usedImages(solved: Solved): { count: number; error: number } {
   return { count, error };
 }
 
-/** Doubts about the survey against the electrode that it is used for. */
-function groundDoubts({ loaded, joints }: Prepared): readonly ResultsWarning[] {
-  if (loaded.survey === undefined) return [];
+/** Doubts about the survey itself, and about it against the electrode that it is used for. */
+function groundDoubts({ loaded, joints, energised }: Prepared, ground: Ground): readonly ResultsWarning[] {
+  if (loaded.survey === undefined || ground.fitted === undefined) return [];
+  const nodes = Array.from({ length: joints.nodeCount }, (_, n) => n).filter((n) =>
+    energised.has(joints.nodeComponent[n]!),
+  );
   const extent = (values: Float64Array): number =>
-    values.reduce((a, b) => Math.max(a, b)) - values.reduce((a, b) => Math.min(a, b));
-  return spacingDoubts(loaded.survey.readings, Math.hypot(extent(joints.nodeX), extent(joints.nodeY)));
+    nodes.reduce((most, n) => Math.max(most, values[n]!), Number.NEGATIVE_INFINITY) -
+    nodes.reduce((least, n) => Math.min(least, values[n]!), Number.POSITIVE_INFINITY);
+  const shallowest = nodes.reduce(
+    (least, n) => Math.min(least, joints.nodeDepth[n]!),
+    Number.POSITIVE_INFINITY,
+  );
+  const diagonal = Math.hypot(extent(joints.nodeX), extent(joints.nodeY));
+  return [
+    ...ground.fitted.fit.doubts,
+    ...spacingDoubts(loaded.survey.readings, diagonal, shallowest > 0 ? shallowest : undefined),
+  ];
 }
 
-function doubts(loaded: LoadedStudy): ResultsWarning[] {
-  if (loaded.study.surfacing === undefined) return [];
+function doubts(loaded: LoadedStudy, soil: number): ResultsWarning[] {
+  const { surfacing } = loaded.study;
+  if (surfacing === undefined) return [];
+  const poor: ResultsWarning[] =
+    surfacing.resistivity_ohm_m >= soil
+      ? []
+      : [
+          {
+            code: 'soil-more-resistive-than-covering',
+            message: `the covering, ${surfacing.resistivity_ohm_m} Ω·m, conducts better than the soil under it, ${soil} Ω·m: the covering factor is held at 1`,
+          },
+        ];
   return [
+    ...poor,
     {
       code: 'surfacing-assumed-wet',
-      message: `the covering is taken at ${loaded.study.surfacing.resistivity_ohm_m} Ω·m in its worst, wet state and present over the whole assessed area`,
+      message: `the covering is taken at ${surfacing.resistivity_ohm_m} Ω·m in its worst, wet state and present wherever it is said to lie`,
     },
   ];
 }

@@ -1,6 +1,7 @@
 // Field readings → layered soil with the family of soils that the readings allow, as the results tell it.
 import {
   bandOf,
+  FAMILY_METHOD,
   type FamilyMember,
   type FittedSurvey,
   type FourPinArray,
@@ -81,7 +82,7 @@ export function fitSurvey(survey: LoadedSurvey, layerCount: number | 'auto'): Su
       family: {
         count: family.members.length,
         seed: SEED,
-        method: 'posterior of log-parameters, affine-invariant ensemble sampler (Goodman and Weare 2010)',
+        method: FAMILY_METHOD,
       },
       resolved_depth_m: Math.max(...readings.map((reading) => medianDepth(reading.array))),
       resolved_depth_rule: 'median depth of investigation of the longest array (Edwards 1977)',

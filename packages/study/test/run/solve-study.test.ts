@@ -101,6 +101,93 @@ describe('solving a study', () => {
     expect(lines[0]).toMatch(/^conductors\.csv:8: 7: /);
   });
 
+  it('does not take a scrap near the centroid for the electrode', () => {
+    const scrap: Bar = { from: [4, 4, 0.5], to: [6, 4, 0.5], radius: 0.005 };
+    const { results } = solveStudy(studyOf([...grid, scrap], [[100]]));
+    const alone = solveStudy(studyOf(grid, [[100]])).results.electrode.resistance_ohm;
+    expect(Math.abs(results.electrode.resistance_ohm / alone - 1)).toBeLessThan(1e-2);
+    expect(results.electrodes.map((e) => [e.role, e.conductor_count])).toEqual([
+      ['energised', 6],
+      ['floating', 1],
+    ]);
+  });
+
+  it('refuses cases that enter separate electrodes, naming the case', () => {
+    const away = gridBars(10, 10, 1, 1, 0.5, 0.005).map(
+      (b): Bar => ({
+        ...b,
+        from: [b.from[0] + 60, b.from[1], b.from[2]],
+        to: [b.to[0] + 60, b.to[1], b.to[2]],
+      }),
+    );
+    const cases = [
+      { name: 'here', grid_current_A: 1, duration_s: 0.5, inject: { x_m: 0, y_m: 0, depth_m: 0.5 } },
+      { name: 'there', grid_current_A: 1, duration_s: 0.5, inject: { x_m: 60, y_m: 0, depth_m: 0.5 } },
+    ];
+    expect(faultsOf(() => solveStudy(studyOf([...grid, ...away], [[100]], { cases })))).toEqual([
+      'study.json: cases[1].inject: case there enters metal that nothing joins to that of case here; give each its own study, with the other electrode floating',
+    ]);
+  });
+
+  it('assesses areas that lie between the points of its map', () => {
+    const square = [[[3.1, 3.1], [3.3, 3.1], [3.3, 3.3], [3.1, 3.3]]] as const; // biome-ignore format: a square
+    const { touch, step } = solveStudy(studyOf(grid, [[100]], { areas: { touch: square, step: square } }))
+      .results.cases[0]!;
+    for (const { x_m, y_m } of [touch, step]) {
+      expect(x_m).toBeGreaterThanOrEqual(3.1 - 1e-9);
+      expect(y_m).toBeLessThanOrEqual(3.3 + 1e-9);
+    }
+    expect(touch.worst_V).toBeGreaterThan(0);
+  });
+
+  it('judges by the covering where it lies and by bare soil elsewhere', () => {
+    const cases = [{ name: 'fault', grid_current_A: 300, duration_s: 0.5 }];
+    const bare = solveStudy(studyOf(grid, [[100]], { cases })).results.cases[0]!;
+    const loaded = studyOf(grid, [[100]], { cases });
+    const surfaced = (areas?: typeof loaded.study.areas) => ({
+      ...loaded,
+      study: {
+        ...loaded.study,
+        surfacing: { resistivity_ohm_m: 3000, thickness_m: 0.1, areas: areas?.touch },
+      },
+    });
+    const covered = solveStudy(surfaced()).results.cases[0]!;
+    expect(covered.touch.on_covering).toBe(true);
+    expect(covered.touch.limit_V).toBeGreaterThan(2 * bare.touch.limit_V);
+    expect(covered.bare_touch_limit_V).toBe(bare.touch.limit_V);
+    // the worst pace leaves the covering, which ends at the grid's edge
+    expect(covered.step.on_covering).toBe(false);
+    expect(covered.step.limit_V).toBe(bare.step.limit_V);
+    const everywhere = [[[-9, -9], [29, -9], [29, 29], [-9, 29]]] as const; // biome-ignore format: a square
+    const wide = solveStudy(surfaced({ touch: everywhere })).results.cases[0]!;
+    expect(wide.step.on_covering).toBe(true);
+    expect(wide.step.limit_V).toBeGreaterThan(2 * bare.step.limit_V);
+  });
+
+  it('states an uncertainty that covers a mesh much finer, step voltage included, over a conducting layer near the grid', () => {
+    const bars = gridBars(60, 60, 2, 2, 0.5, 0.005);
+    const cut = bars.flatMap(({ from, to, radius }) =>
+      Array.from({ length: 24 }, (_, k): Bar => {
+        const at = (t: number): [number, number, number] => [
+          from[0] + (to[0] - from[0]) * t,
+          from[1] + (to[1] - from[1]) * t,
+          0.5,
+        ];
+        return { from: at(k / 24), to: at((k + 1) / 24), radius };
+      }),
+    );
+    const layers = [[100, 0.6], [5]] as const; // biome-ignore format: two layers
+    const coarse = solveStudy(studyOf(bars, layers)).results.cases[0]!;
+    const fine = solveStudy(studyOf(cut, layers)).results.cases[0]!;
+    expect(Math.abs(coarse.step.worst_V - fine.step.worst_V)).toBeLessThan(
+      coarse.step.uncertainty_V + fine.step.uncertainty_V,
+    );
+    expect(Math.abs(coarse.touch.worst_V - fine.touch.worst_V)).toBeLessThan(
+      coarse.touch.uncertainty_V + fine.touch.uncertainty_V,
+    );
+    expect(coarse.step.uncertainty_V / coarse.step.worst_V).toBeLessThan(0.05);
+  });
+
   it('refuses a study in which nothing bare is energised', () => {
     const loaded = studyOf(grid, [[100]]);
     loaded.conductors.insulated.fill(1);
