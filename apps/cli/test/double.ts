@@ -109,6 +109,8 @@ export const fence: ElectrodeResult = {
   touch_ratio: -0.4,
   touch_x_m: 1,
   touch_y_m: 2,
+  touch_uncertainty_ratio: 0.01,
+  touch_on_covering: false,
 };
 
 /** The example's results with everything within its limit. */

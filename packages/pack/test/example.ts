@@ -61,6 +61,7 @@ export function exampleSolve({ study }: LoadedStudy): Outcome {
     uncertainty_V: 1,
     x_m: 0.5,
     y_m: 0,
+    on_covering: false,
     limit_V: 800,
     within_limit: false,
     margin_percent: -12.5,
@@ -114,6 +115,10 @@ export function exampleSolve({ study }: LoadedStudy): Outcome {
         resistance_uncertainty_ohm: 0.1,
         gpr_V: 3330 + study.title.length,
         gpr_uncertainty_V: 10,
+        bare_touch_limit_V: 800,
+        bare_step_limit_V: 2700,
+        covering_touch_limit_V: null,
+        covering_step_limit_V: null,
         touch: worst,
         step: {
           ...worst,

@@ -41,9 +41,11 @@ export interface CaseResult {
   readonly resistance_uncertainty_ohm: number;
   readonly gpr_V: number;
   readonly gpr_uncertainty_V: number;
-  /** limits on bare soil, for places without covering */
+  /** limits on bare soil, and on the covering where there is one */
   readonly bare_touch_limit_V: number;
   readonly bare_step_limit_V: number;
+  readonly covering_touch_limit_V: number | null;
+  readonly covering_step_limit_V: number | null;
   readonly touch: WorstTouch;
   readonly step: WorstStep;
 }

@@ -62,6 +62,8 @@ export function caseResult(
       gpr_uncertainty_V: current * unit.resistanceUncertainty,
       bare_touch_limit_V: bare.touch,
       bare_step_limit_V: bare.step,
+      covering_touch_limit_V: limits.surfacing_resistivity_ohm_m === null ? null : covered.touch,
+      covering_step_limit_V: limits.surfacing_resistivity_ohm_m === null ? null : covered.step,
       touch: touch.worst,
       step: { ...step.worst, from: { x_m: from[0], y_m: from[1] }, to: { x_m: to[0], y_m: to[1] } },
     },

@@ -1,6 +1,13 @@
 // Seasonal variants of the soil: each solved as the study is, and which of them governs.
 import { type SoilModel, seasonalSoil } from '@ohmstead/core';
-import type { CaseResult, EnvelopeCase, SeasonCase, SeasonResult, WorstTouch } from '../results.ts';
+import type {
+  CaseResult,
+  EnvelopeCase,
+  ResultsWarning,
+  SeasonCase,
+  SeasonResult,
+  WorstTouch,
+} from '../results.ts';
 import type { SeasonInput } from '../study.ts';
 import { caseResult } from './case-results.ts';
 import { type Progress, solveLevels } from './levels.ts';
@@ -11,11 +18,17 @@ import { layersOf } from './soil-results.ts';
 /** Name under which the soil of the study itself stands in the envelope. */
 export const AS_GIVEN = 'as given';
 
-export function seasonResults(prepared: Prepared, progress: Progress): SeasonResult[] {
+/** A season's result with the doubts about its verdicts. */
+export interface Seasonal {
+  readonly result: SeasonResult;
+  readonly warnings: readonly ResultsWarning[];
+}
+
+export function seasonResults(prepared: Prepared, progress: Progress): Seasonal[] {
   return (prepared.loaded.study.seasons ?? []).map((season) => seasonResult(prepared, season, progress));
 }
 
-function seasonResult(prepared: Prepared, season: SeasonInput, progress: Progress): SeasonResult {
+function seasonResult(prepared: Prepared, season: SeasonInput, progress: Progress): Seasonal {
   const { study } = prepared.loaded;
   const soil = soilIn(season, prepared.soil);
   const solved = solveLevels({ ...prepared, soil }, (stage, share) =>
@@ -23,18 +36,29 @@ function seasonResult(prepared: Prepared, season: SeasonInput, progress: Progres
   );
   const limits = limitsOf(study, soil.layers[0]!.resistivity);
   const first = solved.units[solved.unitOfCase[0]!]!;
+  const cases = study.cases.map((input, c) =>
+    caseResult(input, solved.units[solved.unitOfCase[c]!]!, solved.mesh, limits),
+  );
   return {
-    name: season.name,
-    layers: layersOf(soil),
-    covering_factor: limits.covering_factor,
-    resistance_ohm: first.resistance,
-    resistance_uncertainty_ohm: first.resistanceUncertainty,
-    segment_count: solved.mesh.count,
-    cases: study.cases.map((input, c) => {
-      const { result } = caseResult(input, solved.units[solved.unitOfCase[c]!]!, solved.mesh, limits);
-      const { name, grid_current_A, gpr_V, gpr_uncertainty_V, touch, step } = result;
-      return { name, grid_current_A, gpr_V, gpr_uncertainty_V, touch, step };
-    }),
+    result: {
+      name: season.name,
+      layers: layersOf(soil),
+      covering_factor: limits.covering_factor,
+      resistance_ohm: first.resistance,
+      resistance_uncertainty_ohm: first.resistanceUncertainty,
+      segment_count: solved.mesh.count,
+      cases: cases.map(({ result: { name, grid_current_A, gpr_V, gpr_uncertainty_V, touch, step } }) => ({
+        name,
+        grid_current_A,
+        gpr_V,
+        gpr_uncertainty_V,
+        touch,
+        step,
+      })),
+    },
+    warnings: cases.flatMap(({ warnings }) =>
+      warnings.map(({ code, message }) => ({ code, message: `${season.name}: ${message}` })),
+    ),
   };
 }
 

@@ -1,7 +1,7 @@
 // The chain from a loaded study to everything that the sheet, the pack and the command line show.
 import { isRod, spacingDoubts } from '@ohmstead/core';
 import type { Outcome } from '../outcome.ts';
-import type { Results, ResultsWarning, SeasonResult } from '../results.ts';
+import type { Results, ResultsWarning } from '../results.ts';
 import type { LoadedStudy } from '../study.ts';
 import { programVersion } from '../version.ts';
 import { caseResult } from './case-results.ts';
@@ -15,7 +15,7 @@ import { type Progress, type Solved, solveLevels } from './levels.ts';
 import { limitsOf } from './limits-of.ts';
 import { type Prepared, prepare } from './prepare.ts';
 import { conductorLength, isEnergised } from './roles.ts';
-import { envelope, seasonResults } from './seasons.ts';
+import { envelope, type Seasonal, seasonResults } from './seasons.ts';
 import { layersOf } from './soil-results.ts';
 
 export interface SolveOptions {
@@ -53,11 +53,12 @@ function resultsOf(
   solved: Solved,
   limits: Results['limits'],
   cases: readonly ReturnType<typeof caseResult>[],
-  seasons: readonly SeasonResult[],
+  seasonal: readonly Seasonal[],
   ground: Ground,
   progress: Progress,
 ): Results {
   const base = cases.map(({ result }) => result);
+  const seasons = seasonal.map(({ result }) => result);
   const { loaded, joints } = prepared;
   const table = loaded.conductors;
   const energised = Array.from({ length: table.count }, (_, i) => i).filter((i) => isEnergised(prepared, i));
@@ -116,7 +117,7 @@ function resultsOf(
       ...prepared.warnings,
       ...groundDoubts(prepared, ground),
       ...doubts(loaded, prepared.soil.layers[0]!.resistivity),
-      ...cases.flatMap(({ warnings }) => warnings),
+      ...[...cases, ...seasonal].flatMap(({ warnings }) => warnings),
     ],
   };
 }

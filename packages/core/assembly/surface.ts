@@ -1,0 +1,211 @@
+// Potentials of the soil surface at many points: far boxes by their points, segments by Gauss points or closed form.
+import { logarithm, radialPair } from './radial';
+
+// Addresses and counts of one group of horizontal metal; written by `level` before points are asked for.
+let segments: usize = 0;
+let strength: usize = 0;
+let nodes: usize = 0;
+let all: usize = 0;
+let rest: usize = 0;
+let rule: usize = 0;
+let cases: i32 = 0;
+let perAll: f64 = 0;
+let perRest: f64 = 0;
+let ownWeight: f64 = 0;
+
+/** Doubles of one segment: centre, half vector, its square, two thresholds of distance², length, height² + radius². */
+const SEGMENT: usize = 80;
+/** Doubles of one box: centre, far distance², from, to, first half, second half, address of its points. */
+const NODE: usize = 64;
+
+/** Sums of the cases at one point: two lanes each, added at the end. */
+let sums: usize = 0;
+
+/** Adds the potentials of a group of horizontal metal at each point; `into` shape [points × cases]. */
+export function level(
+  segmentsAt: usize,
+  strengthAt: usize,
+  nodesAt: usize,
+  allAt: usize,
+  perAllSquare: f64,
+  restAt: usize,
+  perRestSquare: f64,
+  own: f64,
+  ruleAt: usize,
+  casesCount: i32,
+  sumsAt: usize,
+  xs: usize,
+  ys: usize,
+  points: i32,
+  into: usize,
+): void {
+  segments = segmentsAt;
+  strength = strengthAt;
+  nodes = nodesAt;
+  all = allAt;
+  perAll = perAllSquare;
+  rest = restAt;
+  perRest = perRestSquare;
+  ownWeight = own;
+  rule = ruleAt;
+  cases = casesCount;
+  sums = sumsAt;
+  for (let p: i32 = 0; p < points; p++) {
+    const at = <usize>p << 3;
+    for (let u: i32 = 0; u < casesCount; u++) v128.store(sums + (<usize>u << 4), f64x2.splat(0));
+    visit(nodesAt, load<f64>(xs + at), load<f64>(ys + at));
+    const row = into + <usize>(p * casesCount) * 8;
+    for (let u: i32 = 0; u < casesCount; u++) {
+      const sum = v128.load(sums + (<usize>u << 4));
+      const place = row + (<usize>u << 3);
+      store<f64>(place, load<f64>(place) + f64x2.extract_lane(sum, 0) + f64x2.extract_lane(sum, 1));
+    }
+  }
+}
+
+function visit(node: usize, x: f64, y: f64): void {
+  const first = <i32>load<f64>(node, 40);
+  if (first < 0) {
+    run(<i32>load<f64>(node, 24), <i32>load<f64>(node, 32), x, y);
+    return;
+  }
+  const dx = x - load<f64>(node);
+  const dy = y - load<f64>(node, 8);
+  if (dx * dx + dy * dy < load<f64>(node, 16)) {
+    visit(nodes + <usize>first * NODE, x, y);
+    visit(nodes + <usize>load<f64>(node, 48) * NODE, x, y);
+    return;
+  }
+  far(<usize>load<f64>(node, 56), x, y);
+}
+
+/** Six by six points: coordinates in x, in y, then strengths by row, case and column. */
+function far(box: usize, x: f64, y: f64): void {
+  const xx = f64x2.splat(x);
+  const per = f64x2.splat(perAll);
+  const one = f64x2.splat(1);
+  let at = box + 96;
+  for (let b: usize = 0; b < 48; b += 8) {
+    const ey = y - load<f64>(box + b, 48);
+    const eyy = f64x2.splat(ey * ey);
+    for (let a: usize = 0; a < 48; a += 16) {
+      const ex = f64x2.sub(xx, v128.load(box + a));
+      const value = radialPair(all, per, one, f64x2.add(f64x2.mul(ex, ex), eyy));
+      let s = at + a;
+      for (let u: i32 = 0; u < cases; u++) {
+        const sum = sums + (<usize>u << 4);
+        v128.store(sum, f64x2.add(v128.load(sum), f64x2.mul(v128.load(s), value)));
+        s += 48;
+      }
+    }
+    at += 48 * <usize>cases;
+  }
+}
+
+function run(from: i32, to: i32, x: f64, y: f64): void {
+  const per = f64x2.splat(perAll);
+  const one = f64x2.splat(1);
+  let seg = segments + <usize>from * SEGMENT;
+  let s = strength + <usize>(from * cases) * 8;
+  for (let j = from; j < to; j++) {
+    const dx = x - load<f64>(seg);
+    const dy = y - load<f64>(seg, 8);
+    const distance = dx * dx + dy * dy;
+    const along = dx * load<f64>(seg, 16) + dy * load<f64>(seg, 24);
+    let value: v128;
+    if (distance > load<f64>(seg, 40)) {
+      const across = 1.1547005383792515 * along;
+      const base = distance + load<f64>(seg, 32) * 0.3333333333333333;
+      value = f64x2.mul(f64x2.splat(0.5), radialPair(all, per, one, f64x2.replace_lane(f64x2.splat(base + across), 1, base - across)));
+    } else if (distance > load<f64>(seg, 48)) {
+      const across = 1.5491933384829668 * along;
+      const base = distance + load<f64>(seg, 32) * 0.6;
+      const outer = radialPair(all, per, one, f64x2.replace_lane(f64x2.splat(base + across), 1, base - across));
+      const middle = radialPair(all, per, one, f64x2.splat(distance));
+      value = f64x2.add(f64x2.mul(f64x2.splat(5.0 / 18.0), outer), f64x2.mul(f64x2.splat(4.0 / 18.0), middle));
+    } else value = near(seg, dx, dy);
+    for (let u: i32 = 0; u < cases; u++) {
+      const sum = sums + (<usize>u << 4);
+      v128.store(sum, f64x2.add(v128.load(sum), f64x2.mul(v128.load64_splat(s), value)));
+      s += 8;
+    }
+    seg += SEGMENT;
+  }
+}
+
+/** Two lanes whose sum is the mean of all images along a near segment. */
+function near(seg: usize, dx: f64, dy: f64): v128 {
+  const ux = load<f64>(seg, 16);
+  const uy = load<f64>(seg, 24);
+  const length = load<f64>(seg, 56);
+  const above = load<f64>(seg, 64);
+  const ends =
+    sqrt((dx - ux) * (dx - ux) + (dy - uy) * (dy - uy) + above) +
+    sqrt((dx + ux) * (dx + ux) + (dy + uy) * (dy + uy) + above);
+  const own = (ownWeight * logarithm((ends + length) / (ends - length))) / length;
+  let sum = f64x2.replace_lane(f64x2.splat(0), 0, own);
+  if (rest == 0) return sum;
+  const per = f64x2.splat(perRest);
+  const one = f64x2.splat(1);
+  // pairs of points on [−1, 1] and pairs of weights, an odd one padded by weight nothing
+  let at = rule + <usize>load<f64>(seg, 72);
+  const pairs = <i32>load<f64>(at);
+  at += 8;
+  for (let k: i32 = 0; k < pairs; k++) {
+    const t = v128.load(at);
+    const px = f64x2.sub(f64x2.splat(dx), f64x2.mul(t, f64x2.splat(ux)));
+    const py = f64x2.sub(f64x2.splat(dy), f64x2.mul(t, f64x2.splat(uy)));
+    const value = radialPair(rest, per, one, f64x2.add(f64x2.mul(px, px), f64x2.mul(py, py)));
+    sum = f64x2.add(sum, f64x2.mul(v128.load(at, 16), value));
+    at += 32;
+  }
+  return sum;
+}
+
+/** Adds the potentials of a group of vertical metal: x, y, radius², length a segment; `restAt` 0 for none. */
+export function upright(
+  metal: usize,
+  count: i32,
+  strengthAt: usize,
+  restAt: usize,
+  perRestSquare: f64,
+  own: f64,
+  z1: f64,
+  z2: f64,
+  farRatio: f64,
+  casesCount: i32,
+  xs: usize,
+  ys: usize,
+  points: i32,
+  into: usize,
+): void {
+  const per = f64x2.splat(perRestSquare);
+  const one = f64x2.splat(1);
+  const centre = (z1 + z2) / 2;
+  for (let p: i32 = 0; p < points; p++) {
+    const x = load<f64>(xs + (<usize>p << 3));
+    const y = load<f64>(ys + (<usize>p << 3));
+    const row = into + <usize>(p * casesCount) * 8;
+    let s = strengthAt;
+    for (let j: i32 = 0; j < count; j++) {
+      const at = metal + (<usize>j << 5);
+      const dx = x - load<f64>(at);
+      const dy = y - load<f64>(at, 8);
+      const rr = dx * dx + dy * dy;
+      const aa = load<f64>(at, 16);
+      const length = load<f64>(at, 24);
+      let value: f64;
+      if (rr > farRatio * length * (farRatio * length)) value = own / sqrt(rr + centre * centre);
+      else {
+        const ends = sqrt(rr + aa + z1 * z1) + sqrt(rr + aa + z2 * z2);
+        value = (own * logarithm((ends + length) / (ends - length))) / length;
+      }
+      if (restAt != 0) value += f64x2.extract_lane(radialPair(restAt, per, one, f64x2.splat(rr)), 0);
+      for (let u: i32 = 0; u < casesCount; u++) {
+        const place = row + (<usize>u << 3);
+        store<f64>(place, load<f64>(place) + load<f64>(s) * value);
+        s += 8;
+      }
+    }
+  }
+}
