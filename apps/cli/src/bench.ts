@@ -1,14 +1,18 @@
 // Times the main job beside a plain dense LU of the same system, as ratios in one run: `npm run bench`.
 import { resolve } from 'node:path';
 import {
+  adaptiveLattices,
+  type ConductorTable,
+  compressedLeakageMatrix,
+  interfaceDepths,
   joinConductors,
   leakageMatrix,
-  type SoilModel,
   segmentMesh,
   soilImages,
   solveGraph,
+  surfacePotentials,
 } from '@ohmstead/core';
-import { type LoadedStudy, loadStudy, solveStudy } from '@ohmstead/study';
+import { type LoadedStudy, layeredSoil, loadStudy, solveStudy } from '@ohmstead/study';
 import { LuDecomposition, Matrix } from 'ml-matrix';
 import { benchCases } from './bench-cases.ts';
 import { folderSource } from './folder-source.ts';
@@ -34,23 +38,10 @@ function milliseconds<T>(work: () => T): [ms: number, result: T] {
   return [performance.now() - start, result];
 }
 
-function soilOf(loaded: LoadedStudy): SoilModel {
-  return {
-    layers: (loaded.study.soil.layers ?? []).map((layer) => ({
-      resistivity: layer.resistivity_ohm_m,
-      thickness: layer.thickness_m ?? Number.POSITIVE_INFINITY,
-    })),
-  };
-}
-
 function round(loaded: LoadedStudy, level: number): Arms {
   const [study] = milliseconds(() => solveStudy(loaded));
-  const soil = soilOf(loaded);
-  const interfaces: number[] = [];
-  soil.layers.slice(0, -1).reduce((depth, layer) => {
-    interfaces.push(depth + layer.thickness);
-    return depth + layer.thickness;
-  }, 0);
+  const soil = layeredSoil(loaded.study.soil.layers ?? []);
+  const interfaces = interfaceDepths(soil);
   const table = loaded.conductors;
   const mesh = segmentMesh(table, joinConductors(table), interfaces, level);
   const ohm = new Float64Array(table.count).fill(1e-4);
@@ -100,7 +91,107 @@ function main(args: readonly string[]): void {
     const rounds = Array.from({ length: ROUNDS }, () => round(loaded, level));
     lines.push(report(name, rounds));
   }
+  lines.push('', '| part, one thread | ms | what it did |', '|---|---|---|', ...parts(smallest));
   process.stdout.write(`${lines.join('\n')}\n`);
+}
+
+/** Parts of the main job by themselves: medians of the same rounds. */
+function parts(smallest: boolean): string[] {
+  const across = smallest ? 30 : 100;
+  const lattice = latticeTable(across);
+  const four = layeredSoil(fourLayers);
+  const timed = (work: () => string): string[] => {
+    const rounds = Array.from({ length: ROUNDS }, () => milliseconds(work));
+    return [median(rounds.map(([ms]) => ms)).toFixed(0), rounds[0]![1]];
+  };
+  const row = (name: string, work: () => string): string => `| ${[name, ...timed(work)].join(' | ')} |`;
+  const rows = [
+    row(
+      'joining conductors',
+      () => `${lattice.count} conductors into ${joinConductors(lattice).nodeCount} nodes`,
+    ),
+    row('image lists of a new soil', () => {
+      const images = soilImages(four);
+      const lists = four.layers.flatMap((_, s) => four.layers.map((_, f) => images.list(s, f)));
+      const worst = Math.max(...lists.map((list) => list.error));
+      return `4 layers, all ${lists.length} pairs, error ${worst.toExponential(1)}`;
+    }),
+    row('map of the demonstration’s areas', () => mapOnce()),
+  ];
+  if (!smallest)
+    rows.push(
+      row('compressed leakage matrix', () => {
+        const table = latticeTable(44);
+        const mesh = segmentMesh(table, joinConductors(table), [2], 0);
+        const { stored, evaluations } = compressedLeakageMatrix(mesh, soilImages(layeredSoil(twoLayers)));
+        const share = ((200 * evaluations) / mesh.count ** 2).toFixed(0);
+        return `${mesh.count} segments, ${(stored / 125_000).toFixed(0)} MB, ${share} % of the entries computed`;
+      }),
+    );
+  return rows;
+}
+
+const twoLayers = [{ resistivity_ohm_m: 100, thickness_m: 2 }, { resistivity_ohm_m: 300 }];
+const fourLayers = [
+  { resistivity_ohm_m: 200, thickness_m: 1 },
+  { resistivity_ohm_m: 50, thickness_m: 3 },
+  { resistivity_ohm_m: 800, thickness_m: 4 },
+  { resistivity_ohm_m: 20 },
+];
+
+/** The demonstration's surface on half a metre, from the leakage of its second mesh. */
+function mapOnce(): string {
+  demonstration ??= surfaceOf(loadStudy(folderSource(resolve('test-data/aldermoor'))));
+  const [map] = adaptiveLattices(
+    demonstration.surfaces.at,
+    [2e-3 * demonstration.rise],
+    demonstration.box,
+    0.5,
+  );
+  return `${map!.nx} × ${map!.ny} places, ${map!.evaluated} computed, ${demonstration.segments} segments`;
+}
+
+let demonstration: ReturnType<typeof surfaceOf> | undefined;
+
+function surfaceOf(loaded: LoadedStudy) {
+  const soil = layeredSoil(loaded.study.soil.layers ?? []);
+  const table = loaded.conductors;
+  const mesh = segmentMesh(table, joinConductors(table), interfaceDepths(soil), 1);
+  const images = soilImages(soil);
+  const ohm = new Float64Array(table.count).fill(1e-4);
+  const [unit] = solveGraph(mesh, leakageMatrix(mesh, images), [0], ohm, 'equipotential').units;
+  const surfaces = surfacePotentials(mesh, images, [unit!.leakage], 300);
+  return {
+    surfaces,
+    rise: unit!.resistance,
+    segments: mesh.count,
+    box: { west: -5, south: -5, east: 65, north: 50 },
+  };
+}
+
+/** A square lattice of lines five metres apart, cut at every crossing. */
+function latticeTable(across: number): ConductorTable {
+  const ends: [number, number, number, number][] = [];
+  for (let i = 0; i <= across; i++)
+    for (let j = 0; j < across; j++)
+      ends.push([5 * i, 5 * j, 5 * i, 5 * j + 5], [5 * j, 5 * i, 5 * j + 5, 5 * i]);
+  const column = (pick: (end: readonly number[]) => number): Float64Array => Float64Array.from(ends, pick);
+  const all = (value: number): Float64Array => new Float64Array(ends.length).fill(value);
+  return {
+    count: ends.length,
+    id: ends.map((_, i) => String(i)),
+    x1: column((e) => e[0]!),
+    y1: column((e) => e[1]!),
+    depth1: all(0.5),
+    x2: column((e) => e[2]!),
+    y2: column((e) => e[3]!),
+    depth2: all(0.5),
+    radius: all(0.005),
+    material: ends.map(() => 'copper-annealed'),
+    electrode: ends.map(() => 'main'),
+    insulated: new Uint8Array(ends.length),
+    resistancePerMetre: all(Number.NaN),
+  };
 }
 
 main(process.argv.slice(2));

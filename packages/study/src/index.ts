@@ -11,6 +11,7 @@ export { type StudySource, sourceFromMap } from './input/source.ts';
 export type * from './outcome.ts';
 export type * from './results.ts';
 export { type FieldPoint, type FieldValue, fieldAt } from './run/field-at.ts';
+export { layeredSoil } from './run/prepare.ts';
 export { type SolveOptions, solveStudy } from './run/solve-study.ts';
 export { fitSurvey, type SurveyFit } from './run/survey-fit.ts';
 export type * from './study.ts';

@@ -43,7 +43,7 @@ export function look(
 ): Found[] {
   const { surfaces, graph } = level;
   const maps = adaptiveLattices(
-    surfaces.at,
+    surfaces,
     graph.units.map((unit) => tolerance * unit.resistance),
     box,
     spacing,

@@ -129,3 +129,46 @@ describe('floating metal beside a grid of 60 m and 36 meshes at 0.5 m, 100 Ω·m
     expectWithin(results.electrode.resistance_ohm, 0.8077, 3e-3);
   });
 });
+
+describe('simple electrodes through the whole chain: the stated uncertainty covers the true error', () => {
+  it.each([
+    [50, 0.67126],
+    [100, 0.78278],
+    [375, 0.99603],
+    [500, 1.04238],
+    [1000, 1.15389],
+  ])(
+    'driven rod, length over radius %i (independent computation: exact hollow tube, whose missing end cap is worth a/2L)',
+    (slenderness, expected) => {
+      const { electrode } = solved([rodBar(0, 0, 0, 3, 3 / slenderness)], [[100]]);
+      const reference = (expected * 100) / 3;
+      expectWithin(electrode.resistance_ohm, reference, 5e-3);
+      const cap = 1 / (2 * slenderness);
+      expectCovered(
+        electrode.resistance_ohm,
+        electrode.resistance_uncertainty_ohm,
+        reference * (1 - cap),
+        reference,
+        1e-4,
+      );
+    },
+  );
+
+  it('ring of 10 m (Dwight 1936; independent computation: exact)', () => {
+    const [D, d, s, sides] = [10, 0.01, 1, 96];
+    const formula = (100 / (2 * Math.PI ** 2 * D)) * (Math.log((8 * D) / d) + Math.log((4 * D) / s));
+    const radius = (Math.PI * D) / (2 * sides * Math.sin(Math.PI / sides));
+    const corner = (k: number): [number, number, number] => [
+      radius * Math.cos((2 * Math.PI * k) / sides),
+      radius * Math.sin((2 * Math.PI * k) / sides),
+      s / 2,
+    ];
+    const ring = Array.from(
+      { length: sides },
+      (_, k): Bar => ({ from: corner(k), to: corner(k + 1), radius: d / 2 }),
+    );
+    const { electrode } = solved(ring, [[100]]);
+    expectWithin(electrode.resistance_ohm, formula, 5e-3);
+    expectCovered(electrode.resistance_ohm, electrode.resistance_uncertainty_ohm, formula, formula, 5e-4);
+  });
+});
