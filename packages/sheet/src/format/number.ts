@@ -1,12 +1,14 @@
 // Writes numbers for people: digits from the uncertainty, thin spaces, a proper minus, SI units.
 
-const THIN_SPACE = '\u202f';
+export const THIN_SPACE = '\u202f';
 const NO_BREAK_SPACE = '\u00a0';
-const MINUS = '\u2212';
+export const MINUS = '\u2212';
 const SUPERSCRIPTS = '⁰¹²³⁴⁵⁶⁷⁸⁹';
 
 /** More digits than this are never shown, however small the stated uncertainty: nobody reads them in a sentence. */
 const MOST_DIGITS = 6;
+/** Places after the point beyond which nothing of a grounding study has meaning: nanovolts, nano-ohms. */
+const MOST_DECIMALS = 9;
 /** A result without its own uncertainty is shown with this many significant digits. */
 export const RESULT_DIGITS = 4;
 /** From this value on, volts and amperes are written as kV and kA, V or A. */
@@ -80,8 +82,9 @@ export function powerOfTen(value: number): string {
  * begins with 1 (then one digit would be coarse), and never more than six digits of the value.
  */
 export function decimalsFor(value: number, uncertainty: number): number {
-  const most = MOST_DIGITS - 1 - exponentOf(value);
-  if (!(uncertainty > 0) || !Number.isFinite(uncertainty)) return RESULT_DIGITS - 1 - exponentOf(value);
+  const most = Math.min(MOST_DIGITS - 1 - exponentOf(value), MOST_DECIMALS);
+  if (!(uncertainty > 0) || !Number.isFinite(uncertainty))
+    return Math.min(RESULT_DIGITS - 1 - exponentOf(value), most);
   const exponent = exponentOf(uncertainty);
   const leading = uncertainty / 10 ** exponent;
   return Math.min(leading < 2 ? 1 - exponent : -exponent, most);
@@ -89,17 +92,18 @@ export function decimalsFor(value: number, uncertainty: number): number {
 
 /**
  * A value and its uncertainty at one common decimal place; the uncertainty is rounded up, so that rounding never
- * narrows what is claimed.
+ * narrows what is claimed. No result is exact: one of nought is rounded up to the last place shown, and one that is
+ * missing is an em dash.
  */
 export function valueAndUncertainty(value: number, uncertainty: number): readonly [string, string] {
   const decimals = decimalsFor(value, uncertainty);
   const unit = 10 ** -decimals;
   const up = Math.max(1, Math.ceil(uncertainty / unit - ROUND_UP_SLACK)) * unit;
-  return [fixed(value, decimals), uncertainty > 0 ? fixed(up, decimals) : '0'];
+  return [fixed(value, decimals), fixed(up, decimals)];
 }
 
 /** Volts and amperes of 10 000 and more are told in thousands; every other unit stays. */
-function scaled(value: number, unit: string): readonly [divisor: number, unit: string] {
+export function scaled(value: number, unit: string): readonly [divisor: number, unit: string] {
   const kilo = (unit === 'V' || unit === 'A') && Math.abs(value) >= KILO_FROM;
   return kilo ? [1000, `k${unit}`] : [1, unit];
 }

@@ -62,6 +62,18 @@ describe('digits from the uncertainty', () => {
     expect(decimalsFor(2.72, 0)).toBe(3);
   });
 
+  it('never claims an exact result: nought is rounded up to the last place shown, what is missing is a dash', () => {
+    expect(valueAndUncertainty(2.7212, 0)).toEqual(['2.721', '0.001']);
+    expect(valueAndUncertainty(0, 0)).toEqual(['0.000', '0.001']);
+    expect(measured(975.26, 0, 'V')).toBe('975.3\u202f±\u202f0.1\u202fV');
+    expect(valueAndUncertainty(2.7212, Number.NaN)).toEqual(['2.721', '—']);
+    fc.assert(
+      fc.property(finite, fc.double({ min: 0, max: 1e-6, noNaN: true }), (value, uncertainty) => {
+        expect(read(valueAndUncertainty(value, uncertainty)[1])).toBeGreaterThan(0);
+      }),
+    );
+  });
+
   it('shows value and uncertainty at one place, and a band no narrower than the computed one', () => {
     fc.assert(
       fc.property(positive, positive, (value, uncertainty) => {
