@@ -9,28 +9,36 @@ import { Figure } from './frame.tsx';
 import { Hatch } from './hatch.tsx';
 import { px } from './path.ts';
 
+/** A comparison, and whether it is the one that governs among seasons. */
+export type BarRow = VerdictRow & { readonly governs?: boolean };
+
 const WIDTH = 900;
 const ROW = 30;
 const TOP = 34;
 const NAME = 8;
+const INDENT = 22;
 const WORST = 372;
 const LIMIT = 440;
 const BAR: readonly [number, number] = [456, 680];
 const WORDS = 694;
-/** Longest name that fits its column, characters. */
-const LONGEST_NAME = 34;
+/** Longest texts that fit their places, characters. */
+const LONGEST_NAME = 38;
+const LONGEST_CASE = 110;
 
-function cut(text: string): string {
-  return text.length > LONGEST_NAME ? `${text.slice(0, LONGEST_NAME - 1)}…` : text;
+/** A name that fits its place, the rest told by …. */
+export function cut(text: string, longest: number): string {
+  return text.length > longest ? `${text.slice(0, longest - 1)}…` : text;
 }
 
-function Row({ row, y, full, name }: { row: VerdictRow; y: number; full: number; name: string }): VNode {
+function Row({ row, y, full, name }: { row: BarRow; y: number; full: number; name: string }): VNode {
   const bar = barOf(row, full);
   const at = (share: number): number => BAR[0] + share * (BAR[1] - BAR[0]);
+  const governs = row.governs === true;
   return (
     <g>
-      <text x={NAME} y={y} dy="0.36em">
-        {cut(`${row.caseName}, ${row.subject}`)}
+      <text class={governs ? 'strong' : undefined} x={INDENT} y={y} dy="0.36em">
+        {cut(row.subject, LONGEST_NAME - (governs ? 9 : 0))}
+        {governs && ', governs'}
       </text>
       <text class="end" x={WORST} y={y} dy="0.36em">
         {measured(row.worst, row.uncertainty, 'V')}
@@ -58,6 +66,27 @@ function Row({ row, y, full, name }: { row: VerdictRow; y: number; full: number;
   );
 }
 
+/** Name of a case over its rows. */
+export function CaseHeading({ text, y }: { text: string; y: number }): VNode {
+  return (
+    <text class="strong" x={NAME} y={y} dy="0.6em">
+      {cut(text, LONGEST_CASE)}
+    </text>
+  );
+}
+
+/** Heights of rows that stand under a heading wherever another case begins. */
+export function stacked<Row extends { readonly caseIndex: number }>(
+  rows: readonly Row[],
+): readonly { readonly row: Row; readonly y: number; readonly first: boolean }[] {
+  let below = TOP;
+  return rows.map((row, k) => {
+    const first = k === 0 || rows[k - 1].caseIndex !== row.caseIndex;
+    below += first ? 2 * ROW : ROW;
+    return { row, y: below - ROW / 2, first };
+  });
+}
+
 /** All comparisons as bars; for files that stand alone, the page sets them as a table with the same bars. */
 export function BarsFigure({
   rows,
@@ -65,14 +94,19 @@ export function BarsFigure({
   title,
   css,
 }: {
-  rows: readonly VerdictRow[];
+  rows: readonly BarRow[];
   name: string;
   title: string;
   css?: string | undefined;
 }): VNode {
   const full = barScale(rows);
-  const height = TOP + rows.length * ROW + 12;
-  const description = rows.map((r) => `${r.caseName}, ${r.subject}: ${findingWords(r)}.`).join(' ');
+  const lines = stacked(rows);
+  const height = (lines.at(-1)?.y ?? TOP) + ROW / 2 + 12;
+  const description = rows
+    .map(
+      (r) => `${r.caseName}, ${r.subject}${r.governs === true ? ', which governs' : ''}: ${findingWords(r)}.`,
+    )
+    .join(' ');
   return (
     <Figure
       name={name}
@@ -95,14 +129,11 @@ export function BarsFigure({
       <text class="soft end" x={LIMIT} y={18}>
         limit
       </text>
-      {rows.map((row, k) => (
-        <Row
-          key={`${row.caseIndex} ${row.subject}`}
-          row={row}
-          y={TOP + k * ROW + ROW / 2}
-          full={full}
-          name={name}
-        />
+      {lines.map(({ row, y, first }, k) => (
+        <g key={k}>
+          {first && <CaseHeading text={row.caseName} y={y - ROW} />}
+          <Row row={row} y={y} full={full} name={name} />
+        </g>
       ))}
     </Figure>
   );

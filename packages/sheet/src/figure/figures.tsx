@@ -3,14 +3,19 @@ import type { Outcome } from '@ohmstead/study';
 import type { VNode } from 'preact';
 import { renderToString } from 'preact-render-to-string';
 import { uniqueSlugs } from '../format/slug.ts';
+import { diagonalOf } from '../geometry/electrode-size.ts';
 import type { MapKind } from '../geometry/map-drawing.ts';
 import { verdictRows } from '../verdict/rows.ts';
+import { seasonRows } from '../verdict/season-rows.ts';
+import { soilBandRows } from '../verdict/soil-band.ts';
 import { BarsFigure } from './bars.tsx';
 import { GroundFigure } from './ground.tsx';
 import { LeakageFigure } from './leakage.tsx';
 import { MapFigure } from './map.tsx';
 import { PlanFigure } from './plan.tsx';
 import { ProfileFigure } from './profile.tsx';
+import { SoilBandsFigure } from './soil-bands.tsx';
+import { SoundingFigure } from './sounding.tsx';
 import { standaloneCss } from './style.ts';
 import { titles } from './titles.ts';
 import { xmlText } from './xml-text.ts';
@@ -25,7 +30,8 @@ const MAP_KINDS: readonly MapKind[] = ['potential', 'step', 'touch'];
 
 /**
  * Every figure as an SVG document with its own styles, title and description, sorted by name: plan, ground, leakage,
- * bars against the limits, and for each case the maps of potential, touch and step and the profile.
+ * bars against the limits, and for each case the maps of potential, touch and step and the profile; where the soil was
+ * fitted to readings the sounding and what they leave open; where there are seasons, bars by season.
  * @param outcome of a solved study
  * @returns files named by kind and case, e.g. `touch-33-kv-bus.svg`; the same outcome gives the same bytes
  */
@@ -43,6 +49,27 @@ export function figures(outcome: Outcome): readonly FigureFile[] {
   add('limits', (name) => (
     <BarsFigure rows={verdictRows(outcome.results)} name={name} title={titles.limits} css={css} />
   ));
+  const { ground, seasons } = outcome.results;
+  if (ground !== null) {
+    const { fit } = ground;
+    add('sounding', (name) => (
+      <SoundingFigure
+        fit={fit}
+        diagonal={diagonalOf(outcome.plan.conductors)}
+        name={name}
+        title={titles.sounding}
+        css={css}
+      />
+    ));
+    add('ground-consequence', (name) => (
+      <SoilBandsFigure rows={soilBandRows(outcome.results)} name={name} title={titles.soilBands} css={css} />
+    ));
+  }
+  if (seasons.length > 0) {
+    add('seasons', (name) => (
+      <BarsFigure rows={seasonRows(outcome.results)} name={name} title={titles.seasons} css={css} />
+    ));
+  }
   uniqueSlugs(outcome.cases.map((c) => c.name)).forEach((of, caseIndex) => {
     for (const kind of MAP_KINDS) {
       const title = titles[kind](outcome.cases[caseIndex].name);

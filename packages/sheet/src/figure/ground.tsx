@@ -1,6 +1,7 @@
 // Draws a section through the ground: layers, covering, and the depth at which the metal lies.
 import type { Outcome, PlanConductor, Point } from '@ohmstead/study';
 import type { VNode } from 'preact';
+import { fittedQuantity } from '../format/fitted.ts';
 import { fixed, givenQuantity } from '../format/number.ts';
 import { sectionLines } from '../geometry/section-lines.ts';
 import { ticksIn } from '../geometry/ticks.ts';
@@ -58,6 +59,7 @@ function sideOf(outcome: Outcome, interfaces: readonly number[]): Side {
 /** The electrode seen from the side, in the layers of the soil; depth is stretched. */
 export function GroundFigure({ outcome, name, title, css }: GroundFigureProps): VNode {
   const { layers } = outcome.results.soil;
+  const told = outcome.results.ground === null ? givenQuantity : fittedQuantity;
   const interfaces = depthsOfInterfaces(outcome);
   const side = sideOf(outcome, interfaces);
   const x = (m: number): number =>
@@ -89,7 +91,7 @@ export function GroundFigure({ outcome, name, title, css }: GroundFigureProps): 
             <line class="layer-line" x1={FRAME.left} x2={FRAME.right} y1={px(y(depth))} y2={px(y(depth))} />
           )}
           <text x={FRAME.right + 8} y={px((y(depth) + y(tops[k + 1] ?? side.deepest)) / 2)} dy="0.35em">
-            {givenQuantity(layers[k].resistivity_ohm_m, 'Ω·m')}
+            {told(layers[k].resistivity_ohm_m, 'Ω·m')}
           </text>
         </g>
       ))}

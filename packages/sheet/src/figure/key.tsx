@@ -69,6 +69,35 @@ export const SIGN_ROW = 24;
 /** Signs side by side. */
 export const SIGN_COLUMNS = 3;
 
+export interface SignsProps {
+  readonly x: number;
+  readonly y: number;
+  /** of one column, drawing units */
+  readonly column: number;
+  readonly columns: number;
+  readonly signs: readonly Sign[];
+}
+
+/** Signs with their meaning, row by row in columns. */
+export function Signs({ x, y, column, columns, signs }: SignsProps): VNode {
+  return (
+    <g>
+      {signs.map(({ text, drawing }, k) => {
+        const left = x + (k % columns) * column;
+        const middle = y + Math.floor(k / columns) * SIGN_ROW;
+        return (
+          <g key={text} transform={`translate(${px(left + 14)},${px(middle)})`}>
+            {drawing}
+            <text x="22" dy="0.36em">
+              {text}
+            </text>
+          </g>
+        );
+      })}
+    </g>
+  );
+}
+
 export interface SignKeyProps {
   readonly x: number;
   readonly y: number;
@@ -89,18 +118,7 @@ export function SignKey({ x, y, width, signs, plate }: SignKeyProps): VNode {
   const last = signs.length;
   return (
     <g>
-      {signs.map(({ text, drawing }, k) => {
-        const left = x + (k % SIGN_COLUMNS) * column;
-        const middle = y + Math.floor(k / SIGN_COLUMNS) * SIGN_ROW;
-        return (
-          <g key={text} transform={`translate(${px(left + 14)},${px(middle)})`}>
-            {drawing}
-            <text x="22" dy="0.36em">
-              {text}
-            </text>
-          </g>
-        );
-      })}
+      <Signs x={x} y={y} column={column} columns={SIGN_COLUMNS} signs={signs} />
       <g
         transform={`translate(${px(x + (last % SIGN_COLUMNS) * column + 2)},${px(y + Math.floor(last / SIGN_COLUMNS) * SIGN_ROW)})`}
       >

@@ -55,14 +55,16 @@ export interface NoteProps {
   readonly feet?: readonly (readonly [number, number])[];
   /** no line of the text is strong */
   readonly plain?: boolean;
+  /** of the ring, drawing units; larger about a mark that has to be seen in it */
+  readonly radius?: number;
 }
 
 /** The ring, the leader line and the text, the first line strong. */
-export function Note({ note, beyond, feet, plain }: NoteProps): VNode {
+export function Note({ note, beyond, feet, plain, radius = RING_RADIUS }: NoteProps): VNode {
   const { x, y, lines, callout } = note;
   const [lx, ly] = callout.leader;
   const away = Math.hypot(lx - x, ly - y);
-  const start = away > 0 ? Math.min(1, RING_RADIUS / away) : 0;
+  const start = away > 0 ? Math.min(1, radius / away) : 0;
   const d = `M${px(x + start * (lx - x))},${px(y + start * (ly - y))}L${px(lx)},${px(ly)}`;
   const line = beyond ? 'warn-line' : '';
   const right = callout.side === 'right';
@@ -72,8 +74,8 @@ export function Note({ note, beyond, feet, plain }: NoteProps): VNode {
     <g>
       <Path class="under" d={d} />
       <Path class={`leader ${line}`} d={d} />
-      <circle class="disc" cx={px(x)} cy={px(y)} r={RING_RADIUS + 1.6} />
-      <circle class={`ring ${line}`} cx={px(x)} cy={px(y)} r={RING_RADIUS} />
+      <circle class="disc" cx={px(x)} cy={px(y)} r={radius + 1.6} />
+      <circle class={`ring ${line}`} cx={px(x)} cy={px(y)} r={radius} />
       {feet !== undefined && (
         <Path
           class={`ring ${line}`}

@@ -1,6 +1,6 @@
 // Writes points as SVG path data, two decimals.
 import type { Point, Polygon } from '@ohmstead/study';
-import { curveLinearClosed, line } from 'd3-shape';
+import { area, curveLinearClosed, curveMonotoneX, line } from 'd3-shape';
 import type { Plate } from '../geometry/plate.ts';
 
 /** Decimals of drawing units: a hundredth is far below what is seen. */
@@ -8,6 +8,14 @@ const DIGITS = 2;
 
 const open = line<Point>().digits(DIGITS);
 const closed = line<Point>().curve(curveLinearClosed).digits(DIGITS);
+
+const smooth = line<Point>().curve(curveMonotoneX).digits(DIGITS);
+const ribbon = area<readonly [x: number, low: number, high: number]>()
+  .curve(curveMonotoneX)
+  .x((p) => p[0])
+  .y0((p) => p[1])
+  .y1((p) => p[2])
+  .digits(DIGITS);
 
 /** Rounded for attributes, in drawing units. */
 export function px(value: number): number {
@@ -22,6 +30,16 @@ export function onPlate(plate: Plate, points: readonly Point[]): readonly Point[
 /** An open line through points in drawing units. */
 export function linePath(points: readonly Point[]): string {
   return open(points) ?? '';
+}
+
+/** A smooth line through points in drawing units whose x grows; it makes no hump that they do not have. */
+export function smoothPath(points: readonly Point[]): string {
+  return smooth(points) ?? '';
+}
+
+/** The ground between two smooth lines over the same x, drawing units. */
+export function ribbonPath(points: readonly (readonly [x: number, low: number, high: number])[]): string {
+  return ribbon(points) ?? '';
 }
 
 /** Closed outlines in drawing units, to be filled even–odd. */

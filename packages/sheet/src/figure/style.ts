@@ -56,6 +56,17 @@ export const figureCss: string = `
 .fig .leak-core{fill:none;stroke:var(--paper)}
 .fig .leak-rod{fill:var(--deep);stroke:var(--paper);stroke-width:1}
 .fig .bar{fill:var(--deep)}
+.fig .soils{fill:var(--deep);fill-opacity:.17}
+.fig .soils-edge{fill:none;stroke:var(--deep);stroke-width:.8}
+.fig .soils-bar{fill:var(--deep);fill-opacity:.2;stroke:var(--deep);stroke-width:1}
+.fig .soils-median{stroke:var(--deep);stroke-width:2.4}
+.fig .best-fit{fill:var(--ink)}
+.fig .stairs{fill:none;stroke:var(--ink);stroke-width:1}
+.fig .gridline.minor{stroke-opacity:.45}
+.fig .reading{fill:var(--ink);stroke:var(--ink);stroke-width:1.3;stroke-linejoin:round}
+.fig .reading.hollow{fill:var(--paper)}
+.fig .resolved{fill:none;stroke:var(--soft);stroke-width:1.2;stroke-dasharray:1.5 3}
+.fig .diagonal{fill:none;stroke:var(--soft);stroke-width:1.2;stroke-dasharray:9 3 2 3}
 .fig .layer-line{stroke:var(--soft);stroke-width:1}
 .fig .ground-line{stroke:var(--ink);stroke-width:1.6}
 .fig .edge{fill:none;stroke:var(--soft);stroke-width:.6}

@@ -3,6 +3,9 @@
 export const titles = {
   plan: 'Electrode in plan',
   ground: 'Section through the ground',
+  sounding: 'Sounding and fitted layers',
+  soilBands: 'Worst voltages over the soils that the readings allow',
+  seasons: 'Worst voltages by season against their limits',
   leakage: 'Leakage into the soil',
   limits: 'Worst voltages against their limits',
   potential: (name: string): string => `Surface potential, ${name}`,

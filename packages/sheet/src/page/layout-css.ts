@@ -34,6 +34,8 @@ figcaption{max-width:46em;margin:8px 0 0}
 .inputs dd{margin:0;text-align:right}
 .verdicts{margin:18px 0 18px}
 .bar-cell{width:40%;min-width:120px}
+.bands .bar-cell{width:27%}
+.by-season .bar-cell{width:30%}
 .bar-line{display:block;width:100%;height:22px;overflow:visible}
 .print-note{display:none}
 .unseen{position:absolute;width:1px;height:1px;overflow:hidden;clip-path:inset(50%);white-space:nowrap}
@@ -61,6 +63,10 @@ figcaption{max-width:46em;margin:8px 0 0}
 .verdicts tbody td.num{padding:2px 0;text-align:left}
 .verdicts .worst::before{content:"worst "}
 .verdicts .limit-value::before{content:"limit "}
-.verdicts .worst::before,.verdicts .limit-value::before{color:var(--soft);font-weight:400}
+.verdicts .best::before{content:"best fit "}
+.verdicts .median::before{content:"median "}
+.verdicts .soils-range::before{content:"5–95 % of soils "}
+.bands tbody tr{grid-template-columns:auto minmax(0,1fr)}
+.verdicts td::before{color:var(--soft);font-weight:400}
 }
 `.trim();

@@ -53,6 +53,13 @@ tr{border-bottom:1px solid var(--rule)}
 .verdicts .finding{white-space:nowrap}
 .verdicts .beyond .finding,.verdicts .beyond .worst{color:var(--beyond);font-weight:600}
 .verdicts td.bar-cell{vertical-align:middle;padding-top:3px;padding-bottom:3px}
+.verdicts .governing th{font-weight:600}
+.verdicts .mark{white-space:nowrap}
+.soils-told{color:var(--soft)}
+.soils-told span{color:var(--ink);white-space:nowrap;font-variant-numeric:lining-nums tabular-nums}
+.bands .best{font-weight:600}
+.verdicts.bands .finding{white-space:normal;text-wrap:balance}
+.bands .open .finding,.bands .beyond .finding{color:var(--beyond)}
 .verdicts .limit-tick{stroke:var(--ink);stroke-width:2}
 .caution{border-left:3px solid var(--beyond);padding:2px 0 2px 14px;max-width:43em;margin:18px 0 0}
 .remarks,.cautions{margin:0 0 12px;padding:0;list-style:none;max-width:43em}

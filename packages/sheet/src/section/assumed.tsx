@@ -1,29 +1,10 @@
 // Assumed: what was taken for granted, which contacts were bridged, and where an engineer should doubt.
-import type { Outcome, ResultsWarning } from '@ohmstead/study';
+import type { Outcome } from '@ohmstead/study';
 import type { VNode } from 'preact';
 import { given, place } from '../format/number.ts';
-import { capital, tally } from '../format/words.ts';
+import { tally } from '../format/words.ts';
 import { DataTable, Part, Say } from './parts.tsx';
-
-function sentence(message: string): string {
-  const text = capital(message);
-  return /[.!?]$/.test(text) ? text : `${text}.`;
-}
-
-function Remarks({ title, remarks }: { title: string; remarks: readonly ResultsWarning[] }): VNode {
-  return (
-    <>
-      <h3>{title}</h3>
-      <ul class="remarks">
-        {remarks.map((remark, k) => (
-          <li key={k}>
-            {sentence(remark.message)} <code>{remark.code}</code>
-          </li>
-        ))}
-      </ul>
-    </>
-  );
-}
+import { Remarks } from './remarks.tsx';
 
 function Snaps({ outcome }: { outcome: Outcome }): VNode {
   const { snaps } = outcome.results;

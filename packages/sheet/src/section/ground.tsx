@@ -1,14 +1,17 @@
-// Ground: the layers of the soil and what covers them.
+// Ground: the layers of the soil, the readings behind them, and what covers them.
 import type { Outcome } from '@ohmstead/study';
 import type { VNode } from 'preact';
 import { GroundFigure } from '../figure/ground.tsx';
 import { titles } from '../figure/titles.ts';
+import { fitted } from '../format/fitted.ts';
 import { fixed, given, givenQuantity, significant } from '../format/number.ts';
 import { tally } from '../format/words.ts';
 import { CLAUSES, CoveringFormula, S } from './formulas.tsx';
 import { How } from './how.tsx';
-import { Layers } from './layers.tsx';
+import { Layers, originOf, soilQuantity } from './layers.tsx';
 import { DataTable, FigureBlock, Input, Part, Result, Say } from './parts.tsx';
+import { Survey } from './survey.tsx';
+import { surveyFacts } from './survey-words.ts';
 
 function Covering({ outcome }: { outcome: Outcome }): VNode {
   const { limits } = outcome.results;
@@ -29,7 +32,7 @@ function Covering({ outcome }: { outcome: Outcome }): VNode {
           {
             symbol: <S of="ρ" />,
             name: 'soil under the covering',
-            value: givenQuantity(limits.soil_resistivity_ohm_m, 'Ω·m'),
+            value: soilQuantity(limits.soil_resistivity_ohm_m, 'Ω·m', originOf(outcome.results)),
           },
           { symbol: <S of="ρ" index="s" />, name: 'covering', value: givenQuantity(resistivity, 'Ω·m') },
           {
@@ -45,13 +48,14 @@ function Covering({ outcome }: { outcome: Outcome }): VNode {
 }
 
 function layerTable(outcome: Outcome): VNode {
+  const told = outcome.results.ground === null ? given : fitted;
   let top = 0;
   const rows = outcome.results.soil.layers.map((layer, k) => {
     const row = [
       String(k + 1),
-      given(top),
-      layer.thickness_m === null ? 'to any depth' : given(layer.thickness_m),
-      given(layer.resistivity_ohm_m),
+      top === 0 ? '0' : told(top),
+      layer.thickness_m === null ? 'to any depth' : told(layer.thickness_m),
+      told(layer.resistivity_ohm_m),
     ];
     top += layer.thickness_m ?? 0;
     return row;
@@ -70,10 +74,11 @@ function layerTable(outcome: Outcome): VNode {
   );
 }
 
-/** Soil layers and covering. */
+/** Soil layers or the survey they are fitted to, and the covering. */
 export function Ground({ outcome }: { outcome: Outcome }): VNode {
-  const { soil, limits } = outcome.results;
+  const { soil, limits, ground } = outcome.results;
   const facts = [
+    ...(ground === null ? [] : surveyFacts(ground.fit)),
     soil.layers.length === 1 ? 'uniform soil' : tally(soil.layers.length, 'layer'),
     limits.surfacing_thickness_m === null
       ? 'no covering'
@@ -81,9 +86,13 @@ export function Ground({ outcome }: { outcome: Outcome }): VNode {
   ];
   return (
     <Part id="ground" title="Ground" facts={facts}>
-      <Say>
-        <Layers layers={soil.layers} path="soil.layers" />.
-      </Say>
+      {ground === null ? (
+        <Say>
+          <Layers layers={soil.layers} origin="stated" />.
+        </Say>
+      ) : (
+        <Survey outcome={outcome} fit={ground.fit} />
+      )}
       <Covering outcome={outcome} />
       <FigureBlock
         name="ground-section"

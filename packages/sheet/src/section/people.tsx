@@ -1,19 +1,24 @@
 // People: the tolerable voltages, and every worst voltage against them.
 import type { Outcome } from '@ohmstead/study';
 import type { VNode } from 'preact';
-import { Hatch } from '../figure/hatch.tsx';
-import { fixed, givenQuantity, measured, quantity } from '../format/number.ts';
-import { barOf, barScale } from '../geometry/bars.ts';
-import { findingWords, undecidedReason } from '../verdict/finding.ts';
+import { fixed, givenQuantity, quantity } from '../format/number.ts';
+import { undecidedReason } from '../verdict/finding.ts';
 import { type VerdictRow, verdictRows } from '../verdict/rows.ts';
+import { soilBandRows } from '../verdict/soil-band.ts';
 import { BODY_FACTOR, CLAUSES, S, StepFormula, TouchFormula } from './formulas.tsx';
 import { How } from './how.tsx';
+import { originOf, soilQuantity } from './layers.tsx';
 import { CaseName, Input, Part, Result, Say } from './parts.tsx';
+import { SoilBandTable } from './soil-band-table.tsx';
+import { VerdictTable } from './verdict-table.tsx';
 
 function Limits({ outcome }: { outcome: Outcome }): VNode {
   const { limits, cases } = outcome.results;
   const factor = BODY_FACTOR[limits.body_mass_kg];
-  const ground = limits.surfacing_resistivity_ohm_m ?? limits.soil_resistivity_ohm_m;
+  const ground =
+    limits.surfacing_resistivity_ohm_m === null
+      ? soilQuantity(limits.soil_resistivity_ohm_m, 'Ω·m', originOf(outcome.results))
+      : givenQuantity(limits.surfacing_resistivity_ohm_m, 'Ω·m');
   return (
     <>
       <Say>
@@ -45,7 +50,7 @@ function Limits({ outcome }: { outcome: Outcome }): VNode {
               {
                 symbol: <S of="ρ" index="s" />,
                 name: 'ground under the feet',
-                value: givenQuantity(ground, 'Ω·m'),
+                value: ground,
               },
               { symbol: <S of="t" index="s" />, name: 'duration', value: givenQuantity(of.duration_s, 's') },
             ]}
@@ -54,76 +59,6 @@ function Limits({ outcome }: { outcome: Outcome }): VNode {
         </Say>
       ))}
     </>
-  );
-}
-
-function BarCell({ row, full, id }: { row: VerdictRow; full: number; id: string }): VNode {
-  const bar = barOf(row, full);
-  const pc = (share: number): string => `${Math.round(share * 10_000) / 100}%`;
-  return (
-    <svg class="fig bar-line" aria-hidden="true" focusable="false">
-      <defs>
-        <Hatch id={id} spacing={5} />
-      </defs>
-      <rect class="bar" x="0" y="6" width={pc(bar.within)} height="10" />
-      {bar.beyond > 0 && (
-        <rect x={pc(bar.within)} y="6" width={pc(bar.beyond)} height="10" fill={`url(#${id})`} />
-      )}
-      <line class="leader" x1={pc(bar.low)} x2={pc(bar.high)} y1="11" y2="11" />
-      <line class="limit-tick" x1={pc(bar.limit)} x2={pc(bar.limit)} y1="0" y2="22" />
-    </svg>
-  );
-}
-
-function VerdictLine({ row, full, id }: { row: VerdictRow; full: number; id: string }): VNode {
-  return (
-    <tr class={row.finding}>
-      <th scope="row">{row.subject}</th>
-      <td class="num worst">{measured(row.worst, row.uncertainty, 'V')}</td>
-      <td class="num limit-value">{quantity(row.limit, 'V')}</td>
-      <td class="bar-cell">
-        <BarCell row={row} full={full} id={id} />
-      </td>
-      <td class="finding">{findingWords(row)}</td>
-    </tr>
-  );
-}
-
-function Verdicts({ rows }: { rows: readonly VerdictRow[] }): VNode {
-  const full = barScale(rows);
-  const cases = [...new Set(rows.map((row) => row.caseIndex))];
-  return (
-    <table class="verdicts">
-      <caption>Worst voltages against their limits; the tick across the bars is the limit</caption>
-      <thead>
-        <tr>
-          <th scope="col">case and quantity</th>
-          <th scope="col" class="num">
-            worst
-          </th>
-          <th scope="col" class="num">
-            limit
-          </th>
-          <td class="bar-cell" />
-          <th scope="col">finding</th>
-        </tr>
-      </thead>
-      {cases.map((caseIndex) => (
-        <tbody key={caseIndex}>
-          <tr class="group">
-            <th scope="rowgroup" colSpan={5}>
-              {rows.find((row) => row.caseIndex === caseIndex)?.caseName}
-            </th>
-          </tr>
-          {rows.map(
-            (row, k) =>
-              row.caseIndex === caseIndex && (
-                <VerdictLine key={k} row={row} full={full} id={`people-hatch-${k}`} />
-              ),
-          )}
-        </tbody>
-      ))}
-    </table>
   );
 }
 
@@ -141,7 +76,23 @@ function Undecided({ rows }: { rows: readonly VerdictRow[] }): VNode {
   );
 }
 
-/** Limits, bars, what cannot be decided. */
+/** What the readings leave open in touch and step voltage; nothing where the soil was given. */
+function Soils({ outcome }: { outcome: Outcome }): VNode | null {
+  const rows = soilBandRows(outcome.results);
+  if (rows.length === 0) return null;
+  return (
+    <>
+      <Say>
+        What the readings leave open: the same currents in the soils that they allow, beside the best fit and
+        against its limits. This spread belongs to the soil; the ± of the best fit belongs to the mesh, and
+        neither holds the other.
+      </Say>
+      <SoilBandTable rows={rows} id="soils" />
+    </>
+  );
+}
+
+/** Limits, bars, what cannot be decided, what the soil leaves open. */
 export function People({ outcome }: { outcome: Outcome }): VNode {
   const { limits } = outcome.results;
   const rows = verdictRows(outcome.results);
@@ -150,8 +101,13 @@ export function People({ outcome }: { outcome: Outcome }): VNode {
   return (
     <Part id="people" title="People" facts={facts}>
       <Limits outcome={outcome} />
-      <Verdicts rows={rows} />
+      <VerdictTable
+        rows={rows}
+        caption="Worst voltages against their limits; the tick across the bars is the limit"
+        id="people"
+      />
       <Undecided rows={rows} />
+      <Soils outcome={outcome} />
       {floating && (
         <Say>
           At floating metal the same touch limit is taken; where the covering does not reach it, the limit of

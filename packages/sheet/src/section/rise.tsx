@@ -7,12 +7,14 @@ import { fixed, measured, percent, place, powerOfTen, quantity, significant } fr
 import { capital } from '../format/words.ts';
 import { conductorCurrents } from '../geometry/leakage.ts';
 import { MOST_CONDUCTOR_ROWS } from './electrode.tsx';
+import { EquivalentUniformSoil } from './equivalent-uniform.tsx';
 import { RiseFormula, S } from './formulas.tsx';
 import { How } from './how.tsx';
 import { CaseName, DataTable, FigureBlock, Input, Part, Result, Say } from './parts.tsx';
+import { SoilSpread } from './soil-spread.tsx';
 
 function Resistance({ outcome }: { outcome: Outcome }): VNode {
-  const { electrode, metal_model, cases } = outcome.results;
+  const { electrode, metal_model, cases, ground } = outcome.results;
   const where =
     cases.length > 1
       ? `, seen where the current of ${cases[0].name} enters`
@@ -41,7 +43,25 @@ function Resistance({ outcome }: { outcome: Outcome }): VNode {
         ]}
         value={measured(electrode.resistance_ohm, electrode.resistance_uncertainty_ohm, 'Ω')}
       />
+      {ground !== null && (
+        <>
+          {' '}
+          <SoilSpread of={ground.consequence.resistance_ohm} unit="Ω" />
+        </>
+      )}
     </Say>
+  );
+}
+
+/** The rise of a case over the soils; nothing where the soil was given. */
+function RiseSpread({ outcome, index }: { outcome: Outcome; index: number }): VNode | null {
+  const spread = outcome.results.ground?.consequence.cases[index]?.gpr_V;
+  if (spread === undefined) return null;
+  return (
+    <>
+      {' '}
+      <SoilSpread of={spread} unit="V" />
+    </>
   );
 }
 
@@ -70,6 +90,7 @@ function Rises({ outcome }: { outcome: Outcome }): VNode {
             ]}
             value={measured(of.gpr_V, of.gpr_uncertainty_V, 'V')}
           />
+          <RiseSpread outcome={outcome} index={index} />
         </Say>
       ))}
     </>
@@ -148,6 +169,7 @@ export function Rise({ outcome }: { outcome: Outcome }): VNode {
     <Part id="rise" title="Rise" facts={facts}>
       <Resistance outcome={outcome} />
       <Rises outcome={outcome} />
+      <EquivalentUniformSoil outcome={outcome} />
       {electrodes
         .filter((metal) => metal.role === 'floating')
         .map((metal) => (

@@ -1,16 +1,18 @@
 // Season: the soil in its other states, and which of them governs.
-import type { EnvelopeCase, Outcome, SeasonCase, SeasonResult, WorstTouch } from '@ohmstead/study';
+import type { EnvelopeCase, Outcome, Results, SeasonResult } from '@ohmstead/study';
 import type { VNode } from 'preact';
-import { fixed, measured, percent, quantity } from '../format/number.ts';
+import { fixed, measured, quantity } from '../format/number.ts';
 import { countWord, tally } from '../format/words.ts';
-import { voltageFinding } from '../verdict/finding.ts';
+import { AS_GIVEN, seasonRows } from '../verdict/season-rows.ts';
 import { Layers } from './layers.tsx';
 import { CaseName, DataTable, Part, Result, Say } from './parts.tsx';
+import { VerdictTable } from './verdict-table.tsx';
 
-function SeasonSoil({ season }: { season: SeasonResult }): VNode {
+function SeasonSoil({ season, fitted }: { season: SeasonResult; fitted: boolean }): VNode {
   return (
     <Say>
-      <CaseName name={season.name} />: <Layers layers={season.layers} />. The resistance is{' '}
+      <CaseName name={season.name} />:{' '}
+      <Layers layers={season.layers} origin={fitted ? 'from fitted' : 'from stated'} />. The resistance is{' '}
       <Result>{measured(season.resistance_ohm, season.resistance_uncertainty_ohm, 'Ω')}</Result>
       {`, the covering factor ${fixed(season.covering_factor, 3)}`}.
     </Say>
@@ -25,33 +27,40 @@ function governs(given: EnvelopeCase): string {
   return `${who}; the rise is highest in ${given.gpr.season}, ${quantity(given.gpr.gpr_V, 'V')}.`;
 }
 
-function compared(of: WorstTouch): string {
-  const share = of.worst_V / of.limit_V;
-  switch (voltageFinding(of)) {
-    case 'beyond':
-      return `beyond by ${percent(share - 1)}`;
-    case 'within':
-      return `${percent(1 - share)} margin`;
-    case 'undecided':
-      return 'undecided';
-  }
-}
-
-function cells(season: string, of: SeasonCase): readonly string[] {
-  return [
-    of.name,
-    season,
-    measured(of.gpr_V, of.gpr_uncertainty_V, 'V'),
-    measured(of.touch.worst_V, of.touch.uncertainty_V, 'V'),
-    compared(of.touch),
-    measured(of.step.worst_V, of.step.uncertainty_V, 'V'),
-    compared(of.step),
-  ];
+/** Resistance and rise by season, the highest rise of each case marked. */
+function RiseTable({ results }: { results: Results }): VNode {
+  const { cases, seasons, envelope, electrode } = results;
+  const rise = (season: string, k: number, of: Results['cases'][number] | SeasonResult['cases'][number]) => {
+    const highest = envelope[k]?.gpr.season === season ? ', highest' : '';
+    return `${measured(of.gpr_V, of.gpr_uncertainty_V, 'V')}${highest}`;
+  };
+  return (
+    <DataTable
+      caption="Resistance and rise by season"
+      columns={[
+        { label: 'season' },
+        { label: 'resistance', align: 'right' },
+        ...cases.map((of) => ({ label: `rise, ${of.name}`, align: 'right' as const })),
+      ]}
+      rows={[
+        [
+          AS_GIVEN,
+          measured(electrode.resistance_ohm, electrode.resistance_uncertainty_ohm, 'Ω'),
+          ...cases.map((of, k) => rise(AS_GIVEN, k, of)),
+        ],
+        ...seasons.map((season) => [
+          season.name,
+          measured(season.resistance_ohm, season.resistance_uncertainty_ohm, 'Ω'),
+          ...season.cases.map((of, k) => rise(season.name, k, of)),
+        ]),
+      ]}
+    />
+  );
 }
 
 /** Other states of the soil; absent where the study names none. */
 export function Season({ outcome }: { outcome: Outcome }): VNode | null {
-  const { seasons, envelope, cases, electrodes } = outcome.results;
+  const { seasons, envelope, electrodes, ground } = outcome.results;
   if (seasons.length === 0) return null;
   const floating = electrodes.some((metal) => metal.role === 'floating');
   return (
@@ -62,31 +71,24 @@ export function Season({ outcome }: { outcome: Outcome }): VNode | null {
         change with the soil under the covering too.
       </Say>
       {seasons.map((season) => (
-        <SeasonSoil key={season.name} season={season} />
+        <SeasonSoil key={season.name} season={season} fitted={ground !== null} />
       ))}
       {envelope.map((given) => (
         <Say key={given.name}>
           <CaseName name={given.name} />: {governs(given)}
         </Say>
       ))}
-      <DataTable
-        caption="Each case in each season"
-        columns={[
-          { label: 'case' },
-          { label: 'season' },
-          { label: 'rise', align: 'right' },
-          { label: 'worst touch', align: 'right' },
-          { label: 'against its limit' },
-          { label: 'worst step', align: 'right' },
-          { label: 'against its limit' },
-        ]}
-        rows={cases.flatMap((of, k) => [
-          cells('as given', of),
-          ...seasons.map((season) => cells(season.name, season.cases[k])),
-        ])}
+      <VerdictTable
+        rows={seasonRows(outcome.results)}
+        caption="Each case in each season against the limit of that season; the smallest margin governs"
+        id="season"
+        bySeason
       />
+      <RiseTable results={outcome.results} />
       <Say>
         The maps show the soil as given.{floating && ' Floating metal is compared in the soil as given only.'}
+        {ground !== null &&
+          ' The seasons change the best fit; what the readings leave open is told for the soil as given only.'}
       </Say>
     </Part>
   );

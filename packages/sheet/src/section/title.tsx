@@ -1,8 +1,15 @@
 // The title block: what was calculated, and the answer in words.
-import type { Outcome } from '@ohmstead/study';
+import type { Outcome, Results } from '@ohmstead/study';
 import type { VNode } from 'preact';
-import { counted } from '../format/words.ts';
+import { capital, counted } from '../format/words.ts';
 import { answerOf, answerSentences } from '../verdict/answer.ts';
+import { soilBandSentences } from '../verdict/soil-band.ts';
+
+interface DoubtsIn {
+  readonly part: string;
+  readonly name: string;
+  readonly count: number;
+}
 
 /** Anchors and names of the parts, in order. */
 const PARTS: readonly (readonly [id: string, name: string])[] = [
@@ -18,11 +25,21 @@ const PARTS: readonly (readonly [id: string, name: string])[] = [
   ['cautions', 'Cautions'],
 ];
 
+/** Doubts of the soil's fit stand under Ground, all others under Assumed. */
+function doubtsOf({ ground, warnings }: Results): readonly DoubtsIn[] {
+  const places: readonly DoubtsIn[] = [
+    { part: 'ground', name: 'Ground', count: ground?.fit.doubts.length ?? 0 },
+    { part: 'assumed', name: 'Assumed', count: warnings.length },
+  ];
+  return places.filter(({ count }) => count > 0);
+}
+
 /** Title, answer, and the findings behind it. */
 export function TitleBlock({ outcome }: { outcome: Outcome }): VNode {
   const { results } = outcome;
   const answer = answerOf(results);
-  const doubts = results.warnings.length;
+  const stated = doubtsOf(results);
+  const doubts = stated.reduce((sum, { count }) => sum + count, 0);
   return (
     <header class="title-block">
       <div class="headline">
@@ -38,15 +55,19 @@ export function TitleBlock({ outcome }: { outcome: Outcome }): VNode {
         </p>
       </div>
       <div class="findings">
-        {answerSentences(results).map((sentence) => (
+        {[...answerSentences(results), ...soilBandSentences(results)].map((sentence) => (
           <p key={sentence}>{sentence}</p>
         ))}
-        {doubts > 0 && (
+        {stated.length > 0 && (
           <p>
-            {doubts === 1
-              ? 'One doubt is'
-              : `${counted(doubts, 'doubt').replace(/^./, (c) => c.toUpperCase())} are`}{' '}
-            stated under <a href="#assumed">Assumed</a>.
+            {capital(counted(doubts, 'doubt'))} {doubts === 1 ? 'is' : 'are'} stated under{' '}
+            {stated.map(({ part, name }, k) => (
+              <span key={part}>
+                {k > 0 && ' and '}
+                <a href={`#${part}`}>{name}</a>
+              </span>
+            ))}
+            .
           </p>
         )}
       </div>

@@ -8,6 +8,12 @@ export interface Column<Row> {
   readonly value: (row: Row) => Cell;
 }
 
+export interface TableFile {
+  /** ends in `.csv`, unique within the list */
+  readonly name: string;
+  readonly csv: string;
+}
+
 /** Text that begins like this is evaluated by spreadsheets when the file is opened. */
 const FORMULA_START = /^[=+\-@\t\r]/;
 const NEEDS_QUOTES = /[",\r\n]/;

@@ -2,14 +2,9 @@
 import type { MeshLevel, Outcome } from '@ohmstead/study';
 import { uniqueSlugs } from '../format/slug.ts';
 import { casesCsv, limitsCsv, profileCsv, seasonsCsv } from './case-tables.ts';
-import { type Column, csvOf } from './csv.ts';
+import { type Column, csvOf, type TableFile } from './csv.ts';
 import { conductorsCsv, electrodesCsv, segmentsCsv, snapsCsv } from './electrode-tables.ts';
-
-export interface TableFile {
-  /** ends in `.csv`, unique within the list */
-  readonly name: string;
-  readonly csv: string;
-}
+import { groundTables } from './ground-tables.ts';
 
 interface LayerRow {
   readonly season: string;
@@ -55,7 +50,7 @@ const MESH_COLUMNS: readonly Column<MeshLevel>[] = [
 ];
 
 interface Remark {
-  readonly kind: 'assumption' | 'warning';
+  readonly kind: 'assumption' | 'warning' | 'doubt of the fit';
   readonly code: string;
   readonly message: string;
 }
@@ -70,6 +65,7 @@ function remarks({ results }: Outcome): readonly Remark[] {
   return [
     ...results.assumptions.map((a): Remark => ({ kind: 'assumption', ...a })),
     ...results.warnings.map((w): Remark => ({ kind: 'warning', ...w })),
+    ...(results.ground?.fit.doubts ?? []).map((d): Remark => ({ kind: 'doubt of the fit', ...d })),
   ];
 }
 
@@ -98,6 +94,7 @@ export function tables(outcome: Outcome): readonly TableFile[] {
     { name: 'snaps.csv', csv: snapsCsv(outcome) },
     { name: 'soil.csv', csv: csvOf(LAYER_COLUMNS, layerRows(outcome)) },
     ...profiles,
+    ...groundTables(outcome),
     ...(results.seasons.length > 0 ? [{ name: 'seasons.csv', csv: seasonsCsv(outcome) }] : []),
   ];
   return files.sort((a, b) => (a.name < b.name ? -1 : 1));

@@ -4,6 +4,7 @@ import { measured, percent, place, quantity } from '../format/number.ts';
 import { capital, countWord } from '../format/words.ts';
 import { type Finding, findingWords } from './finding.ts';
 import { type VerdictRow, verdictRows } from './rows.ts';
+import { casesLeftOpen } from './soil-band.ts';
 
 export interface Answer {
   /** `one of three cases` */
@@ -31,7 +32,16 @@ function some(count: number, total: number): string {
   return total === 2 ? 'both cases' : `all ${countWord(total)} cases`;
 }
 
-/** The answer of the sheet from the findings of all its cases. */
+/** What the first line leaves open: mesh, then soil. */
+function restOf(mesh: string | undefined, results: Results): string | undefined {
+  const open = casesLeftOpen(results);
+  const cases = open === 1 ? 'one case' : `${countWord(open)} cases`;
+  const soil = open > 0 ? `at the best fit; the soil readings leave ${cases} open` : undefined;
+  const parts = [mesh, soil].filter((part) => part !== undefined);
+  return parts.length > 0 ? parts.join('; ') : undefined;
+}
+
+/** The answer of the sheet from the findings of all its cases, at the best fit of the soil. */
 export function answerOf(results: Results): Answer {
   const found = findingByCase(results);
   const total = found.length;
@@ -40,7 +50,7 @@ export function answerOf(results: Results): Answer {
   if (beyond > 0) {
     const predicate = beyond === 1 ? 'exceeds a limit' : 'exceed a limit';
     const rest = open > 0 ? `${countWord(open)} more cannot be decided at this mesh` : undefined;
-    return { subject: some(beyond, total), predicate, rest, finding: 'beyond' };
+    return { subject: some(beyond, total), predicate, rest: restOf(rest, results), finding: 'beyond' };
   }
   if (open > 0) {
     const others = total - open;
@@ -49,7 +59,7 @@ export function answerOf(results: Results): Answer {
     return {
       subject: some(open, total),
       predicate: 'cannot be decided at this mesh',
-      rest,
+      rest: restOf(rest, results),
       finding: 'undecided',
     };
   }
@@ -57,7 +67,7 @@ export function answerOf(results: Results): Answer {
   return {
     subject: `${some(total, total)} ${verb}`,
     predicate: `within ${whose} limits`,
-    rest: undefined,
+    rest: restOf(undefined, results),
     finding: 'within',
   };
 }

@@ -33,8 +33,8 @@ function row(caseIndex: number, caseName: string, place: Place, volts: Voltages)
 }
 
 /**
- * Voltage between floating metal and the soil within reach of it, V, against the touch limit of the case. Its
- * uncertainty is that of the metal's own potential and of the rise; both are numerical.
+ * Voltage between floating metal and the soil within reach of it, V, against the touch limit of the ground there: the
+ * covering where it lies, bare soil elsewhere. Its uncertainty is its own and that of the rise; both are numerical.
  */
 function floatingRow(index: number, of: CaseResult, metal: ElectrodeResult): VerdictRow | undefined {
   if (metal.touch_ratio === null) return undefined;
@@ -48,8 +48,11 @@ function floatingRow(index: number, of: CaseResult, metal: ElectrodeResult): Ver
   };
   return row(index, of.name, place, {
     worst: ratio * of.gpr_V,
-    uncertainty: metal.potential_uncertainty_ratio * of.gpr_V + ratio * of.gpr_uncertainty_V,
-    limit: of.touch.limit_V,
+    uncertainty: (metal.touch_uncertainty_ratio ?? 0) * of.gpr_V + ratio * of.gpr_uncertainty_V,
+    limit:
+      metal.touch_on_covering === true
+        ? (of.covering_touch_limit_V ?? of.bare_touch_limit_V)
+        : of.bare_touch_limit_V,
   });
 }
 

@@ -5,28 +5,10 @@ import { standaloneCss } from '../../src/figure/style.ts';
 import { xmlText } from '../../src/figure/xml-text.ts';
 import { figures } from '../../src/index.ts';
 import { fixtureOutcome } from '../fixture.ts';
+import { malformed } from '../markup.ts';
 
 const outcome = fixtureOutcome({ spacing: 2 });
 const files = figures(outcome);
-
-/** Problems of nesting and quoting that an XML reader would refuse; none for well-formed markup. */
-function malformed(xml: string): readonly string[] {
-  const open: string[] = [];
-  const problems: string[] = [];
-  const rest = xml.replace(
-    /<(\/?)([a-zA-Z]+)((?:\s+[a-zA-Z0-9:-]+="[^"<]*")*)\s*(\/?)>/g,
-    (_, close, name, __, empty) => {
-      if (close === '/') {
-        if (open.pop() !== name) problems.push(`</${name}>`);
-      } else if (empty === '') open.push(name);
-      return '';
-    },
-  );
-  if (open.length > 0) problems.push(`open: ${open.join(' ')}`);
-  if (rest.includes('<') || rest.includes(']]>')) problems.push(`bracket: ${rest.slice(0, 80)}`);
-  if (/&(?!(amp|lt|gt|quot|#\d+);)/.test(xml)) problems.push('bare ampersand');
-  return problems;
-}
 
 describe('figure files', () => {
   it('are named by kind and case, sorted and unique', () => {

@@ -4,26 +4,10 @@ import { describe, expect, it } from 'vitest';
 import { sheetCss, sheetHtml } from '../../src/index.ts';
 import { fixtureOutcome } from '../fixture.ts';
 import { withSeason } from '../fixture-season.ts';
+import { partOf, textOf } from '../markup.ts';
 
 const outcome = fixtureOutcome({ spacing: 2 });
 const html = sheetHtml(outcome);
-
-/** Text between tags, spaces made plain. */
-function textOf(markup: string): string {
-  return markup
-    .replace(/<style>[\s\S]*?<\/style>/g, '')
-    .replace(/<[^>]+>/g, '')
-    .replace(/[\u202f\u00a0]/g, ' ')
-    .replaceAll('&lt;', '<')
-    .replaceAll('&quot;', '"')
-    .replaceAll('&amp;', '&');
-}
-
-function partOf(markup: string, id: string): string {
-  const from = markup.indexOf(`<section class="part" id="${id}"`);
-  const to = markup.indexOf('<section class="part"', from + 1);
-  return markup.slice(from, to < 0 ? undefined : to);
-}
 
 describe('the page', () => {
   it('needs nothing else: no script, no request, a policy that forbids both', () => {

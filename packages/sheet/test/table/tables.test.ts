@@ -5,25 +5,13 @@ import { tables } from '../../src/index.ts';
 import { csvCell, csvOf } from '../../src/table/csv.ts';
 import { fixtureOutcome } from '../fixture.ts';
 import { withSeason } from '../fixture-season.ts';
+import { readCsv } from '../read-csv.ts';
 
 const outcome = fixtureOutcome({ spacing: 2 });
 const files = tables(outcome);
 
-/** Reads CSV after RFC 4180, section 2. */
-function parse(csv: string): readonly (readonly string[])[] {
-  const rows: string[][] = [[]];
-  const cell = /(?:"((?:[^"]|"")*)"|([^",\r\n]*))(,|\r\n|$)/y;
-  while (cell.lastIndex < csv.length) {
-    const found = cell.exec(csv);
-    if (found === null) throw new Error('not RFC 4180');
-    rows[rows.length - 1].push(found[1]?.replaceAll('""', '"') ?? found[2]);
-    if (found[3] === '\r\n' && cell.lastIndex < csv.length) rows.push([]);
-  }
-  return rows;
-}
-
 function table(name: string): readonly (readonly string[])[] {
-  return parse(files.find((f) => f.name === name)?.csv ?? '');
+  return readCsv(files.find((f) => f.name === name)?.csv ?? '');
 }
 
 function column(name: string, of: string): readonly string[] {
@@ -58,7 +46,7 @@ describe('a cell', () => {
           ],
           texts,
         );
-        const read = parse(csv)
+        const read = readCsv(csv)
           .slice(1)
           .map(([cell]) => cell);
         expect(read).toEqual(texts.map((t) => (/^[=+\-@\t\r]/.test(t) ? `'${t}` : t)));
@@ -86,7 +74,7 @@ describe('table files', () => {
     for (const { csv } of files) {
       expect(csv.endsWith('\r\n')).toBe(true);
       expect(csv.replaceAll('\r\n', '')).not.toMatch(/[\r\n]/);
-      const [header, ...rows] = parse(csv);
+      const [header, ...rows] = readCsv(csv);
       for (const row of rows) expect(row).toHaveLength(header.length);
     }
   });
@@ -120,7 +108,7 @@ describe('table files', () => {
 
   it('tell every case in every other season', () => {
     const seasonal = tables(withSeason(outcome, { name: 'dry summer', times: 1.3 }));
-    const seasons = parse(seasonal.find((f) => f.name === 'seasons.csv')?.csv ?? '');
+    const seasons = readCsv(seasonal.find((f) => f.name === 'seasons.csv')?.csv ?? '');
     expect(seasons).toHaveLength(1 + outcome.results.cases.length);
     expect(seasons[1][0]).toBe('dry summer');
     expect(seasonal.find((f) => f.name === 'soil.csv')?.csv).toContain('dry summer,1,0,1.5,900\r\n');
@@ -137,7 +125,7 @@ describe('table files', () => {
     expect(all).toContain('"plain, with comma"');
     expect(all).toContain("'+fence");
     for (const { csv } of nasty) {
-      for (const cell of parse(csv).flat()) expect(/^[=+@]|^-(?!\d)/.test(cell)).toBe(false);
+      for (const cell of readCsv(csv).flat()) expect(/^[=+@]|^-(?!\d)/.test(cell)).toBe(false);
     }
   });
 
