@@ -21,6 +21,7 @@ const NODE_ONLY = 'apps/cli';
 
 /** Folders of core, each importing only from itself and those before it. */
 const CORE_ORDER = [
+  'kernels',
   'numerics',
   'materials',
   'soil',

@@ -16,7 +16,19 @@ export async function generatedText() {
   for (const name of MODULES) {
     let bytes;
     const { error, stderr } = await asc.main(
-      [`${name}.ts`, '--outFile', `${name}.wasm`, '-O2', '--noAssert', '--runtime', 'stub', '--enable', 'simd', '--initialMemory', '1'],
+      [
+        `${name}.ts`,
+        '--outFile',
+        `${name}.wasm`,
+        '-O2',
+        '--noAssert',
+        '--runtime',
+        'stub',
+        '--enable',
+        'simd',
+        '--initialMemory',
+        '1',
+      ],
       {
         readFile: (file) => {
           try {

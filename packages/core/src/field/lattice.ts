@@ -28,16 +28,21 @@ const COMPUTED = 1;
 /** Side of the finest cell that may be interpolated. */
 const FINEST = 2;
 
+/** Functions of place: one place at a time (`into` shape [functions]), or many (`into` shape [places × functions]). */
+export type PlaceFunctions =
+  | ((x: number, y: number, into: Float64Array) => void)
+  | { atMany(xs: Float64Array, ys: Float64Array, into: Float64Array): void };
+
 /**
  * Fills lattices of several functions over one box. Each cell carries 3 × 3 values; its four quarter points are computed
  * and compared with the biquadratic through the nine. Where one function differs by more than its tolerance the cell is
- * quartered, otherwise its points are interpolated.
- * @param f writes the values at a place; `into` shape [tolerances]
+ * quartered, otherwise its points are interpolated. All points of one size of cell are asked for at once.
+ * @param f as many functions as tolerances
  * @param spacing of the lattices, m
  * @param tolerances one a function, in its unit
  */
 export function adaptiveLattices(
-  f: (x: number, y: number, into: Float64Array) => void,
+  f: PlaceFunctions,
   tolerances: readonly number[],
   box: Box,
   spacing: number,
@@ -53,57 +58,96 @@ export function adaptiveLattices(
   const values = tolerances.map(() => new Float64Array(nx * ny));
   const errors = tolerances.map(() => 0);
   const known = new Uint8Array(nx * ny);
-  const here = new Float64Array(tolerances.length);
   let evaluated = 0;
-  const compute = (i: number, j: number): number => {
-    const place = j * nx + i;
-    if (known[place] !== COMPUTED) {
-      f(x0 + i * spacing, y0 + j * spacing, here);
+  const compute = (wanted: readonly number[]): void => {
+    const xs = Float64Array.from(wanted, (place) => x0 + (place % nx) * spacing);
+    const ys = Float64Array.from(wanted, (place) => y0 + Math.floor(place / nx) * spacing);
+    const found = valuesAt(f, xs, ys, tolerances.length);
+    wanted.forEach((place, p) => {
       values.forEach((of, u) => {
-        of[place] = here[u]!;
+        of[place] = found[p * tolerances.length + u]!;
       });
-      known[place] = COMPUTED;
-      evaluated++;
-    }
-    return place;
-  };
-  const places = new Int32Array(9);
-  const nine = new Float64Array(9);
-  const take = (of: Float64Array): void => {
-    for (let k = 0; k < 9; k++) nine[k] = of[places[k]!]!;
-  };
-  const fill = (i0: number, j0: number, side: number): void => {
-    const half = side / 2;
-    for (let b = 0; b < 3; b++)
-      for (let a = 0; a < 3; a++) places[b * 3 + a] = compute(i0 + a * half, j0 + b * half);
-    if (side <= FINEST) return;
-    const quarter = side / 4;
-    const tests = [1, 3].flatMap((b) =>
-      [1, 3].map((a) => [a, b, compute(i0 + a * quarter, j0 + b * quarter)] as const),
-    );
-    const misses = values.map((of) => {
-      take(of);
-      return tests.reduce(
-        (most, [a, b, place]) => Math.max(most, Math.abs(of[place]! - biquadratic(nine, a / 4, b / 4))),
-        0,
-      );
     });
-    if (misses.some((miss, u) => miss > tolerances[u]!)) {
-      for (const b of [0, half]) for (const a of [0, half]) fill(i0 + a, j0 + b, half);
+    evaluated += wanted.length;
+  };
+  const nine = new Float64Array(9);
+  const take = (of: Float64Array, corner: number, half: number): void => {
+    for (let b = 0; b < 3; b++)
+      for (let a = 0; a < 3; a++) nine[b * 3 + a] = of[corner + b * half * nx + a * half]!;
+  };
+  const missOf = (of: Float64Array, corner: number, side: number): number => {
+    take(of, corner, side / 2);
+    let most = 0;
+    for (const b of [1, 3])
+      for (const a of [1, 3]) {
+        const value = of[corner + ((b * side) / 4) * nx + (a * side) / 4]!;
+        most = Math.max(most, Math.abs(value - biquadratic(nine, a / 4, b / 4)));
+      }
+    return most;
+  };
+  /** Cells that were quartered, marked at their centre, which is no other cell's. */
+  const quartered = new Uint8Array(nx * ny);
+  let level: number[] = [];
+  for (let j = 0; j < up; j++) for (let i = 0; i < across; i++) level.push((j * nx + i) * COARSEST);
+  for (let side = COARSEST; level.length > 0; side /= 2) {
+    const half = side / 2;
+    compute(unknownOf(level, side, nx, known));
+    if (side <= FINEST) break;
+    const next: number[] = [];
+    for (const corner of level) {
+      const misses = values.map((of) => missOf(of, corner, side));
+      if (misses.some((miss, u) => miss > tolerances[u]!)) {
+        quartered[corner + half * nx + half] = 1;
+        next.push(corner, corner + half, corner + half * nx, corner + half * nx + half);
+      } else
+        misses.forEach((miss, u) => {
+          errors[u] = Math.max(errors[u]!, miss);
+        });
+    }
+    level = next;
+  }
+  const fill = (corner: number, side: number): void => {
+    const half = side / 2;
+    if (side <= FINEST) return;
+    if (quartered[corner + half * nx + half] === 1) {
+      for (const b of [0, half]) for (const a of [0, half]) fill(corner + b * nx + a, half);
       return;
     }
-    values.forEach((of, u) => {
-      errors[u] = Math.max(errors[u]!, misses[u]!);
-      take(of);
+    for (const of of values) {
+      take(of, corner, half);
       for (let b = 0; b <= side; b++)
         for (let a = 0; a <= side; a++) {
-          const place = (j0 + b) * nx + i0 + a;
+          const place = corner + b * nx + a;
           if (known[place] !== COMPUTED) of[place] = biquadratic(nine, a / side, b / side);
         }
-    });
+    }
   };
-  for (let j = 0; j < up; j++) for (let i = 0; i < across; i++) fill(i * COARSEST, j * COARSEST, COARSEST);
+  for (let j = 0; j < up; j++) for (let i = 0; i < across; i++) fill((j * nx + i) * COARSEST, COARSEST);
   return values.map((of, u) => ({ x0, y0, spacing, nx, ny, values: of, evaluated, error: errors[u]! }));
+}
+
+/** Points of cells of one side that are not computed yet, which it marks: nine a cell, and the quarter points of cells that are tested. */
+function unknownOf(level: readonly number[], side: number, nx: number, known: Uint8Array): number[] {
+  const wanted: number[] = [];
+  const step = side / 4;
+  const want = (place: number): void => {
+    if (known[place] === COMPUTED) return;
+    known[place] = COMPUTED;
+    wanted.push(place);
+  };
+  for (const corner of level) {
+    for (const b of [0, 2, 4]) for (const a of [0, 2, 4]) want(corner + b * step * nx + a * step);
+    if (side > FINEST)
+      for (const b of [1, 3]) for (const a of [1, 3]) want(corner + b * step * nx + a * step);
+  }
+  return wanted;
+}
+
+function valuesAt(f: PlaceFunctions, xs: Float64Array, ys: Float64Array, count: number): Float64Array {
+  const found = new Float64Array(xs.length * count);
+  if (typeof f !== 'function') f.atMany(xs, ys, found);
+  else for (let p = 0; p < xs.length; p++) f(xs[p]!, ys[p]!, found.subarray(p * count, (p + 1) * count));
+  return found;
 }
 
 /** Value of the biquadratic through 3 × 3 values at (u, v) in the unit square. */

@@ -8,6 +8,7 @@ import { gaussLegendre } from '../numerics/gauss-legendre.ts';
 import type { SoilImages } from '../soil/image-list.ts';
 import { addFarField, clusterOrder, type FarCluster, farClusters } from './far-clusters.ts';
 import { potentialAt } from './potential.ts';
+import { addByKernel, type PackedGroup, packGroup, surfaceKernel } from './surface-kernel.ts';
 
 /** Surface potential at a place, V (or Ω for a leakage per ampere). */
 export type SurfacePotential = (x: number, y: number) => number;
@@ -17,6 +18,8 @@ export interface SurfacePotentials {
   readonly count: number;
   /** writes the potential of each leakage at a place; `into` shape [count] */
   at(x: number, y: number, into: Float64Array): void;
+  /** the same at many places, by the compiled kernel where there is one; `into` shape [places × count] */
+  atMany(xs: Float64Array, ys: Float64Array, into: Float64Array): void;
 }
 
 /** Segments of one depth class that leak; coordinates and currents packed, shape [count] each. */
@@ -51,6 +54,9 @@ const THREE_POINTS = 3.187;
 const NEAR_ORDER_LEAST = 4;
 const NEAR_ORDER_MOST = 12;
 
+/** Distance over length past which a vertical segment is a point at its middle depth. */
+const UPRIGHT_FAR = CLOSED_FORM_RATIO * 100;
+
 /** An image offset below this is none, m. */
 const NO_OFFSET = 1e-12;
 
@@ -69,15 +75,32 @@ export function surfacePotentials(
   const groups = classes.classes.map((c, at) => classGroup(mesh, images, leakages, c, at, classes.of, reach));
   const sloped = leakages.map((leakage) => leakage.map((current, i) => (classes.of[i]! < 0 ? current : 0)));
   const anySloped = sloped.some((leakage) => leakage.some((current) => current !== 0));
+  const count = leakages.length;
+  const addSloped = (x: number, y: number, into: Float64Array): void => {
+    for (let u = 0; u < count; u++) into[u] = anySloped ? potentialAt(mesh, images, sloped[u]!, x, y, 0) : 0;
+  };
+  const at = (x: number, y: number, into: Float64Array): void => {
+    addSloped(x, y, into);
+    for (const group of groups) addGroup(group, x, y, into);
+  };
+  let packed: readonly PackedGroup[] | undefined;
   return {
-    count: leakages.length,
-    at(x, y, into) {
-      for (let u = 0; u < leakages.length; u++)
-        into[u] = anySloped ? potentialAt(mesh, images, sloped[u]!, x, y, 0) : 0;
-      for (const group of groups) {
-        if (group.vertical) addUpright(group, x, y, into);
-        else addLevel(group, x, y, into);
-      }
+    count,
+    at,
+    atMany(xs, ys, into) {
+      const kernel = surfaceKernel();
+      const each = (add: (x: number, y: number, into: Float64Array) => void): void => {
+        for (let p = 0; p < xs.length; p++) add(xs[p]!, ys[p]!, into.subarray(p * count, (p + 1) * count));
+      };
+      if (kernel === undefined) return each(at);
+      packed ??= groups.map((group) =>
+        packGroup(group, count, TWO_POINTS, THREE_POINTS, (length) => nearOrder(length, group.rest)),
+      );
+      each(addSloped);
+      packed.forEach((group, k) => {
+        if (group.count > 0 && !addByKernel(kernel, group, count, UPRIGHT_FAR, xs, ys, into))
+          each((x, y, sums) => addGroup(groups[k]!, x, y, sums));
+      });
     },
   };
 }
@@ -140,6 +163,11 @@ function classGroup(
 const TWO = Math.sqrt(1 / 3);
 const THREE = Math.sqrt(3 / 5);
 
+function addGroup(group: ClassGroup, x: number, y: number, into: Float64Array): void {
+  if (group.vertical) addUpright(group, x, y, into);
+  else addLevel(group, x, y, into);
+}
+
 /** Horizontal metal: far boxes by their points, the rest segment by segment. */
 function addLevel(group: ClassGroup, x: number, y: number, into: Float64Array): void {
   if (group.clusters === undefined) return;
@@ -187,8 +215,7 @@ function nearLevel(group: ClassGroup, j: number, dx: number, dy: number): number
     Math.sqrt((dx - ux) ** 2 + (dy - uy) ** 2 + above) + Math.sqrt((dx + ux) ** 2 + (dy + uy) ** 2 + above);
   const own = (group.ownWeight * Math.log((ends + length) / (ends - length))) / length;
   if (group.rest === undefined) return own;
-  const wanted = Math.ceil((NEAR_ORDER_LEAST * length) / group.rest.smoothness);
-  const { points, weights } = gaussLegendre(Math.min(NEAR_ORDER_MOST, Math.max(NEAR_ORDER_LEAST, wanted)));
+  const { points, weights } = gaussLegendre(nearOrder(length, group.rest));
   let rest = 0;
   for (let a = 0; a < points.length; a++) {
     const t = 2 * points[a]! - 1;
@@ -197,6 +224,11 @@ function nearLevel(group: ClassGroup, j: number, dx: number, dy: number): number
     rest += weights[a]! * radialValue(group.rest, px * px + py * py);
   }
   return own + rest;
+}
+
+function nearOrder(length: number, rest: RadialTable | undefined): number {
+  const wanted = Math.ceil((NEAR_ORDER_LEAST * length) / (rest?.smoothness ?? length));
+  return Math.min(NEAR_ORDER_MOST, Math.max(NEAR_ORDER_LEAST, wanted));
 }
 
 /** Vertical metal is one place in plan: closed form for its own distance, the table's mean for the rest. */
@@ -210,7 +242,7 @@ function addUpright(group: ClassGroup, x: number, y: number, into: Float64Array)
     const length = group.length[j]!;
     const ends = Math.sqrt(rr + aa + z1 * z1) + Math.sqrt(rr + aa + z2 * z2);
     const own =
-      rr > (CLOSED_FORM_RATIO * 100 * length) ** 2
+      rr > (UPRIGHT_FAR * length) ** 2
         ? ownWeight / Math.sqrt(rr + ((z1 + z2) / 2) ** 2)
         : (ownWeight * Math.log((ends + length) / (ends - length))) / length;
     addScaled(group.strength, j, own + (rest === undefined ? 0 : radialValue(rest, rr)), into);

@@ -1,0 +1,212 @@
+// The surface potentials of one group of metal at many points, by the compiled kernel.
+import { doublesAt, type Kernel, kernelOf, place } from '../kernels/instance.ts';
+import { surfaceBytes } from '../kernels/wasm-bytes.ts';
+import type { RadialTable } from '../leakage/radial-table.ts';
+import { gaussLegendre } from '../numerics/gauss-legendre.ts';
+import type { FarCluster } from './far-clusters.ts';
+
+/** A group as the kernel reads it. */
+export interface PackedGroup {
+  readonly vertical: boolean;
+  readonly count: number;
+  /** ten doubles a horizontal segment, four a vertical one */
+  readonly segments: Float64Array;
+  /** shape [count × cases] */
+  readonly strength: Float64Array;
+  /** eight doubles a box */
+  readonly nodes: Float64Array;
+  /** coordinates and strengths of boxes, by rows of cases; places are counted from here */
+  readonly boxes: Float64Array;
+  readonly all: RadialTable | undefined;
+  readonly rest: RadialTable | undefined;
+  /** Gauss rules of near segments, in pairs */
+  readonly rules: Float64Array;
+  readonly ownWeight: number;
+  readonly z1: number;
+  readonly z2: number;
+}
+
+/** What of a group of segments is packed; see ClassGroup. */
+export interface SegmentGroup {
+  readonly vertical: boolean;
+  readonly z1: number;
+  readonly z2: number;
+  readonly count: number;
+  readonly cx: Float64Array;
+  readonly cy: Float64Array;
+  readonly hx: Float64Array;
+  readonly hy: Float64Array;
+  readonly length: Float64Array;
+  readonly radiusSquared: Float64Array;
+  readonly strength: Float64Array;
+  readonly ownWeight: number;
+  readonly all: RadialTable | undefined;
+  readonly rest: RadialTable | undefined;
+  readonly clusters: FarCluster | undefined;
+}
+
+/** Points each way in a box, as far-clusters.ts makes them and the kernel reads them. */
+const BOX_POINTS = 6;
+const NODE = 8;
+
+/**
+ * @param cases leakages
+ * @param twoPoints ratio of distance to length past which two Gauss points are enough
+ * @param threePoints the same for three
+ * @param order Gauss points of a near segment of a length, m, on the rest's table
+ */
+export function packGroup(
+  group: SegmentGroup,
+  cases: number,
+  twoPoints: number,
+  threePoints: number,
+  order: (length: number) => number,
+): PackedGroup {
+  const { count, cx, cy, hx, hy, length, radiusSquared } = group;
+  const zz = group.z1 * group.z1;
+  const rules: number[] = [];
+  const ruleAt = new Map<number, number>();
+  const segments = new Float64Array(count * (group.vertical ? 4 : 10));
+  for (let j = 0; j < count; j++) {
+    const l = length[j]!;
+    if (group.vertical) {
+      segments.set([cx[j]!, cy[j]!, radiusSquared[j]!, l], j * 4);
+      continue;
+    }
+    const points = order(l);
+    if (!ruleAt.has(points)) {
+      ruleAt.set(points, rules.length * 8);
+      rules.push(...pairedRule(points));
+    }
+    const ux = hx[j]!;
+    const uy = hy[j]!;
+    const two = twoPoints * twoPoints * l * l - zz;
+    const three = threePoints * threePoints * l * l - zz;
+    segments.set(
+      [cx[j]!, cy[j]!, ux, uy, ux * ux + uy * uy, two, three, l, zz + radiusSquared[j]!, ruleAt.get(points)!],
+      j * 10,
+    );
+  }
+  return { ...group, segments, ...packClusters(group.clusters, cases), rules: Float64Array.from(rules) };
+}
+
+/** Number of pairs, then for each pair its two points on [−1, 1] and its two weights. */
+function pairedRule(order: number): number[] {
+  const { points, weights } = gaussLegendre(order);
+  const pairs = Math.ceil(order / 2);
+  const rule = [pairs];
+  for (let k = 0; k < pairs; k++) {
+    const a = 2 * k;
+    const b = a + 1 < order ? a + 1 : a;
+    rule.push(2 * points[a]! - 1, 2 * points[b]! - 1, weights[a]!, b === a ? 0 : weights[b]!);
+  }
+  return rule;
+}
+
+function packClusters(
+  root: FarCluster | undefined,
+  cases: number,
+): { nodes: Float64Array; boxes: Float64Array } {
+  if (root === undefined) return { nodes: new Float64Array(0), boxes: new Float64Array(0) };
+  const order: FarCluster[] = [root];
+  const nodes: number[] = [];
+  const boxes: number[] = [];
+  // breadth first: halves are put at the end of the list while it is read
+  for (let k = 0; k < order.length; k++) {
+    const box = order[k]!;
+    const first = box.halves === undefined ? -1 : order.length;
+    nodes.push(box.x, box.y, box.farSquared, box.from, box.to, first, first + 1, boxes.length * 8);
+    if (box.halves === undefined) continue;
+    order.push(...box.halves);
+    boxes.push(...box.px, ...box.py);
+    for (let b = 0; b < BOX_POINTS; b++)
+      for (let u = 0; u < cases; u++)
+        for (let a = 0; a < BOX_POINTS; a++) boxes.push(box.strength[(b * BOX_POINTS + a) * cases + u]!);
+  }
+  return { nodes: Float64Array.from(nodes), boxes: Float64Array.from(boxes) };
+}
+
+export function surfaceKernel(): Kernel | undefined {
+  return kernelOf(surfaceBytes);
+}
+
+/**
+ * Adds the potentials of a group at every point.
+ * @param into shape [points × cases]
+ * @returns false where memory was refused, with nothing added
+ */
+export function addByKernel(
+  kernel: Kernel,
+  group: PackedGroup,
+  cases: number,
+  farRatio: number,
+  xs: Float64Array,
+  ys: Float64Array,
+  into: Float64Array,
+): boolean {
+  const none = new Float64Array(0);
+  const { segments, strength, nodes, boxes, rules, all, rest } = group;
+  const sums = new Float64Array(2 * cases);
+  const arrays = [
+    segments,
+    strength,
+    nodes,
+    boxes,
+    all?.bins ?? none,
+    rest?.bins ?? none,
+    rules,
+    sums,
+    xs,
+    ys,
+    into,
+  ];
+  const at = place(kernel, arrays);
+  if (at === undefined) return false;
+  const [s = 0, w = 0, n = 0, b = 0, a = 0, r = 0, g = 0, t = 0, x = 0, y = 0, o = 0] = at;
+  const restAt = rest === undefined ? 0 : r;
+  const perRest = rest?.perSquare ?? 0;
+  if (group.vertical) {
+    const { count, ownWeight, z1, z2 } = group;
+    kernel.call(
+      'upright',
+      s,
+      count,
+      w,
+      restAt,
+      perRest,
+      ownWeight,
+      z1,
+      z2,
+      farRatio,
+      cases,
+      x,
+      y,
+      xs.length,
+      o,
+    );
+  } else {
+    const shifted = doublesAt(kernel, n, nodes.length);
+    for (let k = 7; k < nodes.length; k += NODE) shifted[k]! += b;
+    const perAll = all?.perSquare ?? 0;
+    kernel.call(
+      'level',
+      s,
+      w,
+      n,
+      a,
+      perAll,
+      restAt,
+      perRest,
+      group.ownWeight,
+      g,
+      cases,
+      t,
+      x,
+      y,
+      xs.length,
+      o,
+    );
+  }
+  into.set(doublesAt(kernel, o, into.length));
+  return true;
+}

@@ -1,0 +1,89 @@
+// Compiled kernels: one instance a module, made on first use; none where WebAssembly is missing or blocked.
+
+/** An instance with memory of its own, which holds nothing from one call to the next. */
+export interface Kernel {
+  readonly memory: WebAssembly.Memory;
+  /** calls an exported function; addresses and counts are whole numbers */
+  call(name: string, ...values: number[]): number;
+}
+
+/** Bytes of a page of WebAssembly memory (WebAssembly core specification 2.0, 4.2.8). */
+const PAGE = 65536;
+/** First address given out: 0 is kept for "none". */
+const BASE = 1024;
+/** Alignment of arrays: a pair of doubles. */
+const ALIGN = 16;
+
+const made = new Map<string, Kernel | undefined>();
+let allowed = true;
+
+/** Turns the kernels off or on again: what they do is then done by plain code, with the same results to rounding. */
+export function useKernels(on: boolean): void {
+  allowed = on;
+}
+
+/**
+ * The instance of a module.
+ * @param bytes the module as base64
+ * @returns undefined where WebAssembly is missing, lacks SIMD, is forbidden by the page's policy, or may not compile
+ * at once on a page's main thread: plain code then takes over
+ */
+export function kernelOf(bytes: string): Kernel | undefined {
+  if (!allowed) return undefined;
+  if (!made.has(bytes)) made.set(bytes, instantiate(bytes));
+  return made.get(bytes);
+}
+
+function instantiate(bytes: string): Kernel | undefined {
+  if (typeof WebAssembly !== 'object') return undefined;
+  try {
+    const binary = Uint8Array.from(atob(bytes), (letter) => letter.charCodeAt(0));
+    const abort = (): never => {
+      throw new Error('kernel stopped');
+    };
+    const { exports } = new WebAssembly.Instance(new WebAssembly.Module(binary), { env: { abort } });
+    const memory = exports.memory;
+    if (!(memory instanceof WebAssembly.Memory)) return undefined;
+    return {
+      memory,
+      call: (name, ...values) => {
+        const f = exports[name];
+        if (typeof f !== 'function') throw new TypeError(`kernel has no function ${name}`);
+        return Number(f(...values) ?? 0);
+      },
+    };
+  } catch {
+    return undefined;
+  }
+}
+
+/**
+ * Copies arrays into a kernel's memory, over whatever was there.
+ * @returns address of each, then the first free one; undefined where memory of that size is refused
+ */
+export function place(kernel: Kernel, arrays: readonly Float64Array[]): number[] | undefined {
+  const addresses: number[] = [];
+  let at = BASE;
+  for (const array of arrays) {
+    addresses.push(at);
+    at += Math.ceil(array.byteLength / ALIGN) * ALIGN;
+  }
+  addresses.push(at);
+  const missing = at - kernel.memory.buffer.byteLength;
+  if (missing > 0) {
+    try {
+      kernel.memory.grow(Math.ceil(missing / PAGE));
+    } catch {
+      return undefined;
+    }
+  }
+  arrays.forEach((array, k) => {
+    new Float64Array(kernel.memory.buffer, addresses[k]!, array.length).set(array);
+  });
+  return addresses;
+}
+
+/** Doubles at an address of a kernel's memory, valid until the next `place`. */
+export function doublesAt(kernel: Kernel, address: number, length: number): Float64Array {
+  return new Float64Array(kernel.memory.buffer, address, length);
+}
