@@ -68,8 +68,13 @@ const LAST_LEVEL = 6;
 const MOST_SEGMENTS = 60_000;
 /** Memory that a large electrode takes, a segment: 5.5 kB of compressed matrix were seen at 52 000, and the mesh besides. */
 const BYTES_A_SEGMENT = 7000;
-/** Lattice spacing, m: half a metre shows a mesh of 3 m; larger plans get at most this many points a side. */
+/**
+ * Lattice spacing, m: half a metre shows a mesh of 3 m. Small plans get this many points along the longer side, down to
+ * the finest spacing; large ones at most this many.
+ */
 const SPACING_M = 0.5;
+const FINEST_SPACING_M = 0.2;
+const WANTED_POINTS = 150;
 const MOST_POINTS = 400;
 /** The first map, of one unit, only finds where to look: it may be this much coarser. */
 const SCOUT = 2;
@@ -84,10 +89,11 @@ export function solveLevels(prepared: Prepared, progress: Progress): Solved {
   const interfaces = interfaceDepths(prepared.soil);
   const distinct = [...new Set(prepared.injectionNodes)];
   const box = assessedBox(prepared);
+  const longest = Math.max(box.east - box.west, box.north - box.south);
   const spacing = Math.max(
-    SPACING_M,
-    (box.east - box.west) / MOST_POINTS,
-    (box.north - box.south) / MOST_POINTS,
+    FINEST_SPACING_M,
+    Math.min(SPACING_M, longest / WANTED_POINTS),
+    longest / MOST_POINTS,
   );
   const meshAt = (level: number): SegmentMesh =>
     segmentMesh(prepared.loaded.conductors, prepared.joints, interfaces, level);
