@@ -34,10 +34,11 @@ function Row({ row, y, full, name }: { row: BarRow; y: number; full: number; nam
   const bar = barOf(row, full);
   const at = (share: number): number => BAR[0] + share * (BAR[1] - BAR[0]);
   const governs = row.governs === true;
+  const subject = row.footing === 'bare soil' ? `${row.subject}, on bare soil` : row.subject;
   return (
     <g>
       <text class={governs ? 'strong' : undefined} x={INDENT} y={y} dy="0.36em">
-        {cut(row.subject, LONGEST_NAME - (governs ? 9 : 0))}
+        {cut(subject, LONGEST_NAME - (governs ? 9 : 0))}
         {governs && ', governs'}
       </text>
       <text class="end" x={WORST} y={y} dy="0.36em">

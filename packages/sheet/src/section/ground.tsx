@@ -22,8 +22,12 @@ function Covering({ outcome }: { outcome: Outcome }): VNode {
   return (
     <Say>
       A covering of <Input path="surfacing.resistivity_ohm_m" value={resistivity} unit="Ω·m" />,{' '}
-      <Input path="surfacing.thickness_m" value={thickness} unit="m" /> thick, lies on it. It bears on what
-      people tolerate by the factor <Result>{fixed(limits.covering_factor, 3)}</Result>, not on the rise.
+      <Input path="surfacing.thickness_m" value={thickness} unit="m" /> thick, lies{' '}
+      {outcome.study.surfacing?.areas === undefined
+        ? 'over the area where touch voltage is assessed'
+        : 'in the areas given'}
+      . It bears on what people tolerate there by the factor{' '}
+      <Result>{fixed(limits.covering_factor, 3)}</Result>, not on the rise.
       <How
         of="the covering factor is found"
         formula={<CoveringFormula />}

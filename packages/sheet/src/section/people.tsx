@@ -1,24 +1,65 @@
 // People: the tolerable voltages, and every worst voltage against them.
-import type { Outcome } from '@ohmstead/study';
+import type { CaseResult, Outcome, Results } from '@ohmstead/study';
 import type { VNode } from 'preact';
 import { fixed, givenQuantity, quantity } from '../format/number.ts';
 import { undecidedReason } from '../verdict/finding.ts';
 import { type VerdictRow, verdictRows } from '../verdict/rows.ts';
 import { soilBandRows } from '../verdict/soil-band.ts';
 import { BODY_FACTOR, CLAUSES, S, StepFormula, TouchFormula } from './formulas.tsx';
-import { How } from './how.tsx';
+import { How, type HowInput } from './how.tsx';
 import { originOf, soilQuantity } from './layers.tsx';
 import { CaseName, Input, Part, Result, Say } from './parts.tsx';
 import { SoilBandTable } from './soil-band-table.tsx';
 import { VerdictTable } from './verdict-table.tsx';
 
+/** Tolerable voltages of a case, on the covering and on bare soil. */
+function Tolerable({ of }: { of: CaseResult }): VNode {
+  const pair = (touch: number, step: number): VNode => (
+    <>
+      touch <Result>{quantity(touch, 'V')}</Result> and step <Result>{quantity(step, 'V')}</Result>
+    </>
+  );
+  const { covering_touch_limit_V: touch, covering_step_limit_V: step } = of;
+  if (touch === null || step === null) return pair(of.bare_touch_limit_V, of.bare_step_limit_V);
+  return (
+    <>
+      on the covering {pair(touch, step)}, on bare soil {pair(of.bare_touch_limit_V, of.bare_step_limit_V)}
+    </>
+  );
+}
+
+function limitWords(of: CaseResult): string {
+  const words = (touch: number, step: number): string =>
+    `${quantity(touch, 'V')} touch, ${quantity(step, 'V')} step`;
+  const bare = words(of.bare_touch_limit_V, of.bare_step_limit_V);
+  const { covering_touch_limit_V: touch, covering_step_limit_V: step } = of;
+  return touch === null || step === null ? bare : `${words(touch, step)}; on bare soil ${bare}`;
+}
+
+/** Ground under the feet: the covering where there is one, and the soil, for which the factor is 1. */
+function groundInputs(results: Results): readonly HowInput[] {
+  const { limits } = results;
+  const soil = soilQuantity(limits.soil_resistivity_ohm_m, 'Ω·m', originOf(results));
+  const bare: HowInput = { symbol: <S of="ρ" index="s" />, name: 'bare soil, factor 1', value: soil };
+  if (limits.surfacing_resistivity_ohm_m === null) return [bare];
+  return [
+    {
+      symbol: <S of="C" index="s" />,
+      name: 'covering factor',
+      value: fixed(limits.covering_factor, 4),
+    },
+    {
+      symbol: <S of="ρ" index="s" />,
+      name: 'covering',
+      value: givenQuantity(limits.surfacing_resistivity_ohm_m, 'Ω·m'),
+    },
+    bare,
+  ];
+}
+
 function Limits({ outcome }: { outcome: Outcome }): VNode {
   const { limits, cases } = outcome.results;
   const factor = BODY_FACTOR[limits.body_mass_kg];
-  const ground =
-    limits.surfacing_resistivity_ohm_m === null
-      ? soilQuantity(limits.soil_resistivity_ohm_m, 'Ω·m', originOf(outcome.results))
-      : givenQuantity(limits.surfacing_resistivity_ohm_m, 'Ω·m');
   return (
     <>
       <Say>
@@ -28,9 +69,7 @@ function Limits({ outcome }: { outcome: Outcome }): VNode {
       {cases.map((of, index) => (
         <Say key={index}>
           <CaseName name={of.name} />: over{' '}
-          <Input path={`cases[${index}].duration_s`} value={of.duration_s} unit="s" />, touch{' '}
-          <Result>{quantity(of.touch.limit_V, 'V')}</Result> and step{' '}
-          <Result>{quantity(of.step.limit_V, 'V')}</Result>.
+          <Input path={`cases[${index}].duration_s`} value={of.duration_s} unit="s" />, <Tolerable of={of} />.
           <How
             of={`the limits of ${of.name} are found`}
             formula={
@@ -42,19 +81,10 @@ function Limits({ outcome }: { outcome: Outcome }): VNode {
             }
             clause={CLAUSES.tolerable}
             inputs={[
-              {
-                symbol: <S of="C" index="s" />,
-                name: 'covering factor',
-                value: fixed(limits.covering_factor, 4),
-              },
-              {
-                symbol: <S of="ρ" index="s" />,
-                name: 'ground under the feet',
-                value: ground,
-              },
+              ...groundInputs(outcome.results),
               { symbol: <S of="t" index="s" />, name: 'duration', value: givenQuantity(of.duration_s, 's') },
             ]}
-            value={`${quantity(of.touch.limit_V, 'V')} touch, ${quantity(of.step.limit_V, 'V')} step`}
+            value={limitWords(of)}
           />
         </Say>
       ))}
@@ -108,10 +138,10 @@ export function People({ outcome }: { outcome: Outcome }): VNode {
       />
       <Undecided rows={rows} />
       <Soils outcome={outcome} />
-      {floating && (
+      {floating && limits.surfacing_resistivity_ohm_m !== null && (
         <Say>
-          At floating metal the same touch limit is taken; where the covering does not reach it, the limit of
-          bare soil is lower and has to be set against it.
+          Floating metal is set against the limit of the ground beside it: the covering where it reaches
+          there, bare soil elsewhere.
         </Say>
       )}
       <p class="caution">

@@ -21,8 +21,22 @@ function limitText(outcome: Outcome, of: CaseResult, kind: 'touch' | 'step'): st
   const covering =
     limits.surfacing_thickness_m === null
       ? 'no covering'
-      : `covering ${givenQuantity(limits.surfacing_thickness_m, 'm')}`;
+      : of[kind].on_covering
+        ? `covering ${givenQuantity(limits.surfacing_thickness_m, 'm')}`
+        : 'on bare soil, where the worst lies';
   return `${quantity(of[kind].limit_V, 'V')} (${limits.basis}, ${limits.body_mass_kg}\u202fkg, ${givenQuantity(of.duration_s, 's')}, ${covering})`;
+}
+
+/** The limit that holds where the map's own does not; empty without a covering. */
+function otherLimit(of: CaseResult, kind: 'touch' | 'step'): string {
+  const [bare, covered] =
+    kind === 'touch'
+      ? [of.bare_touch_limit_V, of.covering_touch_limit_V]
+      : [of.bare_step_limit_V, of.covering_step_limit_V];
+  if (covered === null) return '';
+  return of[kind].on_covering
+    ? ` The limit is that of the covering; where there is none it is ${quantity(bare, 'V')}.`
+    : ` On the covering the limit is ${quantity(covered, 'V')}.`;
 }
 
 function captionOf(outcome: Outcome, caseIndex: number, kind: MapKind): string {
@@ -31,9 +45,9 @@ function captionOf(outcome: Outcome, caseIndex: number, kind: MapKind): string {
     case 'potential':
       return `Fill is the share of the rise of ${measured(of.gpr_V, of.gpr_uncertainty_V, 'V')}; lines carry volts.`;
     case 'touch':
-      return `Voltage to the metal that can be reached from the place. Fill is the share of the limit of ${limitText(outcome, of, kind)}; the red-brown line is the limit, and what lies beyond it is hatched. Paler: outside the assessed area.`;
+      return `Voltage to the metal that can be reached from the place. Fill is the share of the limit of ${limitText(outcome, of, kind)}; the red-brown line is the limit, and what lies beyond it is hatched. Paler: outside the assessed area.${otherLimit(of, kind)}`;
     case 'step':
-      return `Largest voltage over 1\u202fm about the place. Fill is the share of the limit of ${limitText(outcome, of, kind)}. The bar across the ring joins the two feet. Paler: outside the assessed area.`;
+      return `Largest voltage over 1\u202fm about the place. Fill is the share of the limit of ${limitText(outcome, of, kind)}. The bar across the ring joins the two feet. Paler: outside the assessed area.${otherLimit(of, kind)}`;
   }
 }
 

@@ -34,7 +34,7 @@ function Balance({ checks }: { checks: Results['checks'] }): VNode {
             <S of="I" index="injected" />
           </>
         }
-        clause="The equation of remote earth is the one that the solution does not use; it holds only if all others do."
+        clause="The potentials of reference are chosen so that this holds; what is missing is rounding. Whether the solution solves the equations is told by the two checks below."
         inputs={[{ symbol: <>Σ</>, name: 'over every segment of every electrode', value: 'signed' }]}
         value={powerOfTen(checks.current_balance)}
       />

@@ -30,6 +30,7 @@ function VerdictLine({ row, full, id }: { row: BarRow; full: number; id: string 
     <tr class={governs ? `${row.finding} governing` : row.finding}>
       <th scope="row">
         {row.subject}
+        {row.footing === 'bare soil' && ', on bare soil'}
         {governs && <span class="mark">, governs</span>}
       </th>
       <td class="num worst">{measured(row.worst, row.uncertainty, 'V')}</td>

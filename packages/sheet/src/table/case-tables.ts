@@ -48,6 +48,7 @@ export function limitsCsv(outcome: Outcome): string {
     { name: 'x_m', value: (r) => r.x },
     { name: 'y_m', value: (r) => r.y },
     { name: 'limit_V', value: (r) => r.limit },
+    { name: 'ground_under_feet', value: (r) => r.footing ?? 'bare soil' },
     { name: 'margin_percent', value: (r) => 100 * (1 - r.share) },
     { name: 'finding', value: (r) => r.finding },
     { name: 'duration_s', value: (r) => cases[r.caseIndex].duration_s },

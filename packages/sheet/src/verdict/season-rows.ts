@@ -1,7 +1,7 @@
 // Lists touch and step voltage of every case in every season against their limits, and marks what governs.
 import type { CaseResult, Results, SeasonCase, WorstStep, WorstTouch } from '@ohmstead/study';
 import { findingOf } from './finding.ts';
-import type { VerdictRow } from './rows.ts';
+import { footingOf, type VerdictRow } from './rows.ts';
 
 export interface SeasonRow extends VerdictRow {
   /** smallest margin of its case and kind over all seasons */
@@ -12,6 +12,7 @@ export interface SeasonRow extends VerdictRow {
 export const AS_GIVEN = 'as given';
 
 function rowOf(
+  results: Results,
   caseIndex: number,
   kind: 'touch' | 'step',
   season: string,
@@ -29,6 +30,7 @@ function rowOf(
     worst,
     uncertainty,
     limit,
+    footing: footingOf(results, voltage.on_covering),
     share: worst / limit,
     finding: findingOf(worst, uncertainty, limit),
     x: voltage.x_m,
@@ -38,16 +40,17 @@ function rowOf(
 }
 
 /** Case by case, touch before step, the soil as given before the seasons; empty where the study names none. */
-export function seasonRows({ cases, seasons, envelope }: Results): readonly SeasonRow[] {
+export function seasonRows(results: Results): readonly SeasonRow[] {
+  const { cases, seasons, envelope } = results;
   if (seasons.length === 0) return [];
   return cases.flatMap((given, index) =>
     (['touch', 'step'] as const).flatMap((kind) => {
       const governing = envelope[index]?.[kind].season;
       return [
-        rowOf(index, kind, AS_GIVEN, given, governing),
+        rowOf(results, index, kind, AS_GIVEN, given, governing),
         ...seasons.flatMap((season) => {
           const of = season.cases[index];
-          return of === undefined ? [] : [rowOf(index, kind, season.name, of, governing)];
+          return of === undefined ? [] : [rowOf(results, index, kind, season.name, of, governing)];
         }),
       ];
     }),
