@@ -15,9 +15,9 @@ const WIDTH = 900;
 const ROW = 30;
 const NAME = 8;
 const INDENT = 22;
-const BEST = 172;
-const MEDIAN = 252;
-const BAND = 372;
+const BEST = 196;
+const MEDIAN = 264;
+const BAND = 376;
 const LIMIT = 440;
 const BAR: readonly [number, number] = [456, 660];
 const WORDS = 674;
@@ -32,7 +32,7 @@ function Row({ row, y, full, name }: { row: SoilBandRow; y: number; full: number
   return (
     <g>
       <text x={INDENT} y={y} dy="0.36em">
-        {row.kind}
+        {row.footing === 'bare soil' ? `${row.kind}, bare soil` : row.kind}
       </text>
       <text class="end" x={BEST} y={y} dy="0.36em">
         {quantity(row.of.best, 'V')}

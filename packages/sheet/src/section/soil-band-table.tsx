@@ -32,7 +32,10 @@ function IntervalCell({ row, full, id }: { row: SoilBandRow; full: number; id: s
 function BandLine({ row, full, id }: { row: SoilBandRow; full: number; id: string }): VNode {
   return (
     <tr class={row.reach}>
-      <th scope="row">{row.kind}</th>
+      <th scope="row">
+        {row.kind}
+        {row.footing === 'bare soil' && ', on bare soil'}
+      </th>
       <td class="num best">{measured(row.of.best, row.uncertainty, 'V')}</td>
       <td class="num median">{fittedQuantity(row.of.median, 'V')}</td>
       <td class="num soils-range">{bandQuantity(row.of, 'V')}</td>

@@ -3,6 +3,7 @@ import type { Results, Spread } from '@ohmstead/study';
 import { bandQuantity } from '../format/fitted.ts';
 import { quantity } from '../format/number.ts';
 import { capital, countWord } from '../format/words.ts';
+import { footingOf, type VerdictRow } from './rows.ts';
 
 /** Where the band and the best fit lie: `open` where the limit has soils of the band or the best fit on either side. */
 export type Reach = 'within' | 'beyond' | 'open';
@@ -18,6 +19,8 @@ export interface SoilBandRow {
   readonly uncertainty: number;
   /** of the best fit's soil, V */
   readonly limit: number;
+  /** what people stand on there; undefined where the study has no covering */
+  readonly footing: VerdictRow['footing'];
   readonly reach: Reach;
 }
 
@@ -29,7 +32,8 @@ function reachOf({ best, low, high }: Spread, limit: number): Reach {
 }
 
 /** Touch and step of every case over the soils that the readings allow; empty where the soil was given. */
-export function soilBandRows({ ground, cases }: Results): readonly SoilBandRow[] {
+export function soilBandRows(results: Results): readonly SoilBandRow[] {
+  const { ground, cases } = results;
   if (ground === null) return [];
   return ground.consequence.cases.flatMap((of, caseIndex) => {
     const result = cases[caseIndex];
@@ -44,6 +48,7 @@ export function soilBandRows({ ground, cases }: Results): readonly SoilBandRow[]
         of: spread,
         uncertainty,
         limit,
+        footing: footingOf(results, result[kind].on_covering),
         reach: reachOf(spread, limit),
       };
     });
@@ -74,7 +79,7 @@ export function casesLeftOpen(results: Results): number {
 }
 
 function sentence(row: SoilBandRow): string {
-  const soils = `${bandQuantity(row.of, 'V')} over the soils that the readings allow (5–95 %)`;
+  const soils = `${bandQuantity(row.of, 'V')} over the soils that the readings allow (5–95\u202f%)`;
   return `${row.caseName}: the readings leave the worst ${row.kind} voltage open across its limit of ${quantity(row.limit, 'V')}: ${quantity(row.of.best, 'V')} at the best fit, ${soils}.`;
 }
 
