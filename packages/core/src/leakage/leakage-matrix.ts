@@ -4,6 +4,7 @@ import { gaussLegendre } from '../numerics/gauss-legendre.ts';
 import { multiplyPacked, type PackedLower } from '../numerics/packed-cholesky.ts';
 import type { ImageList, SoilImages } from '../soil/image-list.ts';
 import { type DepthClasses, depthClasses } from './depth-classes.ts';
+import { type DepthPair, fillFarEntries } from './leakage-kernel.ts';
 import { CLOSED_FORM_RATIO, gaussOrder, imagePairSum } from './pair-potential.ts';
 import { type RadialTable, radialValue, scaledTable } from './radial-table.ts';
 import { smoothImages, smoothKernel } from './smooth-kernel.ts';
@@ -41,11 +42,19 @@ export function leakageMatrix(mesh: SegmentMesh, images: SoilImages): DenseLeaka
   const segments = leakingSegments(mesh);
   const size = segments.length;
   const entries = new Float64Array((size * (size + 1)) / 2);
-  const entryOf = leakageEntries(mesh, images);
-  for (let i = 0; i < size; i++) {
-    const row = (i * (i + 1)) / 2;
-    for (let j = 0; j <= i; j++) entries[row + j] = entryOf(segments[i]!, segments[j]!);
-  }
+  const classes = depthClasses(mesh);
+  const tables = tableCache(mesh, images, classes);
+  const points = gaussPoints(mesh);
+  const pairOf = (i: number, j: number): DepthPair => {
+    const field = mesh.layer[i]! >= mesh.layer[j]! ? i : j;
+    const source = field === i ? j : i;
+    const list = images.list(mesh.layer[source]!, mesh.layer[field]!);
+    const table = list.count === list.primaryCount ? undefined : tables.of(source, field, list);
+    return { list, table, fieldDepth: mesh.z1[field]!, sourceDepth: mesh.z1[source]! };
+  };
+  fillFarEntries(mesh, classes, segments, pairOf, entries, (row, column) => {
+    entries[(row * (row + 1)) / 2 + column] = entry(mesh, images, classes, tables, points, segments[row]!, segments[column]!); // biome-ignore format: one entry
+  });
   const diagonal = Float64Array.from({ length: size }, (_, i) => entries[(i * (i + 3)) / 2]!);
   return {
     segments,

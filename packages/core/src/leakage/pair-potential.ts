@@ -10,14 +10,17 @@ import { meanInverseDistance, selfInverseDistance, type Wire } from './wire-pair
  */
 export const CLOSED_FORM_RATIO = 1.987;
 
+/** Ratios of distance to length from which one, two and three Gauss points are enough. */
+export const GAUSS_RATIOS: Float64Array = Float64Array.of(197.3, 7.93, 3.187);
+
 /**
  * Gauss points on a segment seen from a given distance over its length, so that an entry errs by less than 3e-6:
  * the n-point rule on 1/r errs by 2/180·x⁴, 2/2 800·x⁶, 2·2.3e-5·x⁸ of the entry at length over distance x.
  */
 export function gaussOrder(ratio: number): number {
-  if (ratio >= 197.3) return 1;
-  if (ratio >= 7.93) return 2;
-  if (ratio >= 3.187) return 3;
+  if (ratio >= GAUSS_RATIOS[0]!) return 1;
+  if (ratio >= GAUSS_RATIOS[1]!) return 2;
+  if (ratio >= GAUSS_RATIOS[2]!) return 3;
   return 4;
 }
 
