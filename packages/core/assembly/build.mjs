@@ -8,7 +8,7 @@ const here = dirname(fileURLToPath(import.meta.url));
 const target = join(here, '../src/kernels/wasm-bytes.ts');
 
 /** Modules, each with its entry file. */
-const MODULES = ['surface', 'leakage'];
+const MODULES = ['surface', 'leakage', 'cholesky'];
 
 /** @returns {Promise<string>} text of the generated file */
 export async function generatedText() {

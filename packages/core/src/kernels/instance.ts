@@ -59,9 +59,14 @@ function instantiate(bytes: string): Kernel | undefined {
 
 /**
  * Copies arrays into a kernel's memory, over whatever was there.
+ * @param room doubles wanted after them
  * @returns address of each, then the first free one; undefined where memory of that size is refused
  */
-export function place(kernel: Kernel, arrays: readonly Float64Array[]): number[] | undefined {
+export function place(
+  kernel: Kernel,
+  arrays: readonly Float64Array[],
+  room: number = 0,
+): number[] | undefined {
   const addresses: number[] = [];
   let at = BASE;
   for (const array of arrays) {
@@ -69,7 +74,7 @@ export function place(kernel: Kernel, arrays: readonly Float64Array[]): number[]
     at += Math.ceil(array.byteLength / ALIGN) * ALIGN;
   }
   addresses.push(at);
-  const missing = at - kernel.memory.buffer.byteLength;
+  const missing = at + room * Float64Array.BYTES_PER_ELEMENT - kernel.memory.buffer.byteLength;
   if (missing > 0) {
     try {
       kernel.memory.grow(Math.ceil(missing / PAGE));

@@ -1,4 +1,6 @@
 // Cholesky factor of a symmetric positive-definite matrix kept as its packed lower triangle.
+import { doublesAt, kernelOf, place } from '../kernels/instance.ts';
+import { choleskyBytes } from '../kernels/wasm-bytes.ts';
 
 /** Packed lower triangle: entry (i, j ≤ i) at i(i + 1)/2 + j; shape [n(n + 1)/2]. */
 export type PackedLower = Float64Array;
@@ -16,11 +18,16 @@ export class NotPositiveDefinite extends Error {
 /** Rows and columns of the tile whose products are summed together: sixteen sums share eight loads. */
 const TILE = 4;
 
+/** Rows below which copying into the kernel's memory costs more than it saves. */
+const KERNEL_FROM = 96;
+
 /**
- * Overwrites a packed matrix with its Cholesky factor L, A = L Lᵀ, left-looking, in tiles of four by four.
+ * Overwrites a packed matrix with its Cholesky factor L, A = L Lᵀ, left-looking, in tiles of four by four; by the
+ * compiled kernel where there is one.
  * @throws NotPositiveDefinite with the row at which the pivot fails
  */
 export function factorPacked(a: PackedLower, n: number): void {
+  if (n >= KERNEL_FROM && factorByKernel(a, n)) return;
   const sums = new Float64Array(TILE * TILE);
   for (let i0 = 0; i0 < n; i0 += TILE) {
     const rows = Math.min(TILE, n - i0);
@@ -28,6 +35,23 @@ export function factorPacked(a: PackedLower, n: number): void {
     // what is left: rows past the last full tile, and the triangle on the diagonal
     for (let i = i0; i < i0 + rows; i++) reduceRow(a, i, rows === TILE ? i0 : 0);
   }
+}
+
+/** @returns false where there is no kernel or not the memory, with nothing changed */
+function factorByKernel(a: PackedLower, n: number): boolean {
+  const kernel = kernelOf(choleskyBytes);
+  if (kernel === undefined) return false;
+  const panels = Math.ceil(n / TILE);
+  const entries = (n * (n + 1)) / 2;
+  const at = place(kernel, [a.subarray(0, entries)], TILE * TILE * ((panels * (panels + 1)) / 2));
+  if (at === undefined) return false;
+  const [packed = 0, tiled = 0] = at;
+  kernel.call('toPanels', packed, tiled, n, panels);
+  const failed = kernel.call('factor', tiled, panels);
+  if (failed >= 0) throw new NotPositiveDefinite(failed);
+  kernel.call('fromPanels', packed, tiled, n);
+  a.set(doublesAt(kernel, packed, entries));
+  return true;
 }
 
 function rowStart(i: number): number {
