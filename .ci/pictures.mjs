@@ -11,7 +11,13 @@ mkdirSync(out, { recursive: true });
 const server = await preview({ root: resolve(root, 'apps/report'), preview: { host: '127.0.0.1', port: 0 } });
 const browser = await chromium.launch({
   executablePath: '/usr/bin/chromium',
-  args: ['--no-sandbox', '--disable-gpu', '--disable-quic', '--disable-background-networking', '--no-first-run'],
+  args: [
+    '--no-sandbox',
+    '--disable-gpu',
+    '--disable-quic',
+    '--disable-background-networking',
+    '--no-first-run',
+  ],
 });
 
 async function solved(width, height) {
