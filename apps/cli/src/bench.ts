@@ -15,6 +15,7 @@ import {
 import { type LoadedStudy, layeredSoil, loadStudy, solveStudy } from '@ohmstead/study';
 import { LuDecomposition, Matrix } from 'ml-matrix';
 import { benchCases } from './bench-cases.ts';
+import { kernelRows } from './bench-kernels.ts';
 import { folderSource } from './folder-source.ts';
 
 /** Rounds of every arm, in the order A B C A B C; medians are printed. */
@@ -92,6 +93,8 @@ function main(args: readonly string[]): void {
     lines.push(report(name, rounds));
   }
   lines.push('', '| part, one thread | ms | what it did |', '|---|---|---|', ...parts(smallest));
+  demonstration ??= surfaceOf(loadStudy(folderSource(resolve('test-data/aldermoor'))));
+  lines.push('', ...kernelRows(demonstration.mesh, demonstration.images, demonstration.surfaces));
   process.stdout.write(`${lines.join('\n')}\n`);
 }
 
@@ -142,12 +145,7 @@ const fourLayers = [
 /** The demonstration's surface on half a metre, from the leakage of its second mesh. */
 function mapOnce(): string {
   demonstration ??= surfaceOf(loadStudy(folderSource(resolve('test-data/aldermoor'))));
-  const [map] = adaptiveLattices(
-    demonstration.surfaces.at,
-    [2e-3 * demonstration.rise],
-    demonstration.box,
-    0.5,
-  );
+  const [map] = adaptiveLattices(demonstration.surfaces, [2e-3 * demonstration.rise], demonstration.box, 0.5);
   return `${map!.nx} × ${map!.ny} places, ${map!.evaluated} computed, ${demonstration.segments} segments`;
 }
 
@@ -162,6 +160,8 @@ function surfaceOf(loaded: LoadedStudy) {
   const [unit] = solveGraph(mesh, leakageMatrix(mesh, images), [0], ohm, 'equipotential').units;
   const surfaces = surfacePotentials(mesh, images, [unit!.leakage], 300);
   return {
+    mesh,
+    images,
     surfaces,
     rise: unit!.resistance,
     segments: mesh.count,

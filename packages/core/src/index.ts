@@ -35,12 +35,14 @@ export { type Joints, joinConductors } from './geometry/joints.ts';
 export { meshOutlines } from './geometry/outline.ts';
 export { segmentMesh } from './geometry/segmentation.ts';
 export type { SegmentMesh } from './geometry/segments.ts';
+export { useKernels } from './kernels/instance.ts';
 export { type CompressedLeakageMatrix, compressedLeakageMatrix } from './leakage/compressed-matrix.ts';
 export { type LeakageMatrix, leakageMatrix, planReach } from './leakage/leakage-matrix.ts';
 export { leakageOperator } from './leakage/leakage-operator.ts';
 export { type ConductorMaterial, conductorMaterials } from './materials/conductor-materials.ts';
 export { type Branches, branchCurrents, nodeOutflow, REMOTE_EARTH } from './network/branches.ts';
 export { type ReducedLaplacian, reducedLaplacian } from './network/reduced-laplacian.ts';
+export { factorPacked } from './numerics/packed-cholesky.ts';
 export { type Covering, coveringDeratingFactor } from './safety/covering-derating.ts';
 export {
   type BodyMass,
