@@ -3,6 +3,7 @@ import type { Outcome } from '@ohmstead/study';
 import type { VNode } from 'preact';
 import { given, place } from '../format/number.ts';
 import { tally } from '../format/words.ts';
+import { otherDoubts } from '../verdict/doubts.ts';
 import { DataTable, Part, Say } from './parts.tsx';
 import { Remarks } from './remarks.tsx';
 
@@ -35,7 +36,8 @@ function Snaps({ outcome }: { outcome: Outcome }): VNode {
 
 /** Assumptions, doubts, bridged contacts. */
 export function Assumed({ outcome }: { outcome: Outcome }): VNode {
-  const { assumptions, warnings, snaps } = outcome.results;
+  const { assumptions, snaps } = outcome.results;
+  const warnings = otherDoubts(outcome.results);
   const facts = [
     tally(assumptions.length, 'assumption'),
     tally(warnings.length, 'doubt'),

@@ -3,6 +3,7 @@ import type { Outcome, Results } from '@ohmstead/study';
 import type { VNode } from 'preact';
 import { capital, counted } from '../format/words.ts';
 import { answerOf, answerSentences } from '../verdict/answer.ts';
+import { otherDoubts } from '../verdict/doubts.ts';
 import { soilBandSentences } from '../verdict/soil-band.ts';
 
 interface DoubtsIn {
@@ -26,10 +27,10 @@ const PARTS: readonly (readonly [id: string, name: string])[] = [
 ];
 
 /** Doubts of the soil's fit stand under Ground, all others under Assumed. */
-function doubtsOf({ ground, warnings }: Results): readonly DoubtsIn[] {
+function doubtsOf(results: Results): readonly DoubtsIn[] {
   const places: readonly DoubtsIn[] = [
-    { part: 'ground', name: 'Ground', count: ground?.fit.doubts.length ?? 0 },
-    { part: 'assumed', name: 'Assumed', count: warnings.length },
+    { part: 'ground', name: 'Ground', count: results.ground?.fit.doubts.length ?? 0 },
+    { part: 'assumed', name: 'Assumed', count: otherDoubts(results).length },
   ];
   return places.filter(({ count }) => count > 0);
 }

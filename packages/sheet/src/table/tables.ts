@@ -1,6 +1,7 @@
 // Every table of a sheet as a CSV file.
 import type { MeshLevel, Outcome } from '@ohmstead/study';
 import { uniqueSlugs } from '../format/slug.ts';
+import { otherDoubts } from '../verdict/doubts.ts';
 import { casesCsv, limitsCsv, profileCsv, seasonsCsv } from './case-tables.ts';
 import { type Column, csvOf, type TableFile } from './csv.ts';
 import { conductorsCsv, electrodesCsv, segmentsCsv, snapsCsv } from './electrode-tables.ts';
@@ -64,7 +65,7 @@ const REMARK_COLUMNS: readonly Column<Remark>[] = [
 function remarks({ results }: Outcome): readonly Remark[] {
   return [
     ...results.assumptions.map((a): Remark => ({ kind: 'assumption', ...a })),
-    ...results.warnings.map((w): Remark => ({ kind: 'warning', ...w })),
+    ...otherDoubts(results).map((w): Remark => ({ kind: 'warning', ...w })),
     ...(results.ground?.fit.doubts ?? []).map((d): Remark => ({ kind: 'doubt of the fit', ...d })),
   ];
 }
