@@ -6,8 +6,7 @@ it('tells a doubt of the fit once, though the results list it among the warnings
   const { results } = fixtureOutcome();
   const own = { code: 'outliers', message: 'a reading stands off' };
   const other = { code: 'near-miss', message: 'an end stops short' };
-  const fit = { ...results.ground, fit: { doubts: [own] } };
-  const merged = { ...results, ground: fit as typeof results.ground, warnings: [own, other] };
+  const merged = { ...results, ground: { fit: { doubts: [own] } }, warnings: [own, other] };
   expect(otherDoubts(merged)).toEqual([other]);
   expect(otherDoubts({ ...results, ground: null, warnings: [own, other] })).toEqual([own, other]);
 });
