@@ -1,7 +1,7 @@
 // Step voltage: between two feet one metre apart, in the worst direction, and its worst place.
 import { type Lattice, latticeValue } from './lattice.ts';
 import { climb } from './local-search.ts';
-import { alongEdge, edgePlaces, onEdge, type Region, regionMask } from './region.ts';
+import { alongEdge, edgePlaces, onEdge, type Region } from './region.ts';
 import { bestStarts, latticeSummits } from './starts.ts';
 import type { SurfacePotential } from './surface-potential.ts';
 import type { WorstPlace } from './touch.ts';
@@ -46,11 +46,13 @@ export function stepLattice(potential: Lattice): Lattice {
 /**
  * The largest step voltage whose midpoint lies in a region: summits of the map, edges, and paces that begin by the
  * metal, ranked by the exact field; then a search over place and direction. Undefined where the region holds no place.
+ * @param within 1 where a lattice point lies in the region
  * @param beside places by the metal: one foot of a pace is tried there
  */
 export function worstStep(
   step: Lattice,
   region: Region,
+  within: Uint8Array,
   surface: SurfacePotential,
   beside: readonly (readonly [number, number])[],
 ): WorstStep | undefined {
@@ -59,7 +61,7 @@ export function worstStep(
     const [ex, ey] = halfPace(angle!);
     return Math.abs(surface(x! + ex, y! + ey) - surface(x! - ex, y! - ey));
   };
-  const places = [...latticeSummits(step, regionMask(step, region)), ...edgePlaces(region)];
+  const places = [...latticeSummits(step, within), ...edgePlaces(region)];
   const starts = bestStarts([...places.flatMap(turned), ...beside.flatMap(steppedFrom)], f, STARTS).flatMap(
     ([x, y, angle]): Pace[] => [
       [x, y, angle],

@@ -1,7 +1,7 @@
 // Touch voltage: potential of the metal within reach minus the potential of the soil under the feet, and its worst place.
 import type { Lattice } from './lattice.ts';
 import { climb } from './local-search.ts';
-import { alongEdge, edgePlaces, onEdge, type Region, regionMask } from './region.ts';
+import { alongEdge, edgePlaces, onEdge, type Region } from './region.ts';
 import { bestStarts, latticeSummits } from './starts.ts';
 import type { SurfacePotential } from './surface-potential.ts';
 
@@ -32,18 +32,20 @@ export function touchLattice(potential: Lattice, reachable: (place: number) => n
  * The largest touch voltage in a region: summits of the map, corners and edges, and places by the metal, ranked by the
  * exact field; then a search from the best. Undefined where the region holds no place.
  * @param touch lattice of touch voltages that covers the region
+ * @param within 1 where a lattice point lies in the region
  * @param beside places by the metal that a lattice may step over
  */
 export function worstTouch(
   touch: Lattice,
   region: Region,
+  within: Uint8Array,
   surface: SurfacePotential,
   metal: MetalPotential,
   beside: readonly (readonly [number, number])[],
 ): WorstPlace | undefined {
   const f = ([x, y]: readonly number[]): number =>
     region.inside(x!, y!) ? Math.abs(metal(x!, y!) - surface(x!, y!)) : Number.NEGATIVE_INFINITY;
-  const candidates = [...latticeSummits(touch, regionMask(touch, region)), ...edgePlaces(region), ...beside];
+  const candidates = [...latticeSummits(touch, within), ...edgePlaces(region), ...beside];
   return climbFromBest(candidates, f, region, touch.spacing);
 }
 

@@ -79,12 +79,15 @@ const FLAT = 1e-13;
 export function soilImages(soil: SoilModel, tolerance: number = IMAGE_TOLERANCE): SoilImages {
   const depths = layerDepths(soil);
   const known = new Map<string, ImageList>();
+  const factors: SharedFactors = new Map();
   const list = (source: number, field: number): ImageList => {
     const key = `${source},${field}`;
     let images = known.get(key);
     if (images === undefined) {
       images =
-        field >= source ? fitImages(soil, depths, source, field, tolerance) : reversed(list(field, source));
+        field >= source
+          ? fitImages(soil, depths, source, field, tolerance, factors)
+          : reversed(list(field, source));
       known.set(key, images);
     }
     return images;
@@ -135,6 +138,7 @@ function fitImages(
   source: number,
   field: number,
   tolerance: number,
+  factors: SharedFactors,
 ): ImageList {
   const layers = soil.layers.length;
   const k = interfaceReflections(soil);
@@ -142,7 +146,7 @@ function fitImages(
   const limit = new Float64Array(4);
   reflections(soil, k, Number.POSITIVE_INFINITY, state);
   amplitudes(state, source, field, limit);
-  const fits = layers === 1 ? undefined : fitAmplitudes(soil, k, source, field, limit, tolerance);
+  const fits = layers === 1 ? undefined : fitAmplitudes(soil, k, source, field, limit, tolerance, factors);
 
   const primary: [number, number, number][] = source === field ? [[1, 0, 1]] : [];
   const smooth: [number, number, number][] = [];
@@ -176,6 +180,9 @@ interface AmplitudeFits {
   readonly error: number;
 }
 
+/** Factors of the unscaled basis by its density: the same for every pair of a soil's layers. */
+type SharedFactors = Map<number, QrDecomposition>;
+
 function fitAmplitudes(
   soil: SoilModel,
   k: Float64Array,
@@ -183,12 +190,13 @@ function fitAmplitudes(
   field: number,
   limit: Float64Array,
   tolerance: number,
+  factors: SharedFactors,
 ): AmplitudeFits {
   const densities = NODES_PER_DECADE.filter(([, best]) => best <= tolerance).map(([perDecade]) => perDecade);
-  let fits = fitWithNodes(soil, k, source, field, limit, densities[0]!);
+  let fits = fitWithNodes(soil, k, source, field, limit, densities[0]!, factors);
   for (const perDecade of densities.slice(1)) {
     if (fits.error <= tolerance) break;
-    const finer = fitWithNodes(soil, k, source, field, limit, perDecade);
+    const finer = fitWithNodes(soil, k, source, field, limit, perDecade, factors);
     if (finer.error < fits.error) fits = finer;
   }
   return fits;
@@ -204,6 +212,7 @@ function fitWithNodes(
   field: number,
   limit: Float64Array,
   perDecade: number,
+  factors: SharedFactors,
 ): AmplitudeFits {
   const thinnest = Math.min(...full.layers.map((layer) => layer.thickness));
   const soil: SoilModel = {
@@ -220,7 +229,6 @@ function fitWithNodes(
   const fitted = sampleAmplitudes(soil, k, source, field, logSpaced(low, high, SAMPLES_PER_DECADE, 0));
   const between = sampleAmplitudes(soil, k, source, field, logSpaced(low, high, SAMPLES_PER_DECADE, 0.5));
 
-  let shared: QrDecomposition | undefined;
   let error = 0;
   const weights = [0, 1, 2, 3].map((q): Float64Array | undefined => {
     const values = fitted.values[q]!;
@@ -232,8 +240,9 @@ function fitWithNodes(
     );
     const scale = values.map((value) => 1 / Math.max(1, Math.abs(value)));
     const plain = scale.every((s) => s === 1);
-    const factor = plain && shared !== undefined ? shared : factorBasis(fitted.wavenumbers, scale, distances);
-    if (plain) shared = factor;
+    const factor =
+      (plain ? factors.get(perDecade) : undefined) ?? factorBasis(fitted.wavenumbers, scale, distances);
+    if (plain) factors.set(perDecade, factor);
     const right = Matrix.zeros(values.length + distances.length, 1);
     values.forEach((value, i) => {
       right.set(i, 0, scale[i]! * (value - limit[q]!));

@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { adaptiveLattices } from '../../src/field/lattice.ts';
 import { lineProfile } from '../../src/field/line-profile.ts';
 import { climb } from '../../src/field/local-search.ts';
-import { areaRegion } from '../../src/field/region.ts';
+import { areaRegion, regionMask } from '../../src/field/region.ts';
 import { stepLattice, worstStep } from '../../src/field/step.ts';
 import { touchLattice, worstTouch } from '../../src/field/touch.ts';
 import type { Polygon } from '../../src/geometry/area.ts';
@@ -19,7 +19,7 @@ describe('the worst touch voltage', () => {
       0.7 - 0.3 * Math.exp(-((x - 7.13) ** 2 + (y - 11.61) ** 2) / 2);
     const lattice = latticeOf(surface);
     const touch = touchLattice(lattice, () => 1);
-    const worst = worstTouch(touch, region, surface, () => 1, [])!;
+    const worst = worstTouch(touch, region, regionMask(lattice, region), surface, () => 1, [])!;
     expect(Math.hypot(worst.x - 7.13, worst.y - 11.61)).toBeLessThan(0.02);
     expect(worst.value).toBeCloseTo(0.6, 4);
   });
@@ -31,6 +31,7 @@ describe('the worst touch voltage', () => {
     const worst = worstTouch(
       touchLattice(lattice, () => 1),
       region,
+      regionMask(lattice, region),
       away,
       () => 1,
       [],
@@ -45,6 +46,7 @@ describe('the worst touch voltage', () => {
     const worst = worstTouch(
       touchLattice(lattice, () => 1),
       region,
+      regionMask(lattice, region),
       surface,
       () => 1,
       [],
@@ -59,7 +61,7 @@ describe('the worst step voltage', () => {
       const plane = (x: number, y: number): number => 5 - 0.4 * (x * Math.cos(angle) + y * Math.sin(angle));
       const lattice = latticeOf(plane);
       const step = stepLattice(lattice);
-      const worst = worstStep(step, region, plane, [])!;
+      const worst = worstStep(step, region, regionMask(lattice, region), plane, [])!;
       expect(worst.value).toBeCloseTo(0.4, 3);
       expect(Math.hypot(worst.from[0] - worst.to[0], worst.from[1] - worst.to[1])).toBeCloseTo(1, 12);
       expect(plane(...worst.from)).toBeGreaterThan(plane(...worst.to));
@@ -69,7 +71,7 @@ describe('the worst step voltage', () => {
   it('is found where the potential falls steepest', () => {
     const surface = (x: number): number => 1 / (1 + Math.exp(3 * (x - 9.4)));
     const lattice = latticeOf(surface);
-    const worst = worstStep(stepLattice(lattice), region, surface, [])!;
+    const worst = worstStep(stepLattice(lattice), region, regionMask(lattice, region), surface, [])!;
     expect(worst.x).toBeCloseTo(9.4, 1);
     expect(worst.value).toBeCloseTo(surface(8.9) - surface(9.9), 3);
   });
@@ -84,7 +86,7 @@ describe('the worst step voltage', () => {
       return (1 + 0.004 * along) * Math.exp(-((across / 0.8) ** 2));
     };
     const lattice = latticeOf(ridge);
-    const worst = worstStep(stepLattice(lattice), region, ridge, [])!;
+    const worst = worstStep(stepLattice(lattice), region, regionMask(lattice, region), ridge, [])!;
     let probed = 0;
     for (let x = 0; x <= 20; x += 0.25)
       for (let y = 0; y <= 20; y += 0.25)
@@ -98,15 +100,21 @@ describe('the worst step voltage', () => {
   it('is found beside metal that the lattice steps over, and in areas between its points', () => {
     const spike = (x: number, y: number): number => Math.exp(-((x - 3.26) ** 2 + (y - 8.24) ** 2) / 0.002);
     const lattice = latticeOf(() => 0);
-    expect(worstStep(stepLattice(lattice), region, spike, [[3.26, 8.24]])!.value).toBeGreaterThan(0.99);
+    expect(
+      worstStep(stepLattice(lattice), region, regionMask(lattice, region), spike, [[3.26, 8.24]])!.value,
+    ).toBeGreaterThan(0.99);
     const small = areaRegion([[[5.1, 5.1], [5.3, 5.1], [5.3, 5.3], [5.1, 5.3]]]); // biome-ignore format: a square
     const slope = (x: number, y: number): number => 0.2 * x - 0.1 * y;
     const flat = latticeOf(slope);
-    expect(worstStep(stepLattice(flat), small, slope, [])!.value).toBeCloseTo(Math.hypot(0.2, 0.1), 4);
+    expect(worstStep(stepLattice(flat), small, regionMask(flat, small), slope, [])!.value).toBeCloseTo(
+      Math.hypot(0.2, 0.1),
+      4,
+    );
     expect(
       worstTouch(
         touchLattice(flat, () => 1),
         small,
+        regionMask(flat, small),
         slope,
         () => 1,
         [],

@@ -4,6 +4,7 @@ import {
   type Box,
   type Lattice,
   nodesReached,
+  regionMask,
   stepLattice,
   touchLattice,
   type WorstPlace,
@@ -49,7 +50,11 @@ export function look(
     spacing,
   );
   const nodes = nodesReached(maps[0]!, level.fields[0]!.nearest);
-  const zones = zonesOf(prepared);
+  const zones = zonesOf(prepared).map((zone) => ({
+    ...zone,
+    touchMask: regionMask(maps[0]!, zone.touch),
+    stepMask: regionMask(maps[0]!, zone.step),
+  }));
   return level.fields.slice(0, count).map(({ surface, metal }, u): Found => {
     const potential = maps[u]!;
     const { nodePotential } = graph.units[u]!;
@@ -61,8 +66,8 @@ export function look(
       step,
       zones: zones.map((zone) => ({
         footing: zone.footing,
-        touch: worstTouch(touch, zone.touch, surface, metal, prepared.metalPlaces),
-        step: worstStep(step, zone.step, surface, prepared.metalPlaces),
+        touch: worstTouch(touch, zone.touch, zone.touchMask, surface, metal, prepared.metalPlaces),
+        step: worstStep(step, zone.step, zone.stepMask, surface, prepared.metalPlaces),
       })),
     };
   });
