@@ -23,7 +23,6 @@ export function factor(a: usize, panels: i32): i32 {
   return -1;
 }
 
-// @ts-ignore: decorator
 @inline
 function panelAt(p: i32): usize {
   return (<usize>p * <usize>(p + 1)) << 6;

@@ -42,7 +42,6 @@ export function depths(
   ratios = ratiosAt;
 }
 
-// @ts-ignore: decorator
 @inline
 function order(distance: f64, squared: f64): usize {
   if (distance >= load<f64>(ratios) * squared) return 1;

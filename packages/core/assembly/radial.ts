@@ -5,7 +5,6 @@ const SHIFT: i64 = 49;
 const FIRST: i64 = 0x3ff0000000000000 >> 49;
 
 /** Values of the table at the two lanes of rr; `bins` is its address, `perSquare` in both lanes. */
-// @ts-ignore: decorator
 @inline
 export function radialPair(bins: usize, perSquare: v128, one: v128, rr: v128): v128 {
   const y = v128.add<f64>(one, v128.mul<f64>(rr, perSquare));

@@ -4,6 +4,7 @@ import { surfaceBytes } from '../kernels/wasm-bytes.ts';
 import type { RadialTable } from '../leakage/radial-table.ts';
 import { gaussLegendre } from '../numerics/gauss-legendre.ts';
 import type { FarCluster } from './far-clusters.ts';
+import type { SegmentGroup } from './segment-group.ts';
 
 /** A group as the kernel reads it. */
 export interface PackedGroup {
@@ -24,25 +25,6 @@ export interface PackedGroup {
   readonly ownWeight: number;
   readonly z1: number;
   readonly z2: number;
-}
-
-/** What of a group of segments is packed; see ClassGroup. */
-export interface SegmentGroup {
-  readonly vertical: boolean;
-  readonly z1: number;
-  readonly z2: number;
-  readonly count: number;
-  readonly cx: Float64Array;
-  readonly cy: Float64Array;
-  readonly hx: Float64Array;
-  readonly hy: Float64Array;
-  readonly length: Float64Array;
-  readonly radiusSquared: Float64Array;
-  readonly strength: Float64Array;
-  readonly ownWeight: number;
-  readonly all: RadialTable | undefined;
-  readonly rest: RadialTable | undefined;
-  readonly clusters: FarCluster | undefined;
 }
 
 /** Points each way in a box, as far-clusters.ts makes them and the kernel reads them. */

@@ -6,8 +6,9 @@ import { type RadialTable, radialValue } from '../leakage/radial-table.ts';
 import { smoothKernel } from '../leakage/smooth-kernel.ts';
 import { gaussLegendre } from '../numerics/gauss-legendre.ts';
 import type { SoilImages } from '../soil/image-list.ts';
-import { addFarField, clusterOrder, type FarCluster, farClusters } from './far-clusters.ts';
+import { addFarField, clusterOrder, farClusters } from './far-clusters.ts';
 import { potentialAt } from './potential.ts';
+import type { SegmentGroup } from './segment-group.ts';
 import { addByKernel, type PackedGroup, packGroup, surfaceKernel } from './surface-kernel.ts';
 
 /** Surface potential at a place, V (or Ω for a leakage per ampere). */
@@ -20,31 +21,6 @@ export interface SurfacePotentials {
   at(x: number, y: number, into: Float64Array): void;
   /** the same at many places, by the compiled kernel where there is one; `into` shape [places × count] */
   atMany(xs: Float64Array, ys: Float64Array, into: Float64Array): void;
-}
-
-/** Segments of one depth class that leak; coordinates and currents packed, shape [count] each. */
-interface ClassGroup {
-  readonly vertical: boolean;
-  readonly z1: number;
-  readonly z2: number;
-  readonly count: number;
-  /** centre and half vector in plan */
-  readonly cx: Float64Array;
-  readonly cy: Float64Array;
-  readonly hx: Float64Array;
-  readonly hy: Float64Array;
-  readonly length: Float64Array;
-  readonly radiusSquared: Float64Array;
-  /** leakages times the list's factor, shape [count × leakages] */
-  readonly strength: Float64Array;
-  /** weight of the images at the metal's own distance: the source and its reflection in the surface */
-  readonly ownWeight: number;
-  /** all images (horizontal metal) */
-  readonly all: RadialTable | undefined;
-  /** images other than those at the metal's own distance */
-  readonly rest: RadialTable | undefined;
-  /** boxes of horizontal segments whose far field is that of a few points */
-  readonly clusters: FarCluster | undefined;
 }
 
 /** Ratio of distance to length past which two, and three, Gauss points are enough (see gaussOrder). */
@@ -122,7 +98,7 @@ function classGroup(
   at: number,
   of: Int32Array,
   reach: number,
-): ClassGroup {
+): SegmentGroup {
   const unordered = Array.from({ length: mesh.count }, (_, i) => i).filter(
     (i) => of[i] === at && mesh.leaking[i] === 1,
   );
@@ -163,19 +139,26 @@ function classGroup(
 const TWO = Math.sqrt(1 / 3);
 const THREE = Math.sqrt(3 / 5);
 
-function addGroup(group: ClassGroup, x: number, y: number, into: Float64Array): void {
+function addGroup(group: SegmentGroup, x: number, y: number, into: Float64Array): void {
   if (group.vertical) addUpright(group, x, y, into);
   else addLevel(group, x, y, into);
 }
 
 /** Horizontal metal: far boxes by their points, the rest segment by segment. */
-function addLevel(group: ClassGroup, x: number, y: number, into: Float64Array): void {
+function addLevel(group: SegmentGroup, x: number, y: number, into: Float64Array): void {
   if (group.clusters === undefined) return;
   addFarField(group.clusters, group.all!, x, y, into, (from, to) => addRun(group, from, to, x, y, into));
 }
 
 /** Segments one by one: Gauss points on the table of all images when far, closed form and the rest's table when near. */
-function addRun(group: ClassGroup, from: number, to: number, x: number, y: number, into: Float64Array): void {
+function addRun(
+  group: SegmentGroup,
+  from: number,
+  to: number,
+  x: number,
+  y: number,
+  into: Float64Array,
+): void {
   const { cx, cy, hx, hy, length, strength, all } = group;
   const table = all!;
   const zz = group.z1 * group.z1;
@@ -206,7 +189,7 @@ function addScaled(strength: Float64Array, j: number, value: number, into: Float
   for (let u = 0; u < count; u++) into[u]! += strength[j * count + u]! * value;
 }
 
-function nearLevel(group: ClassGroup, j: number, dx: number, dy: number): number {
+function nearLevel(group: SegmentGroup, j: number, dx: number, dy: number): number {
   const ux = group.hx[j]!;
   const uy = group.hy[j]!;
   const above = group.z1 * group.z1 + group.radiusSquared[j]!;
@@ -232,7 +215,7 @@ function nearOrder(length: number, rest: RadialTable | undefined): number {
 }
 
 /** Vertical metal is one place in plan: closed form for its own distance, the table's mean for the rest. */
-function addUpright(group: ClassGroup, x: number, y: number, into: Float64Array): void {
+function addUpright(group: SegmentGroup, x: number, y: number, into: Float64Array): void {
   const { z1, z2, ownWeight, rest } = group;
   for (let j = 0; j < group.count; j++) {
     const dx = x - group.cx[j]!;
