@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { soilImages } from '../../src/soil/image-list.ts';
+import { layerAt } from '../../src/soil/layer-kernel.ts';
 import { pointPotential } from '../../src/soil/point-potential.ts';
 import type { SoilModel } from '../../src/soil/soil-model.ts';
 import { potentialByHankel } from '../support/hankel-oracle.ts';
@@ -143,7 +144,7 @@ describe('image lists', () => {
   });
 });
 
-/** Error at random depths and distance, of the larger of the potential and ρ/4π over the distance to the source. */
+/** Error at random depths and distance, of the larger of the potential and ρ/4π over the distance to the source, ρ of its layer. */
 function errorAtRandomPlace(model: SoilModel, random: () => number, onSurface: boolean): number {
   const images = soilImages(model);
   const thinnest = Math.min(...model.layers.slice(0, -1).map((layer) => layer.thickness));
@@ -155,7 +156,7 @@ function errorAtRandomPlace(model: SoilModel, random: () => number, onSurface: b
   const exact = potentialByHankel(model, d, z, r, Math.max(0.01 * thinnest, leastDistance(model, d, z)));
   const scale = Math.max(
     Math.abs(exact),
-    model.layers[0]!.resistivity / (4 * Math.PI * Math.hypot(r, z - d)),
+    model.layers[layerAt(images.depths, d)]!.resistivity / (4 * Math.PI * Math.hypot(r, z - d)),
   );
   return Math.abs(pointPotential(images, d, z, r) - exact) / scale;
 }

@@ -65,6 +65,13 @@ function checkGrid(one: GridCase): void {
   const ratio = (100 * touch.worst_V) / gpr_V;
   expectWithin(ratio, one.touch, one.touchShare, 'worst touch');
   expectCovered(ratio, (100 * touch.uncertainty_V) / gpr_V, one.touch, trust * VOLTAGE_TRUST, 'worst touch');
+  const out = Math.SQRT1_2;
+  const [corner, beyond] = fieldAt(studyOf(one.bars, one.layers), [
+    { x_m: 0, y_m: 0, depth_m: 0 },
+    { x_m: -out, y_m: -out, depth_m: 0 },
+  ]);
+  const cornerStep = (100 * (corner!.potential_V - beyond!.potential_V)) / gpr_V;
+  expectWithin(cornerStep, one.step, 0.01 * trust, 'step at the corner');
   // the worst step is nowhere less than the corner's own
   expect((100 * step.worst_V) / gpr_V, 'worst step').toBeGreaterThan(one.step * (1 - 0.01 * trust));
   expect(results.checks.current_balance).toBeLessThan(1e-9);
