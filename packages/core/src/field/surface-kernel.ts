@@ -1,6 +1,6 @@
 // The surface potentials of one group of metal at many points, by the compiled kernel.
 import { doublesAt, type Kernel, kernelOf, place } from '../kernels/instance.ts';
-import { surfaceBytes } from '../kernels/wasm-bytes.ts';
+import { surfaceBytes } from '../kernels/surface-bytes.ts';
 import type { RadialTable } from '../leakage/radial-table.ts';
 import { gaussLegendre } from '../numerics/gauss-legendre.ts';
 import type { FarCluster } from './far-clusters.ts';

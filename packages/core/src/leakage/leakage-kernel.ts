@@ -1,7 +1,7 @@
 // Far entries of the leakage matrix between horizontal segments, by the compiled kernel.
 import type { SegmentMesh } from '../geometry/segments.ts';
 import { doublesAt, kernelOf, place } from '../kernels/instance.ts';
-import { leakageBytes } from '../kernels/wasm-bytes.ts';
+import { leakageBytes } from '../kernels/leakage-bytes.ts';
 import { gaussLegendre } from '../numerics/gauss-legendre.ts';
 import type { ImageList } from '../soil/image-list.ts';
 import type { DepthClasses } from './depth-classes.ts';

@@ -1,6 +1,7 @@
 // Cholesky factor of a symmetric positive-definite matrix kept as its packed lower triangle.
+
+import { choleskyBytes } from '../kernels/cholesky-bytes.ts';
 import { doublesAt, kernelOf, place } from '../kernels/instance.ts';
-import { choleskyBytes } from '../kernels/wasm-bytes.ts';
 
 /** Packed lower triangle: entry (i, j ≤ i) at i(i + 1)/2 + j; shape [n(n + 1)/2]. */
 export type PackedLower = Float64Array;
