@@ -79,6 +79,21 @@ export function leakageEntries(mesh: SegmentMesh, images: SoilImages): LeakageEn
   return (i, j) => entry(mesh, images, classes, tables, points, i, j);
 }
 
+/**
+ * Fills a block of the leakage matrix, Ω, row after row; rows and columns are indices into the mesh.
+ * `into` shape [rows × columns]
+ */
+export type LeakageBlocks = (rows: Int32Array, columns: Int32Array, into: Float64Array) => void;
+
+/** Prepares the tables and points from which blocks of the leakage matrix are made. */
+export function leakageBlocks(mesh: SegmentMesh, images: SoilImages): LeakageBlocks {
+  const entryOf = leakageEntries(mesh, images);
+  return (rows, columns, into) => {
+    for (let r = 0; r < rows.length; r++)
+      for (let c = 0; c < columns.length; c++) into[r * columns.length + c] = entryOf(rows[r]!, columns[c]!);
+  };
+}
+
 export function leakingSegments(mesh: SegmentMesh): Int32Array {
   const found: number[] = [];
   for (let i = 0; i < mesh.count; i++) if (mesh.leaking[i] === 1) found.push(i);
