@@ -35,8 +35,8 @@ const percent = (value: number, reference: number): string => {
   return `${off < 0 ? '−' : '+'}${Math.abs(off).toFixed(2)} %`;
 };
 
-function row(one: AgreementCase): string {
-  const { electrode, cases } = solveStudy(studyOf(one)).results;
+async function row(one: AgreementCase): Promise<string> {
+  const { electrode, cases } = (await solveStudy(studyOf(one))).results;
   const { resistance_ohm: r, resistance_uncertainty_ohm: u } = electrode;
   const { touch, gpr_V } = cases[0]!;
   const ratio = (100 * touch.worst_V) / gpr_V;
@@ -52,4 +52,4 @@ function row(one: AgreementCase): string {
 process.stdout.write(
   '| electrode | source | R, Ω: there / here | worst touch, % of the rise: there / here |\n|---|---|---|---|\n',
 );
-for (const one of agreementCases) process.stdout.write(`${row(one)}\n`);
+for (const one of agreementCases) process.stdout.write(`${await row(one)}\n`);

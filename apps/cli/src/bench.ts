@@ -33,22 +33,23 @@ interface Arms {
   readonly difference: number;
 }
 
-function milliseconds<T>(work: () => T): [ms: number, result: T] {
+async function milliseconds<T>(work: () => T | Promise<T>): Promise<[ms: number, result: T]> {
   const start = performance.now();
-  const result = work();
+  const result = await work();
   return [performance.now() - start, result];
 }
 
-function round(loaded: LoadedStudy, level: number): Arms {
-  const [study] = milliseconds(() => solveStudy(loaded));
+async function round(loaded: LoadedStudy, level: number): Promise<Arms> {
+  const [study] = await milliseconds(() => solveStudy(loaded));
   const soil = layeredSoil(loaded.study.soil.layers ?? []);
   const interfaces = interfaceDepths(soil);
   const table = loaded.conductors;
   const mesh = segmentMesh(table, joinConductors(table), interfaces, level);
   const ohm = new Float64Array(table.count).fill(1e-4);
-  const [ours, solved] = milliseconds(() => {
+  const [ours, solved] = await milliseconds(async () => {
     const matrix = leakageMatrix(mesh, soilImages(soil));
-    return { matrix, resistance: solveGraph(mesh, matrix, [0], ohm, 'equipotential').units[0]!.resistance };
+    const { units } = await solveGraph(mesh, matrix, [0], ohm, 'equipotential');
+    return { matrix, resistance: units[0]!.resistance };
   });
   const { matrix } = solved;
   const full = Matrix.zeros(matrix.size, matrix.size);
@@ -58,7 +59,9 @@ function round(loaded: LoadedStudy, level: number): Arms {
       full.set(j, i, matrix.entries[(i * (i + 1)) / 2 + j]!);
     }
   // all metal at one volt: for an electrode in one piece the same system, so that the resistances must agree
-  const [lu, leakage] = milliseconds(() => new LuDecomposition(full).solve(Matrix.ones(matrix.size, 1)));
+  const [lu, leakage] = await milliseconds(() =>
+    new LuDecomposition(full).solve(Matrix.ones(matrix.size, 1)),
+  );
   return { study, ours, lu, segments: matrix.size, difference: solved.resistance * leakage.sum() - 1 };
 }
 
@@ -80,7 +83,7 @@ function report(name: string, rounds: readonly Arms[]): string {
   return `| ${cells.join(' | ')} |`;
 }
 
-function main(args: readonly string[]): void {
+async function main(args: readonly string[]): Promise<void> {
   const smallest = args.includes('--smallest');
   const lines = [
     '| case | segments | whole study, ms | assemble + solve, ms | dense LU alone (ml-matrix), ms | LU over ours | difference in R |',
@@ -89,41 +92,44 @@ function main(args: readonly string[]): void {
   for (const { name, folder, level, small } of benchCases) {
     if (smallest && !small) continue;
     const loaded = loadStudy(folderSource(resolve(folder)));
-    const rounds = Array.from({ length: ROUNDS }, () => round(loaded, level));
+    const rounds: Arms[] = [];
+    for (let r = 0; r < ROUNDS; r++) rounds.push(await round(loaded, level));
     lines.push(report(name, rounds));
   }
-  lines.push('', '| part, one thread | ms | what it did |', '|---|---|---|', ...parts(smallest));
-  demonstration ??= surfaceOf(loadStudy(folderSource(resolve('test-data/aldermoor'))));
+  lines.push('', '| part, one thread | ms | what it did |', '|---|---|---|', ...(await parts(smallest)));
+  demonstration ??= await surfaceOf(loadStudy(folderSource(resolve('test-data/aldermoor'))));
   lines.push('', ...kernelRows(demonstration.mesh, demonstration.images, demonstration.surfaces));
   process.stdout.write(`${lines.join('\n')}\n`);
 }
 
 /** Parts of the main job by themselves: medians of the same rounds. */
-function parts(smallest: boolean): string[] {
+async function parts(smallest: boolean): Promise<string[]> {
   const across = smallest ? 30 : 100;
   const lattice = latticeTable(across);
   const four = layeredSoil(fourLayers);
-  const timed = (work: () => string): string[] => {
-    const rounds = Array.from({ length: ROUNDS }, () => milliseconds(work));
+  const timed = async (work: () => string | Promise<string>): Promise<string[]> => {
+    const rounds: [number, string][] = [];
+    for (let r = 0; r < ROUNDS; r++) rounds.push(await milliseconds(work));
     return [median(rounds.map(([ms]) => ms)).toFixed(0), rounds[0]![1]];
   };
-  const row = (name: string, work: () => string): string => `| ${[name, ...timed(work)].join(' | ')} |`;
+  const row = async (name: string, work: () => string | Promise<string>): Promise<string> =>
+    `| ${[name, ...(await timed(work))].join(' | ')} |`;
   const rows = [
-    row(
+    await row(
       'joining conductors',
       () => `${lattice.count} conductors into ${joinConductors(lattice).nodeCount} nodes`,
     ),
-    row('image lists of a new soil', () => {
+    await row('image lists of a new soil', () => {
       const images = soilImages(four);
       const lists = four.layers.flatMap((_, s) => four.layers.map((_, f) => images.list(s, f)));
       const worst = Math.max(...lists.map((list) => list.error));
       return `4 layers, all ${lists.length} pairs, error ${worst.toExponential(1)}`;
     }),
-    row('map of the demonstration’s areas', () => mapOnce()),
+    await row('map of the demonstration’s areas', () => mapOnce()),
   ];
   if (!smallest)
     rows.push(
-      row('compressed leakage matrix', () => {
+      await row('compressed leakage matrix', () => {
         const table = latticeTable(44);
         const mesh = segmentMesh(table, joinConductors(table), [2], 0);
         const { stored, evaluations } = compressedLeakageMatrix(mesh, soilImages(layeredSoil(twoLayers)));
@@ -143,21 +149,22 @@ const fourLayers = [
 ];
 
 /** The demonstration's surface on half a metre, from the leakage of its second mesh. */
-function mapOnce(): string {
-  demonstration ??= surfaceOf(loadStudy(folderSource(resolve('test-data/aldermoor'))));
+async function mapOnce(): Promise<string> {
+  demonstration ??= await surfaceOf(loadStudy(folderSource(resolve('test-data/aldermoor'))));
   const [map] = adaptiveLattices(demonstration.surfaces, [2e-3 * demonstration.rise], demonstration.box, 0.5);
   return `${map!.nx} × ${map!.ny} places, ${map!.evaluated} computed, ${demonstration.segments} segments`;
 }
 
-let demonstration: ReturnType<typeof surfaceOf> | undefined;
+let demonstration: Awaited<ReturnType<typeof surfaceOf>> | undefined;
 
-function surfaceOf(loaded: LoadedStudy) {
+async function surfaceOf(loaded: LoadedStudy) {
   const soil = layeredSoil(loaded.study.soil.layers ?? []);
   const table = loaded.conductors;
   const mesh = segmentMesh(table, joinConductors(table), interfaceDepths(soil), 1);
   const images = soilImages(soil);
   const ohm = new Float64Array(table.count).fill(1e-4);
-  const [unit] = solveGraph(mesh, leakageMatrix(mesh, images), [0], ohm, 'equipotential').units;
+  const { units } = await solveGraph(mesh, leakageMatrix(mesh, images), [0], ohm, 'equipotential');
+  const [unit] = units;
   const surfaces = surfacePotentials(mesh, images, [unit!.leakage], 300);
   return {
     mesh,
@@ -194,4 +201,4 @@ function latticeTable(across: number): ConductorTable {
   };
 }
 
-main(process.argv.slice(2));
+await main(process.argv.slice(2));

@@ -27,13 +27,13 @@ export interface Engine {
   readonly solveStudy: (
     loaded: LoadedStudy,
     options?: { readonly onProgress?: (stage: string, share: number) => void },
-  ) => Outcome;
+  ) => Promise<Outcome>;
   readonly fieldAt: (
     loaded: LoadedStudy,
     points: readonly FieldPoint[],
     caseName: string,
     onProgress: (stage: string, share: number) => void,
-  ) => readonly FieldValue[];
+  ) => Promise<readonly FieldValue[]>;
   readonly renderer: Renderer;
   readonly version: string;
 }

@@ -44,7 +44,7 @@ async function runSolve(given: Arguments, io: Io, engine: Engine): Promise<ExitS
   if (fault !== undefined) throw new InputFaults([fault]);
   const loaded = engine.loadStudy(await openStudy(given.operand));
   const { results } = await withProgress(io, async (report) => {
-    const outcome = engine.solveStudy(loaded, { onProgress: report });
+    const outcome = await engine.solveStudy(loaded, { onProgress: report });
     if (pack !== undefined) {
       report('drawing the sheet', 0);
       writeWhole(pack, await writePack(loaded, outcome, engine.version, engine.renderer));

@@ -72,7 +72,7 @@ export function doubleEngine(change: (results: Results) => Results = (results) =
   return {
     loadStudy,
     loadPoints,
-    solveStudy: (loaded, options) => {
+    solveStudy: async (loaded, options) => {
       options?.onProgress?.('solving', 0.5);
       return { ...exampleSolve(loaded), results: change(exampleResults(loaded)) };
     },
@@ -84,7 +84,7 @@ export function doubleEngine(change: (results: Results) => Results = (results) =
         layer_count: layerCount === 'auto' ? exampleFit.layer_count_proposed : layerCount,
       },
     }),
-    fieldAt: (_loaded, points, caseName) =>
+    fieldAt: async (_loaded, points, caseName) =>
       points.map((point) => ({
         ...point,
         potential_V: caseName.length + 0.1 + 0.2,

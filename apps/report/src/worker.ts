@@ -24,7 +24,7 @@ self.onmessage = (event: MessageEvent<SolveRequest>): void => {
 
 async function solve(run: number, files: ReadonlyMap<string, Uint8Array>): Promise<void> {
   const loaded = loadStudy(await sourceOf(files));
-  const outcome = solveStudy(loaded, {
+  const outcome = await solveStudy(loaded, {
     onProgress: (stage, share) => say({ kind: 'progress', run, stage, share }),
   });
   const pack = new Uint8Array(await writePack(loaded, outcome, programVersion));

@@ -1,5 +1,6 @@
 // The leakage matrix: mutual resistance between every two leaking segments, Galerkin, symmetric positive definite.
 import type { SegmentMesh } from '../geometry/segments.ts';
+import type { Product } from '../numerics/conjugate-gradients.ts';
 import { gaussLegendre } from '../numerics/gauss-legendre.ts';
 import { multiplyPacked, type PackedLower } from '../numerics/packed-cholesky.ts';
 import type { ImageList, SoilImages } from '../soil/image-list.ts';
@@ -17,7 +18,7 @@ export interface LeakageMatrix {
   /** R_ii, Ω; shape [size] */
   readonly diagonal: Float64Array;
   /** writes R x, V */
-  multiply(x: Float64Array, into: Float64Array): void;
+  readonly multiply: Product;
   /** writes an approximate R⁻¹ r that keeps iterations few; symmetric positive definite */
   precondition(r: Float64Array, into: Float64Array): void;
   /** R_ij, Ω: mean potential of segment i per ampere leaked evenly by segment j; packed lower triangle, where it is stored whole */

@@ -16,6 +16,9 @@ export interface ConjugateGradientOptions {
 
 export const CONJUGATE_GRADIENT_DEFAULTS: ConjugateGradientOptions = { tolerance: 1e-12, limit: 1000 };
 
+/** Writes A x into its second argument; a promise where others help to compute it. */
+export type Product = (x: Float64Array, into: Float64Array) => void | Promise<void>;
+
 /** Iterations without a smaller residual before the rounding floor is taken as reached. */
 const PATIENCE = 25;
 
@@ -24,12 +27,12 @@ const PATIENCE = 25;
  * @param multiply writes A x into its second argument
  * @param precondition writes an approximate A⁻¹ r into its second argument; symmetric positive definite
  */
-export function conjugateGradients(
-  multiply: (x: Float64Array, into: Float64Array) => void,
+export async function conjugateGradients(
+  multiply: Product,
   precondition: (r: Float64Array, into: Float64Array) => void,
   b: Float64Array,
   options: ConjugateGradientOptions = CONJUGATE_GRADIENT_DEFAULTS,
-): ConjugateGradientResult {
+): Promise<ConjugateGradientResult> {
   const n = b.length;
   const x = new Float64Array(n);
   const r = Float64Array.from(b);
@@ -59,7 +62,7 @@ export function conjugateGradients(
     const rho = dot(r, z);
     const beta = iterations === 0 ? 0 : rho / previous;
     for (let i = 0; i < n; i++) p[i] = z[i]! + beta * p[i]!;
-    multiply(p, q);
+    await multiply(p, q);
     const alpha = rho / dot(p, q);
     for (let i = 0; i < n; i++) {
       x[i]! += alpha * p[i]!;
@@ -68,7 +71,7 @@ export function conjugateGradients(
     previous = rho;
     iterations++;
   }
-  multiply(x, q);
+  await multiply(x, q);
   let error = 0;
   for (let i = 0; i < n; i++) error += (b[i]! - q[i]!) ** 2;
   const scale = dot(b, b);

@@ -1,6 +1,6 @@
 // Solves the coupled leakage equations (R + B Z Bᵀ) x = b by the method that suits their size.
 import type { LeakageMatrix } from '../leakage/leakage-matrix.ts';
-import { conjugateGradients } from '../numerics/conjugate-gradients.ts';
+import { conjugateGradients, type Product } from '../numerics/conjugate-gradients.ts';
 import { factorPacked, type PackedLower, solvePacked } from '../numerics/packed-cholesky.ts';
 
 /** The leakage matrix and, where the metal has resistance, what that adds to it. */
@@ -12,7 +12,7 @@ export interface LeakageOperator {
 
 export interface LinearSolver {
   readonly method: 'cholesky' | 'conjugate-gradients';
-  solve(b: Float64Array): { readonly x: Float64Array; readonly iterations: number };
+  solve(b: Float64Array): Promise<{ readonly x: Float64Array; readonly iterations: number }>;
 }
 
 /** Below this the factor costs less than a dozen iterations' overhead and gives the last digit. */
@@ -57,21 +57,21 @@ export function linearSolver(operator: LeakageOperator, rightHandSides: number):
     factorPacked(factor, size);
     return {
       method: 'cholesky',
-      solve(b) {
+      async solve(b) {
         const x = Float64Array.from(b);
         solvePacked(factor, size, x);
         return { x, iterations: 0 };
       },
     };
   }
-  const multiply = (x: Float64Array, into: Float64Array): void => {
-    matrix.multiply(x, into);
+  const multiply: Product = async (x, into) => {
+    await matrix.multiply(x, into);
     addMetal?.(x, into);
   };
   return {
     method: 'conjugate-gradients',
-    solve(b) {
-      const result = conjugateGradients(multiply, matrix.precondition, b, {
+    async solve(b) {
+      const result = await conjugateGradients(multiply, matrix.precondition, b, {
         tolerance: entries === undefined ? COMPRESSED_RESIDUAL : RESIDUAL,
         limit: ITERATION_LIMIT,
       });

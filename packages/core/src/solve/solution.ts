@@ -42,13 +42,13 @@ export interface GraphSolution {
  * @param resistancePerMetre by conductor, Ω/m; used in the equipotential model only to share the currents along the metal
  * @throws SolverStalled, NotPositiveDefinite
  */
-export function solveGraph(
+export async function solveGraph(
   mesh: SegmentMesh,
   matrix: LeakageMatrix,
   injectionNodes: readonly number[],
   resistancePerMetre: Float64Array,
   model: MetalModel,
-): GraphSolution {
+): Promise<GraphSolution> {
   const { segments, size } = matrix;
   const branches = metalBranches(mesh, resistancePerMetre);
   const { laplacian, references } = groundedMetal(mesh, branches, injectionNodes);
@@ -66,23 +66,25 @@ export function solveGraph(
     pieces.length + offReference,
   );
   let iterations = 0;
-  const solve = (b: Float64Array): Float64Array => {
-    const { x, iterations: steps } = solver.solve(b);
+  const solve = async (b: Float64Array): Promise<Float64Array> => {
+    const { x, iterations: steps } = await solver.solve(b);
     iterations += steps;
     return x;
   };
-  const response = pieces.map((c) => solve(Float64Array.from(component, (own) => (own === c ? 1 : 0))));
+  const response: Float64Array[] = [];
+  for (const c of pieces)
+    response.push(await solve(Float64Array.from(component, (own) => (own === c ? 1 : 0))));
   const net = (x: Float64Array): Float64Array => netByPiece(x, component, pieces);
   const gram = packPieces(response.map(net));
 
-  const unit = (node: number): UnitSolution => {
+  const unit = async (node: number): Promise<UnitSolution> => {
     const injection = new Float64Array(mesh.nodeCount);
     injection[node] = 1;
     const own = pieces.indexOf(mesh.nodeComponent[node]!);
     const away = model === 'resistive' && !references.includes(node);
     const fromInjection = away ? laplacian.solve(injection) : undefined;
     const extra =
-      fromInjection === undefined ? undefined : solve(segmentPotentials(mesh, segments, fromInjection));
+      fromInjection === undefined ? undefined : await solve(segmentPotentials(mesh, segments, fromInjection));
     const level = new Float64Array(pieces.length);
     level[own] = 1;
     if (extra !== undefined) net(extra).forEach((sum, p) => { level[p]! -= sum; }); // biome-ignore format: one line of algebra
@@ -110,15 +112,16 @@ export function solveGraph(
       resistance: nodePotential[node]!,
       balance: current.reduce((sum, i) => sum + i, 0) - 1,
       nodeBalance: kirchhoffFailure(nodeOutflow(branches, mesh.nodeCount, along), drawn, injection),
-      residual: leakageResidual(matrix, current, segmentPotentials(mesh, segments, nodePotential)),
+      residual: await leakageResidual(matrix, current, segmentPotentials(mesh, segments, nodePotential)),
     };
   };
   const known = new Map<number, UnitSolution>();
-  const units = injectionNodes.map((node) => {
-    const solved = known.get(node) ?? unit(node);
+  const units: UnitSolution[] = [];
+  for (const node of injectionNodes) {
+    const solved = known.get(node) ?? (await unit(node));
     known.set(node, solved);
-    return solved;
-  });
+    units.push(solved);
+  }
   return { mesh, units, iterations };
 }
 
@@ -154,9 +157,13 @@ function kirchhoffFailure(outflow: Float64Array, drawn: Float64Array, injection:
   );
 }
 
-function leakageResidual(matrix: LeakageMatrix, current: Float64Array, potential: Float64Array): number {
+async function leakageResidual(
+  matrix: LeakageMatrix,
+  current: Float64Array,
+  potential: Float64Array,
+): Promise<number> {
   const product = new Float64Array(matrix.size);
-  matrix.multiply(current, product);
+  await matrix.multiply(current, product);
   let error = 0;
   let scale = 0;
   for (let k = 0; k < matrix.size; k++) {

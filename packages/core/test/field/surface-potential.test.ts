@@ -18,8 +18,8 @@ describe('surface potential', () => {
     ['two layers, rods through the interface', soil([100, 1.5], [900])],
     ['the grid in the lower layer', soil([300, 0.3], [40])],
     ['four layers', soil([200, 1], [50, 3], [800, 4], [20])],
-  ] as const)('is what the images sum to one by one, to 1e-5 of the rise: %s', (_, model) => {
-    const { mesh, images, unit } = solveBars(yard, model, 1);
+  ] as const)('is what the images sum to one by one, to 1e-5 of the rise: %s', async (_, model) => {
+    const { mesh, images, unit } = await solveBars(yard, model, 1);
     const zero = new Float64Array(mesh.count);
     const surfaces = surfacePotentials(mesh, images, [unit.leakage, zero], 200);
     const surface = onePotential(surfaces, 0);
@@ -42,15 +42,15 @@ describe('surface potential', () => {
     }
   });
 
-  it('falls off like that of a point current far away: ρI/2πr', () => {
-    const { mesh, images, unit } = solveBars(yard, soil([100]), 1);
+  it('falls off like that of a point current far away: ρI/2πr', async () => {
+    const { mesh, images, unit } = await solveBars(yard, soil([100]), 1);
     const surface = onePotential(surfacePotentials(mesh, images, [unit.leakage], 5000), 0);
     const r = 4000;
     expect(Math.abs((surface(30 + r, 20) * 2 * Math.PI * r) / 100 - 1)).toBeLessThan(1e-3);
   });
 
-  it('has no current through the surface: potential just below it is the surface’s', () => {
-    const { mesh, images, unit } = solveBars(yard, soil([100, 1.5], [900]), 1);
+  it('has no current through the surface: potential just below it is the surface’s', async () => {
+    const { mesh, images, unit } = await solveBars(yard, soil([100, 1.5], [900]), 1);
     const slope =
       (potentialAt(mesh, images, unit.leakage, 13, 7, 1e-3) -
         potentialAt(mesh, images, unit.leakage, 13, 7, 0)) /
@@ -62,8 +62,8 @@ describe('surface potential', () => {
     expect(Math.abs(slope)).toBeLessThan(0.02 * Math.abs(deeper));
   });
 
-  it('is continuous through an interface below the grid', () => {
-    const { mesh, images, unit } = solveBars(yard, soil([100, 1.5], [900]), 1);
+  it('is continuous through an interface below the grid', async () => {
+    const { mesh, images, unit } = await solveBars(yard, soil([100, 1.5], [900]), 1);
     const above = potentialAt(mesh, images, unit.leakage, 13, 7, 1.5 - 1e-6);
     const below = potentialAt(mesh, images, unit.leakage, 13, 7, 1.5 + 1e-6);
     expect(Math.abs(above / below - 1)).toBeLessThan(1e-5);

@@ -22,8 +22,8 @@ describe('leakage kernel', () => {
     ['two layers, depths on both sides of the interface', soil([100, 0.7], [900])],
     ['the grid in the lower layer', soil([300, 0.3], [40])],
     ['four layers', soil([200, 1], [50, 3], [800, 4], [20])],
-  ] as const)('agrees with plain code to 1e-12 of every entry: %s', (_, model) => {
-    const { mesh, images } = solveBars(yard, model, 0);
+  ] as const)('agrees with plain code to 1e-12 of every entry: %s', async (_, model) => {
+    const { mesh, images } = await solveBars(yard, model, 0);
     const fast = leakageMatrix(mesh, images).entries;
     useKernels(false);
     const plain = leakageMatrix(mesh, images).entries;

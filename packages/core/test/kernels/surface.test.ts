@@ -39,8 +39,8 @@ describe('surface kernel', () => {
     ['two layers, rods through the interface', soil([100, 1.5], [900])],
     ['the grid in the lower layer', soil([300, 0.3], [40])],
     ['four layers', soil([200, 1], [50, 3], [800, 4], [20])],
-  ] as const)('agrees with plain code to 1e-12 of the rise: %s', (_, model) => {
-    const { mesh, images, unit } = solveBars(yard, model, 1);
+  ] as const)('agrees with plain code to 1e-12 of the rise: %s', async (_, model) => {
+    const { mesh, images, unit } = await solveBars(yard, model, 1);
     const other = unit.leakage.map((current, i) => current * (i % 3));
     const third = unit.leakage.map((current, i) => (i % 2 === 0 ? current : 0));
     const random = randomNumbers(7);
@@ -58,10 +58,10 @@ describe('surface kernel', () => {
     }
   });
 
-  it('is replaced by plain code, bit for bit, when kernels are off', () => {
+  it('is replaced by plain code, bit for bit, when kernels are off', async () => {
     useKernels(false);
     expect(surfaceKernel()).toBeUndefined();
-    const { mesh, images, unit } = solveBars(yard, soil([100, 1.5], [900]), 0);
+    const { mesh, images, unit } = await solveBars(yard, soil([100, 1.5], [900]), 0);
     const potentials = surfacePotentials(mesh, images, [unit.leakage], 100);
     const xs = Float64Array.of(3, 17, 80);
     const ys = Float64Array.of(-2, 20, 60);

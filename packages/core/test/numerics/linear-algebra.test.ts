@@ -53,13 +53,13 @@ describe('packed Cholesky', () => {
 });
 
 describe('conjugate gradients', () => {
-  it('agrees with the factor and reports a residual recomputed from the solution', () => {
+  it('agrees with the factor and reports a residual recomputed from the solution', async () => {
     const n = 60;
     const matrix = randomPositive(n, 3);
     const b = Float64Array.from({ length: n }, randomNumbers(9));
     const diagonal = Float64Array.from({ length: n }, (_, i) => matrix[(i * (i + 3)) / 2]!);
     const multiply = (x: Float64Array, into: Float64Array): void => multiplyPacked(matrix, n, x, into);
-    const result = conjugateGradients(multiply, byDiagonal(diagonal), b);
+    const result = await conjugateGradients(multiply, byDiagonal(diagonal), b);
     expect(result.outcome).toBe('converged');
     expect(result.residual).toBeLessThan(1e-12);
     const direct = Float64Array.from(b);
@@ -71,12 +71,12 @@ describe('conjugate gradients', () => {
     });
   });
 
-  it('says so when it reaches its limit', () => {
+  it('says so when it reaches its limit', async () => {
     const n = 60;
     const matrix = randomPositive(n, 3);
     const b = Float64Array.from({ length: n }, randomNumbers(9));
     const multiply = (x: Float64Array, into: Float64Array): void => multiplyPacked(matrix, n, x, into);
-    const result = conjugateGradients(multiply, byDiagonal(new Float64Array(n).fill(1)), b, {
+    const result = await conjugateGradients(multiply, byDiagonal(new Float64Array(n).fill(1)), b, {
       tolerance: 1e-12,
       limit: 2,
     });

@@ -66,12 +66,12 @@ export interface SolvedElectrode {
 }
 
 /** Solves bars on one mesh, one ampere into the first node. */
-export function solveBars(
+export async function solveBars(
   bars: readonly Bar[],
   model: SoilModel,
   level: number,
   metal: MetalModel = 'equipotential',
-): SolvedElectrode {
+): Promise<SolvedElectrode> {
   const table = conductorTable(bars);
   const interfaces: number[] = [];
   let depth = 0;
@@ -82,6 +82,6 @@ export function solveBars(
   const images = soilImages(model);
   const mesh = segmentMesh(table, joinConductors(table), interfaces, level);
   const resistance = new Float64Array(table.count).fill(1e-4);
-  const unit = solveGraph(mesh, leakageMatrix(mesh, images), [0], resistance, metal).units[0]!;
+  const unit = (await solveGraph(mesh, leakageMatrix(mesh, images), [0], resistance, metal)).units[0]!;
   return { mesh, images, unit };
 }

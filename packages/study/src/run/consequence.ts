@@ -42,20 +42,21 @@ interface Places {
  * Solves members of the family on the coarsest mesh and carries their ratio to the best fit, solved alike, over to the
  * fine results of the best fit.
  */
-export function consequenceOf(
+export async function consequenceOf(
   prepared: Prepared,
   solved: Solved,
   cases: readonly CaseResult[],
   members: readonly FamilyMember[],
   progress: Progress,
-): GroundResult['consequence'] {
+): Promise<GroundResult['consequence']> {
   const places = placesOf(prepared, solved);
   const chosen = strided(members, SOLVED_MEMBERS);
-  const best = respond(prepared, solved, prepared.soil, places);
-  const responses = chosen.map(({ soil }, k) => {
-    progress('solving soils that the readings allow', k / chosen.length);
-    return respond(prepared, solved, soil, places);
-  });
+  const best = await respond(prepared, solved, prepared.soil, places);
+  const responses: Response[][] = [];
+  for (const { soil } of chosen) {
+    await progress('solving soils that the readings allow', responses.length / chosen.length);
+    responses.push(await respond(prepared, solved, soil, places));
+  }
   const spread = (unit: number, value: number, pick: (response: Response) => number): Spread => ({
     best: value,
     ...bandOf(responses.map((units) => (value * pick(units[unit]!)) / pick(best[unit]!))),
@@ -96,12 +97,23 @@ function placesOf(prepared: Prepared, solved: Solved): Places {
   };
 }
 
-function respond(prepared: Prepared, solved: Solved, soil: SoilModel, places: Places): Response[] {
+async function respond(
+  prepared: Prepared,
+  solved: Solved,
+  soil: SoilModel,
+  places: Places,
+): Promise<Response[]> {
   const mesh = segmentMesh(prepared.loaded.conductors, prepared.joints, interfaceDepths(soil), 0);
   const images = soilImages(soil, IMAGE_TOLERANCE);
   const nodes = solved.units.map((unit) => unit.injectionNode);
   const model = prepared.loaded.study.metal_model ?? 'resistive';
-  const graph = solveGraph(mesh, leakageMatrix(mesh, images), nodes, prepared.resistancePerMetre, model);
+  const graph = await solveGraph(
+    mesh,
+    leakageMatrix(mesh, images),
+    nodes,
+    prepared.resistancePerMetre,
+    model,
+  );
   const leakages = graph.units.map((unit) => unit.leakage);
   const surface = surfacePotentials(mesh, images, leakages, lineReach(mesh, assessedBox(prepared)));
   const at = (place: readonly [number, number]): Float64Array => {

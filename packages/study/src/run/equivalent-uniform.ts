@@ -14,11 +14,11 @@ import type { Prepared } from './prepare.ts';
 const LEVEL = 1;
 
 /** Empty in uniform soil, and in soils of more layers than the hand rules are made for. */
-export function equivalentUniform(prepared: Prepared, solved: Solved): EquivalentUniform[] {
+export async function equivalentUniform(prepared: Prepared, solved: Solved): Promise<EquivalentUniform[]> {
   const values = equivalentUniformResistivities(prepared.soil);
   if (values.length === 0) return [];
   const { resistance, injectionNode } = solved.units[solved.unitOfCase[0]!]!;
-  const perOhmMetre = resistanceInUniformSoil(prepared, injectionNode);
+  const perOhmMetre = await resistanceInUniformSoil(prepared, injectionNode);
   return values.map(({ name, source, resistivity }) => ({
     name,
     source,
@@ -29,9 +29,10 @@ export function equivalentUniform(prepared: Prepared, solved: Solved): Equivalen
 }
 
 /** Resistance in uniform soil of 1 Ω·m, perfect metal, Ω: it grows in proportion to the resistivity. */
-function resistanceInUniformSoil(prepared: Prepared, node: number): number {
+async function resistanceInUniformSoil(prepared: Prepared, node: number): Promise<number> {
   const mesh = segmentMesh(prepared.loaded.conductors, prepared.joints, [], LEVEL);
   const images = soilImages({ layers: [{ resistivity: 1, thickness: Number.POSITIVE_INFINITY }] });
   const matrix = leakageMatrix(mesh, images);
-  return solveGraph(mesh, matrix, [node], prepared.resistancePerMetre, 'equipotential').units[0]!.resistance;
+  const { units } = await solveGraph(mesh, matrix, [node], prepared.resistancePerMetre, 'equipotential');
+  return units[0]!.resistance;
 }

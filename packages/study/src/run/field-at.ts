@@ -25,16 +25,16 @@ export interface FieldValue extends FieldPoint {
  * @param caseName undefined for the first case
  * @throws InputFaults when no case has that name, or the drawing has faults
  */
-export function fieldAt(
+export async function fieldAt(
   loaded: LoadedStudy,
   points: readonly FieldPoint[],
   caseName?: string,
   onProgress: Progress = () => {},
-): FieldValue[] {
+): Promise<FieldValue[]> {
   const at = caseName === undefined ? 0 : loaded.study.cases.findIndex((c) => c.name === caseName);
   if (at < 0) throw new InputFaults([unknownCase(loaded, caseName ?? '')]);
   const prepared = prepare(loaded, groundOf(loaded).soil);
-  const solved = solveLevels(prepared, onProgress);
+  const solved = await solveLevels(prepared, onProgress);
   const unit = solved.units[solved.unitOfCase[at]!]!;
   const current = caseResult(
     loaded.study.cases[at]!,

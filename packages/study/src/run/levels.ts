@@ -53,7 +53,8 @@ export interface Solved {
   readonly levels: readonly MeshLevel[];
 }
 
-export type Progress = (stage: string, share: number) => void;
+/** Told of the stage in words and the share done; it may take its time, or end the work by throwing. */
+export type Progress = (stage: string, share: number) => void | Promise<void>;
 
 /** Refinement goes on while an uncertainty is above these: of the resistance, of touch and of step voltage. */
 const RESISTANCE_TARGET = 2e-3;
@@ -84,7 +85,7 @@ const SCOUT_TOLERANCE = 1e-2;
 /** The map must also show the worst touch and step voltage found by the scout, to this share of them. */
 const MAP_SHARE = 0.02;
 
-export function solveLevels(prepared: Prepared, progress: Progress): Solved {
+export async function solveLevels(prepared: Prepared, progress: Progress): Promise<Solved> {
   const images = soilImages(prepared.soil);
   const interfaces = interfaceDepths(prepared.soil);
   const distinct = [...new Set(prepared.injectionNodes)];
@@ -98,11 +99,11 @@ export function solveLevels(prepared: Prepared, progress: Progress): Solved {
   const meshAt = (level: number): SegmentMesh =>
     segmentMesh(prepared.loaded.conductors, prepared.joints, interfaces, level);
   refuseBeyondMemory(meshAt(1).count);
-  const at = (level: number): Level => {
-    progress('solving the graph', level / (LAST_LEVEL + 2));
+  const at = async (level: number): Promise<Level> => {
+    await progress('solving the graph', level / (LAST_LEVEL + 2));
     const mesh = meshAt(level);
     const model = prepared.loaded.study.metal_model ?? DEFAULT_METAL_MODEL;
-    const graph = solveGraph(
+    const graph = await solveGraph(
       mesh,
       leakageOperator(mesh, images),
       distinct,
@@ -111,14 +112,14 @@ export function solveLevels(prepared: Prepared, progress: Progress): Solved {
     );
     return levelOf(images, graph, box);
   };
-  const series = [at(0), at(1)];
+  const series = [await at(0), await at(1)];
   const scouted = look(prepared, series[1]!, box, spacing * SCOUT, SCOUT_TOLERANCE, 1)[0]!;
   while (series.length <= LAST_LEVEL && 2 * series.at(-1)!.graph.mesh.count <= SEGMENT_CEILING) {
     if (series.length >= WANTED_LEVELS && wellResolved(series, scouted)) break;
-    series.push(at(series.length));
+    series.push(await at(series.length));
   }
   const fine = series.at(-1)!;
-  progress('mapping the surface', (LAST_LEVEL + 1) / (LAST_LEVEL + 2));
+  await progress('mapping the surface', (LAST_LEVEL + 1) / (LAST_LEVEL + 2));
   const tolerance = mapTolerance(scouted, fine.graph.units[0]!.resistance);
   const units = look(prepared, fine, box, spacing, tolerance, distinct.length).map((found, u): UnitField => {
     const { resistance, injectionNode } = fine.graph.units[u]!;

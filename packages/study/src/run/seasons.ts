@@ -24,14 +24,17 @@ export interface Seasonal {
   readonly warnings: readonly ResultsWarning[];
 }
 
-export function seasonResults(prepared: Prepared, progress: Progress): Seasonal[] {
-  return (prepared.loaded.study.seasons ?? []).map((season) => seasonResult(prepared, season, progress));
+export async function seasonResults(prepared: Prepared, progress: Progress): Promise<Seasonal[]> {
+  const results: Seasonal[] = [];
+  for (const season of prepared.loaded.study.seasons ?? [])
+    results.push(await seasonResult(prepared, season, progress));
+  return results;
 }
 
-function seasonResult(prepared: Prepared, season: SeasonInput, progress: Progress): Seasonal {
+async function seasonResult(prepared: Prepared, season: SeasonInput, progress: Progress): Promise<Seasonal> {
   const { study } = prepared.loaded;
   const soil = soilIn(season, prepared.soil);
-  const solved = solveLevels({ ...prepared, soil }, (stage, share) =>
+  const solved = await solveLevels({ ...prepared, soil }, (stage, share) =>
     progress(`${season.name}: ${stage}`, share),
   );
   const limits = limitsOf(study, soil.layers[0]!.resistivity);

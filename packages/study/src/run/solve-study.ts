@@ -24,19 +24,20 @@ export interface SolveOptions {
 }
 
 /** @throws InputFaults when the drawing has faults; SolverStalled or NotPositiveDefinite for a fault of the program */
-export function solveStudy(loaded: LoadedStudy, options: SolveOptions = {}): Outcome {
+export async function solveStudy(loaded: LoadedStudy, options: SolveOptions = {}): Promise<Outcome> {
   const progress = options.onProgress ?? (() => {});
-  progress('joining conductors', 0);
+  await progress('joining conductors', 0);
   const ground = groundOf(loaded);
   const prepared = prepare(loaded, ground.soil);
-  const solved = solveLevels(prepared, progress);
+  const solved = await solveLevels(prepared, progress);
   const limits = limitsOf(loaded.study, prepared.soil.layers[0]!.resistivity);
   const unitOf = (c: number) => solved.units[solved.unitOfCase[c]!]!;
   const cases = loaded.study.cases.map((input, c) => caseResult(input, unitOf(c), solved.mesh, limits));
   const box = assessedBox(prepared);
+  const seasonal = await seasonResults(prepared, progress);
   return {
     study: loaded.study,
-    results: resultsOf(prepared, solved, limits, cases, seasonResults(prepared, progress), ground, progress),
+    results: await resultsOf(prepared, solved, limits, cases, seasonal, ground, progress),
     plan: planOf(prepared),
     segments: segmentTable(solved),
     cases: cases.map(({ result }, c) =>
@@ -48,7 +49,7 @@ export function solveStudy(loaded: LoadedStudy, options: SolveOptions = {}): Out
   };
 }
 
-function resultsOf(
+async function resultsOf(
   prepared: Prepared,
   solved: Solved,
   limits: Results['limits'],
@@ -56,7 +57,7 @@ function resultsOf(
   seasonal: readonly Seasonal[],
   ground: Ground,
   progress: Progress,
-): Results {
+): Promise<Results> {
   const base = cases.map(({ result }) => result);
   const seasons = seasonal.map(({ result }) => result);
   const { loaded, joints } = prepared;
@@ -96,9 +97,9 @@ function resultsOf(
         ? null
         : {
             fit: ground.fitted.fit,
-            consequence: consequenceOf(prepared, solved, base, ground.fitted.members, progress),
+            consequence: await consequenceOf(prepared, solved, base, ground.fitted.members, progress),
           },
-    equivalent_uniform: equivalentUniform(prepared, solved),
+    equivalent_uniform: await equivalentUniform(prepared, solved),
     limits,
     mesh: solved.levels,
     seasons,

@@ -11,10 +11,10 @@ import { type Layers, studyOf } from '../support/studies.ts';
 const RESISTANCE_TRUST = 5e-4;
 const VOLTAGE_TRUST = 5e-3;
 
-function resultsOf(bars: readonly Bar[], layers: Layers, mesh?: number): Results {
+async function resultsOf(bars: readonly Bar[], layers: Layers, mesh?: number): Promise<Results> {
   // the references tell the worst place of the corner mesh; rods at the corners make its neighbours worse
   const areas = mesh === undefined ? undefined : { touch: [[[0, 0], [mesh, 0], [mesh, mesh], [0, mesh]] as const] }; // biome-ignore format: a square
-  return solveStudy(studyOf(bars, layers, { areas })).results;
+  return (await solveStudy(studyOf(bars, layers, { areas }))).results;
 }
 
 function expectWithin(value: number, reference: number, share: number, what: string): void {
@@ -49,8 +49,8 @@ interface GridCase {
   readonly trustFactor?: number;
 }
 
-function checkGrid(one: GridCase): void {
-  const results = resultsOf(one.bars, one.layers, one.mesh);
+async function checkGrid(one: GridCase): Promise<void> {
+  const results = await resultsOf(one.bars, one.layers, one.mesh);
   const { touch, step, gpr_V } = results.cases[0]!;
   const { resistance_ohm, resistance_uncertainty_ohm } = results.electrode;
   const trust = one.trustFactor ?? 1;
@@ -66,7 +66,7 @@ function checkGrid(one: GridCase): void {
   expectWithin(ratio, one.touch, one.touchShare, 'worst touch');
   expectCovered(ratio, (100 * touch.uncertainty_V) / gpr_V, one.touch, trust * VOLTAGE_TRUST, 'worst touch');
   const out = Math.SQRT1_2;
-  const [corner, beyond] = fieldAt(studyOf(one.bars, one.layers), [
+  const [corner, beyond] = await fieldAt(studyOf(one.bars, one.layers), [
     { x_m: 0, y_m: 0, depth_m: 0 },
     { x_m: -out, y_m: -out, depth_m: 0 },
   ]);
@@ -91,9 +91,9 @@ describe('square grids in uniform soil of 100 Ω·m: resistance to 0.2 %, worst 
     [60, 16, 0.85491, 29.88, 12.87],
     [60, 36, 0.8072, 24.26, 12.23],
     [60, 100, 0.76657, 18.38, 11.57],
-  ])('%i m, %i meshes', (side, meshes, resistance, touch, step) => {
+  ])('%i m, %i meshes', async (side, meshes, resistance, touch, step) => {
     const bars = grid(side, Math.sqrt(meshes));
-    checkGrid({
+    await checkGrid({
       bars,
       mesh: side / Math.sqrt(meshes),
       layers: [[100]],
@@ -105,13 +105,13 @@ describe('square grids in uniform soil of 100 Ω·m: resistance to 0.2 %, worst 
     });
   });
 
-  it('gives the step at the corner that the reference gives', () => {
+  it('gives the step at the corner that the reference gives', async () => {
     const corner = Math.SQRT1_2;
-    const [at, out] = fieldAt(studyOf(grid(20, 4), [[100]]), [
+    const [at, out] = await fieldAt(studyOf(grid(20, 4), [[100]]), [
       { x_m: 0, y_m: 0, depth_m: 0 },
       { x_m: -corner, y_m: -corner, depth_m: 0 },
     ]);
-    const resistance = resultsOf(grid(20, 4), [[100]]).electrode.resistance_ohm;
+    const resistance = (await resultsOf(grid(20, 4), [[100]])).electrode.resistance_ohm;
     expectWithin((100 * (at!.potential_V - out!.potential_V)) / resistance, 15.51, 5e-3, 'corner step');
   });
 });
@@ -128,9 +128,9 @@ describe('a 20 m grid of 16 meshes in two layers, upper 100 Ω·m: resistance to
   const cases = table.flatMap(([h, ...rows]) =>
     rows.map(([lower, r, touch, step]) => [h, lower, r, touch, step] as const),
   );
-  it.each(cases)('h %f m over %f Ω·m', (h, lower, resistance, touch, step) => {
+  it.each(cases)('h %f m over %f Ω·m', async (h, lower, resistance, touch, step) => {
     const layers: Layers = [[100, h], [lower]];
-    checkGrid({
+    await checkGrid({
       bars: grid(20, 4),
       mesh: 5,
       layers,
@@ -152,8 +152,8 @@ describe('a rod of 3 m, radius 7 mm, from the surface: to 0.5 %', () => {
     [1000, 154.75, 102.45, 62.238, 46.321, 42.513, 39.565, 36.65],
   ];
   const cases = rows.flatMap(([lower, ...ohm]) => ohm.map((r, k) => [lower, thicknesses[k]!, r] as const));
-  it.each(cases)('100 Ω·m over %f Ω·m at %f m: %f Ω', (lower, h, resistance) => {
-    const { electrode } = resultsOf([rodBar(0, 0, 0, 3, 0.007)], [[100, h], [lower]]);
+  it.each(cases)('100 Ω·m over %f Ω·m at %f m: %f Ω', async (lower, h, resistance) => {
+    const { electrode } = await resultsOf([rodBar(0, 0, 0, 3, 0.007)], [[100, h], [lower]]);
     expectWithin(electrode.resistance_ohm, resistance, 5e-3, 'rod');
     expectCovered(
       electrode.resistance_ohm,
@@ -176,12 +176,12 @@ describe('three to six layers: grids to 0.3 % and 1 %, rods and frozen ground to
   ]; // biome-ignore format: one row a soil
   const named = soils.map((row) => [row[0].map(([resistivity]) => resistivity).join('/'), row] as const);
 
-  it.each(named)('rods in %s Ω·m', (_, [layers, a, b]) => {
+  it.each(named)('rods in %s Ω·m', async (_, [layers, a, b]) => {
     for (const [bottom, radius, resistance] of [
       [3, 0.007, a],
       [10, 0.008, b],
     ] as const) {
-      const { electrode } = resultsOf([rodBar(0, 0, 0, bottom, radius)], layers); // biome-ignore format: two rods
+      const { electrode } = await resultsOf([rodBar(0, 0, 0, bottom, radius)], layers); // biome-ignore format: two rods
       expectWithin(electrode.resistance_ohm, resistance, 5e-3, 'rod');
       expectCovered(
         electrode.resistance_ohm,
@@ -195,10 +195,10 @@ describe('three to six layers: grids to 0.3 % and 1 %, rods and frozen ground to
 
   it.each(named)(
     '20 m grid, the same with rods, 60 m grid in %s Ω·m',
-    (_, [layers, , , plain, rodded, large]) => {
+    async (_, [layers, , , plain, rodded, large]) => {
       const electrodes = [grid(20, 4), [...grid(20, 4), ...corners(20, 10)], grid(60, 6)];
-      [plain!, rodded!, large!].forEach(([resistance, touch, step], k) => {
-        checkGrid({
+      for (const [k, [resistance, touch, step]] of [plain!, rodded!, large!].entries()) {
+        await checkGrid({
           bars: electrodes[k]!,
           mesh: k === 2 ? 10 : 5,
           layers,
@@ -208,14 +208,14 @@ describe('three to six layers: grids to 0.3 % and 1 %, rods and frozen ground to
           resistanceShare: 3e-3,
           touchShare: 1e-2,
         });
-      });
+      }
     },
   );
 
-  it('20 m grid with 3 m rods in ground frozen in six layers', () => {
+  it('20 m grid with 3 m rods in ground frozen in six layers', async () => {
     const layers: Layers = [[2000, 0.2], [1500, 0.2], [1000, 0.2], [500, 0.2], [250, 0.2], [100]]; // biome-ignore format: six layers
     const bars = [...grid(20, 4), ...corners(20, 3.5)];
-    checkGrid({
+    await checkGrid({
       bars,
       mesh: 5,
       layers,

@@ -4,9 +4,9 @@ import { type Bar, gridBars, rodBar } from '../../../core/test/support/electrode
 import { solveStudy } from '../../src/index.ts';
 import { type Layers, studyOf } from '../support/studies.ts';
 
-function solved(bars: readonly Bar[], layers: Layers, current = 1) {
+async function solved(bars: readonly Bar[], layers: Layers, current = 1) {
   const cases = [{ name: 'fault', grid_current_A: current, duration_s: 0.5 }];
-  const { results } = solveStudy(studyOf(bars, layers, { cases }));
+  const { results } = await solveStudy(studyOf(bars, layers, { cases }));
   return { electrode: results.electrode, touch: results.cases[0]!.touch, step: results.cases[0]!.step };
 }
 
@@ -30,27 +30,27 @@ describe('IEEE Std 80-2000, annex B: 400 Ω·m, 1 908 A, conductors 10 mm at 0.5
   // references: independent computation (thin-wire Galerkin, two separate solvers); rods of 16 mm on every second
   // perimeter node, whose places the standard does not state
 
-  it('B.1, square of 70 m without rods: R 2.648 to 2.6518 Ω within 1 %, worst touch 966 to 975 V within 3 %', () => {
-    const { electrode, touch } = solved(gridBars(70, 70, 10, 10, 0.5, 0.005), [[400]], 1908);
+  it('B.1, square of 70 m without rods: R 2.648 to 2.6518 Ω within 1 %, worst touch 966 to 975 V within 3 %', async () => {
+    const { electrode, touch } = await solved(gridBars(70, 70, 10, 10, 0.5, 0.005), [[400]], 1908);
     expectWithin(electrode.resistance_ohm, 2.65, 1e-2);
     expectWithin(touch.worst_V, 970, 3e-2);
     expectCovered(electrode.resistance_ohm, electrode.resistance_uncertainty_ohm, 2.6476, 2.6518, 5e-4);
     expectCovered(touch.worst_V, touch.uncertainty_V, 966, 975, 5e-3);
   });
 
-  it('B.2, the same with 20 rods of 7.5 m: R 2.491 to 2.500 Ω within 1 %, worst touch 716 to 733 V within 3 %', () => {
+  it('B.2, the same with 20 rods of 7.5 m: R 2.491 to 2.500 Ω within 1 %, worst touch 716 to 733 V within 3 %', async () => {
     const bars = gridBars(70, 70, 10, 10, 0.5, 0.005);
     for (let k = 0; k < 70; k += 14)
       for (const [x, y] of [[k, 0], [70, k], [70 - k, 70], [0, 70 - k]] as const) bars.push(rodBar(x, y, 0.5, 8, 0.008)); // biome-ignore format: four sides
     expect(bars.length).toBe(22 + 20);
-    const { electrode, touch } = solved(bars, [[400]], 1908);
+    const { electrode, touch } = await solved(bars, [[400]], 1908);
     expectWithin(electrode.resistance_ohm, 2.495, 1e-2);
     expectWithin(touch.worst_V, 725, 3e-2);
     expectCovered(electrode.resistance_ohm, electrode.resistance_uncertainty_ohm, 2.491, 2.5, 5e-4);
     expectCovered(touch.worst_V, touch.uncertainty_V, 716, 733, 5e-3);
   });
 
-  it('B.4, L of 70 by 105 m with 24 rods of 7.5 m: R 2.318 to 2.327 Ω within 1 %, worst touch 736 V within 3 %', () => {
+  it('B.4, L of 70 by 105 m with 24 rods of 7.5 m: R 2.318 to 2.327 Ω within 1 %, worst touch 736 V within 3 %', async () => {
     // the other reference, 743.7 V, was solved on segments of a whole mesh side; so does our own coarsest mesh read
     const bars: Bar[] = [];
     for (let i = 0; i <= 10; i++) bars.push(line(7 * i, 0, 7 * i, i <= 5 ? 105 : 35, 0.5, 0.005));
@@ -68,7 +68,7 @@ describe('IEEE Std 80-2000, annex B: 400 Ω·m, 1 908 A, conductors 10 mm at 0.5
     expect(nodes.length).toBe(50);
     const rodded = nodes.filter((_, n) => n % 2 === 0).slice(0, 24);
     bars.push(...rodded.map(([x, y]) => rodBar(x, y, 0.5, 8, 0.008)));
-    const { electrode, touch } = solved(bars, [[400]], 1908);
+    const { electrode, touch } = await solved(bars, [[400]], 1908);
     expectWithin(electrode.resistance_ohm, 2.322, 1e-2);
     expectWithin(touch.worst_V, 736, 3e-2);
     expectCovered(electrode.resistance_ohm, electrode.resistance_uncertainty_ohm, 2.318, 2.327, 5e-4);
@@ -87,9 +87,9 @@ describe('Balaidos grid: resistance within 1 %', () => {
     ['A, uniform 50 Ω·m', [[50]], 0.3366, 0.3354],
     ['B, 400 over 50 Ω·m at 0.7 m', [[400, 0.7], [50]], 0.3522, 0.3502],
     ['C, the same at 1.0 m', [[400, 1], [50]], 0.486, 0.4869],
-  ] as const)('%s', (_, layers, published, rebuilt) => {
+  ] as const)('%s', async (_, layers, published, rebuilt) => {
     // biome-ignore format: three models
-    const { electrode } = solved(bars, layers);
+    const { electrode } = await solved(bars, layers);
     expectWithin(electrode.resistance_ohm, published, 1e-2);
     // the rebuilt values come from segments of up to 2.5 m, 0.5 % above their limit in model C as on our own such mesh
     expectCovered(electrode.resistance_ohm, electrode.resistance_uncertainty_ohm, rebuilt, rebuilt, 5e-3);
@@ -105,9 +105,11 @@ describe('floating metal beside a grid of 60 m and 36 meshes at 0.5 m, 100 Ω·m
   it.each([
     ['a pipe along one side', pipe(-20, 70, 80, 70, 1.5, 0.15), 0.8045, 0.4621],
     ['a pipe leading away', pipe(30, 70, 30, 270, 1.5, 0.15), 0.7952, 0.1911],
-  ])('%s', (_, body, resistance, level) => {
+  ])('%s', async (_, body, resistance, level) => {
     const electrodes = [...grid.map(() => undefined), 'pipe'];
-    const { results } = solveStudy(studyOf([...grid, body], [[100]], { electrodes, floating: ['pipe'] }));
+    const { results } = await solveStudy(
+      studyOf([...grid, body], [[100]], { electrodes, floating: ['pipe'] }),
+    );
     expectWithin(results.electrode.resistance_ohm, resistance, 3e-3);
     const floating = results.electrodes.find((e) => e.name === 'pipe')!;
     expect(floating.role).toBe('floating');
@@ -115,7 +117,7 @@ describe('floating metal beside a grid of 60 m and 36 meshes at 0.5 m, 100 Ω·m
     expect(Math.abs(floating.leakage_ratio)).toBeLessThan(1e-9);
   });
 
-  it('fence posts of 30 mm radius and 1 m, every 3 m, joined by nothing but their rail above ground', () => {
+  it('fence posts of 30 mm radius and 1 m, every 3 m, joined by nothing but their rail above ground', async () => {
     const posts = Array.from({ length: 21 }, (_, k) => rodBar(3 * k, 62, 0, 1, 0.03));
     const rail: Bar = line(0, 62, 60, 62, 0.5, 0.03);
     const bars = [...grid, ...posts, rail];
@@ -123,7 +125,7 @@ describe('floating metal beside a grid of 60 m and 36 meshes at 0.5 m, 100 Ω·m
     const loaded = studyOf(bars, [[100]], { electrodes, floating: ['fence'] });
     const insulated = Uint8Array.from(bars, (_, i) => (i === bars.length - 1 ? 1 : 0));
     // the insulated rail touches posts at its two ends only: as many pieces as a fence without one, less those joined
-    const { results } = solveStudy({ ...loaded, conductors: { ...loaded.conductors, insulated } });
+    const { results } = await solveStudy({ ...loaded, conductors: { ...loaded.conductors, insulated } });
     const fence = results.electrodes.find((e) => e.name === 'fence')!;
     expect(fence.piece_count).toBe(20);
     expectWithin(results.electrode.resistance_ohm, 0.8077, 3e-3);
@@ -139,8 +141,8 @@ describe('simple electrodes through the whole chain: the stated uncertainty cove
     [1000, 1.15389],
   ])(
     'driven rod, length over radius %i (independent computation: exact hollow tube, whose missing end cap is worth a/2L)',
-    (slenderness, expected) => {
-      const { electrode } = solved([rodBar(0, 0, 0, 3, 3 / slenderness)], [[100]]);
+    async (slenderness, expected) => {
+      const { electrode } = await solved([rodBar(0, 0, 0, 3, 3 / slenderness)], [[100]]);
       const reference = (expected * 100) / 3;
       expectWithin(electrode.resistance_ohm, reference, 5e-3);
       const cap = 1 / (2 * slenderness);
@@ -154,7 +156,7 @@ describe('simple electrodes through the whole chain: the stated uncertainty cove
     },
   );
 
-  it('ring of 10 m (Dwight 1936; independent computation: exact)', () => {
+  it('ring of 10 m (Dwight 1936; independent computation: exact)', async () => {
     const [D, d, s, sides] = [10, 0.01, 1, 96];
     const formula = (100 / (2 * Math.PI ** 2 * D)) * (Math.log((8 * D) / d) + Math.log((4 * D) / s));
     const radius = (Math.PI * D) / (2 * sides * Math.sin(Math.PI / sides));
@@ -167,7 +169,7 @@ describe('simple electrodes through the whole chain: the stated uncertainty cove
       { length: sides },
       (_, k): Bar => ({ from: corner(k), to: corner(k + 1), radius: d / 2 }),
     );
-    const { electrode } = solved(ring, [[100]]);
+    const { electrode } = await solved(ring, [[100]]);
     expectWithin(electrode.resistance_ohm, formula, 5e-3);
     expectCovered(electrode.resistance_ohm, electrode.resistance_uncertainty_ohm, formula, formula, 5e-4);
   });

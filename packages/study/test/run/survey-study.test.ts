@@ -26,17 +26,17 @@ function surveyed(survey: LoadedSurvey, layer_count: number | 'auto'): LoadedStu
   return { ...loaded, study: { ...loaded.study, soil: { survey: survey.file, layer_count } }, survey };
 }
 
-describe('a study whose soil is a survey', () => {
-  const { results } = solveStudy(surveyed(textbook, 'auto'));
+describe('a study whose soil is a survey', async () => {
+  const { results } = await solveStudy(surveyed(textbook, 'auto'));
 
-  it('is solved in the soil that the readings fit', () => {
+  it('is solved in the soil that the readings fit', async () => {
     const [upper, lower] = results.soil.layers;
     expect(Math.abs(upper!.resistivity_ohm_m / 699.85 - 1)).toBeLessThan(1e-2);
     expect(Math.abs(lower!.resistivity_ohm_m / 180.24 - 1)).toBeLessThan(1e-2);
     expect(Math.abs(upper!.thickness_m! / 2.499 - 1)).toBeLessThan(1e-2);
     const layers = [[upper!.resistivity_ohm_m, upper!.thickness_m!], [lower!.resistivity_ohm_m]] as const; // biome-ignore format: two layers
     expect(results.electrode.resistance_ohm).toBe(
-      solveStudy(studyOf(grid, layers)).results.electrode.resistance_ohm,
+      (await solveStudy(studyOf(grid, layers))).results.electrode.resistance_ohm,
     );
   });
 
@@ -55,17 +55,18 @@ describe('a study whose soil is a survey', () => {
     expect(only!.touch_V.best).toBe(results.cases[0]!.touch.worst_V);
   });
 
-  it('is in doubt when the spacings stop short of the electrode, and not when they do not', () => {
-    const short = solveStudy(surveyed(surveyOf([1, 2, 4, 6, 8], [684, 611, 415, 294, 237]), 2)).results;
+  it('is in doubt when the spacings stop short of the electrode, and not when they do not', async () => {
+    const short = (await solveStudy(surveyed(surveyOf([1, 2, 4, 6, 8], [684, 611, 415, 294, 237]), 2)))
+      .results;
     expect(short.warnings.map((w) => w.code)).toContain('spacings-short');
     expect(results.warnings.map((w) => w.code)).not.toContain('spacings-short');
   });
 
-  it('shows the uniform soil that a hand calculation would use, and how far off each is', () => {
+  it('shows the uniform soil that a hand calculation would use, and how far off each is', async () => {
     const names = results.equivalent_uniform.map((e) => e.name);
     expect(names).toContain('upper layer alone');
     const upper = results.equivalent_uniform.find((e) => e.name === 'upper layer alone')!;
-    const alone = solveStudy(studyOf(grid, [[upper.resistivity_ohm_m]])).results.electrode;
+    const alone = (await solveStudy(studyOf(grid, [[upper.resistivity_ohm_m]]))).results.electrode;
     expect(Math.abs(upper.resistance_ohm / alone.resistance_ohm - 1)).toBeLessThan(3e-3);
     expect(upper.deviation_percent).toBeCloseTo(
       100 * (upper.resistance_ohm / results.electrode.resistance_ohm - 1),
