@@ -7,6 +7,8 @@ export default defineConfig({
     target: 'node20',
     outDir: 'dist',
     emptyOutDir: false,
+    // names stay, so that the lines of a fault can be read; a third less text is parsed at every start
+    minify: 'oxc',
     rollupOptions: {
       input: {
         ohmstead: 'src/ohmstead.ts',
@@ -14,7 +16,11 @@ export default defineConfig({
         agreement: 'src/agreement.ts',
         schema: 'src/schema.ts',
       },
-      output: { entryFileNames: '[name].js', chunkFileNames: 'chunks/[name].js' },
+      output: {
+        minify: { compress: true, mangle: false, codegen: { removeWhitespace: true } },
+        entryFileNames: '[name].js',
+        chunkFileNames: 'chunks/[name].js',
+      },
     },
   },
   ssr: { noExternal: true },

@@ -1,5 +1,5 @@
 // The computing that commands call, in one place, so that tests can put a quick one in its stead.
-import { type Renderer, sheetRenderer } from '@ohmstead/pack';
+import type { Renderer } from '@ohmstead/pack';
 import {
   type FieldPoint,
   type FieldValue,
@@ -34,7 +34,8 @@ export interface Engine {
     caseName: string,
     onProgress: (stage: string, share: number) => void,
   ) => Promise<readonly FieldValue[]>;
-  readonly renderer: Renderer;
+  /** what packs are drawn with; the sheet's own where left out */
+  readonly renderer?: Renderer;
   readonly version: string;
 }
 
@@ -45,6 +46,5 @@ export const engine: Engine = {
   fitSurvey,
   solveStudy,
   fieldAt,
-  renderer: sheetRenderer,
   version: programVersion,
 };

@@ -28,6 +28,8 @@ const io: Io = {
   now: () => performance.now(),
 };
 
-const status = await main(process.argv.slice(2), io, engine);
-// Set, not exit(): what is still on its way to a pipe is written out first. A failed stream has set it already.
-process.exitCode ??= status;
+// Not awaited at the top: chunks that are read when wanted import from this file, which must be done by then.
+void main(process.argv.slice(2), io, engine).then((status) => {
+  // Set, not exit(): what is still on its way to a pipe is written out first. A failed stream has set it already.
+  process.exitCode ??= status;
+});

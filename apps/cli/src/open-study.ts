@@ -1,7 +1,7 @@
 // STUDY on the command line → its files: a folder, a zip, or the path of a study.json.
 import { closeSync, openSync, readFileSync, readSync, type Stats, statSync } from 'node:fs';
 import { basename, dirname } from 'node:path';
-import { MAX_TOTAL_BYTES, sourceFromZip } from '@ohmstead/pack';
+import { MAX_TOTAL_BYTES } from '@ohmstead/pack';
 import { InputFaults, type StudySource } from '@ohmstead/study';
 import { folderSource } from './folder-source.ts';
 import { whatAStudyIs } from './minimal-study.ts';
@@ -25,7 +25,10 @@ export async function openStudy(path: string): Promise<StudySource> {
   const state = stateOf(path);
   if (state.isDirectory()) return withStudyJson(path);
   if (!state.isFile()) throw refused(path, 'neither a folder nor a file; expected a study');
-  if (beginsAsZip(path) || /\.zip$/i.test(path)) return sourceFromZip(readZipFile(path), path);
+  if (beginsAsZip(path) || /\.zip$/i.test(path)) {
+    const { sourceFromZip } = await import('@ohmstead/pack');
+    return sourceFromZip(readZipFile(path), path);
+  }
   if (basename(path) === 'study.json') return folderSource(dirname(path));
   if (/\.json$/i.test(path))
     throw refused(path, 'expected a file named study.json, the folder it is in, or a zip');

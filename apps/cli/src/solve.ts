@@ -1,6 +1,6 @@
 // `ohmstead solve`: every case of a study, as a table or as JSON, and a review pack where one is asked for.
 import { realpathSync } from 'node:fs';
-import { jsonText, writePack } from '@ohmstead/pack';
+import { jsonText } from '@ohmstead/pack';
 import { verdictRows } from '@ohmstead/sheet';
 import { type Fault, InputFaults } from '@ohmstead/study';
 import type { Arguments, Command } from './command.ts';
@@ -47,6 +47,8 @@ async function runSolve(given: Arguments, io: Io, engine: Engine): Promise<ExitS
     const outcome = await engine.solveStudy(loaded, { onProgress: report });
     if (pack !== undefined) {
       report('drawing the sheet', 0);
+      // read only when wanted: what draws and packs is half the program
+      const { writePack } = await import('@ohmstead/pack');
       writeWhole(pack, await writePack(loaded, outcome, engine.version, engine.renderer));
     }
     return outcome;

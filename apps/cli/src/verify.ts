@@ -1,5 +1,5 @@
 // `ohmstead verify`: a review pack's digests checked, its study solved again, and every difference listed.
-import { differenceLine, type Verification, verifyPack } from '@ohmstead/pack';
+import { differenceLine, type Verification } from '@ohmstead/pack';
 import type { Arguments, Command } from './command.ts';
 import type { Engine } from './engine.ts';
 import { DONE, type ExitStatus, FINDING } from './exit-status.ts';
@@ -26,11 +26,12 @@ export const verify: Command = {
 
 async function runVerify(given: Arguments, io: Io, engine: Engine): Promise<ExitStatus> {
   const bytes = readZipFile(given.operand);
+  const { verifyPack } = await import('@ohmstead/pack');
   const { differences, checked } = await withProgress(io, (report) =>
     verifyPack(bytes, (loaded) => engine.solveStudy(loaded, { onProgress: report }), {
       file: given.operand,
       load: engine.loadStudy,
-      renderer: engine.renderer,
+      ...(engine.renderer === undefined ? {} : { renderer: engine.renderer }),
     }),
   );
   const lines = differences.map((difference) => `difference: ${printable(differenceLine(difference))}`);

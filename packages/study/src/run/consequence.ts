@@ -5,7 +5,7 @@ import {
   type FamilyMember,
   interfaceDepths,
   latticeSummits,
-  leakageMatrix,
+  leakageOperator,
   regionMask,
   type SoilModel,
   segmentMesh,
@@ -109,7 +109,7 @@ async function respond(
   const model = prepared.loaded.study.metal_model ?? 'resistive';
   const graph = await solveGraph(
     mesh,
-    leakageMatrix(mesh, images),
+    leakageOperator(mesh, images),
     nodes,
     prepared.resistancePerMetre,
     model,

@@ -1,7 +1,7 @@
 // The uniform soil that a hand calculation would use, and how far off it is.
 import {
   equivalentUniformResistivities,
-  leakageMatrix,
+  leakageOperator,
   segmentMesh,
   soilImages,
   solveGraph,
@@ -10,15 +10,12 @@ import type { EquivalentUniform } from '../ground.ts';
 import type { Solved } from './levels.ts';
 import type { Prepared } from './prepare.ts';
 
-/** Mesh level of the uniform soil: its error is a hundredth of what hand values are off by. */
-const LEVEL = 1;
-
 /** Empty in uniform soil, and in soils of more layers than the hand rules are made for. */
 export async function equivalentUniform(prepared: Prepared, solved: Solved): Promise<EquivalentUniform[]> {
   const values = equivalentUniformResistivities(prepared.soil);
   if (values.length === 0) return [];
   const { resistance, injectionNode } = solved.units[solved.unitOfCase[0]!]!;
-  const perOhmMetre = await resistanceInUniformSoil(prepared, injectionNode);
+  const perOhmMetre = await resistanceInUniformSoil(prepared, solved, injectionNode);
   return values.map(({ name, source, resistivity }) => ({
     name,
     source,
@@ -28,11 +25,17 @@ export async function equivalentUniform(prepared: Prepared, solved: Solved): Pro
   }));
 }
 
-/** Resistance in uniform soil of 1 Ω·m, perfect metal, Ω: it grows in proportion to the resistivity. */
-async function resistanceInUniformSoil(prepared: Prepared, node: number): Promise<number> {
-  const mesh = segmentMesh(prepared.loaded.conductors, prepared.joints, [], LEVEL);
+/**
+ * Resistance in uniform soil of 1 Ω·m, perfect metal, Ω: it grows in proportion to the resistivity. Solved on the
+ * coarsest mesh, and carried to the finest by what refinement did to the soil as given: what is left of the mesh's
+ * error is a hundredth of what hand values are off by.
+ */
+async function resistanceInUniformSoil(prepared: Prepared, solved: Solved, node: number): Promise<number> {
+  const mesh = segmentMesh(prepared.loaded.conductors, prepared.joints, [], 0);
   const images = soilImages({ layers: [{ resistivity: 1, thickness: Number.POSITIVE_INFINITY }] });
-  const matrix = leakageMatrix(mesh, images);
+  const matrix = leakageOperator(mesh, images);
   const { units } = await solveGraph(mesh, matrix, [node], prepared.resistancePerMetre, 'equipotential');
-  return units[0]!.resistance;
+  const at = solved.unitOfCase[0]!;
+  const coarse = solved.series[0]!.graph.units[at]!.resistance;
+  return (units[0]!.resistance * solved.units[at]!.resistance) / coarse;
 }
