@@ -34,7 +34,7 @@ export async function fieldAt(
   const at = caseName === undefined ? 0 : loaded.study.cases.findIndex((c) => c.name === caseName);
   if (at < 0) throw new InputFaults([unknownCase(loaded, caseName ?? '')]);
   const prepared = prepare(loaded, groundOf(loaded).soil);
-  const solved = await solveLevels(prepared, onProgress);
+  const solved = await solveLevels(prepared, { progress: onProgress });
   const unit = solved.units[solved.unitOfCase[at]!]!;
   const current = caseResult(
     loaded.study.cases[at]!,

@@ -1,5 +1,6 @@
 // Solves the graph on ever finer meshes until refinement moves the headline numbers little enough.
 import {
+  type Box,
   type GraphSolution,
   interfaceDepths,
   leakageOperator,
@@ -85,17 +86,19 @@ const SCOUT_TOLERANCE = 1e-2;
 /** The map must also show the worst touch and step voltage found by the scout, to this share of them. */
 const MAP_SHARE = 0.02;
 
-export async function solveLevels(prepared: Prepared, progress: Progress): Promise<Solved> {
+export interface LevelsOptions {
+  readonly progress: Progress;
+  /** given what the first two meshes tell, with its uncertainty, before the finer ones are solved */
+  readonly onFirst?: ((first: Solved) => void | Promise<void>) | undefined;
+}
+
+export async function solveLevels(prepared: Prepared, options: LevelsOptions): Promise<Solved> {
+  const { progress, onFirst } = options;
   const images = soilImages(prepared.soil);
   const interfaces = interfaceDepths(prepared.soil);
   const distinct = [...new Set(prepared.injectionNodes)];
   const box = assessedBox(prepared);
-  const longest = Math.max(box.east - box.west, box.north - box.south);
-  const spacing = Math.max(
-    FINEST_SPACING_M,
-    Math.min(SPACING_M, longest / WANTED_POINTS),
-    longest / MOST_POINTS,
-  );
+  const spacing = latticeSpacing(box);
   const meshAt = (level: number): SegmentMesh =>
     segmentMesh(prepared.loaded.conductors, prepared.joints, interfaces, level);
   refuseBeyondMemory(meshAt(1).count);
@@ -112,38 +115,50 @@ export async function solveLevels(prepared: Prepared, progress: Progress): Promi
     );
     return levelOf(images, graph, box);
   };
-  const series = [await at(0), await at(1)];
-  const scouted = look(prepared, series[1]!, box, spacing * SCOUT, SCOUT_TOLERANCE, 1)[0]!;
-  while (series.length <= LAST_LEVEL && 2 * series.at(-1)!.graph.mesh.count <= SEGMENT_CEILING) {
-    if (series.length >= WANTED_LEVELS && wellResolved(series, scouted)) break;
-    series.push(await at(series.length));
-  }
-  const fine = series.at(-1)!;
-  await progress('mapping the surface', (LAST_LEVEL + 1) / (LAST_LEVEL + 2));
-  const tolerance = mapTolerance(scouted, fine.graph.units[0]!.resistance);
-  const units = look(prepared, fine, box, spacing, tolerance, distinct.length).map((found, u): UnitField => {
-    const { resistance, injectionNode } = fine.graph.units[u]!;
-    return {
-      ...fine.fields[u]!,
-      ...found,
-      injectionNode,
-      resistance,
-      resistanceUncertainty: refinementUncertainty(resistances(series, u), resistance),
-      zones: found.zones.map(({ footing, touch, step }) => ({
-        footing,
-        touch: touch && { ...touch, uncertainty: touchUncertainty(series, u, touch) },
-        step: step && { ...step, uncertainty: stepUncertainty(series, u, step) },
-      })),
-    };
-  });
-  return {
+  const solvedBy = (series: readonly Level[], found: readonly Found[]): Solved => ({
     images,
-    mesh: fine.graph.mesh,
-    graph: fine.graph,
-    units,
+    mesh: series.at(-1)!.graph.mesh,
+    graph: series.at(-1)!.graph,
+    units: found.map((one, u) => unitField(series, u, one)),
     unitOfCase: prepared.injectionNodes.map((node) => distinct.indexOf(node)),
     series,
-    levels: series.map((level) => summary(level, scouted)),
+    levels: series.map((level) => summary(level, found[0]!)),
+  });
+  const series = [await at(0), await at(1)];
+  const scouts = onFirst === undefined ? 1 : distinct.length;
+  const scouted = look(prepared, series[1]!, box, spacing * SCOUT, SCOUT_TOLERANCE, scouts);
+  await onFirst?.(solvedBy(series, scouted));
+  while (series.length <= LAST_LEVEL && 2 * series.at(-1)!.graph.mesh.count <= SEGMENT_CEILING) {
+    if (series.length >= WANTED_LEVELS && wellResolved(series, scouted[0]!)) break;
+    series.push(await at(series.length));
+  }
+  await progress('mapping the surface', (LAST_LEVEL + 1) / (LAST_LEVEL + 2));
+  const fine = series.at(-1)!;
+  const tolerance = mapTolerance(scouted[0]!, fine.graph.units[0]!.resistance);
+  return solvedBy(series, look(prepared, fine, box, spacing, tolerance, distinct.length));
+}
+
+/** Half a metre; finer for small plans, coarser for large ones. */
+function latticeSpacing(box: Box): number {
+  const longest = Math.max(box.east - box.west, box.north - box.south);
+  return Math.max(FINEST_SPACING_M, Math.min(SPACING_M, longest / WANTED_POINTS), longest / MOST_POINTS);
+}
+
+/** What was found for one place of injection on the finest of several meshes, with what the series leaves uncertain. */
+function unitField(series: readonly Level[], u: number, found: Found): UnitField {
+  const fine = series.at(-1)!;
+  const { resistance, injectionNode } = fine.graph.units[u]!;
+  return {
+    ...fine.fields[u]!,
+    ...found,
+    injectionNode,
+    resistance,
+    resistanceUncertainty: refinementUncertainty(resistances(series, u), resistance),
+    zones: found.zones.map(({ footing, touch, step }) => ({
+      footing,
+      touch: touch && { ...touch, uncertainty: touchUncertainty(series, u, touch) },
+      step: step && { ...step, uncertainty: stepUncertainty(series, u, step) },
+    })),
   };
 }
 

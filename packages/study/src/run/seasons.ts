@@ -34,8 +34,9 @@ export async function seasonResults(prepared: Prepared, progress: Progress): Pro
 async function seasonResult(prepared: Prepared, season: SeasonInput, progress: Progress): Promise<Seasonal> {
   const { study } = prepared.loaded;
   const soil = soilIn(season, prepared.soil);
-  const solved = await solveLevels({ ...prepared, soil }, (stage, share) =>
-    progress(`${season.name}: ${stage}`, share),
+  const solved = await solveLevels(
+    { ...prepared, soil },
+    { progress: (stage, share) => progress(`${season.name}: ${stage}`, share) },
   );
   const limits = limitsOf(study, soil.layers[0]!.resistivity);
   const first = solved.units[solved.unitOfCase[0]!]!;
