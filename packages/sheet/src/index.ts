@@ -1,4 +1,18 @@
 // Results → figures (SVG), tables (CSV) and the sheet (HTML); the same code in Node and in the browser.
+export {
+  type Desk,
+  DeskContext,
+  type DisplayUnits,
+  type JsonObject,
+  type JsonValue,
+  type PastedTable,
+  type QuantityKind,
+  type Reading,
+  type SectionId,
+  type SectionState,
+  type StudyPath,
+} from './desk/desk.ts';
+export { pathText, sectionOfInput } from './desk/study-path.ts';
 export { type FigureFile, figures } from './figure/figures.tsx';
 export { measured, percent, place, quantity } from './format/number.ts';
 export { sheetCss } from './page/css.ts';
