@@ -7,7 +7,11 @@ export default defineConfig({
       {
         test: {
           name: 'unit',
-          include: ['packages/*/test/**/*.test.{ts,tsx}', 'apps/cli/test/**/*.test.ts'],
+          include: [
+            'packages/*/test/**/*.test.{ts,tsx}',
+            'apps/cli/test/**/*.test.ts',
+            'apps/report/test/unit/**/*.test.{ts,tsx}',
+          ],
           environment: 'node',
           testTimeout: 60_000,
         },
@@ -16,6 +20,7 @@ export default defineConfig({
         test: {
           name: 'browser',
           include: ['apps/report/test/**/*.test.ts', 'apps/cli/test-e2e/**/*.test.ts'],
+          exclude: ['**/node_modules/**', 'apps/report/test/unit/**'],
           environment: 'node',
           testTimeout: 120_000,
           hookTimeout: 60_000,

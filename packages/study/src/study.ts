@@ -38,10 +38,47 @@ export interface SeasonInput {
   readonly below?: { readonly depth_m: number; readonly resistivity_ohm_m: number } | undefined;
 }
 
+/** Whose work the study is; printed at the head of the sheet. */
+export interface ProjectInput {
+  readonly client?: string | undefined;
+  readonly site?: string | undefined;
+  readonly number?: string | undefined;
+  readonly prepared_by?: string | undefined;
+  readonly checked_by?: string | undefined;
+}
+
+/** One issue of the sheet. */
+export interface RevisionInput {
+  readonly mark: string;
+  /** as its author writes dates; never reckoned with */
+  readonly date?: string | undefined;
+  readonly text?: string | undefined;
+  readonly by?: string | undefined;
+}
+
+/** The engineer's own words under each section of the sheet; lines end in a line feed. */
+export interface SectionNotes {
+  readonly ground?: string | undefined;
+  readonly electrode?: string | undefined;
+  readonly fault?: string | undefined;
+  readonly rise?: string | undefined;
+  readonly surface?: string | undefined;
+  readonly people?: string | undefined;
+  readonly season?: string | undefined;
+  readonly trust?: string | undefined;
+  readonly assumed?: string | undefined;
+}
+
+/** Units in which a sheet is shown and typed; files and results stay in the units of their keys. */
+export type DisplayUnits = 'SI' | 'US';
+
 export interface Study {
   readonly format: 'ohmstead-study';
   readonly version: 1;
   readonly title: string;
+  readonly project?: ProjectInput | undefined;
+  /** in the order of issue */
+  readonly revisions?: readonly RevisionInput[] | undefined;
   readonly soil: SoilInput;
   /** variants of the soil, each solved; the worst of all seasons governs */
   readonly seasons?: readonly SeasonInput[] | undefined;
@@ -63,6 +100,9 @@ export interface Study {
   readonly areas?:
     | { readonly touch?: readonly Polygon[] | undefined; readonly step?: readonly Polygon[] | undefined }
     | undefined;
+  readonly notes?: SectionNotes | undefined;
+  /** SI where undefined */
+  readonly display_units?: DisplayUnits | undefined;
 }
 
 /** Where a row of the conductor table was read. */

@@ -43,7 +43,8 @@ function end(stem: string, label: string): ColumnSpec {
   return { stem, kind: 'length', usualUnit: 'm', required: true, label };
 }
 
-const columns: readonly ColumnSpec[] = [
+/** Columns that a table of conductors may have. */
+export const conductorColumns: readonly ColumnSpec[] = [
   { stem: 'id', kind: 'text', required: false, label: 'name of the conductor' },
   end('x1', 'x of the first end'),
   end('y1', 'y of the first end'),
@@ -195,10 +196,10 @@ function readRow(
  * @returns its rows, usable only where no fault was added; `undefined` where there is no table to judge
  */
 export function readConductorsCsv(file: string, text: string, faults: Fault[]): ConductorRows | undefined {
-  const isColumn = (name: string): boolean => isRequiredColumn(columns, name);
+  const isColumn = (name: string): boolean => isRequiredColumn(conductorColumns, name);
   const table = readCsvTable(file, text, { mostRows: limits.MOST_CONDUCTORS, isColumn }, faults);
   if (table === undefined) return undefined;
-  const { byStem, unused } = findColumns(table, columns, faults);
+  const { byStem, unused } = findColumns(table, conductorColumns, faults);
   const rows = table.rows.map((row) => readRow(file, row, byStem, faults));
   const converted = [...byStem.values()].filter(
     ({ spec, unit }) => unit !== undefined && unit.name !== spec.usualUnit,

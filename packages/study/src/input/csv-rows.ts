@@ -1,9 +1,11 @@
-// CSV text to rows of cells, each with the line on which it begins.
+// CSV text to rows of cells, each with the lines on which it stands.
 import Papa from 'papaparse';
 
 export interface CsvRow {
   /** line of the file on which the row begins, the first being 1 */
   readonly line: number;
+  /** line on which it ends: a cell in quotation marks may hold line ends */
+  readonly lastLine: number;
   /** cells without spaces around them */
   readonly cells: readonly string[];
 }
@@ -26,19 +28,20 @@ const quoteMessages: ReadonlyMap<string, string> = new Map([
 ]);
 
 /**
- * Splits CSV text at commas.
+ * Splits CSV text into rows and cells.
  * @param text line ends are `\n`
  * @param most rows to keep
+ * @param separator of the columns, one character
  * @returns rows; blank rows and rows of nothing but commas are passed over
  */
-export function csvRows(text: string, most: number): CsvRows {
+export function csvRows(text: string, most: number, separator: string = ','): CsvRows {
   const rows: CsvRow[] = [];
   let quote: { line: number; message: string } | undefined;
   let truncated = false;
   let line = 1;
   let counted = 0;
   Papa.parse<string[]>(text, {
-    delimiter: ',',
+    delimiter: separator,
     newline: '\n',
     step: ({ data, errors, meta }, parser) => {
       const begins = line;
@@ -56,7 +59,7 @@ export function csvRows(text: string, most: number): CsvRows {
         parser.abort();
         return;
       }
-      rows.push({ line: begins, cells });
+      rows.push({ line: begins, lastLine: text[counted - 1] === '\n' ? line - 1 : line, cells });
     },
   });
   return { rows, truncated, ...(quote === undefined ? {} : { quote }) };

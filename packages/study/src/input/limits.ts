@@ -36,6 +36,19 @@ export const LONGEST_PLACE = 300;
 /** Longest title, characters. Reason: one line of the sheet. */
 export const LONGEST_TITLE = 200;
 
+/** Longest entry of the project data and of a revision, characters. Reason: one line of the sheet. */
+export const LONGEST_ENTRY = 200;
+
+/** Longest revision mark and longest date of one, characters. Reason: narrow columns of a table. */
+export const LONGEST_MARK = 20;
+export const LONGEST_DATE = 40;
+
+/** Longest note under a section, characters. Reason: two printed pages; more is a document of its own. */
+export const LONGEST_NOTE = 8000;
+
+/** Most revisions. Reason: a table that fits on a page. */
+export const MOST_REVISIONS = 100;
+
 /** Largest plan coordinate, m. Reason: national grids stay below 4e7 m; lengths keep 1e-8 m beside it. */
 export const LARGEST_COORDINATE_M = 1e8;
 

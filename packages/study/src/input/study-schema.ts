@@ -2,40 +2,8 @@
 import { z } from 'zod';
 import type { LayerInput, Study } from '../study.ts';
 import * as most from './limits.ts';
-import { figure } from './shown-value.ts';
-
-// No code made at run time, so that a page with a strict content policy can read studies.
-z.config({ jitless: true });
-
-/** Text that can stand in a label: not blank, nothing invisible; a subset of what `invisibleCharacter` refuses. */
-const VISIBLE = /^(?=.*\S)[^\p{Cc}\p{Cs}\u2028\u2029\u200e\u200f\u202a-\u202e\u2066-\u2069]+$/u;
-
-/** `title` is the trade name that faults begin with, `description` ends the phrase "expected …". */
-function told<T extends z.ZodType>(schema: T, title: string, description: string): T {
-  return schema.meta({ title, description });
-}
-
-/** One of these sets of keys, for editors: when a study is loaded, the rules between keys tell more. */
-function oneOf<T extends z.ZodType>(schema: T, ...keys: readonly (readonly string[])[]): T {
-  return schema.meta({ ...schema.meta(), oneOf: keys.map((required) => ({ required })) });
-}
-
-function label(title: string, longest: number): z.ZodString {
-  const schema = z.string().min(1).max(longest).regex(VISIBLE);
-  return told(schema, title, `visible text of at most ${longest} characters`);
-}
-
-function above(title: string, unit: string, largest: number): z.ZodNumber {
-  return told(z.number().gt(0).max(largest), title, `a number above 0 and at most ${figure(largest)}${unit}`);
-}
-
-function between(title: string, unit: string, least: number, largest: number, why = ''): z.ZodNumber {
-  return told(
-    z.number().min(least).max(largest),
-    title,
-    `a number from ${figure(least)} to ${figure(largest)}${unit}${why}`,
-  );
-}
+import { above, between, label, oneOf, told } from './schema-parts.ts';
+import { notes, project, revisions } from './words-schema.ts';
 
 function coordinate(title: string): z.ZodNumber {
   return between(title, ' m', -most.LARGEST_COORDINATE_M, most.LARGEST_COORDINATE_M);
@@ -209,6 +177,8 @@ export const studySchema: z.ZodType<StudyAsWritten> = told(
     format: told(z.literal('ohmstead-study'), 'format', '"ohmstead-study"'),
     version: told(z.literal(1), 'version of the format', 'the number 1'),
     title: label('title', most.LONGEST_TITLE),
+    project: project.optional(),
+    revisions: revisions.optional(),
     soil,
     seasons: told(
       z.array(season).max(most.MOST_SEASONS),
@@ -234,6 +204,8 @@ export const studySchema: z.ZodType<StudyAsWritten> = told(
     ),
     limits,
     areas: areas.optional(),
+    notes: notes.optional(),
+    display_units: told(z.enum(['SI', 'US']), 'units shown', '"SI" or "US"').optional(),
   }),
   'study',
   'an object with format, version, title, soil, conductors, cases and limits',

@@ -223,7 +223,7 @@ const broken: Readonly<Record<string, readonly string[]>> = {
     'study.json:27: limits.body_mass_kg: body mass 60 is not accepted; expected the number 50 or 70, kg',
     'study.json:29: titel: there is no such key here; title is probably meant',
     'study.json:30: metal_model: model of the metal "inductive" is not yet offered; expected "resistive" or "equipotential"',
-    'study.json:31: colour: there is no such key here; known are format, version, title, soil, seasons, surfacing, metal_model, conductors, electrodes, cases, limits and areas',
+    'study.json:31: colour: there is no such key here; known are format, version, title, project, revisions, soil, seasons, surfacing, metal_model, conductors, electrodes, cases, limits, areas, notes and display_units',
     'study.json:34: surfacing.thickness_m: covering thickness 100 is not accepted; expected a number above 0 and at most 1 m',
   ],
 };

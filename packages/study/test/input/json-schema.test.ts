@@ -29,6 +29,8 @@ describe('published schema', () => {
       'format',
       'version',
       'title',
+      'project',
+      'revisions',
       'soil',
       'seasons',
       'surfacing',
@@ -38,6 +40,8 @@ describe('published schema', () => {
       'cases',
       'limits',
       'areas',
+      'notes',
+      'display_units',
     ]);
     expect(member(schema, 'required')).toEqual([
       'format',
