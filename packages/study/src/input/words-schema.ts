@@ -5,7 +5,8 @@ import * as most from './limits.ts';
 import { label, told } from './schema-parts.ts';
 
 /** Text of several lines: as `VISIBLE`, with line feeds and tabs. */
-const VISIBLE_LINES = /^(?=[\s\S]*\S)(?:[\n\t]|[^\p{Cc}\u2029\u200e\u200f\u202a-\u202e\u2066-\u2069])+$/u;
+const VISIBLE_LINES =
+  /^(?=[\s\S]*\S)(?:[\n\t]|[^\p{Cc}\p{Cs}\u2028\u2029\u200e\u200f\u202a-\u202e\u2066-\u2069])+$/u;
 
 export const project: z.ZodType<ProjectInput> = told(
   z.strictObject({
