@@ -4,21 +4,37 @@ import { faultLine } from '@ohmstead/study';
 import type { VNode } from 'preact';
 import { useEffect, useMemo, useState } from 'preact/hooks';
 import { demoFiles } from './demo.ts';
-import type { WorkerAnswer } from './messages.ts';
-import { createSolver } from './solver.ts';
+import { blobWorker } from './engine/blob-worker.ts';
+import { createEngine, type Engine } from './engine/client.ts';
+import type { RunAnswer } from './engine/messages.ts';
 import { studyFiles } from './study-files.ts';
 
 /** Lets a file field take a whole folder; every browser knows it, no standard types do. */
 const WHOLE_FOLDER: Readonly<Record<string, string>> = { webkitdirectory: '' };
 
-type State = { readonly kind: 'empty' } | { readonly kind: 'cancelled' } | WorkerAnswer;
+type State =
+  | { readonly kind: 'empty' }
+  | { readonly kind: 'cancelled' }
+  | Exclude<RunAnswer, { kind: 'first' | 'ended' }>;
+
+/** Text of the engine, read beside the page so that the page is drawn first. */
+const engineText: Promise<string> = import('./engine/text.ts').then((module) => module.engineText);
 
 export function App(): VNode {
   const [state, setState] = useState<State>({ kind: 'empty' });
-  const solver = useMemo(() => createSolver(setState), []);
+  const engine = useMemo(
+    () =>
+      createEngine({
+        begin: (hear) => blobWorker(engineText, hear),
+        hear: (answer) => {
+          if (answer.kind !== 'first') setState(answer);
+        },
+      }),
+    [],
+  );
   const open = (files: ReadonlyMap<string, Uint8Array>): void => {
     setState({ kind: 'progress', run: 0, stage: 'reading the study', share: 0 });
-    solver.solve(files);
+    engine.solve(files);
   };
   const openFiles = (list: FileList | null): void => {
     if (list !== null && list.length > 0) void studyFiles([...list]).then(open);
@@ -46,8 +62,9 @@ export function App(): VNode {
       </nav>
       <Reading
         state={state}
+        engine={engine}
         cancel={() => {
-          solver.cancel();
+          engine.cancel();
           setState({ kind: 'cancelled' });
         }}
       />
@@ -55,7 +72,13 @@ export function App(): VNode {
   );
 }
 
-function Reading({ state, cancel }: { state: State; cancel: () => void }): VNode {
+interface ReadingProps {
+  readonly state: State;
+  readonly engine: Engine;
+  readonly cancel: () => void;
+}
+
+function Reading({ state, engine, cancel }: ReadingProps): VNode {
   switch (state.kind) {
     case 'empty':
       return (
@@ -111,7 +134,7 @@ function Reading({ state, cancel }: { state: State; cancel: () => void }): VNode
       return (
         <main>
           <p class="take">
-            <PackLink pack={state.pack} title={state.outcome.results.title} />
+            <TakePack engine={engine} run={state.run} title={state.outcome.results.title} />
           </p>
           <Sheet outcome={state.outcome} />
         </main>
@@ -119,17 +142,34 @@ function Reading({ state, cancel }: { state: State; cancel: () => void }): VNode
   }
 }
 
-function PackLink({ pack, title }: { pack: Uint8Array<ArrayBuffer>; title: string }): VNode {
-  const url = useMemo(() => URL.createObjectURL(new Blob([pack], { type: 'application/zip' })), [pack]);
-  useEffect(() => () => URL.revokeObjectURL(url), [url]);
-  const name = title
-    .toLowerCase()
-    .replaceAll(/[^a-z0-9]+/g, '-')
-    .replaceAll(/^-|-$/g, '');
+function TakePack({ engine, run, title }: { engine: Engine; run: number; title: string }): VNode {
+  const [fault, setFault] = useState<string>();
+  const take = async (): Promise<void> => {
+    const { pack } = await engine.ask(run, { kind: 'pack' });
+    const url = URL.createObjectURL(new Blob([pack], { type: 'application/zip' }));
+    const link = document.createElement('a');
+    link.href = url;
+    const name = title
+      .toLowerCase()
+      .replaceAll(/[^a-z0-9]+/g, '-')
+      .replaceAll(/^-|-$/g, '');
+    link.download = `${name === '' ? 'study' : name}-review.zip`;
+    link.click();
+    URL.revokeObjectURL(url);
+  };
   return (
-    <a href={url} download={`${name === '' ? 'study' : name}-review.zip`}>
-      Take the review pack
-    </a>
+    <>
+      <button
+        type="button"
+        onClick={() => {
+          setFault(undefined);
+          take().catch((error: unknown) => setFault(String(error)));
+        }}
+      >
+        Take the review pack
+      </button>
+      {fault !== undefined && <span role="alert">{fault}</span>}
+    </>
   );
 }
 

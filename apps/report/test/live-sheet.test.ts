@@ -28,7 +28,7 @@ describe('the live sheet', () => {
     expect(await page.getByText('exceeds a limit').first().isVisible()).toBe(true);
     const [download] = await Promise.all([
       page.waitForEvent('download'),
-      page.getByRole('link', { name: 'Take the review pack' }).click(),
+      page.getByRole('button', { name: 'Take the review pack' }).click(),
     ]);
     const pack = await readPack(new Uint8Array(readFileSync(await download.path())));
     expect([...pack.entries.keys()]).toContain('index.html');

@@ -1,0 +1,34 @@
+// What the page and its engine say to each other.
+import type { Fault, Outcome } from '@ohmstead/study';
+
+export type EngineRequest =
+  | {
+      readonly kind: 'solve';
+      /** tells answers to this request from answers to one that it replaced */
+      readonly run: number;
+      readonly files: ReadonlyMap<string, Uint8Array>;
+    }
+  /** ends the run if it is still computing */
+  | { readonly kind: 'cancel'; readonly run: number }
+  /** about the outcome of a run that is solved */
+  | { readonly kind: 'ask'; readonly run: number; readonly ask: number; readonly question: Question };
+
+export type Question = { readonly kind: 'pack' };
+
+export type Reply = { readonly kind: 'pack'; readonly pack: Uint8Array<ArrayBuffer> };
+
+/** What is heard of a run; the last four end it. */
+export type RunAnswer =
+  | { readonly kind: 'progress'; readonly run: number; readonly stage: string; readonly share: number }
+  /** an early outcome on coarse meshes, with the uncertainties that these leave */
+  | { readonly kind: 'first'; readonly run: number; readonly outcome: Outcome }
+  | { readonly kind: 'solved'; readonly run: number; readonly outcome: Outcome }
+  | { readonly kind: 'faults'; readonly run: number; readonly faults: readonly Fault[] }
+  | { readonly kind: 'failed'; readonly run: number; readonly message: string }
+  /** cancelled, or replaced by a later run */
+  | { readonly kind: 'ended'; readonly run: number };
+
+export type EngineAnswer =
+  | RunAnswer
+  | { readonly kind: 'told'; readonly ask: number; readonly reply: Reply }
+  | { readonly kind: 'untold'; readonly ask: number; readonly message: string };
