@@ -1,6 +1,6 @@
 // Compiled kernels: one instance a module, made on first use; none where WebAssembly is missing or blocked.
 
-/** An instance with memory of its own, which holds nothing from one call to the next. */
+/** An instance with memory of its own; a shared one (`kernelOf`) holds nothing from one call to the next. */
 export interface Kernel {
   readonly memory: WebAssembly.Memory;
   /** calls an exported function; addresses and counts are whole numbers */
@@ -13,8 +13,10 @@ const PAGE = 65536;
 const BASE = 1024;
 /** Alignment of arrays: a pair of doubles. */
 const ALIGN = 16;
+export const BYTES_A_DOUBLE: number = Float64Array.BYTES_PER_ELEMENT;
 
 const made = new Map<string, Kernel | undefined>();
+const compiled = new Map<string, WebAssembly.Module>();
 let allowed = true;
 
 /** Turns the kernels off or on again: what they do is then done by plain code, with the same results to rounding. */
@@ -34,14 +36,26 @@ export function kernelOf(bytes: string): Kernel | undefined {
   return made.get(bytes);
 }
 
+/** A new instance of a module with memory that nobody else writes to, so that data may stay in it; undefined as above. */
+export function ownKernel(bytes: string): Kernel | undefined {
+  return allowed ? instantiate(bytes) : undefined;
+}
+
+function moduleOf(bytes: string): WebAssembly.Module {
+  const known = compiled.get(bytes);
+  if (known !== undefined) return known;
+  const module = new WebAssembly.Module(Uint8Array.from(atob(bytes), (letter) => letter.charCodeAt(0)));
+  compiled.set(bytes, module);
+  return module;
+}
+
 function instantiate(bytes: string): Kernel | undefined {
   if (typeof WebAssembly !== 'object') return undefined;
   try {
-    const binary = Uint8Array.from(atob(bytes), (letter) => letter.charCodeAt(0));
     const abort = (): never => {
       throw new Error('kernel stopped');
     };
-    const { exports } = new WebAssembly.Instance(new WebAssembly.Module(binary), { env: { abort } });
+    const { exports } = new WebAssembly.Instance(moduleOf(bytes), { env: { abort } });
     const memory = exports.memory;
     if (!(memory instanceof WebAssembly.Memory)) return undefined;
     return {

@@ -1,8 +1,10 @@
 // The leakage matrix: mutual resistance between every two leaking segments, Galerkin, symmetric positive definite.
 import type { SegmentMesh } from '../geometry/segments.ts';
-import type { Product } from '../numerics/conjugate-gradients.ts';
+import type { Product, Products } from '../numerics/conjugate-gradients.ts';
 import { gaussLegendre } from '../numerics/gauss-legendre.ts';
-import { multiplyPacked, type PackedLower } from '../numerics/packed-cholesky.ts';
+import type { PackedLower } from '../numerics/packed-cholesky.ts';
+import { packedOperator } from '../numerics/packed-operator.ts';
+import { packedStore } from '../numerics/packed-store.ts';
 import type { ImageList, SoilImages } from '../soil/image-list.ts';
 import { type DepthClasses, depthClasses } from './depth-classes.ts';
 import { type DepthPair, fillFarEntries } from './leakage-kernel.ts';
@@ -19,6 +21,8 @@ export interface LeakageMatrix {
   readonly diagonal: Float64Array;
   /** writes R x, V */
   readonly multiply: Product;
+  /** the same for several vectors in one pass over the matrix, where it is cheaper so */
+  readonly multiplyAll?: Products;
   /** writes an approximate R⁻¹ r that keeps iterations few; symmetric positive definite */
   precondition(r: Float64Array, into: Float64Array): void;
   /** R_ij, Ω: mean potential of segment i per ampere leaked evenly by segment j; packed lower triangle, where it is stored whole */
@@ -42,7 +46,8 @@ const NEAR_ORDERS: readonly (readonly [ratio: number, order: number])[] = [[1.98
 export function leakageMatrix(mesh: SegmentMesh, images: SoilImages): DenseLeakageMatrix {
   const segments = leakingSegments(mesh);
   const size = segments.length;
-  const entries = new Float64Array((size * (size + 1)) / 2);
+  const store = packedStore(size);
+  const { entries } = store;
   const classes = depthClasses(mesh);
   const tables = tableCache(mesh, images, classes);
   const points = gaussPoints(mesh);
@@ -62,10 +67,7 @@ export function leakageMatrix(mesh: SegmentMesh, images: SoilImages): DenseLeaka
     size,
     entries,
     diagonal,
-    multiply: (x, into) => multiplyPacked(entries, size, x, into),
-    precondition: (r, into) => {
-      for (let i = 0; i < size; i++) into[i] = r[i]! / diagonal[i]!;
-    },
+    ...packedOperator(store),
   };
 }
 

@@ -47,8 +47,32 @@ export function segmentPotentials(
   segments: Int32Array,
   nodePotential: Float64Array,
 ): Float64Array {
-  return Float64Array.from(
-    segments,
-    (i) => 0.5 * (nodePotential[mesh.node1[i]!]! + nodePotential[mesh.node2[i]!]!),
-  );
+  const potential = new Float64Array(segments.length);
+  for (let k = 0; k < segments.length; k++) {
+    const i = segments[k]!;
+    potential[k] = 0.5 * (nodePotential[mesh.node1[i]!]! + nodePotential[mesh.node2[i]!]!);
+  }
+  return potential;
+}
+
+/** Adds B Z Bᵀ x to `into`, V: the drop that leakage currents make in the metal on their way to the references. */
+export type MetalDrop = (x: Float64Array, into: Float64Array) => void;
+
+/** B Z Bᵀ with Z the inverse of the reduced Laplacian; its calls allocate nothing. */
+export function metalDrop(mesh: SegmentMesh, segments: Int32Array, laplacian: ReducedLaplacian): MetalDrop {
+  const first = Int32Array.from(segments, (i) => laplacian.place[mesh.node1[i]!]!);
+  const second = Int32Array.from(segments, (i) => laplacian.place[mesh.node2[i]!]!);
+  // the place after the last gathers what the grounded nodes draw, and stays at their potential
+  const node = new Float64Array(laplacian.size + 1);
+  return (x, into) => {
+    node.fill(0);
+    for (let k = 0; k < first.length; k++) {
+      const half = 0.5 * x[k]!;
+      node[first[k]!]! += half;
+      node[second[k]!]! += half;
+    }
+    laplacian.solveInPlace(node);
+    node[laplacian.size] = 0;
+    for (let k = 0; k < first.length; k++) into[k]! += 0.5 * (node[first[k]!]! + node[second[k]!]!);
+  };
 }

@@ -1,9 +1,15 @@
 // The Laplacian of a network with its grounded nodes struck out, factored once and solved for any injection.
-import { factorSparse, solveSparse } from '../numerics/sparse-cholesky.ts';
+import { factorSparse, solveEliminated } from '../numerics/sparse-cholesky.ts';
 import type { Branches } from './branches.ts';
 
 export interface ReducedLaplacian {
   readonly nodeCount: number;
+  /** nodes that are not grounded */
+  readonly size: number;
+  /** place of each node among the unknowns; `size` for a grounded one; shape [nodeCount] */
+  readonly place: Int32Array;
+  /** replaces currents by potentials, both by place, allocating nothing; what lies from `size` on is left alone */
+  solveInPlace(b: Float64Array): void;
   /**
    * Node potentials, V, for currents injected at the nodes, A, and taken back at the grounded nodes; those stay at 0.
    * @param injection shape [nodeCount]
@@ -50,13 +56,25 @@ export function reducedLaplacian(
     column: Int32Array.from(columns),
     value: Float64Array.from(values),
   });
+  const eliminated = new Int32Array(size);
+  factor.order.forEach((unknown, k) => {
+    eliminated[unknown] = k;
+  });
+  const places = place.map((unknown) => (unknown < 0 ? size : eliminated[unknown]!));
+  const solveInPlace = (b: Float64Array): void => solveEliminated(factor, b);
   return {
     nodeCount,
+    size,
+    place: places,
+    solveInPlace,
     solve(injection) {
-      const b = new Float64Array(size);
-      for (let node = 0; node < nodeCount; node++) if (place[node]! >= 0) b[place[node]!] = injection[node]!;
-      solveSparse(factor, b);
-      return Float64Array.from(place, (at) => (at < 0 ? 0 : b[at]!));
+      const b = new Float64Array(size + 1);
+      places.forEach((at, node) => {
+        b[at] = injection[node]!;
+      });
+      solveInPlace(b);
+      b[size] = 0;
+      return Float64Array.from(places, (at) => b[at]!);
     },
   };
 }

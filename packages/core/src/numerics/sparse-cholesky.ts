@@ -15,7 +15,7 @@ export interface SparseFactor {
   /** place k of the elimination holds unknown order[k] */
   readonly order: Int32Array;
   readonly pivot: Float64Array;
-  /** column k of L below its diagonal: entries start[k] … start[k + 1] − 1, rows as unknowns */
+  /** column k of L below its diagonal: entries start[k] … start[k + 1] − 1, rows as places of the elimination */
   readonly start: Int32Array;
   readonly row: Int32Array;
   readonly value: Float64Array;
@@ -69,20 +69,31 @@ export function factorSparse(matrix: SparseSymmetric): SparseFactor {
     neighbours[v]!.clear();
     start[k + 1] = rows.length;
   }
-  return { size: n, order, pivot, start, row: Int32Array.from(rows), value: Float64Array.from(values) };
+  const place = new Int32Array(n);
+  for (let k = 0; k < n; k++) place[order[k]!] = k;
+  const row = Int32Array.from(rows, (i) => place[i]!);
+  return { size: n, order, pivot, start, row, value: Float64Array.from(values) };
 }
 
 /** Solves A x = b in place. */
 export function solveSparse(factor: SparseFactor, b: Float64Array): void {
-  const { size, order, pivot, start, row, value } = factor;
+  const { size, order } = factor;
+  const eliminated = Float64Array.from(order, (unknown) => b[unknown]!);
+  solveEliminated(factor, eliminated);
+  for (let k = 0; k < size; k++) b[order[k]!] = eliminated[k]!;
+}
+
+/** Solves A x = b in place, both by places of the elimination; allocates nothing. */
+export function solveEliminated(factor: SparseFactor, b: Float64Array): void {
+  const { size, pivot, start, row, value } = factor;
   for (let k = 0; k < size; k++) {
-    const x = b[order[k]!]!;
+    const x = b[k]!;
     for (let e = start[k]!; e < start[k + 1]!; e++) b[row[e]!]! -= value[e]! * x;
   }
   for (let k = size - 1; k >= 0; k--) {
-    let x = b[order[k]!]! / pivot[k]!;
+    let x = b[k]! / pivot[k]!;
     for (let e = start[k]!; e < start[k + 1]!; e++) x -= value[e]! * b[row[e]!]!;
-    b[order[k]!] = x;
+    b[k] = x;
   }
 }
 

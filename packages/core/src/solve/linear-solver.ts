@@ -1,26 +1,29 @@
 // Solves the coupled leakage equations (R + B Z Bᵀ) x = b by the method that suits their size.
 import type { LeakageMatrix } from '../leakage/leakage-matrix.ts';
-import { conjugateGradients, type Product } from '../numerics/conjugate-gradients.ts';
+import type { MetalDrop } from '../network/metal.ts';
+import { type Products, simultaneousGradients } from '../numerics/conjugate-gradients.ts';
 import { factorPacked, type PackedLower, solvePacked } from '../numerics/packed-cholesky.ts';
 
 /** The leakage matrix and, where the metal has resistance, what that adds to it. */
 export interface LeakageOperator {
   readonly matrix: LeakageMatrix;
   /** adds B Z Bᵀ x to `into`; absent for equipotential metal */
-  readonly addMetal?: (x: Float64Array, into: Float64Array) => void;
+  readonly addMetal?: MetalDrop;
+}
+
+export interface LinearSolution {
+  /** one for each right-hand side */
+  readonly xs: readonly Float64Array[];
+  readonly iterations: number;
 }
 
 export interface LinearSolver {
   readonly method: 'cholesky' | 'conjugate-gradients';
-  solve(b: Float64Array): Promise<{ readonly x: Float64Array; readonly iterations: number }>;
+  solve(bs: readonly Float64Array[]): Promise<LinearSolution>;
 }
 
-/** Below this the factor costs less than a dozen iterations' overhead and gives the last digit. */
-const SMALL = 500;
-/** Iterations that a right-hand side takes, for the choice only: 20 to 40 seen from 500 to 6 000 segments. */
-const TYPICAL_ITERATIONS = 40;
-/** Relative residual asked of an iteration: three digits below the tightest promise, 1e-9. */
-const RESIDUAL = 1e-13;
+/** Relative residual asked of an iteration: two digits below the tightest promise, 1e-9; one more costs an iteration. */
+const RESIDUAL = 1e-11;
 /** The same for a compressed matrix, whose blocks are good to 1e-5. */
 const COMPRESSED_RESIDUAL = 1e-10;
 const ITERATION_LIMIT = 2000;
@@ -35,63 +38,90 @@ export class SolverStalled extends Error {
 /** Worst relative residual that is still accepted when rounding stops an iteration short of its target. */
 const ACCEPTED_RESIDUAL = 1e-9;
 
-/** A factor costs as much as this share of the size in products of the matrix with a vector: 230 of them at 1 650, measured. */
-const FACTOR_IN_PRODUCTS = 1 / 7;
+/** Below this either way takes two milliseconds, and the factor gives the last digit. */
+const SMALL = 300;
+/** Iterations that a right-hand side takes, for the choice only: 10 to 14 seen from 400 to 3 000 segments. */
+const TYPICAL_ITERATIONS = 12;
+/** A factor, the metal's drops added, costs as much as this share of the size in iterations of one vector: 0.20 to 0.3, measured. */
+const FACTOR_IN_ITERATIONS = 1 / 4;
 
 /**
  * Chooses between a factor and conjugate gradients: the factor when the system is small or has so many right-hand
  * sides that their iterations would cost more.
  */
 export function chooseMethod(size: number, rightHandSides: number): LinearSolver['method'] {
-  return size <= SMALL || rightHandSides * TYPICAL_ITERATIONS > size * FACTOR_IN_PRODUCTS
+  return size <= SMALL || rightHandSides * TYPICAL_ITERATIONS > size * FACTOR_IN_ITERATIONS
     ? 'cholesky'
     : 'conjugate-gradients';
 }
 
 /** @throws SolverStalled, NotPositiveDefinite */
 export function linearSolver(operator: LeakageOperator, rightHandSides: number): LinearSolver {
-  const { matrix, addMetal } = operator;
-  const { size, entries } = matrix;
-  if (entries !== undefined && chooseMethod(size, rightHandSides) === 'cholesky') {
-    const factor = coupled(entries);
-    factorPacked(factor, size);
-    return {
-      method: 'cholesky',
-      async solve(b) {
-        const x = Float64Array.from(b);
-        solvePacked(factor, size, x);
-        return { x, iterations: 0 };
-      },
-    };
+  const { matrix } = operator;
+  return matrix.entries !== undefined && chooseMethod(matrix.size, rightHandSides) === 'cholesky'
+    ? direct(matrix.entries, operator)
+    : iterative(operator);
+}
+
+function direct(entries: PackedLower, { matrix: { size }, addMetal }: LeakageOperator): LinearSolver {
+  const factor = Float64Array.from(entries);
+  if (addMetal !== undefined) addDrops(factor, size, addMetal);
+  factorPacked(factor, size);
+  return {
+    method: 'cholesky',
+    async solve(bs) {
+      const xs = bs.map((b) => Float64Array.from(b));
+      for (const x of xs) solvePacked(factor, size, x);
+      return { xs, iterations: 0 };
+    },
+  };
+}
+
+/** Adds B Z Bᵀ to a packed matrix, row by row: what one ampere from segment i drops at those before it. */
+function addDrops(packed: PackedLower, size: number, addMetal: MetalDrop): void {
+  const unit = new Float64Array(size);
+  const drop = new Float64Array(size);
+  for (let i = 0; i < size; i++) {
+    unit[i] = 1;
+    drop.fill(0);
+    addMetal(unit, drop);
+    unit[i] = 0;
+    const row = (i * (i + 1)) / 2;
+    for (let j = 0; j <= i; j++) packed[row + j]! += drop[j]!;
   }
-  const multiply: Product = async (x, into) => {
-    await matrix.multiply(x, into);
-    addMetal?.(x, into);
+}
+
+function iterative({ matrix, addMetal }: LeakageOperator): LinearSolver {
+  const multiply: Products = async (xs, into) => {
+    await multiplyAll(matrix, xs, into);
+    if (addMetal !== undefined)
+      xs.forEach((x, c) => {
+        addMetal(x, into[c]!);
+      });
   };
   return {
     method: 'conjugate-gradients',
-    async solve(b) {
-      const result = await conjugateGradients(multiply, matrix.precondition, b, {
-        tolerance: entries === undefined ? COMPRESSED_RESIDUAL : RESIDUAL,
+    async solve(bs) {
+      const results = await simultaneousGradients(multiply, matrix.precondition, bs, {
+        tolerance: matrix.entries === undefined ? COMPRESSED_RESIDUAL : RESIDUAL,
         limit: ITERATION_LIMIT,
       });
-      if (result.outcome !== 'converged' && !(result.residual <= ACCEPTED_RESIDUAL))
-        throw new SolverStalled(result.residual);
-      return { x: result.x, iterations: result.iterations };
+      for (const { outcome, residual } of results)
+        if (outcome !== 'converged' && !(residual <= ACCEPTED_RESIDUAL)) throw new SolverStalled(residual);
+      return {
+        xs: results.map(({ x }) => x),
+        iterations: results.reduce((sum, { iterations }) => sum + iterations, 0),
+      };
     },
   };
-  function coupled(packed: PackedLower): PackedLower {
-    const dense = Float64Array.from(packed);
-    if (addMetal === undefined) return dense;
-    const unit = new Float64Array(size);
-    const column = new Float64Array(size);
-    for (let j = 0; j < size; j++) {
-      unit[j] = 1;
-      column.fill(0);
-      addMetal(unit, column);
-      unit[j] = 0;
-      for (let i = j; i < size; i++) dense[(i * (i + 1)) / 2 + j]! += column[i]!;
-    }
-    return dense;
-  }
+}
+
+/** R x of several vectors, in one pass where the matrix offers that. */
+export async function multiplyAll(
+  matrix: LeakageMatrix,
+  xs: readonly Float64Array[],
+  into: readonly Float64Array[],
+): Promise<void> {
+  if (matrix.multiplyAll !== undefined) await matrix.multiplyAll(xs, into);
+  else for (let c = 0; c < xs.length; c++) await matrix.multiply(xs[c]!, into[c]!);
 }

@@ -2,9 +2,15 @@
 import type { SegmentMesh } from '../geometry/segments.ts';
 import type { LeakageMatrix } from '../leakage/leakage-matrix.ts';
 import { branchCurrents, nodeOutflow } from '../network/branches.ts';
-import { drawnFromNodes, groundedMetal, metalBranches, segmentPotentials } from '../network/metal.ts';
+import {
+  drawnFromNodes,
+  groundedMetal,
+  metalBranches,
+  metalDrop,
+  segmentPotentials,
+} from '../network/metal.ts';
 import { factorPacked, solvePacked } from '../numerics/packed-cholesky.ts';
-import { linearSolver } from './linear-solver.ts';
+import { linearSolver, multiplyAll } from './linear-solver.ts';
 
 export type MetalModel = 'resistive' | 'equipotential';
 
@@ -50,54 +56,48 @@ export async function solveGraph(
   model: MetalModel,
 ): Promise<GraphSolution> {
   const { segments, size } = matrix;
+  const resistive = model === 'resistive';
   const branches = metalBranches(mesh, resistancePerMetre);
   const { laplacian, references } = groundedMetal(mesh, branches, injectionNodes);
-  const drop = (x: Float64Array): Float64Array => laplacian.solve(drawnFromNodes(mesh, segments, x));
-  const addMetal = (x: Float64Array, into: Float64Array): void => {
-    const potential = segmentPotentials(mesh, segments, drop(x));
-    for (let k = 0; k < size; k++) into[k]! += potential[k]!;
-  };
   const component = Int32Array.from(segments, (i) => mesh.nodeComponent[mesh.node1[i]!]!);
   const pieces = piecesThatLeak(component, mesh.componentCount);
-  const offReference =
-    model === 'resistive' ? injectionNodes.filter((node) => !references.includes(node)).length : 0;
+  const distinct = [...new Set(injectionNodes)];
+  const away = resistive ? distinct.filter((node) => !references.includes(node)) : [];
   const solver = linearSolver(
-    model === 'resistive' ? { matrix, addMetal } : { matrix },
-    pieces.length + offReference,
+    resistive ? { matrix, addMetal: metalDrop(mesh, segments, laplacian) } : { matrix },
+    pieces.length + away.length,
   );
-  let iterations = 0;
-  const solve = async (b: Float64Array): Promise<Float64Array> => {
-    const { x, iterations: steps } = await solver.solve(b);
-    iterations += steps;
-    return x;
-  };
-  const response: Float64Array[] = [];
-  for (const c of pieces)
-    response.push(await solve(Float64Array.from(component, (own) => (own === c ? 1 : 0))));
+  const { xs, iterations } = await solver.solve([
+    ...pieces.map((c) => Float64Array.from(component, (own) => (own === c ? 1 : 0))),
+    ...away.map((node) => segmentPotentials(mesh, segments, laplacian.solve(unitAt(mesh.nodeCount, node)))),
+  ]);
+  const response = xs.slice(0, pieces.length);
   const net = (x: Float64Array): Float64Array => netByPiece(x, component, pieces);
   const gram = packPieces(response.map(net));
 
-  const unit = async (node: number): Promise<UnitSolution> => {
-    const injection = new Float64Array(mesh.nodeCount);
-    injection[node] = 1;
-    const own = pieces.indexOf(mesh.nodeComponent[node]!);
-    const away = model === 'resistive' && !references.includes(node);
-    const fromInjection = away ? laplacian.solve(injection) : undefined;
-    const extra =
-      fromInjection === undefined ? undefined : await solve(segmentPotentials(mesh, segments, fromInjection));
+  /** Current from each segment, and the reference potentials by piece that impose the net currents. */
+  const leakageOf = (node: number): { readonly current: Float64Array; readonly level: Float64Array } => {
+    const extra = away.includes(node) ? xs[pieces.length + away.indexOf(node)] : undefined;
     const level = new Float64Array(pieces.length);
-    level[own] = 1;
+    level[pieces.indexOf(mesh.nodeComponent[node]!)] = 1;
     if (extra !== undefined) net(extra).forEach((sum, p) => { level[p]! -= sum; }); // biome-ignore format: one line of algebra
     solvePacked(gram, pieces.length, level);
     const current = extra === undefined ? new Float64Array(size) : Float64Array.from(extra);
     response.forEach((x, p) => {
       for (let k = 0; k < size; k++) current[k]! += level[p]! * x[k]!;
     });
+    return { current, level };
+  };
+  const unit = (
+    node: number,
+    { current, level }: ReturnType<typeof leakageOf>,
+  ): Omit<UnitSolution, 'residual'> => {
+    const injection = unitAt(mesh.nodeCount, node);
     const drawn = drawnFromNodes(mesh, segments, current);
     const relative = laplacian.solve(injection.map((j, at) => j - drawn[at]!));
     const levelOf = new Map(pieces.map((c, p) => [c, level[p]!]));
     const nodePotential = relative.map(
-      (v, at) => (levelOf.get(mesh.nodeComponent[at]!) ?? 0) + (model === 'resistive' ? v : 0),
+      (v, at) => (levelOf.get(mesh.nodeComponent[at]!) ?? 0) + (resistive ? v : 0),
     );
     const along = branchCurrents(branches, relative);
     const leakage = new Float64Array(mesh.count);
@@ -112,17 +112,27 @@ export async function solveGraph(
       resistance: nodePotential[node]!,
       balance: current.reduce((sum, i) => sum + i, 0) - 1,
       nodeBalance: kirchhoffFailure(nodeOutflow(branches, mesh.nodeCount, along), drawn, injection),
-      residual: await leakageResidual(matrix, current, segmentPotentials(mesh, segments, nodePotential)),
     };
   };
-  const known = new Map<number, UnitSolution>();
-  const units: UnitSolution[] = [];
-  for (const node of injectionNodes) {
-    const solved = known.get(node) ?? (await unit(node));
-    known.set(node, solved);
-    units.push(solved);
-  }
-  return { mesh, units, iterations };
+  const leakages = distinct.map(leakageOf);
+  const products = leakages.map(() => new Float64Array(size));
+  await multiplyAll(
+    matrix,
+    leakages.map(({ current }) => current),
+    products,
+  );
+  const units = distinct.map((node, u): UnitSolution => {
+    const solved = unit(node, leakages[u]!);
+    const potential = segmentPotentials(mesh, segments, solved.nodePotential);
+    return { ...solved, residual: relativeDifference(products[u]!, potential) };
+  });
+  return { mesh, units: injectionNodes.map((node) => units[distinct.indexOf(node)]!), iterations };
+}
+
+function unitAt(count: number, node: number): Float64Array {
+  const injection = new Float64Array(count);
+  injection[node] = 1;
+  return injection;
 }
 
 function piecesThatLeak(component: Int32Array, count: number): number[] {
@@ -157,18 +167,13 @@ function kirchhoffFailure(outflow: Float64Array, drawn: Float64Array, injection:
   );
 }
 
-async function leakageResidual(
-  matrix: LeakageMatrix,
-  current: Float64Array,
-  potential: Float64Array,
-): Promise<number> {
-  const product = new Float64Array(matrix.size);
-  await matrix.multiply(current, product);
+/** ‖found − wanted‖/‖wanted‖. */
+function relativeDifference(found: Float64Array, wanted: Float64Array): number {
   let error = 0;
   let scale = 0;
-  for (let k = 0; k < matrix.size; k++) {
-    error += (product[k]! - potential[k]!) ** 2;
-    scale += potential[k]! ** 2;
+  for (let k = 0; k < wanted.length; k++) {
+    error += (found[k]! - wanted[k]!) ** 2;
+    scale += wanted[k]! ** 2;
   }
   return Math.sqrt(error / scale);
 }

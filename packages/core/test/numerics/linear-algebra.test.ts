@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { conjugateGradients } from '../../src/numerics/conjugate-gradients.ts';
+import { conjugateGradients, simultaneousGradients } from '../../src/numerics/conjugate-gradients.ts';
 import {
   factorPacked,
   multiplyPacked,
@@ -83,6 +83,61 @@ describe('conjugate gradients', () => {
     expect(result.outcome).toBe('limit');
     expect(result.iterations).toBe(2);
     expect(result.residual).toBeGreaterThan(1e-12);
+  });
+});
+
+describe('simultaneous conjugate gradients', () => {
+  const n = 60;
+  const matrix = randomPositive(n, 3);
+  const diagonal = Float64Array.from({ length: n }, (_, i) => matrix[(i * (i + 3)) / 2]!);
+  const random = randomNumbers(9);
+  const bs = [0, 1, 2, 3].map((c) => Float64Array.from({ length: n }, () => (c === 2 ? 0 : random() - 0.5)));
+  /** counts passes over the matrix and the vectors they served */
+  const counted = () => {
+    const served: number[] = [];
+    const multiply = (xs: readonly Float64Array[], into: readonly Float64Array[]): void => {
+      served.push(xs.length);
+      xs.forEach((x, c) => {
+        multiplyPacked(matrix, n, x, into[c]!);
+      });
+    };
+    return { served, multiply };
+  };
+
+  it('solves each right-hand side as it would be alone, sharing the passes; one that is done drops out', async () => {
+    const { served, multiply } = counted();
+    const options = { tolerance: 1e-12, limit: 100 };
+    const together = await simultaneousGradients(multiply, byDiagonal(diagonal), bs, options);
+    for (const [c, b] of bs.entries()) {
+      const product = (x: Float64Array, into: Float64Array): void => multiplyPacked(matrix, n, x, into);
+      expect(together[c]).toEqual(await conjugateGradients(product, byDiagonal(diagonal), b, options));
+    }
+    expect(together.map(({ outcome }) => outcome)).toEqual(new Array(4).fill('converged'));
+    expect(together[2]!.iterations).toBe(0);
+    expect(served.length).toBe(Math.max(...together.map(({ iterations }) => iterations)) + 1);
+    expect(served[0]).toBe(3);
+    expect(served.at(-1)).toBe(4);
+  });
+
+  it('starts from a guess: none is needed at the solution, fewer iterations near it', async () => {
+    const { multiply } = counted();
+    const options = { tolerance: 1e-10, limit: 100 };
+    const cold = await simultaneousGradients(multiply, byDiagonal(diagonal), bs, options);
+    const exact = cold.map(({ x }) => x);
+    const again = await simultaneousGradients(
+      multiply,
+      byDiagonal(diagonal),
+      bs,
+      { ...options, tolerance: 2e-10 },
+      exact,
+    );
+    expect(again.map(({ iterations }) => iterations)).toEqual([0, 0, 0, 0]);
+    const near = exact.map((x) => x.map((value) => value * (1 + 1e-5)));
+    const warm = await simultaneousGradients(multiply, byDiagonal(diagonal), bs, options, near);
+    expect(warm[0]!.iterations).toBeLessThan(cold[0]!.iterations);
+    warm[0]!.x.forEach((value, i) => {
+      expect(Math.abs(value - exact[0]![i]!)).toBeLessThan(1e-10);
+    });
   });
 });
 
