@@ -18,6 +18,7 @@ export { MOST_CONDUCTORS } from './input/limits.ts';
 export { loadStudy } from './input/load-study.ts';
 export { loadSurvey, type SurveyFile } from './input/load-survey.ts';
 export { nearestName } from './input/nearest-name.ts';
+export { type NumberReading, readNumber } from './input/number-text.ts';
 export { loadPoints, type PointTable } from './input/points-csv.ts';
 export { STUDY_FILE } from './input/read-study-json.ts';
 export { listed, quoted, shown } from './input/shown-value.ts';
