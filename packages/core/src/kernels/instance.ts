@@ -5,6 +5,8 @@ export interface Kernel {
   readonly memory: WebAssembly.Memory;
   /** calls an exported function; addresses and counts are whole numbers */
   call(name: string, ...values: number[]): number;
+  /** an exported function, for many calls */
+  find(name: string): (...values: number[]) => unknown;
 }
 
 /** Bytes of a page of WebAssembly memory (WebAssembly core specification 2.0, 4.2.8). */
@@ -58,14 +60,12 @@ function instantiate(bytes: string): Kernel | undefined {
     const { exports } = new WebAssembly.Instance(moduleOf(bytes), { env: { abort } });
     const memory = exports.memory;
     if (!(memory instanceof WebAssembly.Memory)) return undefined;
-    return {
-      memory,
-      call: (name, ...values) => {
-        const f = exports[name];
-        if (typeof f !== 'function') throw new TypeError(`kernel has no function ${name}`);
-        return Number(f(...values) ?? 0);
-      },
+    const find = (name: string): ((...values: number[]) => unknown) => {
+      const f = exports[name];
+      if (typeof f !== 'function') throw new TypeError(`kernel has no function ${name}`);
+      return (...values) => f(...values);
     };
+    return { memory, find, call: (name, ...values) => Number(find(name)(...values) ?? 0) };
   } catch {
     return undefined;
   }
@@ -88,18 +88,23 @@ export function place(
     at += Math.ceil(array.byteLength / ALIGN) * ALIGN;
   }
   addresses.push(at);
-  const missing = at + room * Float64Array.BYTES_PER_ELEMENT - kernel.memory.buffer.byteLength;
-  if (missing > 0) {
-    try {
-      kernel.memory.grow(Math.ceil(missing / PAGE));
-    } catch {
-      return undefined;
-    }
-  }
+  if (!reserve(kernel, at + room * Float64Array.BYTES_PER_ELEMENT)) return undefined;
   arrays.forEach((array, k) => {
     new Float64Array(kernel.memory.buffer, addresses[k]!, array.length).set(array);
   });
   return addresses;
+}
+
+/** Grows a kernel's memory to at least so many bytes, with what it holds; false where they are refused. */
+export function reserve(kernel: Kernel, bytes: number): boolean {
+  const missing = bytes - kernel.memory.buffer.byteLength;
+  if (missing <= 0) return true;
+  try {
+    kernel.memory.grow(Math.ceil(missing / PAGE));
+    return true;
+  } catch {
+    return false;
+  }
 }
 
 /** Doubles at an address of a kernel's memory, valid until the next `place`. */

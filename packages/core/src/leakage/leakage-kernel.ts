@@ -1,132 +1,187 @@
-// Far entries of the leakage matrix between horizontal segments, by the compiled kernel.
-import type { SegmentMesh } from '../geometry/segments.ts';
-import { doublesAt, kernelOf, place } from '../kernels/instance.ts';
+// Blocks of the leakage matrix by the compiled kernel, which holds segments and tables in its memory from call to call.
+import { type Kernel, kernelOf, ownKernel, place, reserve } from '../kernels/instance.ts';
 import { leakageBytes } from '../kernels/leakage-bytes.ts';
 import { gaussLegendre } from '../numerics/gauss-legendre.ts';
 import type { ImageList } from '../soil/image-list.ts';
-import type { DepthClasses } from './depth-classes.ts';
-import { CLOSED_FORM_RATIO, GAUSS_RATIOS } from './pair-potential.ts';
-import type { RadialTable } from './radial-table.ts';
+import type { DepthPair, DepthPairs } from './depth-pairs.ts';
+import { PAIR_RATIOS, SMOOTH_ORDERS } from './pair-potential.ts';
+import { CLASS, RECORD } from './segment-records.ts';
 
-/** What two segments of two depth classes share. */
-export interface DepthPair {
-  readonly list: ImageList;
-  readonly table: RadialTable | undefined;
-  /** depths of the field and the source segment, m */
-  readonly fieldDepth: number;
-  readonly sourceDepth: number;
+export interface LeakageKernel {
+  /** fills rows × columns, indices of segments; false where memory was refused, with nothing filled */
+  block(rows: Int32Array, columns: Int32Array, into: Float64Array): boolean;
+  /** fills the packed lower triangle over the given segments; false as above */
+  triangle(segments: Int32Array, entries: Float64Array): boolean;
 }
 
-/** Highest order of a rule, and doubles it takes: points, then weights. */
-const ORDERS = 4;
+/** Bytes of a class pair, and of a whole number. */
+const PAIR = 64;
+const WORD = 4;
+const DOUBLE = 8;
+/** Entries of a triangle that are taken over at a time. */
+const BATCH = 1 << 16;
 
 /**
- * Fills the entries that the kernel can: both segments exactly horizontal, and apart.
- * @param segments leaking segments, rows and columns of the packed triangle
- * @param pairOf what two segments share, by their classes alone
- * @param entries receives the far entries
- * @param left called with row and column of each entry that is not filled
+ * Places segments and tables in a kernel's memory.
+ * @param records as segmentRecords makes them
+ * @param lasting whether calls come one by one, while other matrices may be filled: the instance is then its own
+ * @returns undefined where there is no kernel, or its memory does not suffice
  */
-export function fillFarEntries(
-  mesh: SegmentMesh,
-  classes: DepthClasses,
-  segments: Int32Array,
-  pairOf: (i: number, j: number) => DepthPair,
-  entries: Float64Array,
-  left: (row: number, column: number) => void,
-): void {
-  const kernel = kernelOf(leakageBytes);
-  const members: number[][] = classes.classes.map(() => []);
-  const others: number[] = [];
-  segments.forEach((i, row) => {
-    const own = classes.of[i]!;
-    if (kernel !== undefined && own >= 0 && mesh.z1[i] === mesh.z2[i]) members[own]!.push(row);
-    else others.push(row);
-  });
-  const plain = new Uint8Array(segments.length);
-  for (const row of others) plain[row] = 1;
-  for (let row = 0; row < segments.length; row++)
-    for (let column = 0; column <= row; column++)
-      if (plain[row] === 1 || plain[column] === 1) left(row, column);
-  if (kernel === undefined) return;
-  const level = members.filter((rows) => rows.length > 0);
-  for (const rows of level)
-    for (const columns of level) {
-      const pair = pairOf(segments[rows[0]!]!, segments[columns[0]!]!);
-      const { table, list } = pair;
-      const direct = table === undefined ? list.count : list.primaryCount;
-      const arrays = [
-        packed(mesh, segments, rows),
-        packed(mesh, segments, columns),
-        table?.bins ?? new Float64Array(0),
-        heights(pair, direct),
-        RULES,
-        GAUSS_RATIOS.map((ratio) => ratio * ratio),
-        new Float64Array(columns.length),
-      ];
-      const at = place(kernel, arrays);
-      const [a = 0, b = 0, t = 0, h = 0, g = 0, r = 0, o = 0] = at ?? [];
-      const apart = (pair.fieldDepth - pair.sourceDepth) ** 2;
-      const closed = CLOSED_FORM_RATIO ** 2;
-      if (at !== undefined)
-        kernel.call('depths', table === undefined ? 0 : t, table?.perSquare ?? 0, h, direct, list.factor, apart, g, closed, r); // biome-ignore format: one call
-      const found = at === undefined ? arrays.at(-1)!.fill(Number.NaN) : doublesAt(kernel, o, columns.length);
-      let count = 0;
-      rows.forEach((row, k) => {
-        while (count < columns.length && columns[count]! <= row) count++;
-        if (at !== undefined) kernel.call('row', a + k * 8 * SEGMENT, b, count, o);
-        const start = (row * (row + 1)) / 2;
-        for (let c = 0; c < count; c++) {
-          const value = found[c]!;
-          const column = columns[c]!;
-          if (Number.isNaN(value)) left(row, column);
-          else entries[start + column] = value;
-        }
-      });
+export function leakageKernel(
+  records: Float64Array,
+  depths: DepthPairs,
+  lasting: boolean,
+): LeakageKernel | undefined {
+  const kernel = lasting ? ownKernel(leakageBytes) : kernelOf(leakageBytes);
+  if (kernel === undefined) return undefined;
+  const free = layOut(kernel, records, depths);
+  if (free === undefined) return undefined;
+  const block = kernel.find('block');
+  const triangle = kernel.find('triangle');
+  let buffer: ArrayBufferLike | undefined;
+  let words = new Int32Array(0);
+  let doubles = new Float64Array(0);
+  const room = (end: number): boolean => {
+    if (!reserve(kernel, end)) return false;
+    if (buffer !== kernel.memory.buffer) {
+      buffer = kernel.memory.buffer;
+      words = new Int32Array(buffer);
+      doubles = new Float64Array(buffer);
     }
+    return true;
+  };
+  return {
+    block(rows, columns, into) {
+      const [r, c] = [rows.length, columns.length];
+      const at = free + Math.ceil((r + c) / 2) * DOUBLE;
+      if (!room(at + r * c * DOUBLE)) return false;
+      copyWords(rows, words, free / WORD);
+      copyWords(columns, words, free / WORD + r);
+      const columnsAt = free + r * WORD;
+      // the longer side is the inner loop, which takes two at a time
+      if (c >= r) block(free, r, columnsAt, c, at, c * DOUBLE, DOUBLE);
+      else block(columnsAt, c, free, r, at, DOUBLE, c * DOUBLE);
+      copyDoubles(doubles, at / DOUBLE, into, 0, r * c);
+      return true;
+    },
+    triangle(segments, entries) {
+      const n = segments.length;
+      const at = free + Math.ceil(n / 2) * DOUBLE;
+      if (!room(at + (BATCH + n) * DOUBLE)) return false;
+      copyWords(segments, words, free / WORD);
+      let from = 0;
+      while (from < n) {
+        const start = (from * (from + 1)) / 2;
+        let to = from + 1;
+        while (to < n && ((to + 1) * (to + 2)) / 2 - start <= BATCH) to++;
+        triangle(free, from, to, at);
+        copyDoubles(doubles, at / DOUBLE, entries, start, (to * (to + 1)) / 2 - start);
+        from = to;
+      }
+      return true;
+    },
+  };
 }
 
-/** Doubles of a segment: centre, half vector, length, radius. */
-const SEGMENT = 6;
+/** Fewer items than this are copied one by one. */
+const FEW = 64;
 
-function packed(mesh: SegmentMesh, segments: Int32Array, rows: readonly number[]): Float64Array {
-  const found = new Float64Array(rows.length * SEGMENT);
-  rows.forEach((row, k) => {
-    const i = segments[row]!;
-    const [x1, y1, x2, y2] = [mesh.x1[i]!, mesh.y1[i]!, mesh.x2[i]!, mesh.y2[i]!];
-    const own = [
-      (x1 + x2) / 2,
-      (y1 + y2) / 2,
-      (x2 - x1) / 2,
-      (y2 - y1) / 2,
-      mesh.length[i]!,
-      mesh.radius[i]!,
-    ];
-    found.set(own, k * SEGMENT);
-  });
-  return found;
+function copyWords(from: Int32Array, into: Int32Array, at: number): void {
+  if (from.length < FEW) for (let k = 0; k < from.length; k++) into[at + k] = from[k]!;
+  else into.set(from, at);
 }
 
-/** Weight and squared height of the images taken one by one, each twice. */
-function heights({ list, fieldDepth, sourceDepth }: DepthPair, count: number): Float64Array {
-  const found = new Float64Array(count * 4);
-  for (let k = 0; k < count; k++) {
-    const h = fieldDepth - list.sign[k]! * sourceDepth - list.offset[k]!;
-    found.set([list.weight[k]!, list.weight[k]!, h * h, h * h], 4 * k);
+function copyDoubles(from: Float64Array, start: number, into: Float64Array, at: number, count: number): void {
+  if (count < FEW) for (let k = 0; k < count; k++) into[at + k] = from[start + k]!;
+  else into.set(from.subarray(start, start + count), at);
+}
+
+/** Writes everything that stays, and tells the kernel; returns the first free address. */
+function layOut(
+  kernel: Kernel,
+  records: Float64Array,
+  { count, classOf, pairs }: DepthPairs,
+): number | undefined {
+  const arrays: Float64Array[] = [];
+  const indexOf = new Map<object, number>();
+  const keep = (key: object, made: () => Float64Array): void => {
+    if (indexOf.has(key)) return;
+    indexOf.set(key, arrays.length);
+    arrays.push(made());
+  };
+  keep(records, () => records);
+  keep(RULES, () => RULES);
+  keep(RATIOS, () => RATIOS);
+  const distinct = [...new Set(pairs)];
+  for (const { list, far, rest, nodes, weights } of distinct) {
+    keep(list, () => packedImages(list));
+    if (far) keep(far, () => far.bins);
+    if (rest) keep(rest, () => rest.bins);
+    if (weights) keep(weights, () => weights);
+    // 1/s², count, room for values, bins
+    if (nodes) keep(nodes, () => Float64Array.of(nodes.perSquare, 0, ...new Float64Array(nodes.count), ...nodes.bins)); // biome-ignore format: one row
   }
+  const room = (distinct.length * PAIR + Math.ceil(pairs.length / 2) * DOUBLE) / DOUBLE;
+  const addresses = place(kernel, arrays, room);
+  if (addresses === undefined) return undefined;
+  const addressOf = (key: object | undefined): number => {
+    const at = key === undefined ? undefined : indexOf.get(key);
+    return at === undefined ? 0 : addresses[at]!;
+  };
+  const start = addresses[arrays.length]!;
+  const view = new DataView(kernel.memory.buffer);
+  const pairAt = new Map(distinct.map((pair, k) => [pair, start + k * PAIR]));
+  for (const [pair, at] of pairAt) writePair(view, at, pair, addressOf);
+  const table = start + distinct.length * PAIR;
+  pairs.forEach((pair, k) => {
+    view.setUint32(table + k * WORD, pairAt.get(pair)!, true);
+  });
+  const segments = addressOf(records);
+  for (let i = 0; i < classOf.length; i++)
+    view.setInt32(segments + (i * RECORD + CLASS) * DOUBLE, classOf[i]!, true);
+  for (const { nodes } of distinct) if (nodes) view.setInt32(addressOf(nodes) + DOUBLE, nodes.count, true);
+  kernel.call('prepare', segments, table, count, addressOf(RULES), addressOf(RATIOS));
+  return start + room * DOUBLE;
+}
+
+function writePair(
+  view: DataView,
+  at: number,
+  pair: DepthPair,
+  addressOf: (key: object | undefined) => number,
+): void {
+  const { list, far, rest, nodes, weights } = pair;
+  view.setFloat64(at, list.factor, true);
+  view.setFloat64(at + 8, far?.perSquare ?? 0, true);
+  view.setFloat64(at + 16, rest?.perSquare ?? 0, true);
+  view.setFloat64(at + 24, (rest?.smoothness ?? 0) ** 2, true);
+  const whole = [addressOf(far), addressOf(rest), addressOf(list), list.primaryCount, list.count, addressOf(nodes), addressOf(weights)]; // biome-ignore format: one row
+  whole.forEach((value, k) => {
+    view.setUint32(at + 32 + k * WORD, value, true);
+  });
+}
+
+/** Weight, sign, offset, nothing. */
+function packedImages(list: ImageList): Float64Array {
+  const found = new Float64Array(list.count * 4);
+  for (let k = 0; k < list.count; k++) found.set([list.weight[k]!, list.sign[k]!, list.offset[k]!], 4 * k);
   return found;
 }
 
-/** Rules of order 0 (none) to 4. */
+/** Squared ratios of pairs, then of smooth images. */
+const RATIOS: Float64Array = Float64Array.from([...PAIR_RATIOS, ...SMOOTH_ORDERS.map(([ratio]) => ratio)], (ratio) => ratio * ratio); // biome-ignore format: one row
+
+/** Rules of order 0 (none) to 32: points on [−1, 1], then weights; an odd one repeats its last point with weight nothing. */
 const RULES: Float64Array = rules();
 
 function rules(): Float64Array {
-  const found = new Float64Array((ORDERS + 1) * 2 * ORDERS);
-  for (let order = 1; order <= ORDERS; order++) {
+  const most = SMOOTH_ORDERS.at(-1)![1];
+  const found = new Float64Array((most + 1) * 2 * most);
+  for (let order = 1; order <= most; order++) {
     const { points, weights } = gaussLegendre(order);
-    for (let k = 0; k < ORDERS; k++) {
-      found[order * 2 * ORDERS + k] = 2 * points[Math.min(k, order - 1)]! - 1;
-      found[order * 2 * ORDERS + ORDERS + k] = k < order ? weights[k]! : 0;
+    for (let k = 0; k < most; k++) {
+      found[order * 2 * most + k] = 2 * points[Math.min(k, order - 1)]! - 1;
+      found[order * 2 * most + most + k] = k < order ? weights[k]! : 0;
     }
   }
   return found;

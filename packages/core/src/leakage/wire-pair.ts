@@ -1,4 +1,5 @@
 // Mean of 1/r between two straight filaments: the closed double integral that every near leakage entry is made of.
+import { angleOf, logarithm } from '../numerics/elementary.ts';
 
 /** Straight axis as scalars: ends in plan and depth, m. */
 export interface Wire {
@@ -18,65 +19,97 @@ const PARALLEL_SINE = 1e-7;
 
 /**
  * (1/L_i L_j)∬ ds dt/√(r² + a²) over two straight wires, 1/m; symmetric in the wires.
- * Parallel axes at distance D: G(x2 − y1) − G(x1 − y1) − G(x2 − y2) + G(x1 − y2), G(u) = u·asinh(u/D) − √(u² + D²).
- * Skew axes, with s and t measured from the closest approach, angle θ, distance d:
- * F = s·asinh((t − s cosθ)/√(s² sin²θ + d²)) + t·asinh((s − t cosθ)/√(t² sin²θ + d²))
- *   − (d/sinθ)·atan((d² cosθ + s t sin²θ)/(d r sinθ)), differenced over the four corners.
- * Source: the mutual inductance of inclined filaments, Campbell (Phys. Rev. 5, 1915) (from memory); both forms are
- * tested against numerical integration.
  * @param radius a, the larger of the two conductor radii, m; greater than 0
  */
 export function meanInverseDistance(p: Wire, q: Wire, radius: number): number {
-  let ux = p.x2 - p.x1;
-  let uy = p.y2 - p.y1;
-  let uz = p.z2 - p.z1;
-  let vx = q.x2 - q.x1;
-  let vy = q.y2 - q.y1;
-  let vz = q.z2 - q.z1;
+  const ux = p.x2 - p.x1;
+  const uy = p.y2 - p.y1;
+  const uz = p.z2 - p.z1;
+  const vx = q.x2 - q.x1;
+  const vy = q.y2 - q.y1;
+  const vz = q.z2 - q.z1;
   const lp = Math.sqrt(ux * ux + uy * uy + uz * uz);
   const lq = Math.sqrt(vx * vx + vy * vy + vz * vz);
-  ux /= lp;
-  uy /= lp;
-  uz /= lp;
-  vx /= lq;
-  vy /= lq;
-  vz /= lq;
-  const wx = q.x1 - p.x1;
-  const wy = q.y1 - p.y1;
-  const wz = q.z1 - p.z1;
+  const [wx, wy, wz] = [q.x1 - p.x1, q.y1 - p.y1, q.z1 - p.z1];
+  return axesMean(wx, wy, wz, ux / lp, uy / lp, uz / lp, lp, vx / lq, vy / lq, vz / lq, lq, radius * radius); // biome-ignore format: one call
+}
+
+/**
+ * The same from scalars: w from the first end of one wire to that of the other, unit vectors u and v, lengths, a².
+ * Parallel axes at distance D: G(x2 − y1) − G(x1 − y1) − G(x2 − y2) + G(x1 − y2), G(u) = |u|·ln[(|u| + √(u² + D²))/D] − √(u² + D²).
+ * Skew axes, with s and t measured from the closest approach, angle θ, distance d:
+ * F = s·asinh((t − s cosθ)/√(s² sin²θ + d²)) + t·asinh((s − t cosθ)/√(t² sin²θ + d²))
+ *   − (d/sinθ)·atan((d² cosθ + s t sin²θ)/(d r sinθ)), differenced over the four corners; two corners that share s or t
+ * need one logarithm of a ratio, and two arc tangents one angle of a product.
+ * Source: the mutual inductance of inclined filaments, Campbell (Phys. Rev. 5, 1915) (from memory); both forms are
+ * tested against numerical integration.
+ */
+export function axesMean(
+  wx: number,
+  wy: number,
+  wz: number,
+  ux: number,
+  uy: number,
+  uz: number,
+  lp: number,
+  vx: number,
+  vy: number,
+  vz: number,
+  lq: number,
+  aa: number,
+): number {
   const cosine = ux * vx + uy * vy + uz * vz;
   const cx = uy * vz - uz * vy;
   const cy = uz * vx - ux * vz;
   const cz = ux * vy - uy * vx;
-  const sineSquared = cx * cx + cy * cy + cz * cz;
-  const sine = Math.sqrt(sineSquared);
-  const along = wx * ux + wy * uy + wz * uz;
-  const aa = radius * radius;
-  if (sine < PARALLEL_SINE) {
+  const ss = cx * cx + cy * cy + cz * cz;
+  if (ss < PARALLEL_SINE * PARALLEL_SINE) {
+    const along = wx * ux + wy * uy + wz * uz;
     const px = wx - along * ux;
     const py = wy - along * uy;
     const pz = wz - along * uz;
     const gap = Math.sqrt(px * px + py * py + pz * pz + aa);
-    const y2 = along + Math.sign(cosine) * lq;
-    const from = Math.min(along, y2);
-    const to = Math.max(along, y2);
-    return (
-      (parallelTerm(lp - from, gap) -
-        parallelTerm(-from, gap) -
-        parallelTerm(lp - to, gap) +
-        parallelTerm(-to, gap)) /
-      (lp * lq)
-    );
+    const end = along + (cosine < 0 ? -lq : lq);
+    return parallelMean(lp, lq, Math.min(along, end), Math.max(along, end), gap);
   }
-  const s0 = triple(wx, wy, wz, vx, vy, vz, cx, cy, cz) / sineSquared;
-  const t0 = triple(wx, wy, wz, ux, uy, uz, cx, cy, cz) / sineSquared;
+  const sine = Math.sqrt(ss);
+  const s1 = -triple(wx, wy, wz, vx, vy, vz, cx, cy, cz) / ss;
+  const t1 = -triple(wx, wy, wz, ux, uy, uz, cx, cy, cz) / ss;
+  const s2 = s1 + lp;
+  const t2 = t1 + lq;
   const height = (wx * cx + wy * cy + wz * cz) / sine;
-  const d = Math.sqrt(height * height + aa);
+  const dd = height * height + aa;
+  const d = Math.sqrt(dd);
+  const ws1 = s1 * s1 * ss + dd;
+  const ws2 = s2 * s2 * ss + dd;
+  const x11 = t1 - s1 * cosine;
+  const x12 = t2 - s1 * cosine;
+  const x21 = t1 - s2 * cosine;
+  const x22 = t2 - s2 * cosine;
+  const r11 = Math.sqrt(x11 * x11 + ws1);
+  const r12 = Math.sqrt(x12 * x12 + ws1);
+  const r21 = Math.sqrt(x21 * x21 + ws2);
+  const r22 = Math.sqrt(x22 * x22 + ws2);
+  const logs =
+    s2 * logRatio(x21, r21, x22, r22, ws2) -
+    s1 * logRatio(x11, r11, x12, r12, ws1) +
+    (t2 * logRatio(s1 - t2 * cosine, r12, s2 - t2 * cosine, r22, t2 * t2 * ss + dd) -
+      t1 * logRatio(s1 - t1 * cosine, r11, s2 - t1 * cosine, r21, t1 * t1 * ss + dd));
+  const base = dd * cosine;
+  const ds = d * sine;
+  const angles =
+    turn(base + s2 * t2 * ss, ds * r22, base + s1 * t2 * ss, ds * r12) -
+    turn(base + s2 * t1 * ss, ds * r21, base + s1 * t1 * ss, ds * r11);
+  return (logs - (d / sine) * angles) / (lp * lq);
+}
+
+/** The mean over [0, lp] and [from, to] on two parallel axes at a distance. */
+export function parallelMean(lp: number, lq: number, from: number, to: number, gap: number): number {
+  const perGap = 1 / gap;
   return (
-    (skewTerm(lp - s0, lq - t0, cosine, sine, d) -
-      skewTerm(-s0, lq - t0, cosine, sine, d) -
-      skewTerm(lp - s0, -t0, cosine, sine, d) +
-      skewTerm(-s0, -t0, cosine, sine, d)) /
+    (parallelTerm(lp - from, gap, perGap) -
+      parallelTerm(-from, gap, perGap) -
+      (parallelTerm(lp - to, gap, perGap) - parallelTerm(-to, gap, perGap))) /
     (lp * lq)
   );
 }
@@ -106,19 +139,22 @@ export function meanInverseDistanceToPoint(p: Wire, x: number, y: number, z: num
   return Math.log((sum + length) / (sum - length)) / length;
 }
 
-function parallelTerm(u: number, gap: number): number {
-  return u * Math.asinh(u / gap) - Math.sqrt(u * u + gap * gap);
+function parallelTerm(u: number, gap: number, perGap: number): number {
+  const v = Math.abs(u);
+  const r = Math.sqrt(v * v + gap * gap);
+  return v * logarithm((v + r) * perGap) - r;
 }
 
-function skewTerm(s: number, t: number, cosine: number, sine: number, d: number): number {
-  const dd = d * d;
-  const r = Math.sqrt(Math.max(0, s * s + t * t - 2 * s * t * cosine) + dd);
-  const ss = sine * sine;
-  return (
-    s * Math.asinh((t - s * cosine) / Math.sqrt(s * s * ss + dd)) +
-    t * Math.asinh((s - t * cosine) / Math.sqrt(t * t * ss + dd)) -
-    (d / sine) * Math.atan((dd * cosine + s * t * ss) / (d * sine * r))
-  );
+/** asinh(x2/w) − asinh(x1/w) = ln[(x2 + r2)/(x1 + r1)], x1 ≤ x2, r² = x² + w², without loss where x is negative. */
+export function logRatio(x1: number, r1: number, x2: number, r2: number, ww: number): number {
+  if (x1 >= 0) return logarithm((x2 + r2) / (x1 + r1));
+  if (x2 < 0) return logarithm((r1 - x1) / (r2 - x2));
+  return logarithm(((x2 + r2) * (r1 - x1)) / ww);
+}
+
+/** atan(n2/d2) − atan(n1/d1), d1 and d2 positive. */
+function turn(n2: number, d2: number, n1: number, d1: number): number {
+  return angleOf(n2 * d1 - n1 * d2, d2 * d1 + n2 * n1);
 }
 
 /** (w × v)·c */

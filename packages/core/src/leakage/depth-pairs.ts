@@ -1,0 +1,246 @@
+// What two depth classes share: their images, and the tables that make an entry cost the same whatever their number.
+import type { SegmentMesh } from '../geometry/segments.ts';
+import { gaussLegendre } from '../numerics/gauss-legendre.ts';
+import type { ImageList, SoilImages } from '../soil/image-list.ts';
+import { type DepthClass, depthClasses } from './depth-classes.ts';
+import { collapsed, type DepthNodes, type DepthRange, depthNodes, nodeWeights } from './depth-nodes.ts';
+import { smoothOrder } from './pair-potential.ts';
+import { type RadialTable, radialTable, radialValue } from './radial-table.ts';
+import { smoothImages, smoothKernel } from './smooth-kernel.ts';
+import { logRatio, parallelMean } from './wire-pair.ts';
+
+export interface DepthPair {
+  readonly list: ImageList;
+  /** mean of all images over two far segments; absent where too few pairs would use it */
+  readonly far?: RadialTable;
+  /** the same of images past the primary ones, for near segments too */
+  readonly rest?: RadialTable;
+  /** these images for two vertical classes: weights of the layers' nodes */
+  readonly nodes?: DepthNodes;
+  readonly weights?: Float64Array;
+}
+
+export interface DepthPairs {
+  /** classes, then one for the other segments of each layer */
+  readonly count: number;
+  /** shape [mesh.count] */
+  readonly classOf: Int32Array;
+  /** whether a class is of vertical segments; shape [count] */
+  readonly upright: readonly boolean[];
+  /** the same pair at [a, b] and [b, a]; shape [count × count] */
+  readonly pairs: readonly DepthPair[];
+}
+
+/** Most classes that get tables, the most populous first: the pairs of classes stay below ten thousand. */
+const MOST_CLASSES = 128;
+/** Pairs of segments that make a table worth its building: 100 images at 1 500 places against 100 images at 4 points. */
+const TABLE_PAIRS = 1000;
+/** The same for a table put together from nodes, which takes a tenth. */
+const COLLAPSED_PAIRS = 100;
+/** Pairs with vertical segments that make nodes for their layers worth building. */
+const NODES_PAIRS = 8000;
+/** Vertical pairs that make a table of their own worth putting together, against reading nodes. */
+const UPRIGHT_TABLE_PAIRS = 4000;
+/** Largest error of a table that is used: a hundredth of what an entry may err. */
+const TABLE_ERROR = 1e-8;
+/** Tables from which others are made reach this much farther: those end up to two bins past the reach, 1.12 of it. */
+const WIDER = 1.2;
+/** Least distance between points of two far segments, over the longer length: between centres 1.987, less a half and the outermost of four points. */
+const APART = 1;
+
+interface Class extends DepthClass {
+  /** shortest length, m */
+  readonly shortest: number;
+}
+
+/** @param reach largest horizontal distance between two points of the metal, m */
+export function depthPairs(mesh: SegmentMesh, images: SoilImages, reach: number): DepthPairs {
+  const { classes, classOf } = chosenClasses(mesh);
+  const layers = images.soil.layers.length;
+  const count = classes.length + layers;
+  for (let i = 0; i < mesh.count; i++) if (classOf[i]! < 0) classOf[i] = classes.length + mesh.layer[i]!;
+  const layerOf = (at: number): number => (at < classes.length ? classes[at]!.layer : at - classes.length);
+  const nodesOf = layerNodes(classes, images, reach);
+  const pairs: DepthPair[] = new Array(count * count);
+  for (let a = 0; a < count; a++)
+    for (let b = 0; b <= a; b++) {
+      // the shallower layer is the source
+      const [s, f] = layerOf(a) <= layerOf(b) ? [a, b] : [b, a];
+      const list = images.list(layerOf(s), layerOf(f));
+      const [source, field] = [classes[s], classes[f]];
+      const pair = source === undefined || field === undefined ? { list } : classPair(list, field, source, nodesOf(source.layer, field.layer), reach); // biome-ignore format: one choice
+      pairs[a * count + b] = pair;
+      pairs[b * count + a] = pair;
+    }
+  return { count, classOf, upright: Array.from({ length: count }, (_, at) => classes[at]?.vertical ?? false), pairs }; // biome-ignore format: one row a field
+}
+
+/** The most populous classes, and the class of each segment; −1 for one that slopes or is alone. */
+function chosenClasses(mesh: SegmentMesh): { classes: Class[]; classOf: Int32Array } {
+  const { classes, of } = depthClasses(mesh);
+  const members = new Int32Array(classes.length);
+  const shortest = new Float64Array(classes.length).fill(Number.POSITIVE_INFINITY);
+  let leaking = 0;
+  for (let i = 0; i < mesh.count; i++) {
+    if (mesh.leaking[i] !== 1) continue;
+    leaking++;
+    const at = of[i]!;
+    if (at < 0) continue;
+    members[at]!++;
+    shortest[at] = Math.min(shortest[at]!, mesh.length[i]!);
+  }
+  const chosen = Array.from(classes.keys())
+    .filter((at) => members[at]! * leaking >= COLLAPSED_PAIRS)
+    .sort((a, b) => members[b]! - members[a]! || a - b)
+    .slice(0, MOST_CLASSES);
+  const placeOf = new Int32Array(classes.length).fill(-1);
+  chosen.forEach((at, place) => {
+    placeOf[at] = place;
+  });
+  return {
+    classes: chosen.map((at) => ({ ...classes[at]!, members: members[at]!, shortest: shortest[at]! })),
+    classOf: of.map((at) => (at < 0 ? -1 : placeOf[at]!)),
+  };
+}
+
+function pairCount(a: Class, b: Class): number {
+  return a === b ? (a.members * (a.members + 1)) / 2 : a.members * b.members;
+}
+
+/** Nodes by source and field layer, made when first asked for; undefined where they would not pay. */
+function layerNodes(
+  classes: readonly Class[],
+  images: SoilImages,
+  reach: number,
+): (s: number, f: number) => DepthNodes | undefined {
+  const known = new Map<string, DepthNodes | undefined>();
+  return (s, f) => {
+    const key = `${s} ${f}`;
+    if (known.has(key)) return known.get(key);
+    const [sources, fields] = [s, f].map((layer) => classes.filter((one) => one.layer === layer));
+    let uprightPairs = 0;
+    for (const a of sources!)
+      for (const b of fields!) if (a.vertical || b.vertical) uprightPairs += a.members * b.members;
+    if (s === f) uprightPairs /= 2;
+    const nodes = uprightPairs < NODES_PAIRS ? undefined : depthNodes(images.list(s, f), extent(fields!), extent(sources!), WIDER * reach); // biome-ignore format: one choice
+    known.set(key, nodes);
+    return nodes;
+  };
+}
+
+function extent(classes: readonly Class[]): DepthRange {
+  return {
+    z1: classes.reduce((least, one) => Math.min(least, one.z1), Number.POSITIVE_INFINITY),
+    z2: classes.reduce((most, one) => Math.max(most, one.z2), Number.NEGATIVE_INFINITY),
+  };
+}
+
+function classPair(
+  list: ImageList,
+  field: Class,
+  source: Class,
+  nodes: DepthNodes | undefined,
+  reach: number,
+): DepthPair {
+  const size = pairCount(field, source);
+  const smooth = list.count > list.primaryCount;
+  const anyUpright = field.vertical || source.vertical;
+  if (!anyUpright) {
+    if (size < TABLE_PAIRS) return { list };
+    const rest = smooth
+      ? accurate(smoothKernel(list, smoothImages(list), source, field.z1, WIDER * reach))
+      : undefined;
+    return smooth && rest === undefined ? { list } : withFar(list, field, source, rest, reach);
+  }
+  if (smooth && nodes === undefined) return { list };
+  const weights = nodes && weightsOf(nodes, field, source);
+  if (smooth && weights === undefined) return { list };
+  const both = field.vertical && source.vertical;
+  if (both && size < UPRIGHT_TABLE_PAIRS) return nodes && weights ? { list, nodes, weights } : { list };
+  if (size < (smooth ? COLLAPSED_PAIRS : TABLE_PAIRS)) return { list };
+  return withFar(list, field, source, nodes && weights && collapsed(nodes, weights), reach);
+}
+
+/** Weights for two classes; undefined where an extent is too long for points on the nearest image. */
+function weightsOf(nodes: DepthNodes, field: Class, source: Class): Float64Array | undefined {
+  const longer = Math.max(field.z2 - field.z1, source.z2 - source.z1);
+  const order = smoothOrder(nodes.smoothness ** 2, longer);
+  return order === 0 ? undefined : nodeWeights(nodes, field, source, (length) => smoothOrder(nodes.smoothness ** 2, length)); // biome-ignore format: one choice
+}
+
+function accurate(table: RadialTable | undefined): RadialTable | undefined {
+  return table !== undefined && table.error <= TABLE_ERROR ? table : undefined;
+}
+
+/**
+ * A table of all images for far segments: the primary ones over the extents, and the rest from its own table. Its bins
+ * begin so small that at the least distance of far segments a singularity is as far from a bin as if it were s away.
+ */
+function withFar(
+  list: ImageList,
+  field: Class,
+  source: Class,
+  rest: RadialTable | undefined,
+  reach: number,
+): DepthPair {
+  const apart = APART * Math.max(field.shortest, source.shortest);
+  const primaries = Array.from({ length: list.primaryCount }, (_, k) => primaryMean(list, k, field, source));
+  const nearest = primaries.reduce((least, one) => Math.min(least, one.nearest), Number.POSITIVE_INFINITY);
+  const least = Math.max(0, apart ** 2 - nearest ** 2);
+  // with bins for s, r² + h² ≥ (8/9)(r² + s²) must hold from the least r² on
+  const scale = Math.sqrt((9 / 8) * (nearest ** 2 + least / 9));
+  const all = (rr: number): number => {
+    let sum = rest === undefined ? 0 : radialValue(rest, rr);
+    for (const { mean } of primaries) sum += mean(rr);
+    return sum;
+  };
+  const far = accurate(radialTable(all, scale, reach, least));
+  return { list, ...(rest && { rest }), ...(far && { far }) };
+}
+
+/** One image's mean over the extents of two classes, as a function of r², and its least height. */
+function primaryMean(
+  list: ImageList,
+  k: number,
+  field: Class,
+  source: Class,
+): { nearest: number; mean: (rr: number) => number } {
+  const weight = list.weight[k]!;
+  const sign = list.sign[k]!;
+  const [s1, s2] = [source.z1, source.z2].map((z) => sign * z + list.offset[k]!);
+  const low = field.z1 - Math.max(s1!, s2!);
+  const high = field.z2 - Math.min(s1!, s2!);
+  const nearest = Math.max(0, low, -high);
+  if (!field.vertical && !source.vertical)
+    return { nearest, mean: (rr) => weight / Math.sqrt(rr + low * low) };
+  if (!field.vertical || !source.vertical)
+    return {
+      nearest,
+      mean: (rr) => (weight * logRatio(low, Math.sqrt(rr + low * low), high, Math.sqrt(rr + high * high), rr)) / (high - low), // biome-ignore format: one formula
+    };
+  const [lf, ls] = [field.z2 - field.z1, source.z2 - source.z1];
+  const from = Math.min(s1!, s2!) - field.z1;
+  const farSquare = (FAR_EXTENTS * Math.max(lf, ls)) ** 2;
+  return {
+    nearest,
+    mean: (rr) =>
+      weight *
+      (rr > farSquare ? extentMean(rr, lf, ls, from) : parallelMean(lf, ls, from, from + ls, Math.sqrt(rr))),
+  };
+}
+
+/** Horizontal distance over the longer extent from which points keep more digits than differences: three leave 1e-9. */
+const FAR_EXTENTS = 10;
+const POINTS = 3;
+
+/** Mean of 1/√(r² + (t − s)²) over t in [0, lf] and s in [from, from + ls], by points. */
+function extentMean(rr: number, lf: number, ls: number, from: number): number {
+  const { points, weights } = gaussLegendre(POINTS);
+  let sum = 0;
+  for (let a = 0; a < POINTS; a++)
+    for (let b = 0; b < POINTS; b++) {
+      const h = points[a]! * lf - from - points[b]! * ls;
+      sum += (weights[a]! * weights[b]!) / Math.sqrt(rr + h * h);
+    }
+  return sum;
+}
