@@ -2,9 +2,6 @@
 export {
   type Desk,
   DeskContext,
-  type DisplayUnits,
-  type JsonObject,
-  type JsonValue,
   type PastedTable,
   type QuantityKind,
   type Reading,
@@ -14,9 +11,12 @@ export {
 } from './desk/desk.ts';
 export { pathText, sectionOfInput } from './desk/study-path.ts';
 export { type FigureFile, figures } from './figure/figures.tsx';
-export { measured, percent, place, quantity } from './format/number.ts';
+export { place } from './format/length.ts';
+export { measured, percent, quantity } from './format/number.ts';
+export { quantityText } from './format/quantity-text.ts';
 export { sheetCss } from './page/css.ts';
 export { sheetHtml } from './page/html.tsx';
+export { Questions } from './page/questions.tsx';
 export { Sheet } from './page/sheet.tsx';
 export type { TableFile } from './table/csv.ts';
 export { tables } from './table/tables.ts';

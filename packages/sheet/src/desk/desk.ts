@@ -1,12 +1,6 @@
 // What a live page lends to the sheet: the study as it stands, ways to change it, and what surrounds each section.
-import type { Outcome } from '@ohmstead/study';
+import type { DisplayUnits, JsonValue, Outcome } from '@ohmstead/study';
 import { type Context, createContext, type VNode } from 'preact';
-
-/** A value of study.json. */
-export type JsonValue = null | boolean | number | string | readonly JsonValue[] | JsonObject;
-export interface JsonObject {
-  readonly [key: string]: JsonValue;
-}
 
 /** Keys and places from the root of study.json inward, e.g. `['soil', 'layers', 0, 'resistivity_ohm_m']`. */
 export type StudyPath = readonly (string | number)[];
@@ -48,8 +42,6 @@ export type Reading = { readonly value: number } | { readonly complaint: string 
 
 /** Lists of study.json that take rows pasted from a spreadsheet. */
 export type PastedTable = 'layers' | 'cases' | 'seasons';
-
-export type DisplayUnits = 'SI' | 'US';
 
 /** All that a live page lends to the sheet; without it the sheet is frozen. */
 export interface Desk {

@@ -2,6 +2,7 @@
 import type { Outcome } from '@ohmstead/study';
 import type { VNode } from 'preact';
 import { renderToString } from 'preact-render-to-string';
+import { UnitsContext } from '../desk/use-units.ts';
 import { uniqueSlugs } from '../format/slug.ts';
 import { diagonalOf } from '../geometry/electrode-size.ts';
 import type { MapKind } from '../geometry/map-drawing.ts';
@@ -37,6 +38,10 @@ const MAP_KINDS: readonly MapKind[] = ['potential', 'step', 'touch'];
  */
 export function figures(outcome: Outcome): readonly FigureFile[] {
   const css = standaloneCss();
+  const units = outcome.study.display_units ?? 'SI';
+  const inUnits = (figure: VNode): VNode => (
+    <UnitsContext.Provider value={units}>{figure}</UnitsContext.Provider>
+  );
   const drawn = new Map<string, VNode>();
   const add = (name: string, draw: (name: string) => VNode): void => {
     drawn.set(name, draw(name));
@@ -92,5 +97,5 @@ export function figures(outcome: Outcome): readonly FigureFile[] {
   });
   return [...drawn]
     .sort(([a], [b]) => (a < b ? -1 : 1))
-    .map(([name, figure]) => ({ name: `${name}.svg`, svg: `${xmlText(renderToString(figure))}\n` }));
+    .map(([name, figure]) => ({ name: `${name}.svg`, svg: `${xmlText(renderToString(inUnits(figure)))}\n` }));
 }

@@ -1,6 +1,8 @@
 // The outer shape of every figure: root element with title and description, axes, scale bar.
 import type { ComponentChildren, VNode } from 'preact';
-import { fixed } from '../format/number.ts';
+import { useUnits } from '../desk/use-units.ts';
+import { lengthUnit } from '../format/length.ts';
+import { fixed, THIN_SPACE } from '../format/number.ts';
 import type { Plate } from '../geometry/plate.ts';
 import { roundLength, ticksIn } from '../geometry/ticks.ts';
 import { Path } from './drawn.tsx';
@@ -44,15 +46,18 @@ export function Figure(props: FigureProps): VNode {
 /** About so many ticks along the longer axis. */
 const TICKS = 8;
 
-/** Ticks in metres along the lower and the left side of the ground; `drawn` adds the axes themselves. */
+/** Ticks at round lengths along the lower and the left side of the ground; `drawn` adds the axes themselves. */
 export function PlanAxes({ plate, drawn = false }: { plate: Plate; drawn?: boolean }): VNode {
   const { frame, extent } = plate;
-  const xs = ticksIn(extent.x[0], extent.x[1], TICKS);
+  const { metres, sign } = lengthUnit(useUnits());
+  const [left, right] = extent.x.map((x) => x / metres);
+  const [low, high] = extent.y.map((y) => y / metres);
+  const xs = ticksIn(left, right, TICKS);
   const step = xs.length > 1 ? xs[1] - xs[0] : 1;
-  const ys = ticksIn(extent.y[0], extent.y[1], Math.max(2, (extent.y[1] - extent.y[0]) / step));
+  const ys = ticksIn(low, high, Math.max(2, (high - low) / step));
   /* the unit stands at the last tick of each axis */
   const text = (value: number, last: number): string =>
-    `${fixed(value, step < 1 ? 1 : 0)}${value === last ? '\u202fm' : ''}`;
+    `${fixed(value, step < 1 ? 1 : 0)}${value === last ? THIN_SPACE + sign : ''}`;
   return (
     <g>
       {drawn && (
@@ -62,12 +67,12 @@ export function PlanAxes({ plate, drawn = false }: { plate: Plate; drawn?: boole
         <g key={x}>
           <line
             class="tick"
-            x1={px(plate.x(x))}
-            x2={px(plate.x(x))}
+            x1={px(plate.x(x * metres))}
+            x2={px(plate.x(x * metres))}
             y1={px(frame.bottom)}
             y2={px(frame.bottom + 5)}
           />
-          <text class="soft mid" x={px(plate.x(x))} y={px(frame.bottom + 8)} dy="0.85em">
+          <text class="soft mid" x={px(plate.x(x * metres))} y={px(frame.bottom + 8)} dy="0.85em">
             {text(x, xs[xs.length - 1])}
           </text>
         </g>
@@ -78,10 +83,10 @@ export function PlanAxes({ plate, drawn = false }: { plate: Plate; drawn?: boole
             class="tick"
             x1={px(frame.left - 5)}
             x2={px(frame.left)}
-            y1={px(plate.y(y))}
-            y2={px(plate.y(y))}
+            y1={px(plate.y(y * metres))}
+            y2={px(plate.y(y * metres))}
           />
-          <text class="soft end" x={px(frame.left - 8)} y={px(plate.y(y))} dy="0.35em">
+          <text class="soft end" x={px(frame.left - 8)} y={px(plate.y(y * metres))} dy="0.35em">
             {text(y, ys[ys.length - 1])}
           </text>
         </g>
@@ -90,18 +95,17 @@ export function PlanAxes({ plate, drawn = false }: { plate: Plate; drawn?: boole
   );
 }
 
-/** A bar of round length with its metres, its right end at the given place. */
+/** A bar of round length, its right end at the given place. */
 export function ScaleBar({ plate, x, y, most }: { plate: Plate; x: number; y: number; most: number }): VNode {
-  const metres = roundLength(most / plate.scale);
-  const length = metres * plate.scale;
+  const { metres, sign } = lengthUnit(useUnits());
+  const round = roundLength(most / plate.scale / metres);
+  const length = round * metres * plate.scale;
   return (
     <g>
       <Path class="line" d={`M${px(x - length)},${px(y - 4)}v4h${px(length)}v-4`} />
-      <text
-        class="end"
-        x={px(x - length - 6)}
-        y={px(y)}
-      >{`${fixed(metres, metres < 1 ? 1 : 0)}\u202fm`}</text>
+      <text class="end" x={px(x - length - 6)} y={px(y)}>
+        {fixed(round, round < 1 ? 1 : 0) + THIN_SPACE + sign}
+      </text>
     </g>
   );
 }

@@ -1,8 +1,10 @@
 // Draws a section through the ground: layers, covering, and the depth at which the metal lies.
 import type { Outcome, PlanConductor, Point } from '@ohmstead/study';
 import type { VNode } from 'preact';
+import { useUnits } from '../desk/use-units.ts';
 import { fittedQuantity } from '../format/fitted.ts';
-import { fixed, givenQuantity } from '../format/number.ts';
+import { lengthUnit } from '../format/length.ts';
+import { fixed, givenQuantity, THIN_SPACE } from '../format/number.ts';
 import { sectionLines } from '../geometry/section-lines.ts';
 import { ticksIn } from '../geometry/ticks.ts';
 import { Path } from './drawn.tsx';
@@ -58,6 +60,7 @@ function sideOf(outcome: Outcome, interfaces: readonly number[]): Side {
 
 /** The electrode seen from the side, in the layers of the soil; depth is stretched. */
 export function GroundFigure({ outcome, name, title, css }: GroundFigureProps): VNode {
+  const { metres, sign, words } = lengthUnit(useUnits());
   const { layers } = outcome.results.soil;
   const told = outcome.results.ground === null ? givenQuantity : fittedQuantity;
   const interfaces = depthsOfInterfaces(outcome);
@@ -74,7 +77,8 @@ export function GroundFigure({ outcome, name, title, css }: GroundFigureProps): 
       .filter((line) => line.floating === floating)
       .map(({ from, to }) => linePath([from, to].map(([along, depth]): Point => [x(along), y(depth)])))
       .join('');
-  const ticks = ticksIn(side.from, side.to, 8);
+  const ticks = ticksIn(side.from / metres, side.to / metres, 8);
+  const deepest = side.deepest / metres;
   const description = `Section through the ground with ${layers.length} ${layers.length === 1 ? 'layer' : 'layers'}; the metal is projected on the section. Depth is drawn ${fixed(stretch, 1)} times larger than length.`;
   return (
     <Figure name={name} title={title} description={description} width={WIDTH} height={HEIGHT} wide css={css}>
@@ -98,17 +102,17 @@ export function GroundFigure({ outcome, name, title, css }: GroundFigureProps): 
       <line class="ground-line" x1={FRAME.left} x2={FRAME.right} y1={FRAME.top} y2={FRAME.top} />
       <Path class="metal floating" d={path(true)} />
       <Path class="metal" d={path(false)} />
-      {ticksIn(0, side.deepest, 4).map((depth) => (
-        <text key={depth} class="soft end" x={FRAME.left - 8} y={px(y(depth))} dy="0.35em">
-          {fixed(depth, side.deepest < 4 ? 1 : 0)}
+      {ticksIn(0, deepest, 4).map((depth) => (
+        <text key={depth} class="soft end" x={FRAME.left - 8} y={px(y(depth * metres))} dy="0.35em">
+          {fixed(depth, deepest < 4 ? 1 : 0)}
         </text>
       ))}
       <text class="soft" x={FRAME.left} y={FRAME.top - 16}>
-        {`depth in metres, drawn ${fixed(stretch, stretch < 10 ? 1 : 0)} times larger`}
+        {`depth in ${words}, drawn ${fixed(stretch, stretch < 10 ? 1 : 0)} times larger`}
       </text>
       {ticks.map((m) => (
-        <text key={m} class="soft mid" x={px(x(m))} y={FRAME.bottom + 8} dy="0.85em">
-          {`${fixed(m, 0)}${m === ticks[ticks.length - 1] ? '\u202fm' : ''}`}
+        <text key={m} class="soft mid" x={px(x(m * metres))} y={FRAME.bottom + 8} dy="0.85em">
+          {fixed(m, 0) + (m === ticks[ticks.length - 1] ? THIN_SPACE + sign : '')}
         </text>
       ))}
     </Figure>

@@ -1,6 +1,8 @@
 // Keys of the figures: the ramp with its shares and volts, and the signs of a plan.
 import type { ComponentChildren, VNode } from 'preact';
-import { fixed } from '../format/number.ts';
+import { useUnits } from '../desk/use-units.ts';
+import { lengthUnit } from '../format/length.ts';
+import { fixed, THIN_SPACE } from '../format/number.ts';
 import type { Plate } from '../geometry/plate.ts';
 import { roundLength } from '../geometry/ticks.ts';
 import { Path } from './drawn.tsx';
@@ -113,8 +115,9 @@ const LONGEST_BAR = 110;
 /** Signs with their meaning, in columns, and the scale bar after them. */
 export function SignKey({ x, y, width, signs, plate }: SignKeyProps): VNode {
   const column = width / SIGN_COLUMNS;
-  const metres = roundLength(LONGEST_BAR / plate.scale);
-  const length = metres * plate.scale;
+  const { metres, sign } = lengthUnit(useUnits());
+  const round = roundLength(LONGEST_BAR / plate.scale / metres);
+  const length = round * metres * plate.scale;
   const last = signs.length;
   return (
     <g>
@@ -123,7 +126,9 @@ export function SignKey({ x, y, width, signs, plate }: SignKeyProps): VNode {
         transform={`translate(${px(x + (last % SIGN_COLUMNS) * column + 2)},${px(y + Math.floor(last / SIGN_COLUMNS) * SIGN_ROW)})`}
       >
         <Path class="line" d={`M0,-4v7h${px(length)}v-7`} />
-        <text x={px(length + 8)} dy="0.36em">{`${fixed(metres, metres < 1 ? 1 : 0)}\u202fm`}</text>
+        <text x={px(length + 8)} dy="0.36em">
+          {fixed(round, round < 1 ? 1 : 0) + THIN_SPACE + sign}
+        </text>
       </g>
     </g>
   );

@@ -11,6 +11,8 @@ export interface LogAxesProps {
   readonly up: readonly [number, number];
   readonly x: (value: number) => number;
   readonly y: (value: number) => number;
+  /** in which values to the right are round; 1 for that of `across` */
+  readonly acrossUnit?: number;
   /** what runs to the right, with its unit */
   readonly acrossName: string;
   /** what runs upward, with its unit */
@@ -22,7 +24,9 @@ function gridClass(tick: LogTick): string {
 }
 
 /** Gridlines at 1 to 9 of each decade, numbers at the round ones, names of both axes. */
-export function LogAxes({ frame, across, up, x, y, acrossName, upName }: LogAxesProps): VNode {
+export function LogAxes(props: LogAxesProps): VNode {
+  const { frame, across, up, x, y, acrossUnit = 1, acrossName, upName } = props;
+  const acrossTicks = logTicks(across[0] / acrossUnit, across[1] / acrossUnit);
   return (
     <g>
       {logTicks(up[0], up[1]).map((tick) => (
@@ -35,12 +39,12 @@ export function LogAxes({ frame, across, up, x, y, acrossName, upName }: LogAxes
           y2={px(y(tick.value))}
         />
       ))}
-      {logTicks(across[0], across[1]).map((tick) => (
+      {acrossTicks.map((tick) => (
         <line
           key={tick.value}
           class={gridClass(tick)}
-          x1={px(x(tick.value))}
-          x2={px(x(tick.value))}
+          x1={px(x(tick.value * acrossUnit))}
+          x2={px(x(tick.value * acrossUnit))}
           y1={px(frame.top)}
           y2={px(frame.bottom)}
         />
@@ -52,10 +56,16 @@ export function LogAxes({ frame, across, up, x, y, acrossName, upName }: LogAxes
             {given(value)}
           </text>
         ))}
-      {logTicks(across[0], across[1])
+      {acrossTicks
         .filter((tick) => tick.lettered)
         .map(({ value }) => (
-          <text key={value} class="soft mid" x={px(x(value))} y={px(frame.bottom + 9)} dy="0.85em">
+          <text
+            key={value}
+            class="soft mid"
+            x={px(x(value * acrossUnit))}
+            y={px(frame.bottom + 9)}
+            dy="0.85em"
+          >
             {given(value)}
           </text>
         ))}

@@ -1,6 +1,7 @@
 // Finds the places of the texts on a map: the note at the worst place, and the volts on the lines.
-import type { Outcome, Polygon } from '@ohmstead/study';
-import { measured, place, volts } from '../format/number.ts';
+import type { DisplayUnits, Outcome, Polygon } from '@ohmstead/study';
+import { place } from '../format/length.ts';
+import { measured, volts } from '../format/number.ts';
 import { about, type Box, grown } from '../geometry/box.ts';
 import { type LineLabel, labelIsolines } from '../geometry/isoline-labels.ts';
 import { assessedFor, type MapDrawing, type MapKind } from '../geometry/map-drawing.ts';
@@ -43,7 +44,12 @@ function marks(outcome: Outcome, plate: Plate): readonly Box[] {
 }
 
 /** Note at the worst voltage; none for the potential, nor where the place lies off the map. */
-export function worstNote(props: MapSubject, plate: Plate, metal: Occupancy): PlacedNote | undefined {
+export function worstNote(
+  props: MapSubject,
+  plate: Plate,
+  metal: Occupancy,
+  units: DisplayUnits,
+): PlacedNote | undefined {
   const { outcome, caseIndex, kind, small } = props;
   if (kind === 'potential') return undefined;
   const worst = outcome.results.cases[caseIndex][kind];
@@ -51,7 +57,7 @@ export function worstNote(props: MapSubject, plate: Plate, metal: Occupancy): Pl
   const { frame } = plate;
   if (!(x >= frame.left && x <= frame.right && y >= frame.top && y <= frame.bottom)) return undefined;
   const value = measured(worst.worst_V, worst.uncertainty_V, 'V');
-  const where = place(worst.x_m, worst.y_m);
+  const where = place(worst.x_m, worst.y_m, units);
   return placedNote({
     x,
     y,

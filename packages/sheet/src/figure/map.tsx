@@ -1,7 +1,9 @@
 // Draws a map of one case over the plan: bands of fill, lines in volts, what lies beyond the limit, the worst place.
-import type { Point } from '@ohmstead/study';
+import type { DisplayUnits, Point } from '@ohmstead/study';
 import type { VNode } from 'preact';
-import { measured, place, quantity } from '../format/number.ts';
+import { useUnits } from '../desk/use-units.ts';
+import { place } from '../format/length.ts';
+import { measured, quantity } from '../format/number.ts';
 import { latticeExtent } from '../geometry/contours.ts';
 import { assessedFor, mapDrawing } from '../geometry/map-drawing.ts';
 import { occupancyOf } from '../geometry/occupancy.ts';
@@ -46,25 +48,26 @@ function frameRing(plate: Plate): readonly Point[] {
 }
 
 /** Sentence for readers who do not see the picture. */
-function mapDescription(props: MapFigureProps): string {
+function mapDescription(props: MapFigureProps, units: DisplayUnits): string {
   const { outcome, caseIndex, kind } = props;
   const of = outcome.results.cases[caseIndex];
   if (kind === 'potential') {
     return `Filled contours of the surface potential over the plan, as share of the rise of ${measured(of.gpr_V, of.gpr_uncertainty_V, 'V')}.`;
   }
   const worst = of[kind];
-  return `Filled contours of ${kind} voltage over the plan, as share of the limit of ${quantity(worst.limit_V, 'V')}. The worst is ${measured(worst.worst_V, worst.uncertainty_V, 'V')} at ${place(worst.x_m, worst.y_m)}.`;
+  return `Filled contours of ${kind} voltage over the plan, as share of the limit of ${quantity(worst.limit_V, 'V')}. The worst is ${measured(worst.worst_V, worst.uncertainty_V, 'V')} at ${place(worst.x_m, worst.y_m, units)}.`;
 }
 
 /** The map of one quantity of one case. */
 export function MapFigure(props: MapFigureProps): VNode {
   const { outcome, caseIndex, kind, name, small } = props;
+  const units = useUnits();
   const { map } = outcome.cases[caseIndex];
   const plate = plateOf(latticeExtent(map), small ? SMALL : WIDE);
   const drawing = mapDrawing(outcome, caseIndex, kind, small);
   const area = assessedFor(outcome, kind);
   const metal = occupancyOf(plate.width, plate.height, metalLines(plate, outcome.plan.conductors));
-  const note = worstNote(props, plate, metal);
+  const note = worstNote(props, plate, metal, units);
   const taken: Taken = { metal, boxes: note === undefined ? [] : noteBoxes(note) };
   const labels = small ? [] : lineLabels(props, plate, drawing, taken);
   const of = outcome.results.cases[caseIndex];
@@ -77,7 +80,7 @@ export function MapFigure(props: MapFigureProps): VNode {
     <Figure
       name={name}
       title={props.title}
-      description={mapDescription(props)}
+      description={mapDescription(props, units)}
       width={plate.width}
       height={plate.height}
       wide={!small}

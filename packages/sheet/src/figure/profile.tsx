@@ -1,8 +1,10 @@
 // Draws the profile through the worst place: metal above, surface below, the touch limit between them.
-import type { Outcome, Point } from '@ohmstead/study';
+import type { DisplayUnits, Outcome, Point } from '@ohmstead/study';
 import { scaleLinear } from 'd3-scale';
 import type { VNode } from 'preact';
-import { fixed, measured, place, quantity } from '../format/number.ts';
+import { useUnits } from '../desk/use-units.ts';
+import { fixedLength, lengthUnit, place } from '../format/length.ts';
+import { fixed, measured, quantity, THIN_SPACE } from '../format/number.ts';
 import { keptApart } from '../geometry/apart.ts';
 import type { Box } from '../geometry/box.ts';
 import { occupancyOf } from '../geometry/occupancy.ts';
@@ -53,20 +55,23 @@ function drawn(scales: Scales, points: readonly Point[]): readonly Point[] {
 }
 
 /** Name of the axis along the profile: `x in metres, at y = 10.0 m`. */
-export function profileAxisText(outcome: Outcome, caseIndex: number): string {
+export function profileAxisText(outcome: Outcome, caseIndex: number, units: DisplayUnits): string {
   const { profile } = outcome.cases[caseIndex];
+  const { sign, words } = lengthUnit(units);
+  const at = (metres: number): string => fixedLength(metres, 1, units) + THIN_SPACE + sign;
   switch (profileDrawing(outcome, caseIndex).axis.kind) {
     case 'x':
-      return `x in metres, at y = ${fixed(profile.from[1], 1)}\u202fm`;
+      return `x in ${words}, at y = ${at(profile.from[1])}`;
     case 'y':
-      return `y in metres, at x = ${fixed(profile.from[0], 1)}\u202fm`;
+      return `y in ${words}, at x = ${at(profile.from[0])}`;
     case 'distance':
-      return `metres from ${place(profile.from[0], profile.from[1])} to ${place(profile.to[0], profile.to[1])}`;
+      return `${words} from ${place(profile.from[0], profile.from[1], units)} to ${place(profile.to[0], profile.to[1], units)}`;
   }
 }
 
 function Axes({ drawing, scales, text }: { drawing: ProfileDrawing; scales: Scales; text: string }): VNode {
-  const xs = ticksIn(drawing.range[0], drawing.range[1], 8);
+  const { metres } = lengthUnit(useUnits());
+  const xs = ticksIn(drawing.range[0] / metres, drawing.range[1] / metres, 8);
   const ys = ticksIn(drawing.volts[0], drawing.volts[1], 5);
   return (
     <g>
@@ -85,12 +90,12 @@ function Axes({ drawing, scales, text }: { drawing: ProfileDrawing; scales: Scal
         <g key={d}>
           <line
             class="tick"
-            x1={px(scales.x(d))}
-            x2={px(scales.x(d))}
+            x1={px(scales.x(d * metres))}
+            x2={px(scales.x(d * metres))}
             y1={FRAME.bottom}
             y2={FRAME.bottom + 5}
           />
-          <text class="soft mid" x={px(scales.x(d))} y={FRAME.bottom + 9} dy="0.85em">
+          <text class="soft mid" x={px(scales.x(d * metres))} y={FRAME.bottom + 9} dy="0.85em">
             {fixed(d, 0)}
           </text>
         </g>
@@ -159,6 +164,7 @@ function worstNote(
 
 /** Surface potential, metal and touch limit along the line through the worst place of a case. */
 export function ProfileFigure({ outcome, caseIndex, name, title, css }: ProfileFigureProps): VNode {
+  const units = useUnits();
   const drawing = profileDrawing(outcome, caseIndex);
   const scales = scalesOf(drawing);
   const of = outcome.results.cases[caseIndex];
@@ -177,7 +183,7 @@ export function ProfileFigure({ outcome, caseIndex, name, title, css }: ProfileF
       <defs>
         <Hatch id={`${name}-hatch`} />
       </defs>
-      <Axes drawing={drawing} scales={scales} text={profileAxisText(outcome, caseIndex)} />
+      <Axes drawing={drawing} scales={scales} text={profileAxisText(outcome, caseIndex, units)} />
       {drawing.beyond.length > 0 && (
         <Path d={ringPath(drawing.beyond.map((ring) => drawn(scales, ring)))} fill={`url(#${name}-hatch)`} />
       )}

@@ -1,7 +1,9 @@
 // Draws the sounding on logarithmic axes: readings, fitted curve, band of the soils, and the layers of the fit.
-import type { Point, SoilFit } from '@ohmstead/study';
+import type { DisplayUnits, Point, SoilFit } from '@ohmstead/study';
 import type { VNode } from 'preact';
-import { fittedQuantity, surveyed } from '../format/fitted.ts';
+import { useUnits } from '../desk/use-units.ts';
+import { fittedLength, surveyedLength, surveyedNumber } from '../format/fitted-length.ts';
+import { lengthUnit } from '../format/length.ts';
 import { tally } from '../format/words.ts';
 import type { Box } from '../geometry/box.ts';
 import { decades, logScale } from '../geometry/log-axis.ts';
@@ -65,7 +67,7 @@ function nameOf(traverse: string): string {
   return traverse.length > LONGEST_NAME ? `${traverse.slice(0, LONGEST_NAME - 1)}…` : traverse;
 }
 
-function signsOf(drawing: SoundingDrawing): readonly Sign[] {
+function signsOf(drawing: SoundingDrawing, units: DisplayUnits): readonly Sign[] {
   const own = drawing.traverses
     .slice(0, OWN_MARKS)
     .map((traverse, k): Sign => ({ text: nameOf(traverse), drawing: <SurveyMark traverse={k} /> }));
@@ -88,14 +90,14 @@ function signsOf(drawing: SoundingDrawing): readonly Sign[] {
     [
       true,
       {
-        text: `resolved to ${fittedQuantity(drawing.resolved, 'm')}`,
+        text: `resolved to ${fittedLength(drawing.resolved, units)}`,
         drawing: <Path class="resolved" d="M0,-9V9" />,
       },
     ],
     [
       drawing.diagonal !== undefined,
       {
-        text: `diagonal ${fittedQuantity(drawing.diagonal ?? 0, 'm')}`,
+        text: `diagonal ${fittedLength(drawing.diagonal ?? 0, units)}`,
         drawing: <Path class="diagonal" d="M0,-10V10" />,
       },
     ],
@@ -103,22 +105,24 @@ function signsOf(drawing: SoundingDrawing): readonly Sign[] {
   return [...own, ...signs.filter(([shown]) => shown).map(([, sign]) => sign)];
 }
 
-function descriptionOf({ readings, layer_count, sounding }: SoilFit): string {
+function descriptionOf({ readings, layer_count, sounding }: SoilFit, units: DisplayUnits): string {
   const spacings = readings.map((r) => r.spacing_m);
-  const range = `${surveyed(Math.min(...spacings))} to ${surveyed(Math.max(...spacings))}\u202fm`;
+  const range = `${surveyedNumber(Math.min(...spacings), units)} to ${surveyedLength(Math.max(...spacings), units)}`;
   const band = sounding.length > 0 ? ', with the band of the soils that fit as well' : '';
   return `Apparent resistivity against pin spacing on logarithmic axes: ${tally(readings.length, 'reading')} at spacings of ${range}, the curve of ${tally(layer_count, 'fitted layer')}${band}, and the resistivity of the layers against depth.`;
 }
 
 /** Readings and fit of a survey. */
 export function SoundingFigure({ fit, diagonal, name, title, css }: SoundingFigureProps): VNode {
+  const units = useUnits();
+  const { metres, words } = lengthUnit(units);
   const drawing = soundingDrawing(fit, diagonal);
   const layout = layoutOf(drawing);
   const { frame, x, y } = layout;
   const marks = markBoxes(drawing.marks, layout);
   const notes = outlierNotes(drawing.marks, layout, marks);
   const labels = layerLabels(drawing.stairs, layout, [...marks, ...notes.flatMap(noteBoxes)]);
-  const signs = signsOf(drawing);
+  const signs = signsOf(drawing, units);
   const rows = Math.ceil(signs.length / KEY_COLUMNS);
   const placed = (points: readonly Point[]): readonly Point[] =>
     points.map(([along, rho]): Point => [x(along), y(rho)]);
@@ -130,7 +134,7 @@ export function SoundingFigure({ fit, diagonal, name, title, css }: SoundingFigu
     <Figure
       name={name}
       title={title}
-      description={descriptionOf(fit)}
+      description={descriptionOf(fit, units)}
       width={WIDTH}
       height={frame.bottom + KEY_TOP + (rows - 1) * SIGN_ROW + KEY_BOTTOM}
       wide
@@ -152,7 +156,8 @@ export function SoundingFigure({ fit, diagonal, name, title, css }: SoundingFigu
         up={layout.up}
         x={x}
         y={y}
-        acrossName="pin spacing, and depth of the layers, in metres"
+        acrossUnit={metres}
+        acrossName={`pin spacing, and depth of the layers, in ${words}`}
         upName="apparent resistivity, and that of the layers, in Ω·m"
       />
       <g clip-path={`url(#${name}-frame)`}>

@@ -1,7 +1,7 @@
 // Writes numbers for people: digits from the uncertainty, thin spaces, a proper minus, SI units.
 
 export const THIN_SPACE = '\u202f';
-const NO_BREAK_SPACE = '\u00a0';
+export const NO_BREAK_SPACE = '\u00a0';
 export const MINUS = '\u2212';
 const SUPERSCRIPTS = '⁰¹²³⁴⁵⁶⁷⁸⁹';
 
@@ -17,7 +17,7 @@ const KILO_FROM = 10_000;
 const ROUND_UP_SLACK = 1e-6;
 
 /** Exponent of the leading decimal digit; 0 for zero. */
-function exponentOf(value: number): number {
+export function exponentOf(value: number): number {
   return value === 0 ? 0 : Number(value.toExponential().split('e')[1]);
 }
 
@@ -140,19 +140,4 @@ export function percent(share: number): string {
   if (value === 0) return `0${THIN_SPACE}%`;
   if (value < 0.05) return `less than 0.1${THIN_SPACE}%`;
   return `${sign}${fixed(value, value < 9.95 ? 1 : 0)}${THIN_SPACE}%`;
-}
-
-/** A place on the surface: (24.0, 33.5) m. */
-export function place(x: number, y: number): string {
-  return pair(fixed(x, 1), fixed(y, 1));
-}
-
-/** A place as it was given: (24, 18) m. */
-export function givenPlace(x: number, y: number): string {
-  return pair(given(x), given(y));
-}
-
-/** Never broken across lines. */
-function pair(x: string, y: string): string {
-  return `(${x},${NO_BREAK_SPACE}${y})${THIN_SPACE}m`;
 }

@@ -14,7 +14,7 @@ export interface CoarseGrid {
 
 /** Most columns of the coarse table: what a printed page carries. */
 const MOST_COLUMNS = 12;
-/** The table is never finer than this, m. */
+/** The table is never finer than this, in the unit in which its coordinates are round. */
 const FINEST_STEP = 5;
 
 function multiples(from: number, to: number, step: number): readonly number[] {
@@ -37,12 +37,15 @@ export function valueAt(map: CaseMap, field: Float64Array, x: number, y: number)
   return (1 - t) * ((1 - s) * at(0, 0) + s * at(1, 0)) + t * ((1 - s) * at(0, 1) + s * at(1, 1));
 }
 
-/** Values at round coordinates, at most twelve columns. */
-export function coarseGrid(map: CaseMap, field: Float64Array): CoarseGrid {
+/**
+ * Values at round coordinates, at most twelve columns.
+ * @param unit in which coordinates are round, m
+ */
+export function coarseGrid(map: CaseMap, field: Float64Array, unit: number = 1): CoarseGrid {
   const right = map.x0 + (map.nx - 1) * map.dx;
   const top = map.y0 + (map.ny - 1) * map.dy;
   const longest = Math.max(right - map.x0, top - map.y0);
-  const step = Math.max(FINEST_STEP, roundStep(longest / MOST_COLUMNS));
+  const step = unit * Math.max(FINEST_STEP, roundStep(longest / unit / MOST_COLUMNS));
   const xs = multiples(map.x0, right, step);
   const ys = [...multiples(map.y0, top, step)].reverse();
   return { xs, ys, values: ys.map((y) => xs.map((x) => valueAt(map, field, x, y))) };

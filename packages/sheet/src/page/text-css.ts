@@ -6,8 +6,8 @@ const SANS = 'ui-sans-serif,"Inter","Helvetica Neue",Arial,"DejaVu Sans",sans-se
 export const textCss: string = `
 body{font:16.5px/1.58 ${SERIF};font-variant-numeric:lining-nums;-webkit-text-size-adjust:100%;text-size-adjust:100%}
 h1{font-size:29px;line-height:1.16;font-weight:600;letter-spacing:-.012em;margin:0;text-wrap:balance;overflow-wrap:anywhere}
-h1 span{display:block;font-size:.68em;font-weight:400;letter-spacing:0;color:var(--soft)}
-h2,h3,.facts,.title-block nav,table,.fold>summary,.inputs,.clause,.fig{font-family:${SANS}}
+h1 .sort{display:block;font-size:.68em;font-weight:400;letter-spacing:0;color:var(--soft)}
+h2,h3,.facts,.project,.title-block nav,table,.fold>summary,.inputs,.clause,.fig{font-family:${SANS}}
 h2{font-size:15.5px;line-height:1.3;font-weight:600;margin:0 0 3px}
 h3{font-size:13.5px;line-height:1.35;font-weight:600;margin:22px 0 6px}
 p{margin:0 0 11px}
@@ -62,6 +62,13 @@ tr{border-bottom:1px solid var(--rule)}
 .bands .open .finding,.bands .beyond .finding{color:var(--beyond)}
 .verdicts .limit-tick{stroke:var(--ink);stroke-width:2}
 .caution{border-left:3px solid var(--beyond);padding:2px 0 2px 14px;max-width:43em;margin:18px 0 0}
+.project{display:flex;flex-wrap:wrap;gap:2px 24px;margin:10px 0 0;font-size:12.5px}
+.project dt,.project dd{display:inline;margin:0}
+.project dt{color:var(--soft)}
+.project dt::after{content:" "}
+.revisions{margin:10px 0 0;width:auto;min-width:50%}
+.note{margin:16px 0 0;max-width:43em}
+.note h3{margin:0 0 4px}
 .remarks,.cautions{margin:0 0 12px;padding:0;list-style:none;max-width:43em}
 .remarks li,.cautions li{margin:0 0 7px;padding-left:18px;text-indent:-18px}
 .remarks li::before,.cautions li::before{content:"–";display:inline-block;width:18px;text-indent:0;color:var(--soft)}

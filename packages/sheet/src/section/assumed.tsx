@@ -1,13 +1,19 @@
 // Assumed: what was taken for granted, which contacts were bridged, and where an engineer should doubt.
 import type { Outcome } from '@ohmstead/study';
 import type { VNode } from 'preact';
-import { given, place } from '../format/number.ts';
+import { useUnits } from '../desk/use-units.ts';
+import { givenIn, lengthUnit, smallUnit } from '../format/length.ts';
+import { given } from '../format/number.ts';
 import { tally } from '../format/words.ts';
 import { otherDoubts } from '../verdict/doubts.ts';
-import { DataTable, Part, Say } from './parts.tsx';
+import { Part } from './part.tsx';
+import { DataTable, Say } from './parts.tsx';
+import { PlaceLink } from './place-link.tsx';
 import { Remarks } from './remarks.tsx';
 
 function Snaps({ outcome }: { outcome: Outcome }): VNode {
+  const units = useUnits();
+  const [unit, small] = [lengthUnit(units), smallUnit(units)];
   const { snaps } = outcome.results;
   return (
     <>
@@ -19,16 +25,17 @@ function Snaps({ outcome }: { outcome: Outcome }): VNode {
           { label: 'conductor' },
           { label: 'joined to' },
           { label: 'at', align: 'right' },
-          { label: 'depth, m', align: 'right' },
-          { label: 'between axes, mm', align: 'right' },
+          { label: `depth, ${unit.sign}`, align: 'right' },
+          { label: `between axes, ${small.sign}`, align: 'right' },
         ]}
         rows={snaps.map((snap) => [
           snap.id,
           snap.other_id,
-          place(snap.x_m, snap.y_m),
-          given(snap.depth_m),
-          given(Number((snap.distance_m * 1000).toPrecision(3))),
+          <PlaceLink key={snap.id} x={snap.x_m} y={snap.y_m} />,
+          givenIn(snap.depth_m, unit),
+          given(Number((snap.distance_m / small.metres).toPrecision(3))),
         ])}
+        file="snaps.csv"
       />
     </>
   );
@@ -44,7 +51,7 @@ export function Assumed({ outcome }: { outcome: Outcome }): VNode {
     `${tally(snaps.length, 'contact')} bridged`,
   ];
   return (
-    <Part id="assumed" title="Assumed" facts={facts}>
+    <Part id="assumed" title="Assumed" facts={facts} outcome={outcome}>
       {warnings.length > 0 && <Remarks title="Doubts" remarks={warnings} />}
       {assumptions.length > 0 ? (
         <Remarks title="Taken for granted" remarks={assumptions} />

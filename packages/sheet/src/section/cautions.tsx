@@ -1,6 +1,6 @@
 // Cautions: what the sheet cannot know, and who decides.
 import type { VNode } from 'preact';
-import { Part } from './parts.tsx';
+import { PlainPart } from './part.tsx';
 
 /** The cautions usual in the trade; common practice, no source. */
 const CAUTIONS: readonly string[] = [
@@ -16,12 +16,12 @@ const CAUTIONS: readonly string[] = [
 /** The usual cautions. */
 export function Cautions(): VNode {
   return (
-    <Part id="cautions" title="Cautions" facts={[]}>
+    <PlainPart id="cautions" title="Cautions" facts={[]}>
       <ul class="cautions">
         {CAUTIONS.map((text) => (
           <li key={text}>{text}</li>
         ))}
       </ul>
-    </Part>
+    </PlainPart>
   );
 }

@@ -47,6 +47,7 @@ export function EquivalentUniformSoil({ outcome }: { outcome: Outcome }): VNode 
           deviation(of),
           of.source,
         ])}
+        file="equivalent-uniform.csv"
       />
     </>
   );

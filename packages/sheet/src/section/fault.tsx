@@ -1,11 +1,24 @@
 // Fault: the current of each case that enters the ground, and for how long.
 import type { CaseResult, Outcome } from '@ohmstead/study';
 import type { VNode } from 'preact';
-import { given, givenPlace, givenQuantity, quantity, significant } from '../format/number.ts';
+import type { Desk } from '../desk/desk.ts';
+import { itemsOf, memberOf, rawText } from '../desk/json.ts';
+import { casesWithOneMore, listWithout, solvedIndex } from '../desk/study-edits.ts';
+import { useDesk } from '../desk/use-desk.ts';
+import { useUnits } from '../desk/use-units.ts';
+import { QuantityInput, Stated } from '../field/inputs.tsx';
+import { Pasting } from '../field/pasting.tsx';
+import { WordButton } from '../field/word-button.tsx';
+import { givenPlace } from '../format/length.ts';
+import { given, givenQuantity, quantity, significant } from '../format/number.ts';
+import { quantityTold } from '../format/told.ts';
 import { tally } from '../format/words.ts';
+import { CaseFields } from './case-fields.tsx';
 import { CLAUSES, DecrementFormula, GridCurrentFormula, S } from './formulas.tsx';
 import { How, type HowInput } from './how.tsx';
-import { CaseName, Input, Part, Result, Say } from './parts.tsx';
+import { Part } from './part.tsx';
+import { CaseName, Say } from './parts.tsx';
+import { caseNamed, ResultOf } from './result.tsx';
 
 function howInputs(of: CaseResult): readonly HowInput[] {
   const inputs: (HowInput | undefined)[] = [
@@ -33,83 +46,183 @@ function howInputs(of: CaseResult): readonly HowInput[] {
   return inputs.filter((input) => input !== undefined);
 }
 
+interface CaseProps {
+  readonly outcome: Outcome;
+  readonly index: number;
+}
+
 /** Where the current comes from: a share of a fault current, or as given. */
-function Source({ outcome, index }: { outcome: Outcome; index: number }): VNode {
+function Source({ outcome, index }: CaseProps): VNode {
   const of = outcome.results.cases[index];
   const stated = outcome.study.cases[index]?.grid_current_A;
+  const duration = (
+    <QuantityInput
+      path={['cases', index, 'duration_s']}
+      kind="duration"
+      label={`duration of ${of.name}`}
+      value={of.duration_s}
+    />
+  );
   if (of.fault_current_A !== null && of.division_factor !== null) {
     return (
       <>
-        a fault of <Input path={`cases[${index}].fault_current_A`} value={of.fault_current_A} unit="A" /> for{' '}
-        <Input path={`cases[${index}].duration_s`} value={of.duration_s} unit="s" />, of which the share{' '}
-        <Input path={`cases[${index}].division_factor`} value={of.division_factor} /> enters the ground here
+        a fault of{' '}
+        <QuantityInput
+          path={['cases', index, 'fault_current_A']}
+          kind="current"
+          label={`fault current of ${of.name}`}
+          value={of.fault_current_A}
+        />{' '}
+        for {duration}, of which the share{' '}
+        <QuantityInput
+          path={['cases', index, 'division_factor']}
+          kind="ratio"
+          label={`division factor of ${of.name}`}
+          value={of.division_factor}
+        />{' '}
+        enters the ground here
       </>
     );
   }
   return (
     <>
-      {stated !== undefined && <Input path={`cases[${index}].grid_current_A`} value={stated} unit="A" />}{' '}
-      enter the ground, as given, for{' '}
-      <Input path={`cases[${index}].duration_s`} value={of.duration_s} unit="s" />
+      {stated !== undefined && (
+        <QuantityInput
+          path={['cases', index, 'grid_current_A']}
+          kind="current"
+          label={`current into the ground of ${of.name}`}
+          value={stated}
+        />
+      )}{' '}
+      enter the ground, as given, for {duration}
     </>
   );
 }
 
-function Decrement({ of, index }: { of: CaseResult; index: number }): VNode {
+function Decrement({ outcome, index }: CaseProps): VNode {
+  const of = outcome.results.cases[index];
   if (of.x_over_r === null) return <>; no X/R is given, so the direct-current offset is left out</>;
   return (
     <>
-      ; with <i>X/R</i> of <Input path={`cases[${index}].x_over_r`} value={of.x_over_r} /> the direct-current
-      offset raises it by the factor {significant(of.decrement_factor, 4)}
+      ; with <i>X/R</i> of{' '}
+      <QuantityInput
+        path={['cases', index, 'x_over_r']}
+        kind="ratio"
+        label={`X/R of ${of.name}`}
+        value={of.x_over_r}
+      />{' '}
+      the direct-current offset raises it by the factor {significant(of.decrement_factor, 4)}
     </>
   );
 }
 
 /** Where it enters: as given, or at the node nearest the middle of the metal. */
-function Injected({ outcome, index }: { outcome: Outcome; index: number }): VNode {
+function Injected({ outcome, index }: CaseProps): VNode {
+  const units = useUnits();
   const { x_m, y_m } = outcome.results.cases[index].inject;
-  if (outcome.study.cases[index]?.inject === undefined) {
-    return <>It enters at the node nearest the centroid of the metal, {givenPlace(x_m, y_m)}.</>;
-  }
+  const place = givenPlace(x_m, y_m, units);
+  if (outcome.study.cases[index]?.inject === undefined)
+    return <>It enters at the node nearest the centroid of the metal, {place}.</>;
   return (
     <>
-      It enters the metal at <Input path={`cases[${index}].inject`} value={givenPlace(x_m, y_m)} />.
+      It enters the metal at <Stated path={['cases', index, 'inject']} text={place} />.
     </>
   );
 }
 
-/** Fault cases, one statement each. */
-export function Fault({ outcome }: { outcome: Outcome }): VNode {
-  const { cases } = outcome.results;
-  const frequencies = [...new Set(cases.map((c) => givenQuantity(c.frequency_hz, 'Hz')))];
+/** The current that enters the ground, and how it is found. */
+function GridCurrent({ outcome, of }: { outcome: Outcome; of: CaseResult }): VNode {
   return (
-    <Part id="fault" title="Fault" facts={[tally(cases.length, 'case'), ...frequencies]}>
-      {cases.map((of, index) => (
-        <Say key={index}>
-          <CaseName name={of.name} />: <Source outcome={outcome} index={index} />
-          <Decrement of={of} index={index} />: <Result>{quantity(of.grid_current_A, 'A')}</Result>.{' '}
-          <Injected outcome={outcome} index={index} />
-          <How
-            of={`the current of ${of.name} is found`}
-            formula={
-              <>
-                <GridCurrentFormula />
-                {of.x_over_r !== null && (
-                  <>
-                    <br />
-                    <DecrementFormula />
-                  </>
-                )}
-              </>
-            }
-            clause={
-              of.x_over_r === null ? CLAUSES.gridCurrent : `${CLAUSES.gridCurrent}; ${CLAUSES.decrement}`
-            }
-            inputs={howInputs(of)}
-            value={quantity(of.grid_current_A, 'A')}
-          />
-        </Say>
-      ))}
+    <ResultOf
+      outcome={outcome}
+      told={(one) => {
+        const found = caseNamed(one, of.name);
+        return found && quantityTold(found.grid_current_A, 'A');
+      }}
+    />
+  );
+}
+
+function HowCurrent({ of }: { of: CaseResult }): VNode {
+  return (
+    <How
+      of={`the current of ${of.name} is found`}
+      formula={
+        <>
+          <GridCurrentFormula />
+          {of.x_over_r !== null && (
+            <>
+              <br />
+              <DecrementFormula />
+            </>
+          )}
+        </>
+      }
+      clause={of.x_over_r === null ? CLAUSES.gridCurrent : `${CLAUSES.gridCurrent}; ${CLAUSES.decrement}`}
+      inputs={howInputs(of)}
+      value={quantity(of.grid_current_A, 'A')}
+    />
+  );
+}
+
+/** The cases of the draft, each with what was solved of it. */
+function LiveCases({ desk, outcome }: { desk: Desk; outcome: Outcome | undefined }): VNode {
+  const stated = desk.valueAt(['cases']);
+  const cases = itemsOf(stated);
+  const solved = outcome?.results.cases ?? [];
+  return (
+    <Pasting table="cases" rows="cases with their name, current and duration, under headings">
+      {cases.map((one, index) => {
+        const of = solved[solvedIndex(cases, index, solved) ?? -1];
+        return (
+          <Say key={index}>
+            <CaseFields desk={desk} index={index} solved={of}>
+              {of !== undefined && outcome !== undefined && (
+                <>
+                  : <GridCurrent outcome={outcome} of={of} />
+                </>
+              )}
+              .
+            </CaseFields>
+            {of !== undefined && <HowCurrent of={of} />}{' '}
+            {cases.length > 1 && (
+              <WordButton
+                press={() => desk.edit(['cases'], listWithout(stated, index))}
+                of={rawText(memberOf(one, 'name'))}
+                vanishes
+              >
+                remove the case
+              </WordButton>
+            )}
+          </Say>
+        );
+      })}
+      <Say>
+        <WordButton press={() => desk.edit(['cases'], casesWithOneMore(stated))}>add a case</WordButton>
+      </Say>
+    </Pasting>
+  );
+}
+
+/** Fault cases, one statement each; without an outcome only what is asked. */
+export function Fault({ outcome }: { outcome: Outcome | undefined }): VNode {
+  const desk = useDesk();
+  const cases = outcome?.results.cases ?? [];
+  const frequencies = [...new Set(cases.map((c) => givenQuantity(c.frequency_hz, 'Hz')))];
+  const facts = outcome === undefined ? [] : [tally(cases.length, 'case'), ...frequencies];
+  return (
+    <Part id="fault" title="Fault" facts={facts} outcome={outcome}>
+      {desk !== undefined && <LiveCases desk={desk} outcome={outcome} />}
+      {desk === undefined &&
+        outcome !== undefined &&
+        cases.map((of, index) => (
+          <Say key={index}>
+            <CaseName name={of.name} />: <Source outcome={outcome} index={index} />
+            <Decrement outcome={outcome} index={index} />: <GridCurrent outcome={outcome} of={of} />.{' '}
+            <Injected outcome={outcome} index={index} />
+            <HowCurrent of={of} />
+          </Say>
+        ))}
     </Part>
   );
 }

@@ -1,65 +1,35 @@
 // Ground: the layers of the soil, the readings behind them, and what covers them.
-import type { Outcome } from '@ohmstead/study';
+import type { DisplayUnits, Outcome } from '@ohmstead/study';
 import type { VNode } from 'preact';
+import type { Desk } from '../desk/desk.ts';
+import { useDesk } from '../desk/use-desk.ts';
+import { useUnits } from '../desk/use-units.ts';
 import { GroundFigure } from '../figure/ground.tsx';
 import { titles } from '../figure/titles.ts';
 import { fitted } from '../format/fitted.ts';
-import { fixed, given, givenQuantity, significant } from '../format/number.ts';
+import { givenIn, lengthUnit } from '../format/length.ts';
+import { given } from '../format/number.ts';
+import { quantityText } from '../format/quantity-text.ts';
 import { tally } from '../format/words.ts';
-import { CLAUSES, CoveringFormula, S } from './formulas.tsx';
-import { How } from './how.tsx';
-import { Layers, originOf, soilQuantity } from './layers.tsx';
-import { DataTable, FigureBlock, Input, Part, Result, Say } from './parts.tsx';
+import { Covering } from './covering.tsx';
+import { Layers } from './layers.tsx';
+import { Part } from './part.tsx';
+import { DataTable, FigureBlock, Say } from './parts.tsx';
+import { StatedSoil, UnfittedSurvey } from './soil-fields.tsx';
 import { Survey } from './survey.tsx';
 import { surveyFacts } from './survey-words.ts';
 
-function Covering({ outcome }: { outcome: Outcome }): VNode {
-  const { limits } = outcome.results;
-  const { surfacing_resistivity_ohm_m: resistivity, surfacing_thickness_m: thickness } = limits;
-  if (resistivity === null || thickness === null) {
-    return <Say>No covering is stated: people stand on the soil itself, and the covering factor is 1.</Say>;
-  }
-  return (
-    <Say>
-      A covering of <Input path="surfacing.resistivity_ohm_m" value={resistivity} unit="Ω·m" />,{' '}
-      <Input path="surfacing.thickness_m" value={thickness} unit="m" /> thick, lies{' '}
-      {outcome.study.surfacing?.areas === undefined
-        ? 'over the area where touch voltage is assessed'
-        : 'in the areas given'}
-      . It bears on what people tolerate there by the factor{' '}
-      <Result>{fixed(limits.covering_factor, 3)}</Result>, not on the rise.
-      <How
-        of="the covering factor is found"
-        formula={<CoveringFormula />}
-        clause={CLAUSES.covering}
-        inputs={[
-          {
-            symbol: <S of="ρ" />,
-            name: 'soil under the covering',
-            value: soilQuantity(limits.soil_resistivity_ohm_m, 'Ω·m', originOf(outcome.results)),
-          },
-          { symbol: <S of="ρ" index="s" />, name: 'covering', value: givenQuantity(resistivity, 'Ω·m') },
-          {
-            symbol: <S of="h" index="s" />,
-            name: 'thickness of the covering',
-            value: givenQuantity(thickness, 'm'),
-          },
-        ]}
-        value={significant(limits.covering_factor, 4)}
-      />
-    </Say>
-  );
-}
-
-function layerTable(outcome: Outcome): VNode {
-  const told = outcome.results.ground === null ? given : fitted;
+function LayerTable({ outcome, units }: { outcome: Outcome; units: DisplayUnits }): VNode {
+  const isGiven = outcome.results.ground === null;
+  const unit = lengthUnit(units);
+  const length = (metres: number): string => (isGiven ? givenIn(metres, unit) : fitted(metres / unit.metres));
   let top = 0;
   const rows = outcome.results.soil.layers.map((layer, k) => {
     const row = [
       String(k + 1),
-      top === 0 ? '0' : told(top),
-      layer.thickness_m === null ? 'to any depth' : told(layer.thickness_m),
-      told(layer.resistivity_ohm_m),
+      top === 0 ? '0' : length(top),
+      layer.thickness_m === null ? 'to any depth' : length(layer.thickness_m),
+      isGiven ? given(layer.resistivity_ohm_m) : fitted(layer.resistivity_ohm_m),
     ];
     top += layer.thickness_m ?? 0;
     return row;
@@ -69,43 +39,72 @@ function layerTable(outcome: Outcome): VNode {
       caption="Layers of the soil"
       columns={[
         { label: 'layer' },
-        { label: 'top, m', align: 'right' },
-        { label: 'thickness, m', align: 'right' },
+        { label: `top, ${unit.sign}`, align: 'right' },
+        { label: `thickness, ${unit.sign}`, align: 'right' },
         { label: 'resistivity, Ω·m', align: 'right' },
       ]}
       rows={rows}
+      file="soil.csv"
     />
   );
 }
 
-/** Soil layers or the survey they are fitted to, and the covering. */
-export function Ground({ outcome }: { outcome: Outcome }): VNode {
-  const { soil, limits, ground } = outcome.results;
-  const facts = [
+/** The soil of the draft, with what was fitted to its readings where that is known. */
+function LiveSoil({ desk, outcome }: { desk: Desk; outcome: Outcome | undefined }): VNode {
+  if (desk.valueAt(['soil', 'survey']) === undefined) return <StatedSoil desk={desk} />;
+  const fit = outcome?.results.ground?.fit;
+  return outcome === undefined || fit === undefined ? (
+    <UnfittedSurvey desk={desk} />
+  ) : (
+    <Survey outcome={outcome} fit={fit} />
+  );
+}
+
+function Soil({ outcome }: { outcome: Outcome }): VNode {
+  const { soil, ground } = outcome.results;
+  if (ground !== null) return <Survey outcome={outcome} fit={ground.fit} />;
+  return (
+    <Say>
+      <Layers layers={soil.layers} origin="stated" />.
+    </Say>
+  );
+}
+
+function factsOf({ results }: Outcome, units: DisplayUnits): readonly string[] {
+  const { soil, limits, ground } = results;
+  return [
     ...(ground === null ? [] : surveyFacts(ground.fit)),
     soil.layers.length === 1 ? 'uniform soil' : tally(soil.layers.length, 'layer'),
     limits.surfacing_thickness_m === null
       ? 'no covering'
-      : `covering ${givenQuantity(limits.surfacing_thickness_m, 'm')}`,
+      : `covering ${quantityText('thickness', limits.surfacing_thickness_m, units)}`,
   ];
+}
+
+/** Soil layers or the survey they are fitted to, and the covering; without an outcome only what is asked. */
+export function Ground({ outcome }: { outcome: Outcome | undefined }): VNode {
+  const desk = useDesk();
+  const units = useUnits();
   return (
-    <Part id="ground" title="Ground" facts={facts}>
-      {ground === null ? (
-        <Say>
-          <Layers layers={soil.layers} origin="stated" />.
-        </Say>
-      ) : (
-        <Survey outcome={outcome} fit={ground.fit} />
-      )}
+    <Part
+      id="ground"
+      title="Ground"
+      facts={outcome === undefined ? [] : factsOf(outcome, units)}
+      outcome={outcome}
+    >
+      {desk !== undefined && <LiveSoil desk={desk} outcome={outcome} />}
+      {desk === undefined && outcome !== undefined && <Soil outcome={outcome} />}
       <Covering outcome={outcome} />
-      <FigureBlock
-        name="ground-section"
-        title={titles.ground}
-        caption="The electrode seen from the side, every conductor projected on the section. Floating metal is dashed."
-        table={layerTable(outcome)}
-      >
-        <GroundFigure outcome={outcome} name="ground-section" title={titles.ground} />
-      </FigureBlock>
+      {outcome !== undefined && (
+        <FigureBlock
+          name="ground-section"
+          title={titles.ground}
+          caption="The electrode seen from the side, every conductor projected on the section. Floating metal is dashed."
+          table={<LayerTable outcome={outcome} units={units} />}
+        >
+          <GroundFigure outcome={outcome} name="ground-section" title={titles.ground} />
+        </FigureBlock>
+      )}
     </Part>
   );
 }

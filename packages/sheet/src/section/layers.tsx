@@ -1,10 +1,15 @@
 // Tells the layers of a soil as part of a sentence.
-import type { Results } from '@ohmstead/study';
+import type { DisplayUnits, Results } from '@ohmstead/study';
 import type { ComponentChildren, VNode } from 'preact';
+import { useUnits } from '../desk/use-units.ts';
+import { QuantityInput } from '../field/inputs.tsx';
 import { fittedQuantity, shortQuantity } from '../format/fitted.ts';
+import { fittedLength } from '../format/fitted-length.ts';
+import { lengthUnit } from '../format/length.ts';
 import { givenQuantity } from '../format/number.ts';
-import { capital, countWord } from '../format/words.ts';
-import { Input, Result } from './parts.tsx';
+import { quantityText } from '../format/quantity-text.ts';
+import { LayerSentence } from './layer-sentence.tsx';
+import { Result } from './parts.tsx';
 
 /** Where layers come from: stated in the study, fitted to readings, or following from either in another season. */
 export type LayerOrigin = 'stated' | 'fitted' | 'from stated' | 'from fitted';
@@ -14,16 +19,29 @@ export interface LayersProps {
   readonly origin: LayerOrigin;
 }
 
-/** A quantity of a soil as text, with the digits that its origin gives meaning to. */
-export function soilQuantity(value: number, unit: string, origin: LayerOrigin): string {
+/** A resistivity of a soil as text, with the digits that its origin gives meaning to. */
+export function soilResistivity(value: number, origin: LayerOrigin): string {
   switch (origin) {
     case 'stated':
     case 'from stated':
-      return givenQuantity(value, unit);
+      return givenQuantity(value, 'Ω·m');
     case 'fitted':
-      return fittedQuantity(value, unit);
+      return fittedQuantity(value, 'Ω·m');
     case 'from fitted':
-      return shortQuantity(value, unit);
+      return shortQuantity(value, 'Ω·m');
+  }
+}
+
+/** A thickness in a soil as text, in the units displayed. */
+function soilThickness(metres: number, origin: LayerOrigin, units: DisplayUnits): string {
+  switch (origin) {
+    case 'stated':
+    case 'from stated':
+      return quantityText('length', metres, units);
+    case 'fitted':
+      return fittedLength(metres, units);
+    case 'from fitted':
+      return shortQuantity(metres / lengthUnit(units).metres, lengthUnit(units).sign);
   }
 }
 
@@ -34,36 +52,29 @@ export function originOf({ ground }: Results): LayerOrigin {
 
 /** Layers from the surface down, without the full stop. */
 export function Layers({ layers, origin }: LayersProps): VNode {
-  const told = (value: number, unit: string, of: string): ComponentChildren => {
-    if (origin === 'stated') return <Input path={`soil.layers${of}`} value={value} unit={unit} />;
-    const text = soilQuantity(value, unit, origin);
-    return origin === 'fitted' ? <Result>{text}</Result> : text;
-  };
-  if (layers.length === 1) {
-    return (
-      <>
-        The soil is taken as uniform, {told(layers[0].resistivity_ohm_m, 'Ω·m', '[0].resistivity_ohm_m')} at
-        every depth
-      </>
-    );
-  }
+  const units = useUnits();
+  const stated = (k: number, key: 'resistivity_ohm_m' | 'thickness_m'): VNode => (
+    <QuantityInput
+      path={['soil', 'layers', k, key]}
+      kind={key === 'thickness_m' ? 'length' : 'resistivity'}
+      label={key === 'thickness_m' ? `thickness of layer ${k + 1}` : `resistivity of layer ${k + 1}`}
+      value={layers[k]?.[key] ?? undefined}
+    />
+  );
+  const told = (text: string): ComponentChildren => (origin === 'fitted' ? <Result>{text}</Result> : text);
   return (
-    <>
-      {capital(countWord(layers.length))} layers:{' '}
-      {layers.map((layer, k) => (
-        <span key={k}>
-          {k > 0 && ', then '}
-          {told(layer.resistivity_ohm_m, 'Ω·m', `[${k}].resistivity_ohm_m`)}
-          {layer.thickness_m === null ? (
-            ' below'
-          ) : (
-            <>
-              {k === 0 ? ' for the first ' : ' for '}
-              {told(layer.thickness_m, 'm', `[${k}].thickness_m`)}
-            </>
-          )}
-        </span>
-      ))}
-    </>
+    <LayerSentence
+      count={layers.length}
+      resistivity={(k) =>
+        origin === 'stated'
+          ? stated(k, 'resistivity_ohm_m')
+          : told(soilResistivity(layers[k].resistivity_ohm_m, origin))
+      }
+      thickness={(k) =>
+        origin === 'stated'
+          ? stated(k, 'thickness_m')
+          : told(soilThickness(layers[k].thickness_m ?? 0, origin, units))
+      }
+    />
   );
 }

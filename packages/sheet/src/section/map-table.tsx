@@ -1,11 +1,14 @@
 // The table equivalent of a map: the worst of each area, and values every few metres.
 import type { Outcome } from '@ohmstead/study';
 import type { VNode } from 'preact';
-import { fixed, place } from '../format/number.ts';
+import { useUnits } from '../desk/use-units.ts';
+import { fixedLength, lengthUnit } from '../format/length.ts';
+import { fixed } from '../format/number.ts';
 import { coarseGrid, worstIn } from '../geometry/coarse.ts';
 import { assessedFor, type MapKind, wholeOf } from '../geometry/map-drawing.ts';
 import { insideEvenOdd } from '../geometry/polygon.ts';
 import { DataTable } from './parts.tsx';
+import { PlaceLink } from './place-link.tsx';
 
 const QUANTITY: Readonly<Record<MapKind, string>> = {
   potential: 'Surface potential',
@@ -22,7 +25,12 @@ function AreaTable({ outcome, caseIndex, kind }: MapTableProps): VNode | null {
     const worst = worstIn(map, map[kind], area);
     const name = areas.length === 1 ? 'assessed area' : `area ${k + 1}`;
     if (worst === undefined) return [name, '—', '—', '—'];
-    return [name, fixed(worst.value, 0), place(worst.x, worst.y), fixed((100 * worst.value) / whole, 0)];
+    return [
+      name,
+      fixed(worst.value, 0),
+      <PlaceLink key={name} x={worst.x} y={worst.y} />,
+      fixed((100 * worst.value) / whole, 0),
+    ];
   });
   return (
     <DataTable
@@ -47,8 +55,10 @@ export interface MapTableProps {
 /** Worst values by area, then a coarse lattice that reads like the plan: y falls from row to row, x runs to the right. */
 export function MapTable(props: MapTableProps): VNode {
   const { outcome, caseIndex, kind } = props;
+  const units = useUnits();
+  const unit = lengthUnit(units);
   const { map } = outcome.cases[caseIndex];
-  const { xs, ys, values } = coarseGrid(map, map[kind]);
+  const { xs, ys, values } = coarseGrid(map, map[kind], unit.metres);
   const areas = assessedFor(outcome, kind);
   const limit = wholeOf(kind, outcome.results.cases[caseIndex]);
   const cell = (value: number, x: number, y: number): string => {
@@ -62,9 +72,12 @@ export function MapTable(props: MapTableProps): VNode {
     <>
       <AreaTable {...props} />
       <DataTable
-        caption={`${QUANTITY[kind]} in volts at x (columns) and y (rows) in metres${signs}`}
-        columns={[{ label: 'y \\ x' }, ...xs.map((x) => ({ label: fixed(x, 0), align: 'right' as const }))]}
-        rows={ys.map((y, r) => [fixed(y, 0), ...xs.map((x, c) => cell(values[r][c], x, y))])}
+        caption={`${QUANTITY[kind]} in volts at x (columns) and y (rows) in ${unit.words}${signs}`}
+        columns={[
+          { label: 'y \\ x' },
+          ...xs.map((x) => ({ label: fixedLength(x, 0, units), align: 'right' as const })),
+        ]}
+        rows={ys.map((y, r) => [fixedLength(y, 0, units), ...xs.map((x, c) => cell(values[r][c], x, y))])}
       />
     </>
   );

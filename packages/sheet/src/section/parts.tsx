@@ -1,59 +1,10 @@
-// The pieces sections are written with: a part with its margin, inputs and results in a sentence, folds, tables.
+// The pieces sections are written with: statements, results in a sentence, folds, tables, figures.
 import type { ComponentChildren, VNode } from 'preact';
-import { givenQuantity } from '../format/number.ts';
-
-export interface PartProps {
-  /** anchor of the part, and prefix of identifiers in it */
-  readonly id: string;
-  readonly title: string;
-  /** short facts for the margin */
-  readonly facts: readonly string[];
-  readonly children?: ComponentChildren;
-}
-
-/** One step of the reasoning, with its name and facts in the margin. */
-export function Part({ id, title, facts, children }: PartProps): VNode {
-  return (
-    <section class="part" id={id} aria-labelledby={`${id}-name`}>
-      <div class="margin">
-        <h2 id={`${id}-name`}>{title}</h2>
-        {facts.length > 0 && (
-          <ul class="facts">
-            {facts.map((fact) => (
-              <li key={fact}>{fact}</li>
-            ))}
-          </ul>
-        )}
-      </div>
-      <div class="body">{children}</div>
-    </section>
-  );
-}
+import { Download } from '../field/download.tsx';
 
 /** A statement: a sentence or a few, with folds at its end. Paragraphs cannot hold folds, so it is a division. */
 export function Say({ children }: { children: ComponentChildren }): VNode {
   return <div class="say">{children}</div>;
-}
-
-/**
- * An input in a sentence. `path` is its place in study.json, so that a live sheet can make it editable.
- * @param value number with unit, or a text such as a name of a material
- */
-export function Input({
-  path,
-  value,
-  unit = '',
-}: {
-  path: string;
-  value: number | string;
-  unit?: string;
-}): VNode {
-  const text = typeof value === 'number' ? givenQuantity(value, unit) : value;
-  return (
-    <data class="in" value={String(value)} data-input={path}>
-      {text}
-    </data>
-  );
 }
 
 /** A result in a sentence. */
@@ -98,6 +49,8 @@ export interface DataTableProps {
   readonly columns: readonly TableColumn[];
   /** first cell of a row is its header */
   readonly rows: readonly (readonly ComponentChildren[])[];
+  /** the table file that holds it, in full precision: `cases.csv` */
+  readonly file?: string;
 }
 
 function side(column: TableColumn): string | undefined {
@@ -105,8 +58,8 @@ function side(column: TableColumn): string | undefined {
 }
 
 /** A table that scrolls within itself where it is wider than the page. */
-export function DataTable({ caption, columns, rows }: DataTableProps): VNode {
-  return (
+export function DataTable({ caption, columns, rows, file }: DataTableProps): VNode {
+  const table = (
     // biome-ignore lint/a11y/noNoninteractiveTabindex: a box that scrolls has to be reachable by keyboard
     <section class="scroll" aria-label={caption} tabIndex={0}>
       <table>
@@ -140,6 +93,14 @@ export function DataTable({ caption, columns, rows }: DataTableProps): VNode {
       </table>
     </section>
   );
+  return file === undefined ? (
+    table
+  ) : (
+    <>
+      {table}
+      <Download file={file} />
+    </>
+  );
 }
 
 export interface FigureBlockProps {
@@ -159,7 +120,10 @@ export function FigureBlock({ name, title, caption, table, children }: FigureBlo
       <figure aria-labelledby={`${name}-heading`}>
         <h3 id={`${name}-heading`}>{title}</h3>
         {children}
-        <figcaption>{caption}</figcaption>
+        <figcaption>
+          {caption}
+          <Download file={`${name}.svg`} />
+        </figcaption>
       </figure>
       <Fold label="as a table" of={`: ${title}`}>
         {table}

@@ -1,29 +1,58 @@
 // People: the tolerable voltages, and every worst voltage against them.
 import type { CaseResult, Outcome, Results } from '@ohmstead/study';
 import type { VNode } from 'preact';
+import type { Desk } from '../desk/desk.ts';
+import { itemsOf } from '../desk/json.ts';
+import { draftIndex } from '../desk/study-edits.ts';
+import { useDesk } from '../desk/use-desk.ts';
+import { ChoiceInput, type Option, QuantityInput, Stated } from '../field/inputs.tsx';
 import { fixed, givenQuantity, quantity } from '../format/number.ts';
+import { quantityTold } from '../format/told.ts';
 import { undecidedReason } from '../verdict/finding.ts';
 import { type VerdictRow, verdictRows } from '../verdict/rows.ts';
 import { soilBandRows } from '../verdict/soil-band.ts';
 import { BODY_FACTOR, CLAUSES, S, StepFormula, TouchFormula } from './formulas.tsx';
 import { How, type HowInput } from './how.tsx';
-import { originOf, soilQuantity } from './layers.tsx';
-import { CaseName, Input, Part, Result, Say } from './parts.tsx';
+import { originOf, soilResistivity } from './layers.tsx';
+import { Part } from './part.tsx';
+import { CaseName, Say } from './parts.tsx';
+import { caseNamed, ResultOf } from './result.tsx';
 import { SoilBandTable } from './soil-band-table.tsx';
 import { VerdictTable } from './verdict-table.tsx';
 
+/** A tolerable voltage of a case. */
+type LimitKey =
+  | 'bare_touch_limit_V'
+  | 'bare_step_limit_V'
+  | 'covering_touch_limit_V'
+  | 'covering_step_limit_V';
+
+interface TolerableProps {
+  readonly outcome: Outcome;
+  readonly of: CaseResult;
+}
+
 /** Tolerable voltages of a case, on the covering and on bare soil. */
-function Tolerable({ of }: { of: CaseResult }): VNode {
-  const pair = (touch: number, step: number): VNode => (
+function Tolerable({ outcome, of }: TolerableProps): VNode {
+  const limit = (key: LimitKey): VNode => (
+    <ResultOf
+      outcome={outcome}
+      told={(one) => {
+        const volts = caseNamed(one, of.name)?.[key] ?? undefined;
+        return volts === undefined ? undefined : quantityTold(volts, 'V');
+      }}
+    />
+  );
+  const bare = (
     <>
-      touch <Result>{quantity(touch, 'V')}</Result> and step <Result>{quantity(step, 'V')}</Result>
+      touch {limit('bare_touch_limit_V')} and step {limit('bare_step_limit_V')}
     </>
   );
-  const { covering_touch_limit_V: touch, covering_step_limit_V: step } = of;
-  if (touch === null || step === null) return pair(of.bare_touch_limit_V, of.bare_step_limit_V);
+  if (of.covering_touch_limit_V === null || of.covering_step_limit_V === null) return bare;
   return (
     <>
-      on the covering {pair(touch, step)}, on bare soil {pair(of.bare_touch_limit_V, of.bare_step_limit_V)}
+      on the covering touch {limit('covering_touch_limit_V')} and step {limit('covering_step_limit_V')}, on
+      bare soil {bare}
     </>
   );
 }
@@ -39,7 +68,7 @@ function limitWords(of: CaseResult): string {
 /** Ground under the feet: the covering where there is one, and the soil, for which the factor is 1. */
 function groundInputs(results: Results): readonly HowInput[] {
   const { limits } = results;
-  const soil = soilQuantity(limits.soil_resistivity_ohm_m, 'Ω·m', originOf(results));
+  const soil = soilResistivity(limits.soil_resistivity_ohm_m, originOf(results));
   const bare: HowInput = { symbol: <S of="ρ" index="s" />, name: 'bare soil, factor 1', value: soil };
   if (limits.surfacing_resistivity_ohm_m === null) return [bare];
   return [
@@ -57,19 +86,60 @@ function groundInputs(results: Results): readonly HowInput[] {
   ];
 }
 
+const BASES: readonly Option[] = [{ value: 'IEEE 80', text: 'IEEE 80' }];
+const BODY_MASSES: readonly Option[] = ([50, 70] as const).map((mass) => ({
+  value: mass,
+  text: givenQuantity(mass, 'kg'),
+}));
+
+/** What the limits rest on, as inputs. */
+export function LimitBasis({ basis, mass }: { basis: string | undefined; mass: number | undefined }): VNode {
+  return (
+    <Say>
+      Tolerable voltages after{' '}
+      <ChoiceInput path={['limits', 'basis']} label="basis of the limits" value={basis} options={BASES} /> for
+      a body of{' '}
+      <ChoiceInput path={['limits', 'body_mass_kg']} label="body mass" value={mass} options={BODY_MASSES} />.
+    </Say>
+  );
+}
+
+/** Duration of a solved case: its field in the draft, while it is still there. */
+function Duration({
+  desk,
+  outcome,
+  index,
+}: {
+  desk: Desk | undefined;
+  outcome: Outcome;
+  index: number;
+}): VNode {
+  const { cases } = outcome.results;
+  const of = cases[index];
+  const place = desk === undefined ? index : draftIndex(itemsOf(desk.valueAt(['cases'])), index, cases);
+  if (place === undefined)
+    return <Stated path={['cases', index, 'duration_s']} text={givenQuantity(of.duration_s, 's')} />;
+  return (
+    <QuantityInput
+      path={['cases', place, 'duration_s']}
+      kind="duration"
+      label={`duration of ${of.name}`}
+      value={of.duration_s}
+    />
+  );
+}
+
 function Limits({ outcome }: { outcome: Outcome }): VNode {
+  const desk = useDesk();
   const { limits, cases } = outcome.results;
   const factor = BODY_FACTOR[limits.body_mass_kg];
   return (
     <>
-      <Say>
-        Tolerable voltages after <Input path="limits.basis" value={limits.basis} /> for a body of{' '}
-        <Input path="limits.body_mass_kg" value={limits.body_mass_kg} unit="kg" />.
-      </Say>
+      <LimitBasis basis={limits.basis} mass={limits.body_mass_kg} />
       {cases.map((of, index) => (
         <Say key={index}>
-          <CaseName name={of.name} />: over{' '}
-          <Input path={`cases[${index}].duration_s`} value={of.duration_s} unit="s" />, <Tolerable of={of} />.
+          <CaseName name={of.name} />: over <Duration desk={desk} outcome={outcome} index={index} />,{' '}
+          <Tolerable outcome={outcome} of={of} />.
           <How
             of={`the limits of ${of.name} are found`}
             formula={
@@ -124,17 +194,20 @@ function Soils({ outcome }: { outcome: Outcome }): VNode | null {
 
 /** Limits, bars, what cannot be decided, what the soil leaves open. */
 export function People({ outcome }: { outcome: Outcome }): VNode {
+  const before = useDesk()?.before;
   const { limits } = outcome.results;
   const rows = verdictRows(outcome.results);
   const floating = rows.some((row) => row.kind === 'floating');
   const facts = ['IEEE Std 80-2013, 8.3–8.4', `${limits.body_mass_kg}\u202fkg`];
   return (
-    <Part id="people" title="People" facts={facts}>
+    <Part id="people" title="People" facts={facts} outcome={outcome}>
       <Limits outcome={outcome} />
       <VerdictTable
         rows={rows}
         caption="Worst voltages against their limits; the tick across the bars is the limit"
         id="people"
+        pinned={before === undefined ? undefined : verdictRows(before.results)}
+        file="limits.csv"
       />
       <Undecided rows={rows} />
       <Soils outcome={outcome} />

@@ -1,17 +1,35 @@
 // Rise: resistance to remote earth, rise of the metal, floating metal, and where the current leaves.
-import type { ElectrodeResult, Outcome } from '@ohmstead/study';
+import type { DisplayUnits, Outcome } from '@ohmstead/study';
 import type { VNode } from 'preact';
+import { useUnits } from '../desk/use-units.ts';
+import { ChoiceInput, type Option } from '../field/inputs.tsx';
 import { LeakageFigure } from '../figure/leakage.tsx';
 import { titles } from '../figure/titles.ts';
-import { fixed, measured, percent, place, powerOfTen, quantity, significant } from '../format/number.ts';
-import { capital } from '../format/words.ts';
+import { fixedLength, lengthUnit } from '../format/length.ts';
+import { measured, powerOfTen, quantity, significant } from '../format/number.ts';
+import { measuredTold } from '../format/told.ts';
 import { conductorCurrents } from '../geometry/leakage.ts';
 import { MOST_CONDUCTOR_ROWS } from './electrode.tsx';
 import { EquivalentUniformSoil } from './equivalent-uniform.tsx';
+import { Floating } from './floating.tsx';
 import { RiseFormula, S } from './formulas.tsx';
 import { How } from './how.tsx';
-import { CaseName, DataTable, FigureBlock, Input, Part, Result, Say } from './parts.tsx';
+import { Part } from './part.tsx';
+import { CaseName, DataTable, FigureBlock, Say } from './parts.tsx';
+import { caseNamed, ResultOf } from './result.tsx';
 import { SoilSpread } from './soil-spread.tsx';
+
+const METAL_MODELS: readonly Option[] = [
+  { value: 'resistive', text: 'resistive along its length' },
+  { value: 'equipotential', text: 'one potential throughout' },
+];
+
+/** How the metal is taken, in its sentence. */
+export function MetalModel({ value }: { value: 'resistive' | 'equipotential' }): VNode {
+  return (
+    <ChoiceInput path={['metal_model']} label="model of the metal" value={value} options={METAL_MODELS} />
+  );
+}
 
 function Resistance({ outcome }: { outcome: Outcome }): VNode {
   const { electrode, metal_model, cases, ground } = outcome.results;
@@ -22,13 +40,13 @@ function Resistance({ outcome }: { outcome: Outcome }): VNode {
   return (
     <Say>
       The resistance to remote earth{where}, is{' '}
-      <Result>{measured(electrode.resistance_ohm, electrode.resistance_uncertainty_ohm, 'Ω')}</Result>, with
-      the metal taken as{' '}
-      <Input
-        path="metal_model"
-        value={metal_model === 'resistive' ? 'resistive along its length' : 'one potential throughout'}
+      <ResultOf
+        outcome={outcome}
+        told={({ results: { electrode: of } }) =>
+          measuredTold(of.resistance_ohm, of.resistance_uncertainty_ohm, 'Ω')
+        }
       />
-      .
+      , with the metal taken as <MetalModel value={metal_model} />.
       <How
         of="the resistance is found"
         formula={
@@ -71,7 +89,15 @@ function Rises({ outcome }: { outcome: Outcome }): VNode {
       {outcome.results.cases.map((of, index) => (
         <Say key={index}>
           <CaseName name={of.name} />: with {quantity(of.grid_current_A, 'A')} entering the ground the metal
-          rises to <Result>{measured(of.gpr_V, of.gpr_uncertainty_V, 'V')}</Result>.
+          rises to{' '}
+          <ResultOf
+            outcome={outcome}
+            told={(one) => {
+              const found = caseNamed(one, of.name);
+              return found && measuredTold(found.gpr_V, found.gpr_uncertainty_V, 'V');
+            }}
+          />
+          .
           <How
             of={`the rise of ${of.name} is found`}
             formula={<RiseFormula />}
@@ -97,32 +123,7 @@ function Rises({ outcome }: { outcome: Outcome }): VNode {
   );
 }
 
-function Floating({ outcome, metal }: { outcome: Outcome; metal: ElectrodeResult }): VNode {
-  const first = outcome.results.cases[0];
-  const own = metal.potential_ratio * first.gpr_V;
-  return (
-    <Say>
-      {capital(metal.name)}
-      {metal.piece_count > 1
-        ? `, ${metal.piece_count} pieces that no joint connects, floats at most at`
-        : ' floats at'}{' '}
-      <Result>{percent(metal.potential_ratio)}</Result> of the rise
-      {`, ${measured(own, metal.potential_uncertainty_ratio * first.gpr_V + metal.potential_ratio * first.gpr_uncertainty_V, 'V')} for ${first.name}`}
-      .
-      {metal.touch_ratio !== null && metal.touch_x_m !== null && metal.touch_y_m !== null && (
-        <>
-          {' '}
-          Between it and the soil within 1{'\u202f'}m of it stands at most{' '}
-          {quantity(Math.abs(metal.touch_ratio) * first.gpr_V, 'V', 3)}, at{' '}
-          {place(metal.touch_x_m, metal.touch_y_m)}, where the metal is the{' '}
-          {metal.touch_ratio < 0 ? 'lower' : 'higher'} of the two.
-        </>
-      )}
-    </Say>
-  );
-}
-
-function leakageTable(outcome: Outcome): VNode {
+function leakageTable(outcome: Outcome, units: DisplayUnits): VNode {
   const { conductors } = outcome.plan;
   const currents = conductorCurrents(outcome);
   const order = [...conductors.keys()].sort(
@@ -139,7 +140,7 @@ function leakageTable(outcome: Outcome): VNode {
         columns={[
           { label: 'id' },
           { label: 'electrode' },
-          { label: 'length, m', align: 'right' },
+          { label: `length, ${lengthUnit(units).sign}`, align: 'right' },
           { label: 'into the soil, A/A', align: 'right' },
           { label: 'mean, mA/m per A', align: 'right' },
           { label: 'largest current along, A/A', align: 'right' },
@@ -147,11 +148,12 @@ function leakageTable(outcome: Outcome): VNode {
         rows={shown.map((k) => [
           conductors[k].id,
           conductors[k].electrode,
-          fixed(currents[k].length, 2),
+          fixedLength(currents[k].length, 2, units),
           share(currents[k].leakage),
           significant((1000 * currents[k].leakage) / currents[k].length, 3),
           share(currents[k].along),
         ])}
+        file="conductors.csv"
       />
       {order.length > shown.length && <p>{order.length - shown.length} more are in conductors.csv.</p>}
     </>
@@ -160,13 +162,14 @@ function leakageTable(outcome: Outcome): VNode {
 
 /** Resistance, rise, floating metal, leakage. */
 export function Rise({ outcome }: { outcome: Outcome }): VNode {
+  const units = useUnits();
   const { electrode, electrodes, checks } = outcome.results;
   const facts = [
     `${electrode.segment_count} segments`,
     `balance at remote earth ${powerOfTen(Math.abs(checks.current_balance))}`,
   ];
   return (
-    <Part id="rise" title="Rise" facts={facts}>
+    <Part id="rise" title="Rise" facts={facts} outcome={outcome}>
       <Resistance outcome={outcome} />
       <Rises outcome={outcome} />
       <EquivalentUniformSoil outcome={outcome} />
@@ -179,7 +182,7 @@ export function Rise({ outcome }: { outcome: Outcome }): VNode {
         name="leakage"
         title={titles.leakage}
         caption="Thickness shows the current that a metre of conductor passes to the soil, against the mean of the energised metal; the disc of a rod shows its mean along the rod. Hollow lines take current from the soil; floating metal gives back elsewhere what it takes."
-        table={leakageTable(outcome)}
+        table={leakageTable(outcome, units)}
       >
         <LeakageFigure outcome={outcome} name="leakage" title={titles.leakage} />
       </FigureBlock>

@@ -1,28 +1,33 @@
 // Surface: potential, touch and step voltage over the plan, and the profile through the worst place.
-import type { CaseResult, Outcome } from '@ohmstead/study';
+import type { CaseResult, DisplayUnits, Outcome } from '@ohmstead/study';
 import type { VNode } from 'preact';
+import { useDesk } from '../desk/use-desk.ts';
+import { useUnits } from '../desk/use-units.ts';
 import { MapFigure } from '../figure/map.tsx';
 import { ProfileFigure } from '../figure/profile.tsx';
 import { titles } from '../figure/titles.ts';
-import { fixed, givenQuantity, measured, percent, place, quantity } from '../format/number.ts';
+import { fixedLength, lengthUnit, place } from '../format/length.ts';
+import { fixed, givenQuantity, measured, percent, quantity } from '../format/number.ts';
+import { quantityText } from '../format/quantity-text.ts';
 import { uniqueSlugs } from '../format/slug.ts';
 import { tally } from '../format/words.ts';
 import type { MapKind } from '../geometry/map-drawing.ts';
 import { profileDrawing } from '../geometry/profile-drawing.ts';
 import { governingCase } from '../verdict/rows.ts';
 import { MapTable } from './map-table.tsx';
-import { CaseName, DataTable, FigureBlock, Part, Say } from './parts.tsx';
+import { Part } from './part.tsx';
+import { CaseName, DataTable, FigureBlock, Say } from './parts.tsx';
 
 /** Rows of a profile's table on the sheet, about; the table file has every point. */
 const PROFILE_ROWS = 24;
 
-function limitText(outcome: Outcome, of: CaseResult, kind: 'touch' | 'step'): string {
+function limitText(outcome: Outcome, of: CaseResult, kind: 'touch' | 'step', units: DisplayUnits): string {
   const { limits } = outcome.results;
   const covering =
     limits.surfacing_thickness_m === null
       ? 'no covering'
       : of[kind].on_covering
-        ? `covering ${givenQuantity(limits.surfacing_thickness_m, 'm')}`
+        ? `covering ${quantityText('thickness', limits.surfacing_thickness_m, units)}`
         : 'on bare soil, where the worst lies';
   return `${quantity(of[kind].limit_V, 'V')} (${limits.basis}, ${limits.body_mass_kg}\u202fkg, ${givenQuantity(of.duration_s, 's')}, ${covering})`;
 }
@@ -39,15 +44,15 @@ function otherLimit(of: CaseResult, kind: 'touch' | 'step'): string {
     : ` On the covering the limit is ${quantity(covered, 'V')}.`;
 }
 
-function captionOf(outcome: Outcome, caseIndex: number, kind: MapKind): string {
+function captionOf(outcome: Outcome, caseIndex: number, kind: MapKind, units: DisplayUnits): string {
   const of = outcome.results.cases[caseIndex];
   switch (kind) {
     case 'potential':
       return `Fill is the share of the rise of ${measured(of.gpr_V, of.gpr_uncertainty_V, 'V')}; lines carry volts.`;
     case 'touch':
-      return `Voltage to the metal that can be reached from the place. Fill is the share of the limit of ${limitText(outcome, of, kind)}; the red-brown line is the limit, and what lies beyond it is hatched. Paler: outside the assessed area.${otherLimit(of, kind)}`;
+      return `Voltage to the metal that can be reached from the place. Fill is the share of the limit of ${limitText(outcome, of, kind, units)}; the red-brown line is the limit, and what lies beyond it is hatched. Paler: outside the assessed area.${otherLimit(of, kind)}`;
     case 'step':
-      return `Largest voltage over 1\u202fm about the place. Fill is the share of the limit of ${limitText(outcome, of, kind)}. The bar across the ring joins the two feet. Paler: outside the assessed area.${otherLimit(of, kind)}`;
+      return `Largest voltage over 1\u202fm about the place. Fill is the share of the limit of ${limitText(outcome, of, kind, units)}. The bar across the ring joins the two feet. Paler: outside the assessed area.${otherLimit(of, kind)}`;
   }
 }
 
@@ -57,15 +62,18 @@ interface MapBlockProps {
   readonly kind: MapKind;
   readonly slug: string;
   readonly small?: boolean;
+  /** stands in for the map */
+  readonly instrument?: VNode;
 }
 
-function MapBlock({ outcome, caseIndex, kind, slug, small = false }: MapBlockProps): VNode {
+function MapBlock({ outcome, caseIndex, kind, slug, small = false, instrument }: MapBlockProps): VNode {
+  const units = useUnits();
   const of = outcome.results.cases[caseIndex];
   const name = `${kind}-${slug}`;
   const title = titles[kind](of.name);
   const caption = small
     ? `Share of the limit of ${quantity(of.touch.limit_V, 'V')}; the worst is ${percent(of.touch.worst_V / of.touch.limit_V)} of it.`
-    : captionOf(outcome, caseIndex, kind);
+    : captionOf(outcome, caseIndex, kind, units);
   return (
     <FigureBlock
       name={name}
@@ -73,38 +81,50 @@ function MapBlock({ outcome, caseIndex, kind, slug, small = false }: MapBlockPro
       caption={caption}
       table={<MapTable outcome={outcome} caseIndex={caseIndex} kind={kind} />}
     >
-      <MapFigure
-        outcome={outcome}
-        caseIndex={caseIndex}
-        kind={kind}
-        name={name}
-        title={title}
-        small={small}
-      />
+      {instrument ?? (
+        <MapFigure
+          outcome={outcome}
+          caseIndex={caseIndex}
+          kind={kind}
+          name={name}
+          title={title}
+          small={small}
+        />
+      )}
     </FigureBlock>
   );
 }
 
-function ProfileTable({ outcome, caseIndex }: { outcome: Outcome; caseIndex: number }): VNode {
+function ProfileTable({
+  outcome,
+  caseIndex,
+  file,
+}: {
+  outcome: Outcome;
+  caseIndex: number;
+  file: string;
+}): VNode {
+  const units = useUnits();
   const { profile } = outcome.cases[caseIndex];
   const count = profile.distance.length;
   const stride = Math.max(1, Math.ceil(count / PROFILE_ROWS));
   const rows = Array.from({ length: Math.ceil(count / stride) }, (_, k) => k * stride).map((k) => [
-    fixed(profile.distance[k], 1),
+    fixedLength(profile.distance[k], 1, units),
     fixed(profile.potential[k], 0),
     fixed(profile.potential[k] + profile.touch[k], 0),
     fixed(profile.touch[k], 0),
   ]);
   return (
     <DataTable
-      caption={`Profile from ${place(profile.from[0], profile.from[1])} to ${place(profile.to[0], profile.to[1])}`}
+      caption={`Profile from ${place(profile.from[0], profile.from[1], units)} to ${place(profile.to[0], profile.to[1], units)}`}
       columns={[
-        { label: 'distance, m', align: 'right' },
+        { label: `distance, ${lengthUnit(units).sign}`, align: 'right' },
         { label: 'surface, V', align: 'right' },
         { label: 'metal, V', align: 'right' },
         { label: 'touch, V', align: 'right' },
       ]}
       rows={rows}
+      file={file}
     />
   );
 }
@@ -128,10 +148,40 @@ function ProfileBlock({
       name={name}
       title={title}
       caption={`Touch voltage is the distance from the surface up to the metal; the broken line lies the limit of ${quantity(of.touch.limit_V, 'V')} below the metal.${beyond} Metal is drawn strong over assessed ground. Dots on the axis: metal that the line passes over.`}
-      table={<ProfileTable outcome={outcome} caseIndex={caseIndex} />}
+      table={<ProfileTable outcome={outcome} caseIndex={caseIndex} file={`${name}.csv`} />}
     >
       <ProfileFigure outcome={outcome} caseIndex={caseIndex} name={name} title={title} />
     </FigureBlock>
+  );
+}
+
+/** Touch, step and potential of the governing case with its profile, as figures or as one instrument. */
+function Governing({
+  outcome,
+  caseIndex,
+  slug,
+}: {
+  outcome: Outcome;
+  caseIndex: number;
+  slug: string;
+}): VNode {
+  const instrument = useDesk()?.instrument?.('surface', outcome);
+  const shared = { outcome, caseIndex, slug };
+  if (instrument === undefined) {
+    return (
+      <>
+        <MapBlock {...shared} kind="touch" />
+        <ProfileBlock {...shared} />
+        <MapBlock {...shared} kind="step" />
+        <MapBlock {...shared} kind="potential" />
+      </>
+    );
+  }
+  return (
+    <>
+      <MapBlock {...shared} kind="touch" instrument={instrument} />
+      <ProfileBlock {...shared} />
+    </>
   );
 }
 
@@ -141,13 +191,13 @@ export function Surface({ outcome }: { outcome: Outcome }): VNode {
   const governing = governingCase(results);
   const slugs = uniqueSlugs(cases.map((c) => c.name));
   const others = cases.map((_, k) => k).filter((k) => k !== governing);
-  const shared = { outcome, caseIndex: governing, slug: slugs[governing] };
   const error = cases[governing].map.error;
   return (
     <Part
       id="surface"
       title="Surface"
       facts={[`governing case: ${results.cases[governing].name}`, tally(cases.length, 'case')]}
+      outcome={outcome}
     >
       <Say>
         The maps show <CaseName name={results.cases[governing].name} />, the case that comes{' '}
@@ -158,10 +208,7 @@ export function Surface({ outcome }: { outcome: Outcome }): VNode {
         good to about {quantity(error, 'V', 2)}; the worst places are searched for apart and not read from the
         map.
       </Say>
-      <MapBlock {...shared} kind="touch" />
-      <ProfileBlock {...shared} />
-      <MapBlock {...shared} kind="step" />
-      <MapBlock {...shared} kind="potential" />
+      <Governing outcome={outcome} caseIndex={governing} slug={slugs[governing]} />
       {others.length > 0 && (
         <div class="side-by-side">
           {others.map((k) => (

@@ -1,13 +1,15 @@
 // The sentences about a survey: what the readings allow, how the fit ended, what no reading tells.
-import type { FittedLayer, SoilFit } from '@ohmstead/study';
-import { band, bandQuantity, fitted, outsideBand, surveyed } from '../format/fitted.ts';
+import type { DisplayUnits, FittedLayer, SoilFit } from '@ohmstead/study';
+import { band, bandQuantity, outsideBand } from '../format/fitted.ts';
+import { bandLength, fittedLength, surveyedLength, surveyedNumber } from '../format/fitted-length.ts';
+import { lengthUnit } from '../format/length.ts';
 import { percent } from '../format/number.ts';
 import { counted, countWord, listed } from '../format/words.ts';
 
-/** `0.5 to 32`, metres. */
-export function spacingRange({ readings }: SoilFit): string {
+/** `0.5 to 32 m`. */
+export function spacingRange({ readings }: SoilFit, units: DisplayUnits): string {
   const spacings = readings.map((reading) => reading.spacing_m);
-  return `${surveyed(Math.min(...spacings))} to ${surveyed(Math.max(...spacings))}\u202fm`;
+  return `${surveyedNumber(Math.min(...spacings), units)} to ${surveyedLength(Math.max(...spacings), units)}`;
 }
 
 export function traverseCount({ readings }: SoilFit): number {
@@ -21,25 +23,25 @@ function ordinal(k: number): string {
 }
 
 /** `178–231 Ω·m above and 41–62 Ω·m below, the interface at 1.4–1.8 m`. */
-function allowed(layers: readonly FittedLayer[]): string {
+function allowed(layers: readonly FittedLayer[], units: DisplayUnits): string {
   const rho = layers.map((layer) => bandQuantity(layer.resistivity_ohm_m, 'Ω·m'));
   if (layers.length === 1) return rho[0];
   if (layers.length === 2) {
     const { thickness_m } = layers[0];
-    const depth = thickness_m === null ? '' : `, the interface at ${bandQuantity(thickness_m, 'm')}`;
+    const depth = thickness_m === null ? '' : `, the interface at ${bandLength(thickness_m, units)}`;
     return `${rho[0]} above and ${rho[1]} below${depth}`;
   }
   return listed(
     layers.map(({ thickness_m }, k) => {
       if (thickness_m === null) return `${rho[k]} below`;
-      return `${rho[k]} in the ${ordinal(k)} layer of ${bandQuantity(thickness_m, 'm')}`;
+      return `${rho[k]} in the ${ordinal(k)} layer of ${bandLength(thickness_m, units)}`;
     }),
   );
 }
 
 /** What the middle nine tenths of the soils that fit leave open. */
-export function allowedSentence({ layers }: SoilFit): string {
-  return `The readings allow ${allowed(layers)} (5–95\u202f% of the soils that fit within their scatter).`;
+export function allowedSentence({ layers }: SoilFit, units: DisplayUnits): string {
+  return `The readings allow ${allowed(layers, units)} (5–95\u202f% of the soils that fit within their scatter).`;
 }
 
 /** Quantities whose best fit lies outside the band; undefined where there are none. */
@@ -81,19 +83,23 @@ export function choiceWords(fit: SoilFit, asked: number | 'auto' | undefined): s
 }
 
 /** What the depth that readings resolve means beside the size of the metal. */
-export function depthSentence(fit: SoilFit, diagonal: number): string {
-  const depth = `${fitted(fit.resolved_depth_m)}\u202fm`;
-  const size = `${fitted(diagonal)}\u202fm`;
+export function depthSentence(fit: SoilFit, diagonal: number, units: DisplayUnits): string {
+  const depth = fittedLength(fit.resolved_depth_m, units);
+  const size = fittedLength(diagonal, units);
   return fit.resolved_depth_m >= diagonal
     ? `The readings resolve the ground to about ${depth}, deeper than the diagonal of the electrode, ${size}.`
     : `The readings resolve the ground to about ${depth}; the diagonal of the electrode is ${size}. What lies deeper counts in its resistance and is told only by the trend of the curve.`;
 }
 
 /** Doubt where no spacing is as short as the metal is deep; undefined otherwise. Common practice, no source. */
-export function shortSpacingSentence(fit: SoilFit, shallowest: number | undefined): string | undefined {
+export function shortSpacingSentence(
+  fit: SoilFit,
+  shallowest: number | undefined,
+  units: DisplayUnits,
+): string | undefined {
   const shortest = Math.min(...fit.readings.map((reading) => reading.spacing_m));
   if (shallowest === undefined || shortest <= shallowest) return undefined;
-  return `The shortest spacing, ${surveyed(shortest)}\u202fm, is longer than the metal is deep, ${surveyed(shallowest)}\u202fm: no reading tells the top of the ground by itself, which decides touch and step voltages.`;
+  return `The shortest spacing, ${surveyedLength(shortest, units)}, is longer than the metal is deep, ${surveyedLength(shallowest, units)}: no reading tells the top of the ground by itself, which decides touch and step voltages.`;
 }
 
 /** What no reading tells; common practice, no source. */
@@ -115,6 +121,8 @@ export function surveyFacts(fit: SoilFit): readonly string[] {
 }
 
 /** `1.37–1.79`, or a word for ground without a bottom. */
-export function thicknessBand(layer: FittedLayer): string {
-  return layer.thickness_m === null ? 'to any depth' : band(layer.thickness_m);
+export function thicknessBand({ thickness_m }: FittedLayer, units: DisplayUnits): string {
+  if (thickness_m === null) return 'to any depth';
+  const { metres } = lengthUnit(units);
+  return band({ low: thickness_m.low / metres, high: thickness_m.high / metres });
 }

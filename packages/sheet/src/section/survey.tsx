@@ -1,6 +1,8 @@
 // The survey as part of the ground: what was read, what was fitted, what stays open, and what to mind.
 import type { Outcome, SoilFit } from '@ohmstead/study';
 import type { VNode } from 'preact';
+import { useUnits } from '../desk/use-units.ts';
+import { Stated } from '../field/inputs.tsx';
 import { SoundingFigure } from '../figure/sounding.tsx';
 import { titles } from '../figure/titles.ts';
 import { fitted } from '../format/fitted.ts';
@@ -9,8 +11,9 @@ import { capital, counted, countWord, listed } from '../format/words.ts';
 import { diagonalOf, shallowestOf } from '../geometry/electrode-size.ts';
 import { soundingDrawing } from '../geometry/sounding-drawing.ts';
 import { Layers } from './layers.tsx';
-import { FigureBlock, Fold, Input, Result, Say } from './parts.tsx';
+import { FigureBlock, Fold, Result, Say } from './parts.tsx';
 import { Remarks } from './remarks.tsx';
+import { LayerCount } from './soil-fields.tsx';
 import { CurveTable, LayerTable, ReadingTable, TrialTable } from './survey-tables.tsx';
 import {
   allowedSentence,
@@ -25,13 +28,14 @@ import {
 } from './survey-words.ts';
 
 function Read({ outcome, fit }: { outcome: Outcome; fit: SoilFit }): VNode {
+  const units = useUnits();
   const traverses = traverseCount(fit);
   return (
     <Say>
       The soil is fitted to {counted(fit.readings.length, 'reading')}
       {traverses > 1 && ` on ${countWord(traverses)} traverses`} in{' '}
-      <Input path="soil.survey" value={outcome.study.soil.survey ?? fit.survey_file} />, at spacings from{' '}
-      {spacingRange(fit)}. <Layers layers={outcome.results.soil.layers} origin="fitted" />.
+      <Stated path={['soil', 'survey']} text={outcome.study.soil.survey ?? fit.survey_file} />, at spacings
+      from {spacingRange(fit, units)}. <Layers layers={outcome.results.soil.layers} origin="fitted" />.
     </Say>
   );
 }
@@ -41,7 +45,7 @@ function Fitted({ outcome, fit }: { outcome: Outcome; fit: SoilFit }): VNode {
   return (
     <Say>
       {endingWords(fit.outcome)}; it misses the readings by <Result>{percent(fit.rms_percent / 100)}</Result>{' '}
-      (root mean square). The number of layers, <Input path="soil.layer_count" value={asked ?? 'auto'} />,{' '}
+      (root mean square). The number of layers, <LayerCount asked={asked ?? 'auto'} />,{' '}
       {choiceWords(fit, asked)}.{'\u00a0'}
       <Fold label="how" of=" the number of layers is proposed">
         <TrialTable fit={fit} />
@@ -55,7 +59,7 @@ function Allowed({ fit }: { fit: SoilFit }): VNode {
   const outside = outsideSentence(fit);
   return (
     <Say>
-      {allowedSentence(fit)} {outside !== undefined && `${outside} `}
+      {allowedSentence(fit, useUnits())} {outside !== undefined && `${outside} `}
       What that does to resistance, rise, touch and step voltage is told beside each of them; it is no part of
       any ±, which is numerical.{'\u00a0'}
       <Fold label="how" of=" the band is found">
@@ -71,10 +75,11 @@ function Allowed({ fit }: { fit: SoilFit }): VNode {
 
 function Depth({ outcome, fit }: { outcome: Outcome; fit: SoilFit }): VNode {
   const { conductors } = outcome.plan;
-  const short = shortSpacingSentence(fit, shallowestOf(conductors));
+  const units = useUnits();
+  const short = shortSpacingSentence(fit, shallowestOf(conductors), units);
   return (
     <Say>
-      {depthSentence(fit, diagonalOf(conductors))}
+      {depthSentence(fit, diagonalOf(conductors), units)}
       {short !== undefined && ` ${short}`}
       {'\u00a0'}
       <Fold label="how" of=" the depth is found">

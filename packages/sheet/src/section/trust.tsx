@@ -5,7 +5,8 @@ import { percent, powerOfTen, significant } from '../format/number.ts';
 import { tally } from '../format/words.ts';
 import { S } from './formulas.tsx';
 import { How } from './how.tsx';
-import { DataTable, Part, Result, Say } from './parts.tsx';
+import { Part } from './part.tsx';
+import { DataTable, Result, Say } from './parts.tsx';
 
 /** Current that may be missing at remote earth, of the current injected; far above rounding, far below any result's digits. */
 const BALANCE_TOLERANCE = 1e-6;
@@ -95,6 +96,7 @@ function Mesh({ mesh }: { mesh: Results['mesh'] }): VNode {
             significant(level.worst_touch_ratio, 4),
             significant(level.worst_step_ratio, 4),
           ])}
+          file="mesh.csv"
         />
       )}
     </>
@@ -110,7 +112,7 @@ export function Trust({ outcome }: { outcome: Outcome }): VNode {
     tally(mesh.length, 'mesh', 'meshes'),
   ];
   return (
-    <Part id="trust" title="Trust" facts={facts}>
+    <Part id="trust" title="Trust" facts={facts} outcome={outcome}>
       <Balance checks={checks} />
       <Equations checks={checks} />
       <Mesh mesh={mesh} />

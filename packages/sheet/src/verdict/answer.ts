@@ -1,6 +1,7 @@
 // Says the answer of the whole sheet in words, for the title block.
-import type { Results } from '@ohmstead/study';
-import { measured, percent, place, quantity } from '../format/number.ts';
+import type { DisplayUnits, Results } from '@ohmstead/study';
+import { place } from '../format/length.ts';
+import { measured, percent, quantity } from '../format/number.ts';
 import { capital, countWord } from '../format/words.ts';
 import { type Finding, findingWords } from './finding.ts';
 import { type VerdictRow, verdictRows } from './rows.ts';
@@ -77,24 +78,24 @@ export function subjectVoltage(row: VerdictRow): string {
   return row.subject.replace(/^(touch|step)/, '$1 voltage');
 }
 
-function sentence(row: VerdictRow): string {
+function sentence(row: VerdictRow, units: DisplayUnits): string {
   const worst = measured(row.worst, row.uncertainty, 'V');
   const against =
     row.finding === 'beyond'
       ? findingWords(row).replace('the limit', `the limit of ${quantity(row.limit, 'V')}`)
       : `cannot be decided at this mesh against the limit of ${quantity(row.limit, 'V')}`;
-  return `${row.caseName}: the worst ${subjectVoltage(row)}, ${worst} at ${place(row.x, row.y)}, ${against}.`;
+  return `${row.caseName}: the worst ${subjectVoltage(row)}, ${worst} at ${place(row.x, row.y, units)}, ${against}.`;
 }
 
 /** At most this many single findings are told at the top; the table under People has them all. */
 const MOST_SENTENCES = 3;
 
 /** The findings behind the answer, worst first, then the narrowest margin of what is within. */
-export function answerSentences(results: Results): readonly string[] {
+export function answerSentences(results: Results, units: DisplayUnits = 'SI'): readonly string[] {
   const rows = [...verdictRows(results)].sort((a, b) => b.share - a.share || a.caseIndex - b.caseIndex);
   const told = rows.filter((r) => r.finding !== 'within');
   const within = rows.filter((r) => r.finding === 'within');
-  const lines = told.slice(0, MOST_SENTENCES).map(sentence);
+  const lines = told.slice(0, MOST_SENTENCES).map((row) => sentence(row, units));
   const more = told.length - lines.length;
   if (more > 0) lines.push(`${capital(countWord(more))} more under People.`);
   if (within.length > 0) {

@@ -5,11 +5,9 @@ import {
   decimalsFor,
   fixed,
   given,
-  givenPlace,
   givenQuantity,
   measured,
   percent,
-  place,
   powerOfTen,
   quantity,
   significant,
@@ -120,11 +118,6 @@ describe('quantities', () => {
         },
       ),
     );
-  });
-
-  it('writes places so that no line breaks inside them', () => {
-    expect(place(24, 33.46)).toBe('(24.0,\u00a033.5)\u202fm');
-    expect(givenPlace(24, -0.25)).toBe('(24,\u00a0\u22120.25)\u202fm');
   });
 });
 

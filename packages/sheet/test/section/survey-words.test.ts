@@ -28,7 +28,7 @@ const layer = (rho: Spread, thickness: Spread): FittedLayer => ({
 
 describe('what the readings allow', () => {
   it('is one range in uniform soil', () => {
-    expect(plain(allowedSentence(fitOf(last(95.4, 112.3))))).toBe(
+    expect(plain(allowedSentence(fitOf(last(95.4, 112.3)), 'SI'))).toBe(
       'The readings allow 95.4–112 Ω·m (5–95 % of the soils that fit within their scatter).',
     );
   });
@@ -39,7 +39,7 @@ describe('what the readings allow', () => {
       layer(spread(441, 17_600), spread(0.1, 4.14)),
       last(27.7, 32.1),
     );
-    expect(plain(allowedSentence(fit))).toContain(
+    expect(plain(allowedSentence(fit, 'SI'))).toContain(
       'The readings allow 126–143 Ω·m in the first layer of 1.14–1.77 m, 441–17 600 Ω·m in the second layer of 0.100–4.14 m and 27.7–32.1 Ω·m below (',
     );
   });
@@ -56,9 +56,13 @@ describe('what the readings allow', () => {
 describe('the depth that the readings resolve', () => {
   it('is set against the diagonal of the electrode', () => {
     const fit = fitOf(last(1, 3));
-    expect(plain(depthSentence(fit, 10))).toBe(
+    expect(plain(depthSentence(fit, 10, 'SI'))).toBe(
       'The readings resolve the ground to about 16.6 m, deeper than the diagonal of the electrode, 10.0 m.',
     );
-    expect(plain(depthSentence(fit, 40))).toContain('What lies deeper counts in its resistance');
+    expect(plain(depthSentence(fit, 40, 'SI'))).toContain('What lies deeper counts in its resistance');
+    // 16.6 m and 10 m over 0.3048 m: NIST SP 811:2008, appendix B (from memory)
+    expect(plain(depthSentence(fit, 10, 'US'))).toContain(
+      'about 54.5 ft, deeper than the diagonal of the electrode, 32.8 ft',
+    );
   });
 });
