@@ -15,7 +15,7 @@ export interface Calibration {
 const MULTIPLY_ADDS = 2_500_000;
 /** Operations of one of its rounds: twelve chains, two doubles, a product and a sum. */
 const OPERATIONS = 48;
-/** Doubles of each of the triad's arrays: 96 MB together, past the last-level cache. */
+/** Doubles of each of the triad's arrays: 96 MB together, past the caches of any one core. */
 const TRIAD = 4_000_000;
 /** Doubles of the root loop: in the first cache, so that memory does not count. */
 const ROOTS = 1024;

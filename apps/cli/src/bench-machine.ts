@@ -15,7 +15,7 @@ export function busyLine(found: Calibration | undefined): string {
       ? 'no vectors in WebAssembly'
       : [
           `f64x2 multiply-add ${found.multiplyAddGflops.toFixed(1)} GF/s`,
-          `triad ${found.triadGBs.toFixed(1)} GB/s`,
+          `triad over 96 MB ${found.triadGBs.toFixed(1)} GB/s`,
           `1/√ ${found.reciprocalRootNs.toFixed(2)} ns`,
         ].join(', ');
   return `Load ${load.join(' ')} · one thread: ${loops}`;

@@ -28,17 +28,31 @@ export async function probeNumpy(spawner: Spawner): Promise<Numpy> {
   return { kind: 'present', version: asked.stdout.trim() };
 }
 
-/** @param casePath file written by `writeNumpyCase` @param atMost rounds that the scripts take part in */
-export function numpyArms(spawner: Spawner, casePath: string, atMost: number): Arm[] {
+/**
+ * @param casePath file written by `withNumpyCase`
+ * @param atMost rounds that the scripts take part in
+ * @param failed told why a script has no figures; the rest of the benchmark goes on
+ */
+export function numpyArms(
+  spawner: Spawner,
+  casePath: string,
+  atMost: number,
+  failed: (why: string) => void,
+): Arm[] {
   return SCRIPTS.map(([name, script]) => ({
     name,
     atMost,
     async run() {
       const runs: Run[] = [];
-      for (const threads of THREADS)
-        runs.push(
-          runOf(name, await spawner('python3', [scriptPath(script), casePath], environment(threads))),
-        );
+      for (const threads of THREADS) {
+        const ended = await spawner('python3', [scriptPath(script), casePath], environment(threads));
+        try {
+          runs.push(runOf(name, ended));
+        } catch (error) {
+          failed(error instanceof Error ? error.message : String(error));
+          return undefined;
+        }
+      }
       return runs.reduce((best, run) => (run.wallMs < best.wallMs ? run : best));
     },
   }));

@@ -14,10 +14,11 @@ export interface Arm {
   readonly name: string;
   /** rounds it takes part in, from the first, where it is too slow for all */
   readonly atMost?: number;
-  run(): Promise<Run>;
+  /** undefined where it failed, for a reason told elsewhere */
+  run(): Promise<Run | undefined>;
 }
 
-/** Runs of every arm by round; undefined where it sat out. */
+/** Runs of every arm by round; undefined where it sat out or failed. */
 export type Rounds = ReadonlyMap<string, readonly (Run | undefined)[]>;
 
 /** @param told called before each run */

@@ -76,14 +76,14 @@ async function roundsOf(one: BenchCase, system: BenchSystem, around: Surrounding
   if (!scripts) return inTurns(own, one.rounds, say);
   const atMost = one.scripts === 'full' ? 1 : SCRIPT_ROUNDS;
   return withNumpyCase(system, (path) =>
-    inTurns([...own, ...numpyArms(spawner, path, atMost)], one.rounds, say),
+    inTurns([...own, ...numpyArms(spawner, path, atMost, say)], one.rounds, say),
   );
 }
 
 function row(arm: string, rounds: Rounds, over: Spread | undefined, exact: number): string[] {
   const of = (pick: Parameters<typeof figures>[2]): number[] =>
     figures(rounds, arm, pick).filter((value) => value !== undefined);
-  const found = spread(resistances(rounds, arm))!.median;
+  const found = spread(resistances(rounds, arm))?.median;
   return [
     arm,
     String(of((run) => run.wallMs).length),
@@ -91,8 +91,8 @@ function row(arm: string, rounds: Rounds, over: Spread | undefined, exact: numbe
     spreadText(spread(of((run) => run.solveMs)), ''),
     spreadText(spread(of((run) => run.cpuMs)), ''),
     arm === ENGINE ? '1' : spreadText(over, '×'),
-    found.toPrecision(7),
-    relative(found / exact - 1),
+    found?.toPrecision(7) ?? 'failed',
+    relative(found === undefined ? undefined : found / exact - 1),
   ];
 }
 

@@ -42,7 +42,7 @@ test('each run tries one and two threads without a forced kind of processor, and
       stdout: env.OPENBLAS_NUM_THREADS === '1' ? printed(1, 3) : printed(1, 2),
     };
   };
-  const [whole] = numpyArms(spawner, '/case.json', 1);
+  const [whole] = numpyArms(spawner, '/case.json', 1, () => {});
   const run = await whole!.run();
   delete process.env.OPENBLAS_CORETYPE;
   expect(whole!.name).toBe(WHOLE_ARRAY);
@@ -51,6 +51,13 @@ test('each run tries one and two threads without a forced kind of processor, and
     ['2', undefined, '/case.json'],
   ]);
   expect(run).toEqual({ wallMs: 3000, cpuMs: 750, solveMs: 2000, resistance: 2 });
+});
+
+test('a script that fails leaves no figures and says why', async () => {
+  const told: string[] = [];
+  const [whole] = numpyArms(ending(1, '', 'MemoryError'), '/case.json', 1, (why) => told.push(why));
+  expect(await whole!.run()).toBeUndefined();
+  expect(told).toEqual([`${WHOLE_ARRAY}: ended with 1: MemoryError`]);
 });
 
 test('a script that fails, or prints something else, is named with what it said', () => {
