@@ -59,16 +59,19 @@ function recordsOf(
 }
 
 /** The table that new rows go to: the one asked for, the first, or a new one. */
-function targetTable(draft: Draft, path: string | undefined): { draft: Draft; table: Table } {
+function targetTable(draft: Draft, asked: string | undefined): { draft: Draft; table: Table } {
   const tables = tablesOf(draft);
-  const table = tables.find((one) => one.path === path) ?? tables[0];
+  const table = tables.find(({ path }) => path === asked) ?? tables[0];
   if (table !== undefined) return { draft, table };
-  const name = freePath(draft);
-  const bytes = new TextEncoder().encode(newTableText());
-  const file = conductorFile(bytes);
+  const path = freePath(draft);
+  return { draft: insertItem(draft, TABLES, listAt(draft, TABLES).length, path), table: newTable(path) };
+}
+
+/** A table with a header and no rows. */
+function newTable(path: string): Table {
+  const file = conductorFile(new TextEncoder().encode(newTableText()));
   if (file === undefined) throw new Error('a new table of conductors cannot be read');
-  const listed = insertItem(withFile(draft, name, bytes), TABLES, listAt(draft, TABLES).length, name);
-  return { draft: listed, table: { ...file, path: name } };
+  return { ...file, path };
 }
 
 function freePath(draft: Draft): string {
@@ -232,4 +235,23 @@ export function deleteConductors(draft: Draft, rows: readonly RowOrigin[]): Draf
     }
     return withText(next, table.path, withoutRecords(table.text, gone));
   }, draft);
+}
+
+/**
+ * Replaces every conductor of a table: its header and what stands above it stay, so that columns and units are those of
+ * the file; rows and the lines between them go. A file that is no table is begun anew.
+ * @param path of the table; the first one where undefined, a new `conductors.csv` where the study has none
+ */
+export function replaceConductors(draft: Draft, conductors: readonly Conductor[], path?: string): Draft {
+  const target = path ?? conductorTables(draft.study)[0];
+  if (target === undefined) return addConductors(draft, conductors).draft;
+  const table = tablesOf(draft).find((one) => one.path === target) ?? newTable(target);
+  const { records } = table.text;
+  const below = new Set(records.map((_, i) => i).filter((i) => i > table.header));
+  const emptied = {
+    ...table,
+    text: withoutRecords(table.text, below),
+    recordOnLine: new Map<number, number>(),
+  };
+  return withText(draft, target, written(emptied, new Map(), conductors));
 }

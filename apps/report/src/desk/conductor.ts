@@ -26,6 +26,8 @@ export type ConductorKey = keyof Conductor;
 const PLACE_TOLERANCE_M = 1e-9;
 /** Of other quantities, relative. Reason: beyond what any data sheet gives. */
 const RELATIVE_TOLERANCE = 1e-9;
+/** Decimals that a place may need: a nanometre in kilometres. */
+const MOST_DECIMALS = 12;
 /** Digits that tell every double apart. */
 const MOST_DIGITS = 17;
 
@@ -36,19 +38,26 @@ export function cellTolerance(key: string, value: number): number {
   return placeKeys.has(key) ? PLACE_TOLERANCE_M : RELATIVE_TOLERANCE * Math.abs(value);
 }
 
+/** A number rounded ever less: places by decimals, so that what is nearly nought becomes it, others by digits. */
+function* roundings(key: string, value: number): Generator<number> {
+  if (placeKeys.has(key)) {
+    for (let decimals = 0; decimals <= MOST_DECIMALS; decimals++) yield Number(value.toFixed(decimals));
+    return;
+  }
+  for (let digits = 1; digits < MOST_DIGITS; digits++) yield Number(value.toPrecision(digits));
+}
+
 /**
  * A value in the unit of its column.
  * @param key column without its unit
  * @param value in SI
  * @param unit of the column
- * @returns the fewest digits that are read back within `cellTolerance`, or else as every digit there is
+ * @returns the fewest digits that are read back within `cellTolerance`, or else every digit there is
  */
 export function numberCell(key: string, value: number, unit: Unit): string {
   const inUnit = (value * unit.denominator) / unit.numerator;
-  const tolerance = cellTolerance(key, value);
-  for (let digits = 1; digits < MOST_DIGITS; digits++) {
-    const short = Number(inUnit.toPrecision(digits));
-    if (Math.abs(toSi(short, unit) - value) <= tolerance) return String(short + 0);
+  for (const short of roundings(key, inUnit)) {
+    if (Math.abs(toSi(short, unit) - value) <= cellTolerance(key, value)) return String(short + 0);
   }
   return String(inUnit + 0);
 }

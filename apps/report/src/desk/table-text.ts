@@ -84,9 +84,14 @@ function cellText(cell: string): string {
   return /[",\r\n]|^\s|\s$/.test(cell) ? `"${cell.replaceAll('"', '""')}"` : cell;
 }
 
+/** A row of cells without its line end. */
+export function csvLine(cells: readonly string[]): string {
+  return cells.map(cellText).join(',');
+}
+
 /** A record with other cells, its line end kept. */
 export function withCells(record: TextRecord, cells: readonly string[]): TextRecord {
-  return { ...record, raw: cells.map(cellText).join(','), cells };
+  return { ...record, raw: csvLine(cells), cells };
 }
 
 /** A record with blank cells after its own. */

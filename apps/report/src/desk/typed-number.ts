@@ -32,13 +32,12 @@ function plainDigits(text: string, decimal: DecimalMark | undefined): string | u
   const mark = text[last] === ',' ? ',' : '.';
   const other = mark === ',' ? '.' : ',';
   const whole = text.slice(0, last);
-  const part = text.slice(last + 1);
-  // one mark several times groups digits
-  if (whole.includes(mark)) return grouped(text, mark) ? text.replaceAll(mark, '') : undefined;
-  if (whole.includes(other))
-    return grouped(whole, other) ? `${whole.replaceAll(other, '')}.${part}` : undefined;
-  if (decimal === ',' && mark === '.') return undefined;
-  return `${whole}.${part}`;
+  // a mark that stands several times, or is not the decimal one, groups digits
+  if (whole.includes(mark) || (decimal !== undefined && mark !== decimal)) {
+    return grouped(text, mark) ? text.replaceAll(mark, '') : undefined;
+  }
+  if (whole.includes(other) && !grouped(whole, other)) return undefined;
+  return `${whole.replaceAll(other, '')}.${text.slice(last + 1)}`;
 }
 
 /**

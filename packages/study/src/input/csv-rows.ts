@@ -27,14 +27,18 @@ const quoteMessages: ReadonlyMap<string, string> = new Map([
   ],
 ]);
 
+/** Marks past the first: the parser passes over one of them without counting it, which would shift every line. */
+const BYTE_ORDER_MARKS = /^\ufeff+/;
+
 /**
  * Splits CSV text into rows and cells.
- * @param text line ends are `\n`
+ * @param table text with line ends `\n`
  * @param most rows to keep
  * @param separator of the columns, one character
  * @returns rows; blank rows and rows of nothing but commas are passed over
  */
-export function csvRows(text: string, most: number, separator: string = ','): CsvRows {
+export function csvRows(table: string, most: number, separator: string = ','): CsvRows {
+  const text = table.replace(BYTE_ORDER_MARKS, '');
   const rows: CsvRow[] = [];
   let quote: { line: number; message: string } | undefined;
   let truncated = false;
