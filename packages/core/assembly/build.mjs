@@ -7,7 +7,7 @@ import asc from 'assemblyscript/asc';
 const here = dirname(fileURLToPath(import.meta.url));
 
 /** Modules, each with its entry file. */
-export const MODULES = ['surface', 'leakage', 'cholesky', 'product'];
+export const MODULES = ['surface', 'leakage', 'cholesky', 'product', 'blocks'];
 
 /** @param {string} name @returns {string} path of the generated file */
 export function targetOf(name) {

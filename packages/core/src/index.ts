@@ -36,12 +36,37 @@ export { meshOutlines } from './geometry/outline.ts';
 export { segmentMesh } from './geometry/segmentation.ts';
 export type { SegmentMesh } from './geometry/segments.ts';
 export { useKernels } from './kernels/instance.ts';
-export { type CompressedLeakageMatrix, compressedLeakageMatrix } from './leakage/compressed-matrix.ts';
-export { type LeakageMatrix, leakageMatrix, planReach } from './leakage/leakage-matrix.ts';
+export {
+  type BlockPart,
+  type BlockPlan,
+  COMPRESSION,
+  type CompressionOptions,
+  planBlocks,
+  plannedBytes,
+} from './leakage/block-plan.ts';
+export {
+  assembleMatrix,
+  type CompressedLeakageMatrix,
+  compressedLeakageMatrix,
+  type JoinedParts,
+  joinParts,
+  type PartProducts,
+  type PartStart,
+  startPart,
+} from './leakage/compressed-matrix.ts';
+export {
+  type LeakageBlocks,
+  type LeakageMatrix,
+  leakageBlocks,
+  leakageMatrix,
+  planReach,
+} from './leakage/leakage-matrix.ts';
 export { leakageOperator } from './leakage/leakage-operator.ts';
+export { type PartInputs, type PartMatrix, partMatrix } from './leakage/part-matrix.ts';
 export { type ConductorMaterial, conductorMaterials } from './materials/conductor-materials.ts';
 export { type Branches, branchCurrents, nodeOutflow, REMOTE_EARTH } from './network/branches.ts';
 export { type ReducedLaplacian, reducedLaplacian } from './network/reduced-laplacian.ts';
+export { type BlockRoom, blockRoom, MemoryRefused } from './numerics/dense-blocks.ts';
 export { factorPacked } from './numerics/packed-cholesky.ts';
 export { type Covering, coveringDeratingFactor } from './safety/covering-derating.ts';
 export {

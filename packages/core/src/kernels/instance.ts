@@ -107,6 +107,28 @@ export function reserve(kernel: Kernel, bytes: number): boolean {
   }
 }
 
+/** An instance whose memory is given out piece by piece, for data that stay. */
+export interface Store {
+  readonly kernel: Kernel;
+  /** first free address */
+  free: number;
+}
+
+/** An empty store; undefined as kernelOf. */
+export function storeOf(bytes: string): Store | undefined {
+  const kernel = ownKernel(bytes);
+  return kernel && { kernel, free: BASE };
+}
+
+/** @returns address of a piece of so many bytes; undefined where they are refused, with nothing changed */
+export function take(store: Store, bytes: number): number | undefined {
+  const at = store.free;
+  const next = at + Math.ceil(bytes / ALIGN) * ALIGN;
+  if (!reserve(store.kernel, next)) return undefined;
+  store.free = next;
+  return at;
+}
+
 /** Doubles at an address of a kernel's memory, valid until the next `place`. */
 export function doublesAt(kernel: Kernel, address: number, length: number): Float64Array {
   return new Float64Array(kernel.memory.buffer, address, length);
