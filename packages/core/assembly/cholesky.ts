@@ -1,22 +1,44 @@
 // Cholesky factor in block rows of four: panels [k][4], so that an update tile reads contiguous doubles.
 
+/** Panels of a block: its rows, 256 columns long, stay in the second-level memory while all rows below are reduced by them. */
+const BLOCK: i32 = 64;
+
 /**
  * Factors panels in place. Panel p holds rows 4p … 4p + 3 of the lower triangle, column after column of four, 4(p + 1)
  * columns, and follows panel p − 1.
  * @returns −1, or the row whose pivot is not positive
  */
 export function factor(a: usize, panels: i32): i32 {
-  for (let p: i32 = 0; p < panels; p++) {
+  for (let first: i32 = 0; first < panels; first += BLOCK) {
+    const last = min<i32>(first + BLOCK, panels);
+    for (let from: i32 = 0; from < first; from += BLOCK)
+      for (let p = first; p < panels; p++) {
+        const mine = a + panelAt(p);
+        const skip = <usize>from << 7;
+        for (let q = first, end = min<i32>(last, p + 1); q < end; q++)
+          reduce(mine + skip, a + panelAt(q) + skip, mine + (<usize>q << 7), BLOCK << 2);
+      }
+    const failed = factorBlock(a, first, last, panels);
+    if (failed >= 0) return failed;
+  }
+  return -1;
+}
+
+/** Columns first … last − 1 of all panels below them, everything before these columns being subtracted. */
+function factorBlock(a: usize, first: i32, last: i32, panels: i32): i32 {
+  const skip = <usize>first << 7;
+  for (let p = first; p < panels; p++) {
     const mine = a + panelAt(p);
-    for (let q: i32 = 0; q < p; q++) {
+    for (let q = first, end = min<i32>(last, p); q < end; q++) {
       const other = a + panelAt(q);
       const tile = mine + (<usize>q << 7);
-      reduce(mine, other, tile, q << 2);
+      reduce(mine + skip, other + skip, tile, (q - first) << 2);
       // what remains of the tile is divided by the triangle on the other panel's diagonal
       solve(tile, other + (<usize>q << 7));
     }
+    if (p >= last) continue;
     const tile = mine + (<usize>p << 7);
-    reduce(mine, mine, tile, p << 2);
+    reduce(mine + skip, mine + skip, tile, (p - first) << 2);
     const failed = triangle(tile);
     if (failed >= 0) return (p << 2) + failed;
   }
@@ -102,15 +124,25 @@ function triangle(tile: usize): i32 {
 
 /** Copies packed rows into panels, or back; rows past n are those of the identity. */
 export function toPanels(packed: usize, a: usize, n: i32, panels: i32): void {
-  for (let i: i32 = 0; i < panels << 2; i++) {
-    const p = i >> 2;
-    const into = a + panelAt(p) + (<usize>(i & 3) << 3);
-    const row = packed + ((<usize>i * <usize>(i + 1)) << 2);
-    for (let j: i32 = 0; j <= (p << 2) + 3; j++) {
-      let value: f64 = i == j ? 1 : 0;
-      if (i < n && j <= i) value = load<f64>(row + (<usize>j << 3));
-      store<f64>(into + (<usize>j << 5), value);
-    }
+  for (let p: i32 = 0; p < panels; p++) {
+    const into = a + panelAt(p);
+    const whole = (p << 2) + 4 <= n;
+    const first = packed + ((<usize>(p << 2) * <usize>((p << 2) + 1)) << 2);
+    const second = first + (<usize>p << 5) + 8;
+    const third = second + (<usize>p << 5) + 16;
+    const fourth = third + (<usize>p << 5) + 24;
+    if (whole)
+      for (let j: usize = 0; j < <usize>p << 5; j += 8) {
+        const at = into + (j << 2);
+        v128.store(at, v128.load64_lane(second + j, v128.load64_zero(first + j), 1));
+        v128.store(at, v128.load64_lane(fourth + j, v128.load64_zero(third + j), 1), 16);
+      }
+    for (let i = p << 2; i < (p << 2) + 4; i++)
+      for (let j = whole ? p << 2 : 0; j <= (p << 2) + 3; j++) {
+        let value: f64 = i == j ? 1 : 0;
+        if (i < n && j <= i) value = load<f64>(packed + ((<usize>i * <usize>(i + 1)) << 2) + (<usize>j << 3));
+        store<f64>(into + (<usize>j << 5) + (<usize>(i & 3) << 3), value);
+      }
   }
 }
 
@@ -119,5 +151,57 @@ export function fromPanels(packed: usize, a: usize, n: i32): void {
     const from = a + panelAt(i >> 2) + (<usize>(i & 3) << 3);
     const row = packed + ((<usize>i * <usize>(i + 1)) << 2);
     for (let j: i32 = 0; j <= i; j++) store<f64>(row + (<usize>j << 3), load<f64>(from + (<usize>j << 5)));
+  }
+}
+
+/**
+ * Solves L Lᵀ x = b in place for `count` right-hand sides, `stride` bytes apart, 4 × panels doubles each; a panel read
+ * serves them all.
+ */
+export function solveAll(a: usize, panels: i32, b: usize, stride: usize, count: i32): void {
+  for (let p: i32 = 0; p < panels; p++)
+    for (let c: i32 = 0; c < count; c++) forward(a + panelAt(p), <usize>p << 5, b + stride * <usize>c);
+  for (let p = panels - 1; p >= 0; p--)
+    for (let c: i32 = 0; c < count; c++) backward(a + panelAt(p), <usize>p << 5, b + stride * <usize>c);
+}
+
+/** Four unknowns of L y = b, those before them being final; `own` is their place in bytes. */
+function forward(panel: usize, own: usize, b: usize): void {
+  let low = v128.load(b + own);
+  let high = v128.load(b + own, 16);
+  for (let k: usize = 0; k < own; k += 8) {
+    const y = v128.load64_splat(b + k);
+    low = f64x2.sub(low, f64x2.mul(v128.load(panel + (k << 2)), y));
+    high = f64x2.sub(high, f64x2.mul(v128.load(panel + (k << 2), 16), y));
+  }
+  v128.store(b + own, low);
+  v128.store(b + own, high, 16);
+  const tile = panel + (own << 2);
+  for (let c: usize = 0; c < 4; c++) {
+    const at = b + own + (c << 3);
+    let rest = load<f64>(at);
+    for (let m: usize = 0; m < c; m++) rest -= load<f64>(tile + (m << 5) + (c << 3)) * load<f64>(b + own + (m << 3));
+    store<f64>(at, rest / load<f64>(tile + (c << 5) + (c << 3)));
+  }
+}
+
+/** Four unknowns of Lᵀ x = y, those after them being final and already taken from y, as these are then from the rest. */
+function backward(panel: usize, own: usize, b: usize): void {
+  const tile = panel + (own << 2);
+  for (let c: isize = 3; c >= 0; c--) {
+    const at = b + own + (<usize>c << 3);
+    let rest = load<f64>(at);
+    for (let m = c + 1; m < 4; m++)
+      rest -= load<f64>(tile + (<usize>c << 5) + (<usize>m << 3)) * load<f64>(b + own + (<usize>m << 3));
+    store<f64>(at, rest / load<f64>(tile + (<usize>c << 5) + (<usize>c << 3)));
+  }
+  const low = v128.load(b + own);
+  const high = v128.load(b + own, 16);
+  for (let k: usize = 0; k < own; k += 16) {
+    const at = panel + (k << 2);
+    const even = f64x2.add(f64x2.mul(v128.load(at), low), f64x2.mul(v128.load(at, 16), high));
+    const odd = f64x2.add(f64x2.mul(v128.load(at, 32), low), f64x2.mul(v128.load(at, 48), high));
+    const given = f64x2.add(v128.shuffle<f64>(even, odd, 0, 2), v128.shuffle<f64>(even, odd, 1, 3));
+    v128.store(b + k, f64x2.sub(v128.load(b + k), given));
   }
 }

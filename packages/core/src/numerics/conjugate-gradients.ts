@@ -101,8 +101,8 @@ function begun(b: Float64Array, tolerance: number, start: Float64Array | undefin
   const n = b.length;
   return {
     b,
-    x: start === undefined ? new Float64Array(n) : Float64Array.from(start),
-    r: Float64Array.from(b),
+    x: start === undefined ? new Float64Array(n) : start.slice(),
+    r: b.slice(),
     p: new Float64Array(n),
     q: new Float64Array(n),
     target: tolerance * Math.sqrt(dot(b, b)),

@@ -28,15 +28,13 @@ export interface SparseFactor {
  */
 export function factorSparse(matrix: SparseSymmetric): SparseFactor {
   const n = matrix.size;
-  const neighbours: Map<number, number>[] = Array.from({ length: n }, () => new Map());
+  const graph: Neighbours[] = Array.from({ length: n }, () => ({ unknowns: [], values: [] }));
   for (let e = 0; e < matrix.value.length; e++) {
-    const i = matrix.row[e]!;
-    const j = matrix.column[e]!;
-    neighbours[i]!.set(j, (neighbours[i]!.get(j) ?? 0) + matrix.value[e]!);
-    neighbours[j]!.set(i, (neighbours[j]!.get(i) ?? 0) + matrix.value[e]!);
+    addTo(graph[matrix.row[e]!]!, matrix.column[e]!, matrix.value[e]!);
+    addTo(graph[matrix.column[e]!]!, matrix.row[e]!, matrix.value[e]!);
   }
   const diagonal = Float64Array.from(matrix.diagonal);
-  const queue = degreeQueue(neighbours);
+  const queue = degreeQueue(graph);
   const done = new Uint8Array(n);
   const order = new Int32Array(n);
   const pivot = new Float64Array(n);
@@ -44,29 +42,29 @@ export function factorSparse(matrix: SparseSymmetric): SparseFactor {
   const rows: number[] = [];
   const values: number[] = [];
   for (let k = 0; k < n; k++) {
-    const v = queue.next(done, neighbours);
+    const v = queue.next(done);
     const p = diagonal[v]!;
     if (!(p > 0)) throw new NotPositiveDefinite(v);
     done[v] = 1;
     order[k] = v;
     pivot[k] = p;
-    const around = [...neighbours[v]!];
-    for (const [i] of around) neighbours[i]!.delete(v);
-    for (let a = 0; a < around.length; a++) {
-      const [i, wi] = around[a]!;
+    const around = graph[v]!;
+    for (const i of around.unknowns) remove(graph[i]!, v);
+    for (let a = 0; a < around.unknowns.length; a++) {
+      const i = around.unknowns[a]!;
+      const wi = around.values[a]!;
       const factor = wi / p;
       rows.push(i);
       values.push(factor);
       diagonal[i]! -= factor * wi;
-      for (let b = a + 1; b < around.length; b++) {
-        const [j, wj] = around[b]!;
-        const change = -factor * wj;
-        neighbours[i]!.set(j, (neighbours[i]!.get(j) ?? 0) + change);
-        neighbours[j]!.set(i, (neighbours[j]!.get(i) ?? 0) + change);
+      for (let b = a + 1; b < around.unknowns.length; b++) {
+        const j = around.unknowns[b]!;
+        const change = -factor * around.values[b]!;
+        addTo(graph[i]!, j, change);
+        addTo(graph[j]!, i, change);
       }
     }
-    for (const [i] of around) queue.push(i, neighbours[i]!.size);
-    neighbours[v]!.clear();
+    for (const i of around.unknowns) queue.push(i);
     start[k + 1] = rows.length;
   }
   const place = new Int32Array(n);
@@ -97,29 +95,53 @@ export function solveEliminated(factor: SparseFactor, b: Float64Array): void {
   }
 }
 
+/** Neighbours of an unknown and the entries that join them; few, so that looking through them is quickest. */
+interface Neighbours {
+  readonly unknowns: number[];
+  readonly values: number[];
+}
+
+function addTo({ unknowns, values }: Neighbours, other: number, change: number): void {
+  const at = unknowns.indexOf(other);
+  if (at >= 0) values[at]! += change;
+  else {
+    unknowns.push(other);
+    values.push(change);
+  }
+}
+
+function remove({ unknowns, values }: Neighbours, other: number): void {
+  const at = unknowns.indexOf(other);
+  const last = unknowns.pop()!;
+  const value = values.pop()!;
+  if (at === unknowns.length) return;
+  unknowns[at] = last;
+  values[at] = value;
+}
+
 interface DegreeQueue {
-  push(unknown: number, degree: number): void;
-  next(done: Uint8Array, neighbours: readonly Map<number, number>[]): number;
+  push(unknown: number): void;
+  next(done: Uint8Array): number;
 }
 
 /** Unknowns in buckets by degree; stale entries are passed over when they come up. */
-function degreeQueue(neighbours: readonly Map<number, number>[]): DegreeQueue {
+function degreeQueue(graph: readonly Neighbours[]): DegreeQueue {
   const buckets: number[][] = [];
   let least = 0;
-  const push = (unknown: number, degree: number): void => {
+  const push = (unknown: number): void => {
+    const degree = graph[unknown]!.unknowns.length;
     while (buckets.length <= degree) buckets.push([]);
     buckets[degree]!.push(unknown);
     least = Math.min(least, degree);
   };
-  for (let i = neighbours.length - 1; i >= 0; i--) push(i, neighbours[i]!.size);
+  for (let i = graph.length - 1; i >= 0; i--) push(i);
   return {
     push,
-    next(done, now) {
+    next(done) {
       for (;;) {
-        const bucket = buckets[least]!;
-        const unknown = bucket.pop();
+        const unknown = buckets[least]!.pop();
         if (unknown === undefined) least++;
-        else if (done[unknown] === 0 && now[unknown]!.size === least) return unknown;
+        else if (done[unknown] === 0 && graph[unknown]!.unknowns.length === least) return unknown;
       }
     },
   };

@@ -82,7 +82,7 @@ export async function solveGraph(
     level[pieces.indexOf(mesh.nodeComponent[node]!)] = 1;
     if (extra !== undefined) net(extra).forEach((sum, p) => { level[p]! -= sum; }); // biome-ignore format: one line of algebra
     solvePacked(gram, pieces.length, level);
-    const current = extra === undefined ? new Float64Array(size) : Float64Array.from(extra);
+    const current = extra === undefined ? new Float64Array(size) : extra.slice();
     response.forEach((x, p) => {
       for (let k = 0; k < size; k++) current[k]! += level[p]! * x[k]!;
     });
