@@ -22,8 +22,13 @@ function ordered(value: JsonValue, node: JsonValue | undefined): JsonValue {
   );
 }
 
+/** The same value in canonical order. */
+export function canonical(value: JsonValue): JsonValue {
+  schema ??= studyJsonSchema();
+  return ordered(value, schema);
+}
+
 /** The text of study.json for a value: the same for values that differ in the order of keys the schema knows. */
 export function canonicalJson(value: JsonValue): string {
-  schema ??= studyJsonSchema();
-  return `${JSON.stringify(ordered(value, schema), null, 2)}\n`;
+  return `${JSON.stringify(canonical(value), null, 2)}\n`;
 }

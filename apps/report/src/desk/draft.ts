@@ -1,6 +1,6 @@
 // The study being worked at: its files as they would be saved, and study.json as a value, faulty or not.
-import { type JsonObject, type JsonValue, STUDY_FILE } from '@ohmstead/study';
-import { canonicalJson } from './canonical-json.ts';
+import { isObject, type JsonObject, type JsonValue, STUDY_FILE } from '@ohmstead/study';
+import { canonical, canonicalJson } from './canonical-json.ts';
 import { valueIn } from './json-edit.ts';
 import type { JsonPath } from './path.ts';
 
@@ -29,8 +29,9 @@ export function withoutFile(draft: Draft, path: string): Draft {
 
 /** The draft with study.json replaced, written in its canonical form. */
 export function withStudy(draft: Draft, study: JsonObject): Draft {
-  const bytes = new TextEncoder().encode(canonicalJson(study));
-  return { files: new Map(draft.files).set(STUDY_FILE, bytes), study };
+  const whole = canonical(study);
+  const bytes = new TextEncoder().encode(canonicalJson(whole));
+  return { files: new Map(draft.files).set(STUDY_FILE, bytes), study: isObject(whole) ? whole : {} };
 }
 
 /** Whether two drafts would be saved as the same bytes. */

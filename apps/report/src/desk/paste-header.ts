@@ -19,12 +19,12 @@ function nameAndUnit(cell: string, columns: readonly PasteColumn[]): readonly (r
   const bracket =
     /^(.*?)\s*[([]\s*([^()[\]]+?)\s*[)\]]$/.exec(cell) ?? /^(.*?)\s*[,/]\s*([^,/]+)$/.exec(cell);
   const suffixes = columns.flatMap(({ stem }): readonly (readonly [string, string])[] =>
-    cell.startsWith(`${stem}_`) ? [[stem, cell.slice(stem.length + 1)]] : [],
+    cell.toLowerCase().startsWith(`${stem}_`) ? [[stem, cell.slice(stem.length + 1)]] : [],
   );
   return [
-    [cell, ''],
     ...suffixes,
     ...(bracket === null ? [] : [[bracket[1] ?? '', bracket[2] ?? ''] as const]),
+    [cell, ''],
   ];
 }
 
