@@ -47,11 +47,14 @@ export type PastedTable = 'layers' | 'cases' | 'seasons';
 export interface Desk {
   /** a value of study.json as it stands in the draft; undefined where there is none */
   readonly valueAt: (path: StudyPath) => JsonValue | undefined;
-  /** sets, or with undefined removes, a value of study.json; what holds it exists already */
+  /**
+   * Sets a value of study.json, and makes what is missing on the way to it; undefined removes it, with what then holds
+   * nothing. An index one past the end of a list appends.
+   */
   readonly edit: (path: StudyPath, value: JsonValue | undefined) => void;
   /** reads a quantity as it was typed, with or without its unit */
   readonly read: (kind: QuantityKind, text: string) => Reading;
-  /** writes a quantity with its unit, in the units displayed */
+  /** writes a quantity for editing, with its unit in the units displayed, so that it reads back as the same value */
   readonly show: (kind: QuantityKind, value: number) => string;
   /** replaces a list by pasted rows, or tells why not and changes nothing */
   readonly paste: (table: PastedTable, text: string) => readonly string[];

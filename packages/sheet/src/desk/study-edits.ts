@@ -1,12 +1,21 @@
-// Rewrites the lists of a study: what is added begins without numbers, so that nothing is taken for granted unseen.
+// Rewrites the lists of a study: what is added changes nothing or begins without numbers, so that none is taken for granted.
 import type { JsonObject, JsonValue } from '@ohmstead/study';
 import { isObject, itemsOf, memberOf, textOf, without } from './json.ts';
 
 type List = readonly JsonValue[];
 
-/** One more layer below, to be filled in; what was last has to be given a thickness. */
+/** Thickness given to what was the last layer where no layer above has one, m. Reason: a round length. */
+const FIRST_THICKNESS_M = 1;
+
+/** One more layer below, of the same resistivity: the ground is the same as before until one of them is changed. */
 export function layersWithOneMore(layers: JsonValue | undefined): List {
-  return [...itemsOf(layers), {}];
+  const list = itemsOf(layers);
+  const last = list[list.length - 1];
+  if (last === undefined) return [{}];
+  const above = memberOf(list[list.length - 2], 'thickness_m');
+  const thickness_m = typeof above === 'number' ? above : FIRST_THICKNESS_M;
+  const bare = without(last, 'thickness_m');
+  return [...list.slice(0, -1), { ...bare, thickness_m }, bare];
 }
 
 /** Without one layer; what is last then reaches to any depth. */

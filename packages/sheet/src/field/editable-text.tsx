@@ -8,8 +8,12 @@ export interface EditableTextProps {
   readonly path: StudyPath;
   /** what the text is, for those who do not see its sentence */
   readonly label: string;
-  /** the text as it stands */
+  /** the text as it stands in the sentence */
   readonly shown: string;
+  /** the text to edit, which reads back as what stands; as shown where undefined */
+  readonly exact?: string;
+  /** stands in the field while it is empty */
+  readonly placeholder?: string;
   /** takes a changed text, or tells in words why not */
   readonly take: (text: string) => string | undefined;
   /** complaints about the text as it stands */
@@ -37,7 +41,8 @@ export function Complaint({
 }
 
 /** A field as wide as its text, in the line of the sentence. */
-export function EditableText({ path, label, shown, take, complaints }: EditableTextProps): VNode {
+export function EditableText(props: EditableTextProps): VNode {
+  const { path, label, shown, exact = shown, placeholder, take, complaints } = props;
   const id = useId();
   const [typed, setTyped] = useState<string | undefined>(undefined);
   const [refusal, setRefusal] = useState<string | undefined>(undefined);
@@ -45,7 +50,7 @@ export function EditableText({ path, label, shown, take, complaints }: EditableT
   const told = refusal === undefined ? complaints : [refusal];
   const commit = (): void => {
     if (typed === undefined) return;
-    const refused = typed.trim() === shown ? undefined : take(typed.trim());
+    const refused = typed.trim() === exact ? undefined : take(typed.trim());
     setRefusal(refused);
     if (refused === undefined) setTyped(undefined);
   };
@@ -71,6 +76,13 @@ export function EditableText({ path, label, shown, take, complaints }: EditableT
         autocomplete="off"
         spellcheck={false}
         {...(told.length > 0 ? { 'aria-invalid': true, 'aria-describedby': id } : {})}
+        placeholder={placeholder}
+        onFocus={(event) => {
+          if (typed !== undefined || exact === shown) return;
+          event.currentTarget.value = exact;
+          event.currentTarget.select();
+          setTyped(exact);
+        }}
         onInput={(event) => {
           setTyped(event.currentTarget.value);
           setRefusal(undefined);

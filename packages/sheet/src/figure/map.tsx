@@ -37,7 +37,9 @@ const SMALL: PlateSize = {
   least: 130,
   margin: { left: 2, right: 2, top: 4, bottom: 26 },
 };
-function frameRing(plate: Plate): readonly Point[] {
+
+/** Border of the ground of a plate, drawing units. */
+export function frameRing(plate: Plate): readonly Point[] {
   const { left, top, right, bottom } = plate.frame;
   return [
     [left, top],

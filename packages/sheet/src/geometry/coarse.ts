@@ -1,5 +1,6 @@
 // Reads a map as a coarse table: values every few metres, and the worst value of each area.
 import type { CaseMap, Polygon } from '@ohmstead/study';
+import type { Lattice } from './contours.ts';
 import { insideEvenOdd } from './polygon.ts';
 import { roundStep } from './ticks.ts';
 
@@ -25,7 +26,7 @@ function multiples(from: number, to: number, step: number): readonly number[] {
 }
 
 /** Value between the samples by bilinear interpolation; places outside take the border's value. */
-export function valueAt(map: CaseMap, field: Float64Array, x: number, y: number): number {
+export function valueAt(map: Lattice, field: Float64Array, x: number, y: number): number {
   const u = Math.min(map.nx - 1, Math.max(0, (x - map.x0) / map.dx));
   const v = Math.min(map.ny - 1, Math.max(0, (y - map.y0) / map.dy));
   const i = Math.min(Math.floor(u), Math.max(0, map.nx - 2));
@@ -41,7 +42,7 @@ export function valueAt(map: CaseMap, field: Float64Array, x: number, y: number)
  * Values at round coordinates, at most twelve columns.
  * @param unit in which coordinates are round, m
  */
-export function coarseGrid(map: CaseMap, field: Float64Array, unit: number = 1): CoarseGrid {
+export function coarseGrid(map: Lattice, field: Float64Array, unit: number = 1): CoarseGrid {
   const right = map.x0 + (map.nx - 1) * map.dx;
   const top = map.y0 + (map.ny - 1) * map.dy;
   const longest = Math.max(right - map.x0, top - map.y0);

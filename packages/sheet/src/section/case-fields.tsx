@@ -5,7 +5,8 @@ import type { Desk, StudyPath } from '../desk/desk.ts';
 import { memberOf, rawText } from '../desk/json.ts';
 import { type CurrentSource, caseWithSource, currentSourceOf } from '../desk/study-edits.ts';
 import { useUnits } from '../desk/use-units.ts';
-import { QuantityInput, Select, TextInput } from '../field/inputs.tsx';
+import { Select } from '../field/choice.tsx';
+import { QuantityInput, TextInput } from '../field/inputs.tsx';
 import { WordButton } from '../field/word-button.tsx';
 import { givenPlace } from '../format/length.ts';
 import { significant } from '../format/number.ts';
@@ -88,14 +89,10 @@ function Injection({
   const place: StudyPath = [...path, 'inject'];
   if (desk.valueAt(place) === undefined) {
     const now = solved?.inject;
-    const begin: JsonValue = now === undefined ? {} : { x_m: now.x_m, y_m: now.y_m, depth_m: now.depth_m };
     return (
       <>
         It enters at the node nearest the centroid of the metal
-        {now !== undefined && `, ${givenPlace(now.x_m, now.y_m, units)}`}.{' '}
-        <WordButton press={() => desk.edit(place, begin)} of={`where the current of ${name} enters`}>
-          give a place
-        </WordButton>
+        {now !== undefined && `, ${givenPlace(now.x_m, now.y_m, units)}`}.
       </>
     );
   }
@@ -105,12 +102,23 @@ function Injection({
       <QuantityInput path={[...place, 'x_m']} kind="coordinate" label={`x where ${name} enters`} />, <i>y</i>{' '}
       <QuantityInput path={[...place, 'y_m']} kind="coordinate" label={`y where ${name} enters`} />, at a
       depth of{' '}
-      <QuantityInput path={[...place, 'depth_m']} kind="length" label={`depth where ${name} enters`} />.{' '}
-      <WordButton press={() => desk.edit(place, undefined)} of={`for ${name}`}>
-        leave it to the middle of the metal
-      </WordButton>
+      <QuantityInput path={[...place, 'depth_m']} kind="length" label={`depth where ${name} enters`} />.
     </>
   );
+}
+
+/** Where the current enters: given, or left to the middle of the metal. */
+export function InjectionChoice({ desk, index, solved }: Omit<CaseFieldsProps, 'children'>): VNode {
+  const path: StudyPath = ['cases', index, 'inject'];
+  if (desk.valueAt(path) !== undefined) {
+    return (
+      <WordButton press={() => desk.edit(path, undefined)}>let the current enter at the middle</WordButton>
+    );
+  }
+  const now = solved?.inject;
+  /* the node in use, so that giving the place changes nothing yet */
+  const begin: JsonValue = now === undefined ? {} : { x_m: now.x_m, y_m: now.y_m, depth_m: now.depth_m };
+  return <WordButton press={() => desk.edit(path, begin)}>say where the current enters</WordButton>;
 }
 
 /** Name, current, offset and place of injection. */

@@ -83,16 +83,21 @@ function LiveCovering({ desk, outcome }: { desk: Desk; outcome: Outcome | undefi
   if (desk.valueAt(['surfacing']) === undefined) {
     return (
       <Say>
-        {BARE} <WordButton press={() => desk.edit(['surfacing'], {})}>state a covering</WordButton>
+        {BARE}
+        <span class="edits">
+          <WordButton press={() => desk.edit(['surfacing'], {})}>state a covering</WordButton>
+        </span>
       </Say>
     );
   }
   return (
     <Stated areasGiven={desk.valueAt(['surfacing', 'areas']) !== undefined}>
-      {outcome !== undefined && <Factor outcome={outcome} />}{' '}
-      <WordButton press={() => desk.edit(['surfacing'], undefined)} vanishes>
-        remove the covering
-      </WordButton>
+      {outcome !== undefined && <Factor outcome={outcome} />}
+      <span class="edits">
+        <WordButton press={() => desk.edit(['surfacing'], undefined)} vanishes>
+          remove the covering
+        </WordButton>
+      </span>
     </Stated>
   );
 }

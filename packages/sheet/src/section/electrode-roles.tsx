@@ -3,7 +3,7 @@ import type { JsonValue, Outcome } from '@ohmstead/study';
 import type { VNode } from 'preact';
 import type { Desk } from '../desk/desk.ts';
 import { itemsOf, memberOf } from '../desk/json.ts';
-import { type Option, Select } from '../field/inputs.tsx';
+import { type Option, Select } from '../field/choice.tsx';
 import { Say } from './parts.tsx';
 
 const ROLES: readonly Option[] = [

@@ -112,7 +112,7 @@ function Assessed({ outcome }: { outcome: Outcome }): VNode {
   );
 }
 
-function conductorTable(outcome: Outcome, units: DisplayUnits): VNode {
+function ConductorTable({ outcome, units }: { outcome: Outcome; units: DisplayUnits }): VNode {
   const [unit, small] = [lengthUnit(units), smallUnit(units)];
   const { conductors } = outcome.plan;
   const shown = conductors.slice(0, MOST_CONDUCTOR_ROWS);
@@ -176,7 +176,8 @@ export function Electrode({ outcome }: { outcome: Outcome }): VNode {
         name="electrode-plan"
         title={titles.plan}
         caption={`Metal is ink, floating metal dashed. Tinted: where touch voltage is assessed. Axes in ${words}.`}
-        table={conductorTable(outcome, units)}
+        table={<ConductorTable outcome={outcome} units={units} />}
+        {...(instrument === undefined ? { by: [outcome, units] } : {})}
       >
         {instrument ?? <PlanFigure outcome={outcome} name="electrode-plan" title={titles.plan} />}
       </FigureBlock>

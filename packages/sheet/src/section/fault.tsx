@@ -1,5 +1,5 @@
 // Fault: the current of each case that enters the ground, and for how long.
-import type { CaseResult, Outcome } from '@ohmstead/study';
+import type { Outcome } from '@ohmstead/study';
 import type { VNode } from 'preact';
 import type { Desk } from '../desk/desk.ts';
 import { itemsOf, memberOf, rawText } from '../desk/json.ts';
@@ -10,41 +10,12 @@ import { QuantityInput, Stated } from '../field/inputs.tsx';
 import { Pasting } from '../field/pasting.tsx';
 import { WordButton } from '../field/word-button.tsx';
 import { givenPlace } from '../format/length.ts';
-import { given, givenQuantity, quantity, significant } from '../format/number.ts';
-import { quantityTold } from '../format/told.ts';
+import { givenQuantity, significant } from '../format/number.ts';
 import { tally } from '../format/words.ts';
-import { CaseFields } from './case-fields.tsx';
-import { CLAUSES, DecrementFormula, GridCurrentFormula, S } from './formulas.tsx';
-import { How, type HowInput } from './how.tsx';
+import { CaseFields, InjectionChoice } from './case-fields.tsx';
+import { GridCurrent, HowCurrent } from './fault-current.tsx';
 import { Part } from './part.tsx';
 import { CaseName, Say } from './parts.tsx';
-import { caseNamed, ResultOf } from './result.tsx';
-
-function howInputs(of: CaseResult): readonly HowInput[] {
-  const inputs: (HowInput | undefined)[] = [
-    of.fault_current_A === null
-      ? undefined
-      : {
-          symbol: <S of="I" index="f" />,
-          name: 'fault current',
-          value: givenQuantity(of.fault_current_A, 'A'),
-        },
-    of.division_factor === null
-      ? undefined
-      : { symbol: <S of="S" index="f" />, name: 'division factor', value: given(of.division_factor) },
-    { symbol: <S of="D" index="f" />, name: 'decrement factor', value: significant(of.decrement_factor, 5) },
-    of.x_over_r === null
-      ? undefined
-      : { symbol: <i>X/R</i>, name: 'at the fault', value: given(of.x_over_r) },
-    { symbol: <S of="f" />, name: 'frequency', value: givenQuantity(of.frequency_hz, 'Hz') },
-    {
-      symbol: <S of="t" index="f" />,
-      name: 'duration of the fault',
-      value: givenQuantity(of.duration_s, 's'),
-    },
-  ];
-  return inputs.filter((input) => input !== undefined);
-}
 
 interface CaseProps {
   readonly outcome: Outcome;
@@ -130,41 +101,6 @@ function Injected({ outcome, index }: CaseProps): VNode {
   );
 }
 
-/** The current that enters the ground, and how it is found. */
-function GridCurrent({ outcome, of }: { outcome: Outcome; of: CaseResult }): VNode {
-  return (
-    <ResultOf
-      outcome={outcome}
-      told={(one) => {
-        const found = caseNamed(one, of.name);
-        return found && quantityTold(found.grid_current_A, 'A');
-      }}
-    />
-  );
-}
-
-function HowCurrent({ of }: { of: CaseResult }): VNode {
-  return (
-    <How
-      of={`the current of ${of.name} is found`}
-      formula={
-        <>
-          <GridCurrentFormula />
-          {of.x_over_r !== null && (
-            <>
-              <br />
-              <DecrementFormula />
-            </>
-          )}
-        </>
-      }
-      clause={of.x_over_r === null ? CLAUSES.gridCurrent : `${CLAUSES.gridCurrent}; ${CLAUSES.decrement}`}
-      inputs={howInputs(of)}
-      value={quantity(of.grid_current_A, 'A')}
-    />
-  );
-}
-
 /** The cases of the draft, each with what was solved of it. */
 function LiveCases({ desk, outcome }: { desk: Desk; outcome: Outcome | undefined }): VNode {
   const stated = desk.valueAt(['cases']);
@@ -184,16 +120,19 @@ function LiveCases({ desk, outcome }: { desk: Desk; outcome: Outcome | undefined
               )}
               .
             </CaseFields>
-            {of !== undefined && <HowCurrent of={of} />}{' '}
-            {cases.length > 1 && (
-              <WordButton
-                press={() => desk.edit(['cases'], listWithout(stated, index))}
-                of={rawText(memberOf(one, 'name'))}
-                vanishes
-              >
-                remove the case
-              </WordButton>
-            )}
+            {of !== undefined && <HowCurrent of={of} />}
+            <span class="edits">
+              <InjectionChoice desk={desk} index={index} solved={of} />
+              {cases.length > 1 && (
+                <WordButton
+                  press={() => desk.edit(['cases'], listWithout(stated, index))}
+                  of={rawText(memberOf(one, 'name'))}
+                  vanishes
+                >
+                  remove the case
+                </WordButton>
+              )}
+            </span>
           </Say>
         );
       })}

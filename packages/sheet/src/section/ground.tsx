@@ -101,6 +101,7 @@ export function Ground({ outcome }: { outcome: Outcome | undefined }): VNode {
           title={titles.ground}
           caption="The electrode seen from the side, every conductor projected on the section. Floating metal is dashed."
           table={<LayerTable outcome={outcome} units={units} />}
+          by={[outcome, units]}
         >
           <GroundFigure outcome={outcome} name="ground-section" title={titles.ground} />
         </FigureBlock>

@@ -1,6 +1,7 @@
 // The pieces sections are written with: statements, results in a sentence, folds, tables, figures.
 import type { ComponentChildren, VNode } from 'preact';
 import { Download } from '../field/download.tsx';
+import { Kept } from './kept.tsx';
 
 /** A statement: a sentence or a few, with folds at its end. Paragraphs cannot hold folds, so it is a division. */
 export function Say({ children }: { children: ComponentChildren }): VNode {
@@ -110,23 +111,30 @@ export interface FigureBlockProps {
   readonly caption: ComponentChildren;
   /** the same as a table */
   readonly table: ComponentChildren;
+  /** what figure and table are drawn from: they stay while that is the same; undefined for what is alive itself */
+  readonly by?: readonly unknown[];
+  /** the figure's file; that of its name where undefined, none where null */
+  readonly file?: string | null;
   readonly children: ComponentChildren;
 }
 
 /** A figure with its title, caption and the same content as a table. */
-export function FigureBlock({ name, title, caption, table, children }: FigureBlockProps): VNode {
+export function FigureBlock(props: FigureBlockProps): VNode {
+  const { name, title, caption, table, by, file = `${name}.svg`, children } = props;
+  const kept = (drawn: ComponentChildren): ComponentChildren =>
+    by === undefined ? drawn : <Kept by={by}>{drawn}</Kept>;
   return (
     <div class="figure">
       <figure aria-labelledby={`${name}-heading`}>
         <h3 id={`${name}-heading`}>{title}</h3>
-        {children}
+        {kept(children)}
         <figcaption>
           {caption}
-          <Download file={`${name}.svg`} />
+          {file !== null && <Download file={file} />}
         </figcaption>
       </figure>
       <Fold label="as a table" of={`: ${title}`}>
-        {table}
+        {kept(table)}
       </Fold>
     </div>
   );

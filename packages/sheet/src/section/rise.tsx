@@ -2,7 +2,7 @@
 import type { DisplayUnits, Outcome } from '@ohmstead/study';
 import type { VNode } from 'preact';
 import { useUnits } from '../desk/use-units.ts';
-import { ChoiceInput, type Option } from '../field/inputs.tsx';
+import { ChoiceInput, type Option } from '../field/choice.tsx';
 import { LeakageFigure } from '../figure/leakage.tsx';
 import { titles } from '../figure/titles.ts';
 import { fixedLength, lengthUnit } from '../format/length.ts';
@@ -123,7 +123,7 @@ function Rises({ outcome }: { outcome: Outcome }): VNode {
   );
 }
 
-function leakageTable(outcome: Outcome, units: DisplayUnits): VNode {
+function LeakageTable({ outcome, units }: { outcome: Outcome; units: DisplayUnits }): VNode {
   const { conductors } = outcome.plan;
   const currents = conductorCurrents(outcome);
   const order = [...conductors.keys()].sort(
@@ -182,7 +182,8 @@ export function Rise({ outcome }: { outcome: Outcome }): VNode {
         name="leakage"
         title={titles.leakage}
         caption="Thickness shows the current that a metre of conductor passes to the soil, against the mean of the energised metal; the disc of a rod shows its mean along the rod. Hollow lines take current from the soil; floating metal gives back elsewhere what it takes."
-        table={leakageTable(outcome, units)}
+        table={<LeakageTable outcome={outcome} units={units} />}
+        by={[outcome, units]}
       >
         <LeakageFigure outcome={outcome} name="leakage" title={titles.leakage} />
       </FigureBlock>

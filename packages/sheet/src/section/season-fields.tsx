@@ -3,7 +3,8 @@ import type { ComponentChildren, VNode } from 'preact';
 import type { Desk, StudyPath } from '../desk/desk.ts';
 import { memberOf, rawText } from '../desk/json.ts';
 import { listWithout, type SeasonKind, seasonKindOf, seasonOfKind } from '../desk/study-edits.ts';
-import { QuantityInput, Select, TextInput } from '../field/inputs.tsx';
+import { Select } from '../field/choice.tsx';
+import { QuantityInput, TextInput } from '../field/inputs.tsx';
 import { WordButton } from '../field/word-button.tsx';
 import { LayerFields } from './layer-fields.tsx';
 import { Say } from './parts.tsx';
@@ -69,14 +70,16 @@ export function SeasonFields({ desk, index, children }: SeasonFieldsProps): VNod
       {(kind === 'top' || kind === 'both') && <Change path={path} part="top" name={name} />}
       {(kind === 'below' || kind === 'both') && <Change path={path} part="below" name={name} />}.{' '}
       {kind === 'layers' && <LayerFields desk={desk} path={[...path, 'layers']} of={` in ${name}`} />}{' '}
-      {children}{' '}
-      <WordButton
-        press={() => desk.edit(['seasons'], listWithout(desk.valueAt(['seasons']), index))}
-        of={name}
-        vanishes
-      >
-        remove the season
-      </WordButton>
+      {children}
+      <span class="edits">
+        <WordButton
+          press={() => desk.edit(['seasons'], listWithout(desk.valueAt(['seasons']), index))}
+          of={name}
+          vanishes
+        >
+          remove the season
+        </WordButton>
+      </span>
     </Say>
   );
 }

@@ -1,12 +1,15 @@
 // Sets the band of touch and step voltage over the soils that the readings allow beside best fit and limit.
 import type { VNode } from 'preact';
+import { useDesk } from '../desk/use-desk.ts';
 import { Path } from '../figure/drawn.tsx';
 import { Hatch } from '../figure/hatch.tsx';
 import { BEST_FIT } from '../figure/soil-bands.tsx';
 import { bandQuantity, fittedQuantity } from '../format/fitted.ts';
-import { measured, quantity } from '../format/number.ts';
+import { quantity } from '../format/number.ts';
+import { measuredTold, type Told } from '../format/told.ts';
 import { intervalOf, intervalScale } from '../geometry/interval.ts';
 import { reachWords, type SoilBandRow } from '../verdict/soil-band.ts';
+import { Change } from './result.tsx';
 
 function IntervalCell({ row, full, id }: { row: SoilBandRow; full: number; id: string }): VNode {
   const { low, high, median, best, limit } = intervalOf(row.of, row.limit, full);
@@ -29,14 +32,27 @@ function IntervalCell({ row, full, id }: { row: SoilBandRow; full: number; id: s
   );
 }
 
-function BandLine({ row, full, id }: { row: SoilBandRow; full: number; id: string }): VNode {
+interface LineProps {
+  readonly row: SoilBandRow;
+  /** the same voltage in the pinned state; undefined without one */
+  readonly pinned: SoilBandRow | undefined;
+  readonly full: number;
+  readonly id: string;
+}
+
+function BandLine({ row, pinned, full, id }: LineProps): VNode {
+  const before = useDesk()?.before;
+  const told = ({ of, uncertainty }: SoilBandRow): Told => measuredTold(of.best, uncertainty, 'V');
   return (
     <tr class={row.reach}>
       <th scope="row">
         {row.kind}
         {row.footing === 'bare soil' && ', on bare soil'}
       </th>
-      <td class="num best">{measured(row.of.best, row.uncertainty, 'V')}</td>
+      <td class="num best">
+        {told(row).text}
+        {before !== undefined && <Change now={told(row)} before={pinned && told(pinned)} />}
+      </td>
       <td class="num median">{fittedQuantity(row.of.median, 'V')}</td>
       <td class="num soils-range">{bandQuantity(row.of, 'V')}</td>
       <td class="num limit-value">{quantity(row.limit, 'V')}</td>
@@ -49,7 +65,16 @@ function BandLine({ row, full, id }: { row: SoilBandRow; full: number; id: strin
 }
 
 /** One row a voltage: best fit with its numerical ±, median and band of the soils, limit, and all on one scale. */
-export function SoilBandTable({ rows, id }: { rows: readonly SoilBandRow[]; id: string }): VNode {
+export function SoilBandTable({
+  rows,
+  pinned = [],
+  id,
+}: {
+  rows: readonly SoilBandRow[];
+  /** of the pinned state; undefined without one */
+  pinned?: readonly SoilBandRow[] | undefined;
+  id: string;
+}): VNode {
   const full = intervalScale(rows);
   const cases = [...new Set(rows.map((row) => row.caseIndex))];
   return (
@@ -87,7 +112,13 @@ export function SoilBandTable({ rows, id }: { rows: readonly SoilBandRow[]; id: 
           {rows.map(
             (row, k) =>
               row.caseIndex === caseIndex && (
-                <BandLine key={k} row={row} full={full} id={`${id}-hatch-${k}`} />
+                <BandLine
+                  key={k}
+                  row={row}
+                  pinned={pinned.find((then) => then.caseName === row.caseName && then.kind === row.kind)}
+                  full={full}
+                  id={`${id}-hatch-${k}`}
+                />
               ),
           )}
         </tbody>

@@ -2,7 +2,7 @@
 import type { VNode } from 'preact';
 import type { Desk } from '../desk/desk.ts';
 import { rawText } from '../desk/json.ts';
-import { ChoiceInput, type Option } from '../field/inputs.tsx';
+import { ChoiceInput, type Option } from '../field/choice.tsx';
 import { Pasting } from '../field/pasting.tsx';
 import { WordButton } from '../field/word-button.tsx';
 import { LayerFields } from './layer-fields.tsx';

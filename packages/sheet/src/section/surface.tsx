@@ -14,6 +14,7 @@ import { tally } from '../format/words.ts';
 import type { MapKind } from '../geometry/map-drawing.ts';
 import { profileDrawing } from '../geometry/profile-drawing.ts';
 import { governingCase } from '../verdict/rows.ts';
+import { DifferenceBlock } from './difference-block.tsx';
 import { MapTable } from './map-table.tsx';
 import { Part } from './part.tsx';
 import { CaseName, DataTable, FigureBlock, Say } from './parts.tsx';
@@ -80,6 +81,7 @@ function MapBlock({ outcome, caseIndex, kind, slug, small = false, instrument }:
       title={title}
       caption={caption}
       table={<MapTable outcome={outcome} caseIndex={caseIndex} kind={kind} />}
+      {...(instrument === undefined ? { by: [outcome, caseIndex, units] } : {})}
     >
       {instrument ?? (
         <MapFigure
@@ -149,6 +151,7 @@ function ProfileBlock({
       title={title}
       caption={`Touch voltage is the distance from the surface up to the metal; the broken line lies the limit of ${quantity(of.touch.limit_V, 'V')} below the metal.${beyond} Metal is drawn strong over assessed ground. Dots on the axis: metal that the line passes over.`}
       table={<ProfileTable outcome={outcome} caseIndex={caseIndex} file={`${name}.csv`} />}
+      by={[outcome, caseIndex]}
     >
       <ProfileFigure outcome={outcome} caseIndex={caseIndex} name={name} title={title} />
     </FigureBlock>
@@ -171,6 +174,7 @@ function Governing({
     return (
       <>
         <MapBlock {...shared} kind="touch" />
+        <DifferenceBlock {...shared} />
         <ProfileBlock {...shared} />
         <MapBlock {...shared} kind="step" />
         <MapBlock {...shared} kind="potential" />
@@ -180,6 +184,7 @@ function Governing({
   return (
     <>
       <MapBlock {...shared} kind="touch" instrument={instrument} />
+      <DifferenceBlock {...shared} />
       <ProfileBlock {...shared} />
     </>
   );

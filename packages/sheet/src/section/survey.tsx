@@ -105,6 +105,7 @@ function Sounding({ outcome, fit }: { outcome: Outcome; fit: SoilFit }): VNode {
   return (
     <FigureBlock
       name="sounding"
+      by={[outcome]}
       title={titles.sounding}
       caption={captionOf(outcome, fit)}
       table={

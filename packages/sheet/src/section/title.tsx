@@ -51,7 +51,7 @@ export function Heading({ outcome }: { outcome: Outcome | undefined }): VNode {
   return (
     <>
       <h1>
-        <TextInput path={['title']} label="title" value={outcome?.results.title ?? ''} />{' '}
+        <TextInput path={['title']} label="title" placeholder="title" value={outcome?.results.title ?? ''} />{' '}
         <span class="sort">earthing calculation</span>
       </h1>
       {outcome !== undefined && (

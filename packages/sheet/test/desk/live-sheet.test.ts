@@ -156,11 +156,21 @@ describe('before and after', () => {
     );
   });
 
+  it('maps the change of touch voltage, and says so where there is none', () => {
+    const surface = section(page, 'surface');
+    expect(surface).toContain('id="change-33-kv-bus-heading"');
+    expect(textOf(surface)).toMatch(/Farthest from the pinned state.*higher\+\d+ Vshow on the plan \(/s);
+    const same = section(live(deskOf(outcome.study, { before: outcome })), 'surface');
+    expect(same).not.toContain('id="change-');
+    expect(textOf(same)).toContain('touch voltage moved nowhere by more than the maps are good to');
+  });
+
   it('compares seasons by name', () => {
     const dry = withSeason(outcome, { name: 'dry', times: 1.5 });
     const drier = withSeason(outcome, { name: 'dry', times: 1.2 });
     const season = textOf(section(live(deskOf(dry.study, { before: drier }), dry), 'season'));
     expect(season).toMatch(/8 338 ± 12 V \(1 668 more than pinned\), highest/);
+    expect(season).toMatch(/4 326 ± 6 V \(865 more than pinned\), highest/);
   });
 });
 

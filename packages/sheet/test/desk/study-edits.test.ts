@@ -1,6 +1,5 @@
 // Edits of the lists of a study: nothing is invented, nothing that was stated is lost.
 import { describe, expect, it } from 'vitest';
-import { put } from '../../src/desk/put.ts';
 import {
   casesWithOneMore,
   caseWithSource,
@@ -15,13 +14,20 @@ import {
   solvedIndex,
 } from '../../src/desk/study-edits.ts';
 import { pathText, sectionOfInput } from '../../src/desk/study-path.ts';
-import { deskOf } from './desk-of.ts';
 
 const layers = [{ resistivity_ohm_m: 220, thickness_m: 2.4 }, { resistivity_ohm_m: 65 }];
 
 describe('layers', () => {
-  it('are added below, to be filled in', () => {
-    expect(layersWithOneMore(layers)).toEqual([...layers, {}]);
+  it('are added below of the same resistivity, so that the ground is the same until one is changed', () => {
+    expect(layersWithOneMore(layers)).toEqual([
+      layers[0],
+      { resistivity_ohm_m: 65, thickness_m: 2.4 },
+      { resistivity_ohm_m: 65 },
+    ]);
+    expect(layersWithOneMore([{ resistivity_ohm_m: 65 }])).toEqual([
+      { resistivity_ohm_m: 65, thickness_m: 1 },
+      { resistivity_ohm_m: 65 },
+    ]);
     expect(layersWithOneMore(undefined)).toEqual([{}]);
   });
 
@@ -94,14 +100,5 @@ describe('places of a study', () => {
     expect(sectionOfInput(['cases', 0, 'duration_s'])).toBe('fault');
     expect(sectionOfInput(['title'])).toBeUndefined();
     expect(sectionOfInput([])).toBeUndefined();
-  });
-});
-
-describe('setting a value', () => {
-  it('makes the object that has to hold it, in one edit', () => {
-    const desk = deskOf({});
-    put(desk, ['project', 'client'], 'Aldermoor');
-    put(desk, ['project', 'client'], undefined);
-    expect(desk.edits).toEqual([[['project'], { client: 'Aldermoor' }]]);
   });
 });

@@ -1,7 +1,12 @@
 // The sentences about a survey, for any number of layers.
-import type { FittedLayer, SoilFit, Spread } from '@ohmstead/study';
+import type { FittedLayer, GroundReading, SoilFit, Spread } from '@ohmstead/study';
 import { describe, expect, it } from 'vitest';
-import { allowedSentence, depthSentence, outsideSentence } from '../../src/section/survey-words.ts';
+import {
+  allowedSentence,
+  depthSentence,
+  outsideSentence,
+  spacingRange,
+} from '../../src/section/survey-words.ts';
 import { fixtureOutcome } from '../fixture.ts';
 import { withGround } from '../fixture-ground.ts';
 
@@ -50,6 +55,23 @@ describe('what the readings allow', () => {
       'outside that band in the thickness of layer 1 and the resistivity of layer 2:',
     );
     expect(outsideSentence(fitOf(last(1, 3)))).toBeUndefined();
+  });
+});
+
+describe('the range of the spacings', () => {
+  it('is told once with its unit', () => {
+    const at = (spacing_m: number): GroundReading => ({
+      line: 2,
+      traverse: '',
+      spacing_m,
+      apparent_resistivity_ohm_m: 100,
+      model_ohm_m: 100,
+      misfit_percent: 0,
+      outlier: false,
+    });
+    const fit: SoilFit = { ...fitOf(last(1, 3)), readings: [at(0.6096), at(32)] };
+    expect(plain(spacingRange(fit, 'SI'))).toBe('0.6096 to 32 m');
+    expect(plain(spacingRange(fit, 'US'))).toBe('2 to 105 ft');
   });
 });
 
