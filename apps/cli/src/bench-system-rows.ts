@@ -4,7 +4,7 @@ import { ENGINE, PRODUCT, TWIN } from './bench-engine.ts';
 import { NODE_SHARED, ROW_BLOCKED, WHOLE_ARRAY } from './bench-numpy.ts';
 import { figures, type Rounds, type Run } from './bench-rounds.ts';
 import { ratioSpread, type Spread, spread } from './bench-statistics.ts';
-import { relative, spreadText } from './bench-table.ts';
+import { relative, short, spreadText } from './bench-table.ts';
 
 /** Resistance that an arm should find, Ω. */
 export type ExactOf = (arm: string) => number;
@@ -16,6 +16,7 @@ export const SYSTEM_HEADER: readonly string[] = [
   'of it solve',
   'CPU, ms',
   'over the engine',
+  'by CPU',
   'R, Ω',
   'R off',
 ];
@@ -44,9 +45,14 @@ function row(arm: string, rounds: Rounds, exact: number): string[] {
       '',
     ),
     arm === ENGINE ? '1' : spreadText(overEngine(rounds, arm, wall), '×'),
+    arm === ENGINE ? '1' : medianText(overEngine(rounds, arm, (run) => run.cpuMs)),
     found?.toPrecision(7) ?? 'failed',
     relative(found === undefined ? undefined : found / exact - 1),
   ];
+}
+
+function medianText(found: Spread | undefined): string {
+  return found === undefined ? '–' : `${short(found.median)}×`;
 }
 
 /** The goals that a case speaks for: ratios where its size is theirs, accuracy always. */

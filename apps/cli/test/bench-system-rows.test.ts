@@ -24,8 +24,8 @@ test('a row tells rounds, times, ratio by round, resistance and how far it is of
   const rows = systemRows(rounds, exactOf, undefined);
   expect(rows).toHaveLength(5);
   for (const row of rows) expect(row).toHaveLength(SYSTEM_HEADER.length);
-  expect(rows[0]).toEqual([ENGINE, '2', '15.0 (10.0–20.0)', '3.75 (2.50–5.00)', '7.50 (5.00–10.0)', '1', '2.000001', '5.0e-7']); // biome-ignore format: one row
-  expect(rows[3]).toEqual([WHOLE_ARRAY, '1', '1000', '250', '500', '100×', '1.990000', '5.0e-3']);
+  expect(rows[0]).toEqual([ENGINE, '2', '15.0 (10.0–20.0)', '3.75 (2.50–5.00)', '7.50 (5.00–10.0)', '1', '1', '2.000001', '5.0e-7']); // biome-ignore format: one row
+  expect(rows[3]).toEqual([WHOLE_ARRAY, '1', '1000', '250', '500', '100×', '100×', '1.990000', '5.0e-3']);
   expect(rows[4]![5]).toBe('45.0× (40.0–50.0)');
 });
 
@@ -38,7 +38,7 @@ test('scripts that did not run have rows with the reason', () => {
 
 test('an arm that failed each time says so', () => {
   const rows = systemRows(new Map([[ENGINE, [undefined]]]), exactOf, undefined);
-  expect(rows[0]).toEqual([ENGINE, '0', '–', '–', '–', '1', 'failed', '–']);
+  expect(rows[0]).toEqual([ENGINE, '0', '–', '–', '–', '1', '1', 'failed', '–']);
 });
 
 test('ratios speak for the goals of their size only, and the worst round of both engine arms for accuracy', () => {
