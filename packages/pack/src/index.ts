@@ -10,3 +10,4 @@ export { sourceFromZip } from './source-from-zip.ts';
 export { type Solve, type Verification, type VerifyOptions, verifyPack } from './verify-pack.ts';
 export { writePack } from './write-pack.ts';
 export { MAX_ENTRIES, MAX_TOTAL_BYTES } from './zip-limits.ts';
+export { writeZip } from './zip-write.ts';

@@ -22,6 +22,12 @@ export interface Conductor {
 
 export type ConductorKey = keyof Conductor;
 
+/** In the order in which a row is read. */
+export const conductorKeys: readonly ConductorKey[] = [
+  ...(['id', 'x1', 'y1', 'depth1', 'x2', 'y2', 'depth2', 'diameter'] as const),
+  ...(['material', 'electrode', 'insulated', 'resistance'] as const),
+];
+
 /** Places and depths are kept to a nanometre, m. Reason: sums such as 1.1 + 2.2 are written 3.3; nothing is set out finer. */
 const PLACE_TOLERANCE_M = 1e-9;
 /** Of other quantities, relative. Reason: beyond what any data sheet gives. */

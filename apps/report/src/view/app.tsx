@@ -1,0 +1,141 @@
+// The live sheet: a study is opened, edited where it stands, computed at every edit, and taken away as a review pack.
+import { DeskContext, Questions, type SectionId, Sheet } from '@ohmstead/sheet';
+import { faultLine, type RowOrigin } from '@ohmstead/study';
+import type { VNode } from 'preact';
+import { useMemo, useState } from 'preact/hooks';
+import type { Draft } from '../desk/draft.ts';
+import { setLabel } from '../desk/labels.ts';
+import { openDraft } from '../desk/open-draft.ts';
+import type { Opening } from '../desk/opening.ts';
+import { setValue } from '../desk/set-value.ts';
+import type { EnginePlatform } from '../engine/client.ts';
+import { demoFiles } from '../files/demo.ts';
+import { openFiles } from '../files/open-files.ts';
+import { useDroppedFiles } from '../files/use-dropped-files.ts';
+import { type Bench, draftOf, sectionState } from './bench.ts';
+import { ConductorTables } from './conductor-table.tsx';
+import { Contents } from './contents.tsx';
+import { deskOf, unitsOf } from './desk-of.ts';
+import { Faults } from './faults.tsx';
+import { NoteField } from './note-field.tsx';
+import { noteOf, withNote } from './note-of.ts';
+import { Pins } from './pins.tsx';
+import { Start } from './start.tsx';
+import { Strip } from './strip.tsx';
+import { saveStudy, takeFile, takePack } from './take.ts';
+import { type BenchControl, useBench } from './use-bench.ts';
+import { useUndoKeys } from './use-undo-keys.ts';
+
+export function App({ begin }: { readonly begin: EnginePlatform['begin'] }): VNode {
+  const control = useBench(begin);
+  const { bench, act } = control;
+  const [refused, setRefused] = useState<readonly string[]>([]);
+  const take = (opening: Opening, label: string): void => {
+    if (opening.kind === 'faults') setRefused(opening.faults.map(faultLine));
+    else {
+      setRefused([]);
+      act({ kind: 'open', draft: opening.draft, label });
+    }
+  };
+  const open = (list: readonly File[]): void => {
+    openFiles(list)
+      .then((opening) => take(opening, list.map(({ name }) => name).join(', ')))
+      .catch((error: unknown) => setRefused([String(error)]));
+  };
+  useDroppedFiles(open);
+  useUndoKeys(act);
+  if (bench === undefined || refused.length > 0)
+    return (
+      <Start
+        open={open}
+        demo={() => take(openDraft(demoFiles()), 'the demonstration study')}
+        faults={refused}
+      />
+    );
+  return <Work control={control} bench={bench} open={open} />;
+}
+
+interface WorkProps {
+  readonly control: BenchControl;
+  readonly bench: Bench;
+  readonly open: (list: readonly File[]) => void;
+}
+
+function Work({ control, bench, open }: WorkProps): VNode {
+  const { act, engine } = control;
+  const [word, setWord] = useState<string>();
+  const [selected, select] = useState<readonly RowOrigin[]>([]);
+  const draft = draftOf(bench);
+  const units = unitsOf(draft);
+  const tell = (work: Promise<void>): void => {
+    setWord(undefined);
+    work.catch((error: unknown) => setWord(error instanceof Error ? error.message : String(error)));
+  };
+  const outcome = bench.solved?.outcome;
+  const desk = useMemo(
+    () =>
+      deskOf(bench, act, {
+        instrument: undefined,
+        goTo: () => {},
+        note: (section: SectionId) => (
+          <NoteField
+            section={section}
+            text={noteOf(draft, section)}
+            take={(text) =>
+              act({
+                kind: 'edit',
+                draft: withNote(draft, section, text),
+                label: `note to ${section} changed`,
+              })
+            }
+          />
+        ),
+        download: outcome && ((file) => takeFile(outcome, file)),
+      }),
+    [bench, act, draft, outcome],
+  );
+  return (
+    <DeskContext.Provider value={desk}>
+      <div class="live">
+        <Strip
+          bench={bench}
+          act={act}
+          units={units}
+          switchUnits={() => act(unitSwitch(draft))}
+          open={open}
+          saveStudy={() => tell(saveStudy(draft))}
+          takePack={() => tell(takePack(engine, bench))}
+          close={() => {}}
+          cancel={control.cancel}
+          recompute={control.recompute}
+          word={word}
+        />
+        <Contents state={(section) => sectionState(bench, section)} />
+        <main id="page">
+          {outcome === undefined ? (
+            <>
+              <Faults faults={bench.faults} />
+              <Questions />
+            </>
+          ) : (
+            <Sheet outcome={outcome} />
+          )}
+          <div class="beside">
+            <ConductorTables draft={draft} units={units} act={act} selected={selected} select={select} />
+            <Pins bench={bench} act={act} units={units} />
+          </div>
+        </main>
+      </div>
+    </DeskContext.Provider>
+  );
+}
+
+/** Turns the display from metres to feet and back. */
+function unitSwitch(draft: Draft): { readonly kind: 'edit'; readonly draft: Draft; readonly label: string } {
+  const to = unitsOf(draft) === 'SI' ? 'US' : undefined;
+  return {
+    kind: 'edit',
+    draft: setValue(draft, ['display_units'], to),
+    label: setLabel(draft, ['display_units'], to),
+  };
+}

@@ -1,0 +1,93 @@
+// The line above the sheet: what is being computed, and what can be done with the study as a whole.
+import type { DisplayUnits } from '@ohmstead/study';
+import type { VNode } from 'preact';
+import { redoLabel, undoLabel } from '../desk/history.ts';
+import type { Bench, BenchAction } from './bench.ts';
+import { outdated } from './bench.ts';
+import { FilePicks } from './file-picks.tsx';
+
+export interface StripProps {
+  readonly bench: Bench;
+  readonly act: (action: BenchAction) => void;
+  readonly units: DisplayUnits;
+  readonly switchUnits: () => void;
+  readonly open: (list: readonly File[]) => void;
+  readonly saveStudy: () => void;
+  readonly takePack: () => void;
+  readonly close: () => void;
+  readonly cancel: () => void;
+  readonly recompute: () => void;
+  /** what the page has to say of its doings, e.g. that storage is full */
+  readonly word: string | undefined;
+}
+
+export function Strip(props: StripProps): VNode {
+  const { bench, act } = props;
+  const settled = bench.solved !== undefined && !bench.solved.early && outdated(bench).size === 0;
+  const undo = undoLabel(bench.history);
+  const redo = redoLabel(bench.history);
+  return (
+    <header class="strip">
+      <p class="doing" role="status">
+        {doing(bench)}
+      </p>
+      {props.word !== undefined && (
+        <p class="page-word" role="alert">
+          {props.word}
+        </p>
+      )}
+      <p class="words">
+        {bench.running !== undefined && <Word press={props.cancel}>cancel</Word>}
+        {bench.running === undefined && !settled && bench.faults.length === 0 && (
+          <Word press={props.recompute}>compute</Word>
+        )}
+        <Word press={() => act({ kind: 'undo' })} off={undo === undefined} title={undo}>
+          undo
+        </Word>
+        <Word press={() => act({ kind: 'redo' })} off={redo === undefined} title={redo}>
+          redo
+        </Word>
+        <Word press={() => act({ kind: 'pin' })} off={!settled}>
+          pin this state
+        </Word>
+        <Word press={props.switchUnits}>{props.units === 'SI' ? 'show feet and inches' : 'show metres'}</Word>
+        <Word press={props.saveStudy}>save the study</Word>
+        <Word press={props.takePack} off={!settled}>
+          take the review pack
+        </Word>
+        <FilePicks open={props.open} />
+        <Word press={props.close}>all studies</Word>
+      </p>
+      {bench.running !== undefined && <progress max={1} value={bench.running.share} aria-label="computing" />}
+    </header>
+  );
+}
+
+function doing({ running, solved, faults, failure }: Bench): string {
+  if (running !== undefined) return `Computing: ${running.stage}`;
+  if (failure !== undefined) return `A fault of the program, not of the study: ${failure}`;
+  if (faults.length > 0)
+    return `The study has ${faults.length === 1 ? 'a fault' : `${faults.length} faults`}.`;
+  return solved === undefined ? 'Not computed.' : 'Computed.';
+}
+
+interface WordProps {
+  readonly children: string;
+  readonly press: () => void;
+  readonly off?: boolean;
+  readonly title?: string | undefined;
+}
+
+function Word({ children, press, off = false, title }: WordProps): VNode {
+  return (
+    <button
+      type="button"
+      class="word"
+      disabled={off}
+      onClick={press}
+      {...(title === undefined ? {} : { title })}
+    >
+      {children}
+    </button>
+  );
+}
