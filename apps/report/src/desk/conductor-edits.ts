@@ -196,7 +196,7 @@ export function moveConductors(draft: Draft, rows: readonly RowOrigin[], shift: 
 
 /** Copies conductors, shifted, each into the table of the one it copies and after its last row, under free ids. */
 export function copyConductors(draft: Draft, rows: readonly RowOrigin[], shift: Shift): Placed {
-  const ids = new Set(idsOf(draft));
+  const ids = idsOf(draft);
   return recordsOf(draft, rows).reduce<Placed>(
     (done, { table, records }) => {
       const copies = records.map((record): Conductor => {
@@ -211,13 +211,11 @@ export function copyConductors(draft: Draft, rows: readonly RowOrigin[], shift: 
 }
 
 /** A free id after that of the original, `EW-01` → `EW-01-2`; none where the original has none. */
-function copyId(id: string | undefined, taken: Set<string>): string | undefined {
+function copyId(id: string | undefined, taken: ReadonlySet<string>): string | undefined {
   if (id === undefined) return undefined;
   for (let n = 2; ; n++) {
     const tried = `${id}-${n}`;
-    if (taken.has(tried)) continue;
-    taken.add(tried);
-    return tried;
+    if (!taken.has(tried)) return tried;
   }
 }
 

@@ -36,11 +36,11 @@ export function beginHistory(draft: Draft, label: string): History {
  * @returns the same history where nothing was changed; a run of edits that ends where it began leaves no step
  */
 export function commit(history: History, draft: Draft, label: string, field?: string): History {
-  const { past, present, future } = history;
+  const { past, present } = history;
   if (sameDraft(present.draft, draft)) return history;
   const step: Step = { draft, label, ...(field === undefined ? {} : { field }) };
   const before = past.at(-1);
-  const joins = field !== undefined && present.field === field && future.length === 0 && before !== undefined;
+  const joins = field !== undefined && present.field === field && before !== undefined;
   if (!joins) return trimmed({ past: [...past, present], present: step, future: [] });
   // the step before keeps its draft but not its field, so that a later edit of its field is a step of its own
   if (sameDraft(before.draft, draft)) return { past: past.slice(0, -1), present: closed(before), future: [] };

@@ -14,9 +14,8 @@ export interface PastedCells {
 /** Most rows that are taken from one paste. Reason: more than any table of a study that is edited by hand. */
 export const MOST_PASTED_ROWS = 100_000;
 
-/** A number whose only mark is a comma: 0,5 or 1,500. */
-const COMMA_NUMBER = /^[+\-\u2212]?\d*,\d+(?:\s*\D.*)?$/;
-const POINT_NUMBER = /\d\.\d/;
+/** A number with one mark, a unit perhaps after it: 0,5 or 1.500 m. */
+const ONE_MARK = /^[+\-\u2212]?(\d*)([.,])(\d+)(?:\s*\D.*)?$/;
 
 /** Spreadsheets put tabs between cells; else semicolons where there are any, as files with decimal commas have. */
 function separatorOf(text: string): string {
@@ -24,12 +23,21 @@ function separatorOf(text: string): string {
   return text.includes(';') ? ';' : ',';
 }
 
+/** The marks that can only be decimal ones: 0,5 and 12.25, but not 1,500. */
+function sureMarks(cells: readonly string[]): ReadonlySet<string> {
+  const marks = new Set<string>();
+  for (const cell of cells) {
+    const [, whole = '', mark = '', part = ''] = ONE_MARK.exec(cell) ?? [];
+    if (mark !== '' && !isAmbiguous(`${whole},${part}`)) marks.add(mark);
+  }
+  return marks;
+}
+
 /** The decimal mark that the numbers of a table tell together; undefined where they tell none, or disagree. */
 function decimalMark(cells: readonly string[]): DecimalMark | undefined {
-  const commas = cells.filter((cell) => COMMA_NUMBER.test(cell));
-  const points = cells.some((cell) => POINT_NUMBER.test(cell));
-  const sure = commas.some((cell) => !isAmbiguous(/[\d,]+/.exec(cell)?.[0] ?? ''));
-  return sure && !points ? ',' : undefined;
+  const marks = sureMarks(cells);
+  if (marks.size !== 1) return undefined;
+  return marks.has(',') ? ',' : '.';
 }
 
 /**

@@ -63,6 +63,23 @@ function season(row: PastedRow): JsonObject {
   return { name: row.get('name') ?? '', ...part('top'), ...part('below') };
 }
 
+/** Replaces one of the lists of study.json that take pasted rows; layers are those of the soil. */
+export function pasteList(
+  draft: Draft,
+  table: 'layers' | 'cases' | 'seasons',
+  text: string,
+  units?: DisplayUnits,
+): Pasting {
+  switch (table) {
+    case 'layers':
+      return pasteLayers(draft, ['soil', 'layers'], text, units);
+    case 'cases':
+      return pasteCases(draft, text, units);
+    case 'seasons':
+      return pasteSeasons(draft, text, units);
+  }
+}
+
 /** Adds an area, or replaces the corners of the area `polygon`. */
 export function pasteCorners(
   draft: Draft,

@@ -85,6 +85,7 @@ const rows: readonly (readonly [Dimension, readonly Row[]])[] = [
     [
       ['A', 1, 1, 'amp', 'amps', 'ampere', 'amperes'],
       ['kA', 1000, 1],
+      ['MA', 1_000_000, 1],
       ['mA', 1, 1000],
     ],
   ],
@@ -101,6 +102,7 @@ const rows: readonly (readonly [Dimension, readonly Row[]])[] = [
     [
       ['V', 1, 1, 'volt', 'volts'],
       ['kV', 1000, 1],
+      ['MV', 1_000_000, 1],
       ['mV', 1, 1000],
     ],
   ],

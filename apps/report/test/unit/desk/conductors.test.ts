@@ -69,6 +69,20 @@ describe('rows', () => {
     expect(textOf(moved, FILE)).toBe(odd.replace('  B , 33 ,0,18,33,33,18,0.5,', 'B,33,1,18,33,34,18,0.5,'));
   });
 
+  test('that are given the values they have keep their bytes', () => {
+    const same = setConductor(draft, row(8), {
+      diameter: 0.0127,
+      x1: 10.0584,
+      id: 'C',
+      electrode: undefined,
+    });
+    expect(textOf(same, FILE)).toBe(odd);
+    expect(textOf(setConductor(draft, row(6), { id: 'B', y1: 0 }), FILE)).toBe(odd);
+    expect(textOf(setConductor(draft, row(8), { id: 'E', diameter: 0.0127 }), FILE)).toBe(
+      odd.replace('C,', 'E,'),
+    );
+  });
+
   test('a move and the move back give the same bytes', () => {
     const shift = fc.integer({ min: -9_999_999, max: 9_999_999 }).map((n) => n / 10_000);
     const tidy = odd.replace('  B , 33 ,', 'B,33,').replace('"two\r\nlines"', 'two');

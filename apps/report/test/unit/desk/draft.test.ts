@@ -91,6 +91,11 @@ describe('bare tables', () => {
   test('a table with semicolons, or one that is none, is opened so that loading tells what is wrong', () => {
     const draft = opened(new Map([['c.csv', bytesOf(smallTable.replaceAll(',', ';'))]]));
     expect(draft.study.conductors).toEqual(['c.csv']);
+    const two = new Map([
+      ['c.csv', bytesOf(smallTable.replaceAll(',', '\t'))],
+      ['d.csv', bytesOf('a,b\n1,2\n')],
+    ]);
+    expect(opened(two).study.conductors).toEqual(['c.csv']);
     expect(opened(new Map([['c.csv', bytesOf('a,b\n1,2\n')]])).study.conductors).toEqual(['c.csv']);
   });
 

@@ -69,10 +69,19 @@ describe('history', () => {
     expect(commit(back, titled('C'), 'C', 'title').past.length).toBe(2);
   });
 
+  test('nor does it let the step before go on', () => {
+    const one = commit(beginHistory(start, 'opened'), titled('A'), 'A', 'title');
+    const other = commit(one, setValue(titled('A'), ['version'], 2), 'version', 'version');
+    const back = commit(other, titled('A'), 'version', 'version');
+    expect(commit(back, titled('B'), 'B', 'title').past.length).toBe(2);
+  });
+
   test('after undo a run does not go on', () => {
     let history = commit(beginHistory(start, 'opened'), titled('A'), 'A', 'title');
     history = commit(history, setValue(titled('A'), ['version'], 2), 'version', 'version');
     expect(commit(undo(history), titled('B'), 'B', 'title').past.length).toBe(2);
+    const again = redo(undo(commit(beginHistory(start, 'opened'), titled('A'), 'A', 'title')));
+    expect(commit(again, titled('B'), 'B', 'title').past.length).toBe(2);
   });
 
   test('the oldest steps go first, by number and by bytes', () => {

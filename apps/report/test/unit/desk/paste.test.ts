@@ -11,6 +11,7 @@ import {
   pasteConductors,
   pasteCorners,
   pasteLayers,
+  pasteList,
   pasteReadings,
   pasteSeasons,
 } from '../../../src/desk/paste-into.ts';
@@ -76,6 +77,17 @@ describe('rows', () => {
     ]);
     expect(rows('readings', 'Spacing (ft)\tResistance (mΩ)\n10\t500')).toEqual([
       { spacing: 3.048, resistance: 0.5 },
+    ]);
+  });
+
+  test('numbers that could be read in two ways are read as the others of their table', () => {
+    expect(rows('corners', '0,5\t1,500\n1.234\t-2,250')).toEqual([
+      { x: 0.5, y: 1.5 },
+      { x: 1234, y: -2.25 },
+    ]);
+    expect(rows('corners', '0.5\t1,500\n1.234\t2,250')).toEqual([
+      { x: 0.5, y: 1500 },
+      { x: 1.234, y: 2250 },
     ]);
   });
 
@@ -174,6 +186,9 @@ describe('into a draft', () => {
       });
     }
     const season = taken(pasteSeasons(small(), 'dry\t1\t500\nwet\t\t\t2\t50'));
+    expect(loaded(taken(pasteList(small(), 'seasons', 'wet\t\t\t2\t50'))).study.seasons).toHaveLength(1);
+    expect(taken(pasteList(small(), 'cases', 'a\t\t\t1\t\t\t1')).study.cases).toMatchObject([{ name: 'a' }]);
+    expect(taken(pasteList(small(), 'layers', text)).study.soil).toEqual({ layers: twoLayers });
     expect(loaded(season).study.seasons).toEqual([
       { name: 'dry', top: { depth_m: 1, resistivity_ohm_m: 500 } },
       { name: 'wet', below: { depth_m: 2, resistivity_ohm_m: 50 } },
