@@ -158,7 +158,7 @@ function conductorOf(file: ConductorFile, record: number): Conductor {
     diameter: number('diameter'),
     material: text('material'),
     electrode: text('electrode'),
-    insulated: insulated === undefined ? undefined : insulated === 'yes',
+    insulated: insulated === 'yes' ? true : insulated === 'no' ? false : undefined,
     resistance: Number.isNaN(resistance) ? undefined : resistance,
   };
 }

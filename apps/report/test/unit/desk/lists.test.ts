@@ -13,6 +13,7 @@ import {
 import { roleOf, setRole } from '../../../src/desk/electrodes.ts';
 import { moveLayer, removeLayer, splitLayer } from '../../../src/desk/layers.ts';
 import type { JsonPath } from '../../../src/desk/path.ts';
+import { addRevision, nextMark } from '../../../src/desk/revisions.ts';
 import { setValue } from '../../../src/desk/set-value.ts';
 import { demo, loaded, small, smallStudy, textOf } from './drafts.ts';
 
@@ -134,5 +135,17 @@ describe('roles', () => {
     expect(setRole(draft, 'gate', 'floating').study.electrodes).toHaveLength(3);
     expect(setRole(draft, 'fence', undefined).study.electrodes).toHaveLength(1);
     expect(setRole(draft, 'gate', undefined)).toBe(draft);
+  });
+});
+
+describe('revisions', () => {
+  test('are marked one after another', () => {
+    const marks = ['A', 'Y', 'Z', 'AZ', 'ZZ', '1', 'P09', 'draft', ''];
+    expect(marks.map(nextMark)).toEqual(['B', 'Z', 'AA', 'BA', 'AAA', '2', 'P10', 'A', 'A']);
+    const two = addRevision(addRevision(small(), { date: '2024-05-02', text: ' ' }), { by: 'N.' });
+    expect(loaded(two).study.revisions).toEqual([
+      { mark: 'A', date: '2024-05-02' },
+      { mark: 'B', by: 'N.' },
+    ]);
   });
 });
