@@ -43,7 +43,8 @@ export async function openLiveSheet(): Promise<LiveSheet> {
 export async function watchedPage(
   sheet: LiveSheet,
 ): Promise<{ page: Page; errors: string[]; requests: string[] }> {
-  const page = await sheet.browser.newPage({ viewport: { width: 1180, height: 900 } });
+  const context = await sheet.browser.newContext({ viewport: { width: 1180, height: 900 } });
+  const page = await context.newPage();
   const errors: string[] = [];
   const requests: string[] = [];
   page.on('pageerror', (error) => errors.push(error.message));

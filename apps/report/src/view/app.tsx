@@ -2,7 +2,7 @@
 import { DeskContext, Questions, type SectionId, Sheet } from '@ohmstead/sheet';
 import { faultLine, type RowOrigin } from '@ohmstead/study';
 import type { VNode } from 'preact';
-import { useMemo, useState } from 'preact/hooks';
+import { useEffect, useMemo, useState } from 'preact/hooks';
 import type { Draft } from '../desk/draft.ts';
 import { setLabel } from '../desk/labels.ts';
 import { openDraft } from '../desk/open-draft.ts';
@@ -17,6 +17,7 @@ import { ConductorTables } from './conductor-table.tsx';
 import { Contents } from './contents.tsx';
 import { deskOf, unitsOf } from './desk-of.ts';
 import { Faults } from './faults.tsx';
+import { KeptStudies } from './kept-studies.tsx';
 import { NoteField } from './note-field.tsx';
 import { noteOf, withNote } from './note-of.ts';
 import { Pins } from './pins.tsx';
@@ -24,16 +25,20 @@ import { Start } from './start.tsx';
 import { Strip } from './strip.tsx';
 import { saveStudy, takeFile, takePack } from './take.ts';
 import { type BenchControl, useBench } from './use-bench.ts';
+import { useKeeping } from './use-keeping.ts';
 import { useUndoKeys } from './use-undo-keys.ts';
 
 export function App({ begin }: { readonly begin: EnginePlatform['begin'] }): VNode {
   const control = useBench(begin);
   const { bench, act } = control;
+  const [id, setId] = useState<string>();
+  const keeping = useKeeping(bench, id);
   const [refused, setRefused] = useState<readonly string[]>([]);
   const take = (opening: Opening, label: string): void => {
     if (opening.kind === 'faults') setRefused(opening.faults.map(faultLine));
     else {
       setRefused([]);
+      setId(crypto.randomUUID());
       act({ kind: 'open', draft: opening.draft, label });
     }
   };
@@ -42,26 +47,52 @@ export function App({ begin }: { readonly begin: EnginePlatform['begin'] }): VNo
       .then((opening) => take(opening, list.map(({ name }) => name).join(', ')))
       .catch((error: unknown) => setRefused([String(error)]));
   };
+  const goOn = (wanted: string): void => {
+    keeping
+      .read(wanted)
+      .then((study) => {
+        if (study === undefined) return;
+        setRefused([]);
+        setId(study.id);
+        act({ kind: 'restore', history: study.history, pins: study.pins });
+      })
+      .catch((error: unknown) => setRefused([String(error)]));
+  };
+  const { restoring } = keeping;
+  useEffect(() => {
+    if (restoring !== undefined && id === undefined) goOn(restoring);
+  }, [restoring]);
   useDroppedFiles(open);
   useUndoKeys(act);
-  if (bench === undefined || refused.length > 0)
+  if (bench === undefined || id === undefined || refused.length > 0)
     return (
       <Start
         open={open}
         demo={() => take(openDraft(demoFiles()), 'the demonstration study')}
         faults={refused}
-      />
+      >
+        {keeping.word !== undefined && <p role="alert">{keeping.word}</p>}
+        <KeptStudies kept={keeping.kept} goOn={goOn} remove={keeping.remove} />
+      </Start>
     );
-  return <Work control={control} bench={bench} open={open} />;
+  const close = (): void => {
+    control.cancel();
+    setId(undefined);
+  };
+  return <Work key={id} control={control} bench={bench} open={open} close={close} storage={keeping.word} />;
 }
 
 interface WorkProps {
   readonly control: BenchControl;
   readonly bench: Bench;
   readonly open: (list: readonly File[]) => void;
+  /** back to the studies that are kept */
+  readonly close: () => void;
+  /** what the page has to say of its storage */
+  readonly storage: string | undefined;
 }
 
-function Work({ control, bench, open }: WorkProps): VNode {
+function Work({ control, bench, open, close, storage }: WorkProps): VNode {
   const { act, engine } = control;
   const [word, setWord] = useState<string>();
   const [selected, select] = useState<readonly RowOrigin[]>([]);
@@ -105,10 +136,10 @@ function Work({ control, bench, open }: WorkProps): VNode {
           open={open}
           saveStudy={() => tell(saveStudy(draft))}
           takePack={() => tell(takePack(engine, bench))}
-          close={() => {}}
+          close={close}
           cancel={control.cancel}
           recompute={control.recompute}
-          word={word}
+          word={word ?? storage}
         />
         <Contents state={(section) => sectionState(bench, section)} />
         <main id="page">
