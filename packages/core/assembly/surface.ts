@@ -1,10 +1,11 @@
-// Potentials of the soil surface at many points: far boxes by their points, segments by Gauss points or closed form.
+// Potentials of the soil surface at many points, segment by segment: Gauss points far away, the closed form near.
 import { logarithm, radialPair } from './radial';
+
+export { drops, sources, spread, transfer, wires } from './map';
 
 // Addresses and counts of one group of horizontal metal; written by `level` before points are asked for.
 let segments: usize = 0;
 let strength: usize = 0;
-let nodes: usize = 0;
 let all: usize = 0;
 let rest: usize = 0;
 let rule: usize = 0;
@@ -13,10 +14,8 @@ let perAll: f64 = 0;
 let perRest: f64 = 0;
 let ownWeight: f64 = 0;
 
-/** Doubles of one segment: centre, half vector, its square, two thresholds of distance², length, height² + radius². */
+/** Bytes of one segment: centre, half vector, its square, two thresholds of distance², length, height² + radius², its rule. */
 const SEGMENT: usize = 80;
-/** Doubles of one box: centre, far distance², from, to, first half, second half, address of its points. */
-const NODE: usize = 64;
 
 /** Sums of the cases at one point: two lanes each, added at the end. */
 let sums: usize = 0;
@@ -24,8 +23,8 @@ let sums: usize = 0;
 /** Adds the potentials of a group of horizontal metal at each point; `into` shape [points × cases]. */
 export function level(
   segmentsAt: usize,
+  count: i32,
   strengthAt: usize,
-  nodesAt: usize,
   allAt: usize,
   perAllSquare: f64,
   restAt: usize,
@@ -41,7 +40,6 @@ export function level(
 ): void {
   segments = segmentsAt;
   strength = strengthAt;
-  nodes = nodesAt;
   all = allAt;
   perAll = perAllSquare;
   rest = restAt;
@@ -53,7 +51,7 @@ export function level(
   for (let p: i32 = 0; p < points; p++) {
     const at = <usize>p << 3;
     for (let u: i32 = 0; u < casesCount; u++) v128.store(sums + (<usize>u << 4), f64x2.splat(0));
-    visit(nodesAt, load<f64>(xs + at), load<f64>(ys + at));
+    run(count, load<f64>(xs + at), load<f64>(ys + at));
     const row = into + <usize>(p * casesCount) * 8;
     for (let u: i32 = 0; u < casesCount; u++) {
       const sum = v128.load(sums + (<usize>u << 4));
@@ -63,51 +61,12 @@ export function level(
   }
 }
 
-function visit(node: usize, x: f64, y: f64): void {
-  const first = <i32>load<f64>(node, 40);
-  if (first < 0) {
-    run(<i32>load<f64>(node, 24), <i32>load<f64>(node, 32), x, y);
-    return;
-  }
-  const dx = x - load<f64>(node);
-  const dy = y - load<f64>(node, 8);
-  if (dx * dx + dy * dy < load<f64>(node, 16)) {
-    visit(nodes + <usize>first * NODE, x, y);
-    visit(nodes + <usize>load<f64>(node, 48) * NODE, x, y);
-    return;
-  }
-  far(<usize>load<f64>(node, 56), x, y);
-}
-
-/** Six by six points: coordinates in x, in y, then strengths by row, case and column. */
-function far(box: usize, x: f64, y: f64): void {
-  const xx = f64x2.splat(x);
+function run(count: i32, x: f64, y: f64): void {
   const per = f64x2.splat(perAll);
   const one = f64x2.splat(1);
-  let at = box + 96;
-  for (let b: usize = 0; b < 48; b += 8) {
-    const ey = y - load<f64>(box + b, 48);
-    const eyy = f64x2.splat(ey * ey);
-    for (let a: usize = 0; a < 48; a += 16) {
-      const ex = f64x2.sub(xx, v128.load(box + a));
-      const value = radialPair(all, per, one, f64x2.add(f64x2.mul(ex, ex), eyy));
-      let s = at + a;
-      for (let u: i32 = 0; u < cases; u++) {
-        const sum = sums + (<usize>u << 4);
-        v128.store(sum, f64x2.add(v128.load(sum), f64x2.mul(v128.load(s), value)));
-        s += 48;
-      }
-    }
-    at += 48 * <usize>cases;
-  }
-}
-
-function run(from: i32, to: i32, x: f64, y: f64): void {
-  const per = f64x2.splat(perAll);
-  const one = f64x2.splat(1);
-  let seg = segments + <usize>from * SEGMENT;
-  let s = strength + <usize>(from * cases) * 8;
-  for (let j = from; j < to; j++) {
+  let seg = segments;
+  let s = strength;
+  for (let j: i32 = 0; j < count; j++) {
     const dx = x - load<f64>(seg);
     const dy = y - load<f64>(seg, 8);
     const distance = dx * dx + dy * dy;

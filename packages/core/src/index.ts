@@ -10,6 +10,7 @@ export { potentialAt } from './field/potential.ts';
 export { areaRegion, partOf, type Region, regionMask } from './field/region.ts';
 export { latticeSummits } from './field/starts.ts';
 export { PACE_M, stepLattice, type WorstStep, worstStep } from './field/step.ts';
+export type { SurfaceMap } from './field/surface-map.ts';
 export {
   onePotential,
   type SurfacePotential,

@@ -19,7 +19,8 @@ export function worstTouchNearLines(
   const voltage = (x: number, y: number): number => metal(x, y) - surface(x, y);
   const f = ([x, y]: readonly number[]): number =>
     region.inside(x!, y!) ? Math.abs(voltage(x!, y!)) : Number.NEGATIVE_INFINITY;
-  const worst = climbFromBest(lines.flatMap(placesBeside), f, region, REACH_M / 4);
+  const guesses = lines.flatMap(placesBeside).map((candidate) => ({ candidate, value: f(candidate) }));
+  const worst = climbFromBest(guesses, f, region, REACH_M / 4);
   if (worst === undefined) throw new Error('no place lies within reach of the metal');
   return { ...worst, signed: voltage(worst.x, worst.y) };
 }

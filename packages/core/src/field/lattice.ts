@@ -1,12 +1,16 @@
 // A lattice of points on the surface, filled adaptively: evaluated where the field bends, interpolated where it does not.
 
-/** Value (i, j) stands at (x0 + i·spacing, y0 + j·spacing), index j·nx + i. */
-export interface Lattice {
+/** Point (i, j) stands at (x0 + i·spacing, y0 + j·spacing), index j·nx + i. */
+export interface Grid {
   readonly x0: number;
   readonly y0: number;
   readonly spacing: number;
   readonly nx: number;
   readonly ny: number;
+}
+
+/** A value at each point of a grid. */
+export interface Lattice extends Grid {
   readonly values: Float64Array;
   /** points computed, the others being interpolated */
   readonly evaluated: number;
@@ -47,14 +51,9 @@ export function adaptiveLattices(
   box: Box,
   spacing: number,
 ): Lattice[] {
-  const cells = (length: number): number => Math.max(1, Math.ceil(length / (spacing * COARSEST) - 1e-9));
-  const across = cells(box.east - box.west);
-  const up = cells(box.north - box.south);
-  const nx = across * COARSEST + 1;
-  const ny = up * COARSEST + 1;
-  // the box in the middle of the lattice
-  const x0 = (box.west + box.east - (nx - 1) * spacing) / 2;
-  const y0 = (box.south + box.north - (ny - 1) * spacing) / 2;
+  const { x0, y0, nx, ny } = gridOver(box, spacing);
+  const across = (nx - 1) / COARSEST;
+  const up = (ny - 1) / COARSEST;
   const values = tolerances.map(() => new Float64Array(nx * ny));
   const errors = tolerances.map(() => 0);
   const known = new Uint8Array(nx * ny);
@@ -126,6 +125,20 @@ export function adaptiveLattices(
   return values.map((of, u) => ({ x0, y0, spacing, nx, ny, values: of, evaluated, error: errors[u]! }));
 }
 
+/** The grid of whole coarsest cells that covers a box, with the box in its middle. */
+export function gridOver(box: Box, spacing: number): Grid {
+  const cells = (length: number): number => Math.max(1, Math.ceil(length / (spacing * COARSEST) - 1e-9));
+  const nx = cells(box.east - box.west) * COARSEST + 1;
+  const ny = cells(box.north - box.south) * COARSEST + 1;
+  return {
+    x0: (box.west + box.east - (nx - 1) * spacing) / 2,
+    y0: (box.south + box.north - (ny - 1) * spacing) / 2,
+    spacing,
+    nx,
+    ny,
+  };
+}
+
 /** Points of cells of one side that are not computed yet, which it marks: nine a cell, and the quarter points of cells that are tested. */
 function unknownOf(level: readonly number[], side: number, nx: number, known: Uint8Array): number[] {
   const wanted: number[] = [];
@@ -171,14 +184,20 @@ export function latticeValue(lattice: Lattice, x: number, y: number): number {
   const j = Math.min(ny - 2, Math.floor(fy));
   const u = fx - i;
   const v = fy - j;
+  const wx = keysWeights(u);
+  const wy = keysWeights(v);
   let sum = 0;
-  for (let b = -1; b <= 2; b++) {
-    const row = Math.min(ny - 1, Math.max(0, j + b)) * nx;
-    const wy = keys(v - b);
-    for (let a = -1; a <= 2; a++)
-      sum += wy * keys(u - a) * values[row + Math.min(nx - 1, Math.max(0, i + a))]!;
+  for (let b = 0; b < 4; b++) {
+    const row = Math.min(ny - 1, Math.max(0, j + b - 1)) * nx;
+    for (let a = 0; a < 4; a++)
+      sum += wy[b]! * wx[a]! * values[row + Math.min(nx - 1, Math.max(0, i + a - 1))]!;
   }
   return sum;
+}
+
+/** Weights of the points −1, 0, 1 and 2 at a place between 0 and 1. */
+export function keysWeights(u: number): readonly [number, number, number, number] {
+  return [keys(u + 1), keys(u), keys(1 - u), keys(2 - u)];
 }
 
 function keys(t: number): number {

@@ -1,8 +1,9 @@
 // Step voltage: between two feet one metre apart, in the worst direction, and its worst place.
-import { type Lattice, latticeValue } from './lattice.ts';
+import type { Lattice } from './lattice.ts';
 import { climb } from './local-search.ts';
-import { alongEdge, edgePlaces, onEdge, type Region } from './region.ts';
-import { bestStarts, latticeSummits } from './starts.ts';
+import { paceStencil, steepestDrops } from './pace-stencils.ts';
+import { edgeDirections, edgePlaces, onEdge, type Region } from './region.ts';
+import { bestStarts, latticeSummits, likeliest } from './starts.ts';
 import type { SurfacePotential } from './surface-potential.ts';
 import type { WorstPlace } from './touch.ts';
 
@@ -27,27 +28,25 @@ type Pace = readonly [number, number, number];
 
 /** Largest voltage over one metre centred at each lattice point, from a lattice of surface potentials. */
 export function stepLattice(potential: Lattice): Lattice {
-  const values = new Float64Array(potential.values.length);
-  const paces = Array.from({ length: DIRECTIONS }, (_, d) => halfPace((Math.PI * d) / DIRECTIONS));
-  for (let j = 0; j < potential.ny; j++)
-    for (let i = 0; i < potential.nx; i++) {
-      const x = potential.x0 + i * potential.spacing;
-      const y = potential.y0 + j * potential.spacing;
-      let most = 0;
-      for (const [ex, ey] of paces) {
-        const drop = latticeValue(potential, x + ex, y + ey) - latticeValue(potential, x - ex, y - ey);
-        most = Math.max(most, Math.abs(drop));
-      }
-      values[j * potential.nx + i] = most;
-    }
-  return { ...potential, values };
+  const stencils = Array.from({ length: DIRECTIONS }, (_, d) => {
+    const [ex, ey] = halfPace((Math.PI * d) / DIRECTIONS);
+    return paceStencil(ex / potential.spacing, ey / potential.spacing);
+  });
+  return { ...potential, values: steepestDrops(potential, stencils) };
+}
+
+function drop(surface: SurfacePotential, x: number, y: number, ex: number, ey: number): number {
+  return Math.abs(surface(x + ex, y + ey) - surface(x - ex, y - ey));
 }
 
 /**
  * The largest step voltage whose midpoint lies in a region: summits of the map, edges, and paces that begin by the
- * metal, ranked by the exact field; then a search over place and direction. Undefined where the region holds no place.
+ * metal, ranked and then searched over place and direction. Undefined where the region holds no place.
  * @param within 1 where a lattice point lies in the region
+ * @param surface exact
  * @param beside places by the metal: one foot of a pace is tried there
+ * @param rough a surface potential that costs less, as good as the map: it stands for the exact one away from metal
+ * when paces are ranked at first
  */
 export function worstStep(
   step: Lattice,
@@ -55,23 +54,31 @@ export function worstStep(
   within: Uint8Array,
   surface: SurfacePotential,
   beside: readonly (readonly [number, number])[],
+  rough: SurfacePotential = surface,
 ): WorstStep | undefined {
-  const f = ([x, y, angle]: readonly number[]): number => {
-    if (!region.inside(x!, y!)) return Number.NEGATIVE_INFINITY;
-    const [ex, ey] = halfPace(angle!);
-    return Math.abs(surface(x! + ex, y! + ey) - surface(x! - ex, y! - ey));
+  const voltage = ([x, y, angle]: Pace, over: SurfacePotential): number => {
+    const [ex, ey] = halfPace(angle);
+    return region.inside(x, y) ? drop(over, x, y, ex, ey) : Number.NEGATIVE_INFINITY;
   };
-  const places = [...latticeSummits(step, within), ...edgePlaces(region)];
-  const starts = bestStarts([...places.flatMap(turned), ...beside.flatMap(steppedFrom)], f, STARTS).flatMap(
-    ([x, y, angle]): Pace[] => [
-      [x, y, angle],
-      ...onEdge(region, x, y, step.spacing).map(([u, v]): Pace => [u, v, angle]),
-    ],
+  // one pace a place: the likeliest direction about a midpoint, and from a foot by the metal
+  const likely = [...latticeSummits(step, within), ...edgePlaces(region)].flatMap((midpoint) =>
+    likeliest(turned(midpoint), (pace) => voltage(pace, rough)),
   );
+  for (const [x, y] of beside) {
+    const here = surface(x, y);
+    const fromHere = ([mx, my]: Pace): number =>
+      region.inside(mx, my) ? Math.abs(rough(2 * mx - x, 2 * my - y) - here) : Number.NEGATIVE_INFINITY;
+    likely.push(...likeliest(steppedFrom([x, y]), fromHere));
+  }
+  const f = (at: readonly number[]): number => voltage(at as Pace, surface);
+  const starts = bestStarts(likely, f, STARTS).flatMap(([x, y, angle]): Pace[] => [
+    [x, y, angle],
+    ...onEdge(region, x, y, step.spacing).map(([u, v]): Pace => [u, v, angle]),
+  ]);
+  const directions = edgeDirections(region, step.spacing);
+  const along = ([x, y]: readonly number[]): number[][] => directions(x!, y!).map(([u, v]) => [u, v, 0]);
   let best: { at: readonly number[]; value: number } | undefined;
   for (const start of starts) {
-    const along = ([x, y]: readonly number[]): number[][] =>
-      alongEdge(region, x!, y!, step.spacing).map(([u, v]) => [u, v, 0]);
     const summit = climb(f, start, [step.spacing, step.spacing, TURN], along, FINEST_STEP);
     if (summit.value > (best?.value ?? Number.NEGATIVE_INFINITY)) best = summit;
   }

@@ -3,7 +3,6 @@ import { doublesAt, type Kernel, kernelOf, place } from '../kernels/instance.ts'
 import { surfaceBytes } from '../kernels/surface-bytes.ts';
 import type { RadialTable } from '../leakage/radial-table.ts';
 import { gaussLegendre } from '../numerics/gauss-legendre.ts';
-import type { FarCluster } from './far-clusters.ts';
 import type { SegmentGroup } from './segment-group.ts';
 
 /** A group as the kernel reads it. */
@@ -14,10 +13,6 @@ export interface PackedGroup {
   readonly segments: Float64Array;
   /** shape [count × cases] */
   readonly strength: Float64Array;
-  /** eight doubles a box */
-  readonly nodes: Float64Array;
-  /** coordinates and strengths of boxes, by rows of cases; places are counted from here */
-  readonly boxes: Float64Array;
   readonly all: RadialTable | undefined;
   readonly rest: RadialTable | undefined;
   /** Gauss rules of near segments, in pairs */
@@ -27,19 +22,13 @@ export interface PackedGroup {
   readonly z2: number;
 }
 
-/** Points each way in a box, as far-clusters.ts makes them and the kernel reads them. */
-const BOX_POINTS = 6;
-const NODE = 8;
-
 /**
- * @param cases leakages
  * @param twoPoints ratio of distance to length past which two Gauss points are enough
  * @param threePoints the same for three
  * @param order Gauss points of a near segment of a length, m, on the rest's table
  */
 export function packGroup(
   group: SegmentGroup,
-  cases: number,
   twoPoints: number,
   threePoints: number,
   order: (length: number) => number,
@@ -69,7 +58,7 @@ export function packGroup(
       j * 10,
     );
   }
-  return { ...group, segments, ...packClusters(group.clusters, cases), rules: Float64Array.from(rules) };
+  return { ...group, segments, rules: Float64Array.from(rules) };
 }
 
 /** Number of pairs, then for each pair its two points on [−1, 1] and its two weights. */
@@ -83,29 +72,6 @@ function pairedRule(order: number): number[] {
     rule.push(2 * points[a]! - 1, 2 * points[b]! - 1, weights[a]!, b === a ? 0 : weights[b]!);
   }
   return rule;
-}
-
-function packClusters(
-  root: FarCluster | undefined,
-  cases: number,
-): { nodes: Float64Array; boxes: Float64Array } {
-  if (root === undefined) return { nodes: new Float64Array(0), boxes: new Float64Array(0) };
-  const order: FarCluster[] = [root];
-  const nodes: number[] = [];
-  const boxes: number[] = [];
-  // breadth first: halves are put at the end of the list while it is read
-  for (let k = 0; k < order.length; k++) {
-    const box = order[k]!;
-    const first = box.halves === undefined ? -1 : order.length;
-    nodes.push(box.x, box.y, box.farSquared, box.from, box.to, first, first + 1, boxes.length * 8);
-    if (box.halves === undefined) continue;
-    order.push(...box.halves);
-    boxes.push(...box.px, ...box.py);
-    for (let b = 0; b < BOX_POINTS; b++)
-      for (let u = 0; u < cases; u++)
-        for (let a = 0; a < BOX_POINTS; a++) boxes.push(box.strength[(b * BOX_POINTS + a) * cases + u]!);
-  }
-  return { nodes: Float64Array.from(nodes), boxes: Float64Array.from(boxes) };
 }
 
 export function surfaceKernel(): Kernel | undefined {
@@ -127,28 +93,16 @@ export function addByKernel(
   into: Float64Array,
 ): boolean {
   const none = new Float64Array(0);
-  const { segments, strength, nodes, boxes, rules, all, rest } = group;
+  const { segments, strength, rules, all, rest, count } = group;
   const sums = new Float64Array(2 * cases);
-  const arrays = [
-    segments,
-    strength,
-    nodes,
-    boxes,
-    all?.bins ?? none,
-    rest?.bins ?? none,
-    rules,
-    sums,
-    xs,
-    ys,
-    into,
-  ];
+  const arrays = [segments, strength, all?.bins ?? none, rest?.bins ?? none, rules, sums, xs, ys, into];
   const at = place(kernel, arrays);
   if (at === undefined) return false;
-  const [s = 0, w = 0, n = 0, b = 0, a = 0, r = 0, g = 0, t = 0, x = 0, y = 0, o = 0] = at;
+  const [s = 0, w = 0, a = 0, r = 0, g = 0, t = 0, x = 0, y = 0, o = 0] = at;
   const restAt = rest === undefined ? 0 : r;
   const perRest = rest?.perSquare ?? 0;
   if (group.vertical) {
-    const { count, ownWeight, z1, z2 } = group;
+    const { ownWeight, z1, z2 } = group;
     kernel.call(
       'upright',
       s,
@@ -167,14 +121,12 @@ export function addByKernel(
       o,
     );
   } else {
-    const shifted = doublesAt(kernel, n, nodes.length);
-    for (let k = 7; k < nodes.length; k += NODE) shifted[k]! += b;
     const perAll = all?.perSquare ?? 0;
     kernel.call(
       'level',
       s,
+      count,
       w,
-      n,
       a,
       perAll,
       restAt,

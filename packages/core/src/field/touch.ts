@@ -1,12 +1,14 @@
 // Touch voltage: potential of the metal within reach minus the potential of the soil under the feet, and its worst place.
 import type { Lattice } from './lattice.ts';
 import { climb } from './local-search.ts';
-import { alongEdge, edgePlaces, onEdge, type Region } from './region.ts';
-import { bestStarts, latticeSummits } from './starts.ts';
+import { edgeDirections, edgePlaces, onEdge, type Region } from './region.ts';
+import { bestStarts, type Guess, latticeSummits } from './starts.ts';
 import type { SurfacePotential } from './surface-potential.ts';
 
 /** Potential of the metal that can be reached from a place; same unit as the surface potential. */
 export type MetalPotential = (x: number, y: number) => number;
+
+type Place = readonly [number, number];
 
 export interface WorstPlace {
   readonly x: number;
@@ -29,11 +31,13 @@ export function touchLattice(potential: Lattice, reachable: (place: number) => n
 }
 
 /**
- * The largest touch voltage in a region: summits of the map, corners and edges, and places by the metal, ranked by the
- * exact field; then a search from the best. Undefined where the region holds no place.
+ * The largest touch voltage in a region: summits of the map, corners and edges, and places by the metal, ranked; then a
+ * search from the best. Undefined where the region holds no place.
  * @param touch lattice of touch voltages that covers the region
  * @param within 1 where a lattice point lies in the region
+ * @param surface exact
  * @param beside places by the metal that a lattice may step over
+ * @param rough a surface potential that costs less, as good as the map: it ranks places that are not beside metal
  */
 export function worstTouch(
   touch: Lattice,
@@ -42,27 +46,36 @@ export function worstTouch(
   surface: SurfacePotential,
   metal: MetalPotential,
   beside: readonly (readonly [number, number])[],
+  rough: SurfacePotential = surface,
 ): WorstPlace | undefined {
-  const f = ([x, y]: readonly number[]): number =>
-    region.inside(x!, y!) ? Math.abs(metal(x!, y!) - surface(x!, y!)) : Number.NEGATIVE_INFINITY;
-  const candidates = [...latticeSummits(touch, within), ...edgePlaces(region), ...beside];
-  return climbFromBest(candidates, f, region, touch.spacing);
+  const over =
+    (potential: SurfacePotential) =>
+    ([x, y]: readonly number[]): number =>
+      region.inside(x!, y!) ? Math.abs(metal(x!, y!) - potential(x!, y!)) : Number.NEGATIVE_INFINITY;
+  const guessed = (places: readonly Place[], value: (place: Place) => number): Guess<Place>[] =>
+    places.map((candidate) => ({ candidate, value: value(candidate) }));
+  const guesses = [
+    ...guessed([...latticeSummits(touch, within), ...edgePlaces(region)], over(rough)),
+    ...guessed(beside, over(surface)),
+  ];
+  return climbFromBest(guesses, over(surface), region, touch.spacing);
 }
 
-/** Climbs in the plane from the best of several places, along the region's edge where that is near. */
+/** Climbs in the plane from the best of the likeliest places, along the region's edge where that is near. */
 export function climbFromBest(
-  candidates: readonly (readonly [number, number])[],
+  guesses: readonly Guess<Place>[],
   f: (at: readonly number[]) => number,
   region: Region,
   step: number,
 ): WorstPlace | undefined {
-  const starts = bestStarts(candidates, f, STARTS).flatMap(([x, y]) => [
+  const starts = bestStarts(guesses, f, STARTS).flatMap(([x, y]) => [
     [x, y] as const,
     ...onEdge(region, x, y, step),
   ]);
+  const directions = edgeDirections(region, step);
+  const along = ([x, y]: readonly number[]): readonly (readonly number[])[] => directions(x!, y!);
   let worst: WorstPlace | undefined;
   for (const start of starts) {
-    const along = ([x, y]: readonly number[]): [number, number][] => alongEdge(region, x!, y!, step);
     const { at, value } = climb(f, start, [step, step], along, FINEST_STEP);
     if (value > (worst?.value ?? Number.NEGATIVE_INFINITY)) worst = { x: at[0]!, y: at[1]!, value };
   }

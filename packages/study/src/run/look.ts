@@ -1,10 +1,11 @@
 // Maps of one mesh and the worst places in them, by what lies under the feet.
 import {
-  adaptiveLattices,
   type Box,
   type Lattice,
+  latticeValue,
   nodesReached,
   regionMask,
+  type SurfacePotential,
   stepLattice,
   touchLattice,
   type WorstPlace,
@@ -12,7 +13,7 @@ import {
   worstStep,
   worstTouch,
 } from '@ohmstead/core';
-import type { Level } from './level.ts';
+import { type Level, stepAt, touchAt } from './level.ts';
 import type { Prepared } from './prepare.ts';
 import { type Footing, zonesOf } from './zones.ts';
 
@@ -25,14 +26,17 @@ export interface ZoneFound {
 
 export interface Found {
   readonly potential: Lattice;
+  /** the potential at any place, as exact as the map */
+  readonly surface: SurfacePotential;
   readonly touch: Lattice;
   readonly step: Lattice;
   readonly zones: readonly ZoneFound[];
 }
 
 /**
- * Maps and worst places of the first units of a level.
- * @param tolerance largest interpolation error of the maps, of the rise
+ * Maps and worst places of the first units of a level. Places are searched on the map's own field; their voltages are
+ * then summed segment by segment.
+ * @param tolerance largest interpolation error of what sloped metal adds to the maps, of the rise
  */
 export function look(
   prepared: Prepared,
@@ -43,32 +47,39 @@ export function look(
   count: number,
 ): Found[] {
   const { surfaces, graph } = level;
-  const maps = adaptiveLattices(
-    surfaces,
-    graph.units.map((unit) => tolerance * unit.resistance),
-    box,
-    spacing,
-  );
-  const nodes = nodesReached(maps[0]!, level.fields[0]!.nearest);
+  const tolerances = graph.units.map((unit) => tolerance * unit.resistance);
+  const map = surfaces.map(box, spacing, tolerances);
+  const grid = map.lattices[0]!;
+  const nodes = nodesReached(grid, level.fields[0]!.nearest);
   const zones = zonesOf(prepared).map((zone) => ({
     ...zone,
-    touchMask: regionMask(maps[0]!, zone.touch),
-    stepMask: regionMask(maps[0]!, zone.step),
+    touchMask: regionMask(grid, zone.touch),
+    stepMask: regionMask(grid, zone.step),
   }));
-  return level.fields.slice(0, count).map(({ surface, metal }, u): Found => {
-    const potential = maps[u]!;
+  const beside = prepared.metalPlaces;
+  return level.fields.slice(0, count).map((field, u): Found => {
+    const potential = map.lattices[u]!;
+    const surface = map.potential(u);
     const { nodePotential } = graph.units[u]!;
     const touch = touchLattice(potential, (place) => nodePotential[nodes[place]!]!);
     const step = stepLattice(potential);
+    const rough: SurfacePotential = (x, y) => latticeValue(potential, x, y);
     return {
       potential,
+      surface,
       touch,
       step,
-      zones: zones.map((zone) => ({
-        footing: zone.footing,
-        touch: worstTouch(touch, zone.touch, zone.touchMask, surface, metal, prepared.metalPlaces),
-        step: worstStep(step, zone.step, zone.stepMask, surface, prepared.metalPlaces),
-      })),
+      zones: zones.map((zone) => {
+        const worst = {
+          touch: worstTouch(touch, zone.touch, zone.touchMask, surface, field.metal, beside, rough),
+          step: worstStep(step, zone.step, zone.stepMask, surface, beside, rough),
+        };
+        return {
+          footing: zone.footing,
+          touch: worst.touch && { ...worst.touch, value: touchAt(field, worst.touch) },
+          step: worst.step && { ...worst.step, value: stepAt(field, worst.step) },
+        };
+      }),
     };
   });
 }
