@@ -67,6 +67,7 @@ export { type PartInputs, type PartMatrix, partMatrix } from './leakage/part-mat
 export { type ConductorMaterial, conductorMaterials } from './materials/conductor-materials.ts';
 export { type Branches, branchCurrents, nodeOutflow, REMOTE_EARTH } from './network/branches.ts';
 export { type ReducedLaplacian, reducedLaplacian } from './network/reduced-laplacian.ts';
+export type { Complex, ComplexVector } from './numerics/complex-vector.ts';
 export { type BlockRoom, blockRoom, MemoryRefused } from './numerics/dense-blocks.ts';
 export { factorPacked } from './numerics/packed-cholesky.ts';
 export { type Covering, coveringDeratingFactor } from './safety/covering-derating.ts';
@@ -85,6 +86,11 @@ export { interfaceDepths } from './soil/layer-kernel.ts';
 export { pointPotential } from './soil/point-potential.ts';
 export { type SeasonalChange, seasonalSoil } from './soil/season.ts';
 export type * from './soil/soil-model.ts';
+export {
+  type ComplexGraphSolution,
+  type ComplexUnitSolution,
+  solveGraphComplex,
+} from './solve/complex-solution.ts';
 export { type GraphSolution, type MetalModel, solveGraph, type UnitSolution } from './solve/solution.ts';
 export { MODEL_FLOOR, refinementUncertainty } from './solve/uncertainty.ts';
 export {

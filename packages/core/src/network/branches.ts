@@ -25,7 +25,11 @@ export function branchCurrents(branches: Branches, potential: Float64Array): Flo
 }
 
 /** Current that leaves each node through its branches, A (the incidence matrix times the branch currents); shape [nodeCount]. */
-export function nodeOutflow(branches: Branches, nodeCount: number, current: Float64Array): Float64Array {
+export function nodeOutflow(
+  branches: Pick<Branches, 'count' | 'from' | 'to'>,
+  nodeCount: number,
+  current: Float64Array,
+): Float64Array {
   const outflow = new Float64Array(nodeCount);
   for (let b = 0; b < branches.count; b++) {
     const from = branches.from[b]!;

@@ -12,12 +12,8 @@ export function metalBranches(mesh: SegmentMesh, resistancePerMetre: Float64Arra
   return { count: mesh.count, from: mesh.node1, to: mesh.node2, conductance };
 }
 
-/** The metal's Laplacian with one reference node of each piece of metal grounded; the references are also returned, by component. */
-export function groundedMetal(
-  mesh: SegmentMesh,
-  branches: Branches,
-  preferred: readonly number[],
-): { readonly laplacian: ReducedLaplacian; readonly references: Int32Array } {
+/** One reference node of each piece of metal, by component: the first of those preferred, else its first. */
+export function referenceNodes(mesh: SegmentMesh, preferred: readonly number[]): Int32Array {
   const references = new Int32Array(mesh.componentCount).fill(-1);
   for (const node of preferred) {
     const component = mesh.nodeComponent[node]!;
@@ -27,6 +23,16 @@ export function groundedMetal(
     const component = mesh.nodeComponent[node]!;
     if (references[component]! < 0) references[component] = node;
   }
+  return references;
+}
+
+/** The metal's Laplacian with one reference node of each piece of metal grounded; the references are also returned, by component. */
+export function groundedMetal(
+  mesh: SegmentMesh,
+  branches: Branches,
+  preferred: readonly number[],
+): { readonly laplacian: ReducedLaplacian; readonly references: Int32Array } {
+  const references = referenceNodes(mesh, preferred);
   return { laplacian: reducedLaplacian(branches, mesh.nodeCount, Array.from(references)), references };
 }
 

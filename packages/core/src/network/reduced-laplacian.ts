@@ -17,6 +17,42 @@ export interface ReducedLaplacian {
   solve(injection: Float64Array): Float64Array;
 }
 
+/** Unknowns of a network, and the places of its Laplacian off the diagonal. */
+export interface LaplacianPattern {
+  /** nodes that are not grounded */
+  readonly size: number;
+  /** number of each node among them; −1 for a grounded one; shape [nodeCount] */
+  readonly unknown: Int32Array;
+  /** two unknowns joined, and the branch that joins them */
+  readonly row: Int32Array;
+  readonly column: Int32Array;
+  readonly branch: Int32Array;
+}
+
+/** @param grounded nodes held at zero potential besides remote earth */
+export function laplacianPattern(
+  { count, from, to }: Pick<Branches, 'count' | 'from' | 'to'>,
+  nodeCount: number,
+  grounded: readonly number[],
+): LaplacianPattern {
+  const unknown = new Int32Array(nodeCount);
+  for (const node of grounded) unknown[node] = -1;
+  let size = 0;
+  for (let node = 0; node < nodeCount; node++) if (unknown[node] === 0) unknown[node] = size++;
+  const numberOf = (node: number): number => (node < 0 ? -1 : unknown[node]!);
+  const joining = Int32Array.from({ length: count }, (_, b) => b).filter((b) => {
+    const [i, j] = [numberOf(from[b]!), numberOf(to[b]!)];
+    return i >= 0 && j >= 0 && i !== j;
+  });
+  return {
+    size,
+    unknown,
+    row: joining.map((b) => unknown[from[b]!]!),
+    column: joining.map((b) => unknown[to[b]!]!),
+    branch: joining,
+  };
+}
+
 /**
  * Builds and factors the reduced Laplacian Y = A diag(g) Aᵀ of the nodes that are not grounded. The full Laplacian is
  * singular, its potentials being free up to a constant for each connected part; every part must hold a grounded node
@@ -29,38 +65,14 @@ export function reducedLaplacian(
   nodeCount: number,
   grounded: readonly number[],
 ): ReducedLaplacian {
-  const place = new Int32Array(nodeCount);
-  for (const node of grounded) place[node] = -1;
-  let size = 0;
-  for (let node = 0; node < nodeCount; node++) if (place[node] === 0) place[node] = size++;
+  const { size, unknown, row, column, branch } = laplacianPattern(branches, nodeCount, grounded);
   const diagonal = new Float64Array(size);
-  const rows: number[] = [];
-  const columns: number[] = [];
-  const values: number[] = [];
-  for (let b = 0; b < branches.count; b++) {
-    const from = branches.from[b]! < 0 ? -1 : place[branches.from[b]!]!;
-    const to = branches.to[b]! < 0 ? -1 : place[branches.to[b]!]!;
-    const g = branches.conductance[b]!;
-    if (from >= 0) diagonal[from]! += g;
-    if (to >= 0) diagonal[to]! += g;
-    if (from >= 0 && to >= 0 && from !== to) {
-      rows.push(from);
-      columns.push(to);
-      values.push(-g);
-    }
-  }
-  const factor = factorSparse({
-    size,
-    diagonal,
-    row: Int32Array.from(rows),
-    column: Int32Array.from(columns),
-    value: Float64Array.from(values),
-  });
-  const eliminated = new Int32Array(size);
-  factor.order.forEach((unknown, k) => {
-    eliminated[unknown] = k;
-  });
-  const places = place.map((unknown) => (unknown < 0 ? size : eliminated[unknown]!));
+  for (let b = 0; b < branches.count; b++)
+    for (const node of [branches.from[b]!, branches.to[b]!])
+      if (node >= 0 && unknown[node]! >= 0) diagonal[unknown[node]!]! += branches.conductance[b]!;
+  const value = Float64Array.from(branch, (b) => -branches.conductance[b]!);
+  const factor = factorSparse({ size, diagonal, row, column, value });
+  const places = unknown.map((own) => (own < 0 ? size : factor.place[own]!));
   const solveInPlace = (b: Float64Array): void => solveEliminated(factor, b);
   return {
     nodeCount,

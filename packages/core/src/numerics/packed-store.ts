@@ -1,7 +1,8 @@
 // A packed symmetric matrix kept where the kernel that multiplies and preconditions with it can read it.
 import { BYTES_A_DOUBLE, doublesAt, type Kernel, ownKernel, place } from '../kernels/instance.ts';
 import { productBytes } from '../kernels/product-bytes.ts';
-import { multiplyPacked, NotPositiveDefinite, type PackedLower } from './packed-cholesky.ts';
+import { NotPositiveDefinite, type PackedLower } from './packed-cholesky.ts';
+import { multiplyPacked } from './packed-product.ts';
 import { KEPT_NEIGHBOURS, type Preconditioner, sparseInverse } from './sparse-inverse.ts';
 
 export interface PackedStore {

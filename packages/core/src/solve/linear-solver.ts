@@ -1,7 +1,11 @@
 // Solves the coupled leakage equations (R + B Z Bᵀ) x = b by the method that suits their size.
 import type { LeakageMatrix } from '../leakage/leakage-matrix.ts';
 import type { MetalDrop } from '../network/metal.ts';
-import { type Products, simultaneousGradients } from '../numerics/conjugate-gradients.ts';
+import {
+  type ConjugateGradientOptions,
+  type Products,
+  simultaneousGradients,
+} from '../numerics/conjugate-gradients.ts';
 import type { PackedLower } from '../numerics/packed-cholesky.ts';
 import { packedFactor } from '../numerics/packed-factor.ts';
 
@@ -36,8 +40,14 @@ export class SolverStalled extends Error {
   }
 }
 
+/** What is asked of an iteration with this matrix. */
+export function iterationOptions(matrix: LeakageMatrix): ConjugateGradientOptions {
+  const tolerance = matrix.entries === undefined ? COMPRESSED_RESIDUAL : RESIDUAL;
+  return { tolerance, limit: ITERATION_LIMIT };
+}
+
 /** Worst relative residual that is still accepted when rounding stops an iteration short of its target. */
-const ACCEPTED_RESIDUAL = 1e-9;
+export const ACCEPTED_RESIDUAL = 1e-9;
 
 /** Below this either way takes two milliseconds, and the factor gives the last digit. */
 const SMALL = 300;
@@ -103,10 +113,12 @@ function iterative({ matrix, addMetal }: LeakageOperator): LinearSolver {
   return {
     method: 'conjugate-gradients',
     async solve(bs) {
-      const results = await simultaneousGradients(multiply, matrix.precondition, bs, {
-        tolerance: matrix.entries === undefined ? COMPRESSED_RESIDUAL : RESIDUAL,
-        limit: ITERATION_LIMIT,
-      });
+      const results = await simultaneousGradients(
+        multiply,
+        matrix.precondition,
+        bs,
+        iterationOptions(matrix),
+      );
       for (const { outcome, residual } of results)
         if (outcome !== 'converged' && !(residual <= ACCEPTED_RESIDUAL)) throw new SolverStalled(residual);
       return {

@@ -11,6 +11,7 @@ import {
 } from '../network/metal.ts';
 import { factorPacked, solvePacked } from '../numerics/packed-cholesky.ts';
 import { linearSolver, multiplyAll } from './linear-solver.ts';
+import { leakingPieces, unitAt } from './pieces.ts';
 
 export type MetalModel = 'resistive' | 'equipotential';
 
@@ -59,8 +60,7 @@ export async function solveGraph(
   const resistive = model === 'resistive';
   const branches = metalBranches(mesh, resistancePerMetre);
   const { laplacian, references } = groundedMetal(mesh, branches, injectionNodes);
-  const component = Int32Array.from(segments, (i) => mesh.nodeComponent[mesh.node1[i]!]!);
-  const pieces = piecesThatLeak(component, mesh.componentCount);
+  const { pieces, ones, net } = leakingPieces(mesh, segments);
   const distinct = [...new Set(injectionNodes)];
   const away = resistive ? distinct.filter((node) => !references.includes(node)) : [];
   const solver = linearSolver(
@@ -68,11 +68,10 @@ export async function solveGraph(
     pieces.length + away.length,
   );
   const { xs, iterations } = await solver.solve([
-    ...pieces.map((c) => Float64Array.from(component, (own) => (own === c ? 1 : 0))),
+    ...ones,
     ...away.map((node) => segmentPotentials(mesh, segments, laplacian.solve(unitAt(mesh.nodeCount, node)))),
   ]);
   const response = xs.slice(0, pieces.length);
-  const net = (x: Float64Array): Float64Array => netByPiece(x, component, pieces);
   const gram = packPieces(response.map(net));
 
   /** Current from each segment, and the reference potentials by piece that impose the net currents. */
@@ -127,26 +126,6 @@ export async function solveGraph(
     return { ...solved, residual: relativeDifference(products[u]!, potential) };
   });
   return { mesh, units: injectionNodes.map((node) => units[distinct.indexOf(node)]!), iterations };
-}
-
-function unitAt(count: number, node: number): Float64Array {
-  const injection = new Float64Array(count);
-  injection[node] = 1;
-  return injection;
-}
-
-function piecesThatLeak(component: Int32Array, count: number): number[] {
-  const leaks = new Uint8Array(count);
-  for (const c of component) leaks[c] = 1;
-  return Array.from({ length: count }, (_, c) => c).filter((c) => leaks[c] === 1);
-}
-
-/** Net leakage of each piece of metal; shape [pieces]. */
-function netByPiece(x: Float64Array, component: Int32Array, pieces: readonly number[]): Float64Array {
-  const place = new Map(pieces.map((c, p) => [c, p]));
-  const sums = new Float64Array(pieces.length);
-  for (let k = 0; k < x.length; k++) sums[place.get(component[k]!)!]! += x[k]!;
-  return sums;
 }
 
 /** Cholesky factor of the small matrix of net currents between pieces: symmetric positive definite as K⁻¹ is. */

@@ -1,11 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { conjugateGradients, simultaneousGradients } from '../../src/numerics/conjugate-gradients.ts';
-import {
-  factorPacked,
-  multiplyPacked,
-  NotPositiveDefinite,
-  solvePacked,
-} from '../../src/numerics/packed-cholesky.ts';
+import { factorPacked, NotPositiveDefinite, solvePacked } from '../../src/numerics/packed-cholesky.ts';
+import { multiplyPacked } from '../../src/numerics/packed-product.ts';
 import { factorSparse, solveSparse } from '../../src/numerics/sparse-cholesky.ts';
 import { randomNumbers } from '../support/random.ts';
 

@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { conjugateGradients } from '../../src/numerics/conjugate-gradients.ts';
-import { factorPacked, multiplyPacked, solvePacked } from '../../src/numerics/packed-cholesky.ts';
+import { factorPacked, solvePacked } from '../../src/numerics/packed-cholesky.ts';
+import { multiplyPacked } from '../../src/numerics/packed-product.ts';
 import { sparseInverse } from '../../src/numerics/sparse-inverse.ts';
 import { randomNumbers } from '../support/random.ts';
 
