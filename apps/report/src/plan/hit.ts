@@ -1,0 +1,42 @@
+// What of the plan lies under a place or in a rectangle.
+import type { Point } from '@ohmstead/study';
+import type { PlanItem } from './plan-conductors.ts';
+
+/** Place on a conductor in plan that is nearest to a point, and the distance, m. */
+export function nearestOn(
+  { conductor }: PlanItem,
+  [x, y]: Point,
+): { readonly at: Point; readonly distance: number } {
+  const { x1, y1, x2, y2 } = conductor;
+  const [dx, dy] = [x2 - x1, y2 - y1];
+  const square = dx * dx + dy * dy;
+  const share = square === 0 ? 0 : Math.min(1, Math.max(0, ((x - x1) * dx + (y - y1) * dy) / square));
+  const at: Point = [x1 + share * dx, y1 + share * dy];
+  return { at, distance: Math.hypot(x - at[0], y - at[1]) };
+}
+
+/** The conductor under a place; a rod before the conductors that it stands on. */
+export function itemAt(items: readonly PlanItem[], place: Point, tolerance: number): PlanItem | undefined {
+  let best: PlanItem | undefined;
+  let least = Number.POSITIVE_INFINITY;
+  for (const item of items) {
+    const { distance } = nearestOn(item, place);
+    // rods are points in plan and would never win against the line through them
+    const weighed = item.rod ? distance / 2 - tolerance / 1e3 : distance;
+    if (distance <= tolerance && weighed < least) {
+      best = item;
+      least = weighed;
+    }
+  }
+  return best;
+}
+
+/** Conductors that lie wholly in the rectangle between two corners. */
+export function itemsIn(items: readonly PlanItem[], a: Point, b: Point): readonly PlanItem[] {
+  const inside = (x: number, y: number): boolean =>
+    x >= Math.min(a[0], b[0]) &&
+    x <= Math.max(a[0], b[0]) &&
+    y >= Math.min(a[1], b[1]) &&
+    y <= Math.max(a[1], b[1]);
+  return items.filter(({ conductor: { x1, y1, x2, y2 } }) => inside(x1, y1) && inside(x2, y2));
+}
