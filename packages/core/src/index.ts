@@ -64,6 +64,7 @@ export {
 } from './leakage/leakage-matrix.ts';
 export { leakageOperator } from './leakage/leakage-operator.ts';
 export { type PartInputs, type PartMatrix, partMatrix } from './leakage/part-matrix.ts';
+export { type KnownLeakage, type ReusedLeakage, reusedLeakageMatrix } from './leakage/reused-matrix.ts';
 export { type ConductorMaterial, conductorMaterials } from './materials/conductor-materials.ts';
 export { type Branches, branchCurrents, nodeOutflow, REMOTE_EARTH } from './network/branches.ts';
 export { type ReducedLaplacian, reducedLaplacian } from './network/reduced-laplacian.ts';

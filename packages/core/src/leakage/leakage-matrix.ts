@@ -3,7 +3,7 @@ import type { SegmentMesh } from '../geometry/segments.ts';
 import type { Product, Products } from '../numerics/conjugate-gradients.ts';
 import type { PackedLower } from '../numerics/packed-cholesky.ts';
 import { packedOperator } from '../numerics/packed-operator.ts';
-import { packedStore } from '../numerics/packed-store.ts';
+import { type PackedStore, packedStore } from '../numerics/packed-store.ts';
 import type { SoilImages } from '../soil/image-list.ts';
 import { type DepthPairs, depthPairs } from './depth-pairs.ts';
 import { type LeakageKernel, leakageKernel } from './leakage-kernel.ts';
@@ -49,14 +49,14 @@ export function leakageMatrix(mesh: SegmentMesh, images: SoilImages): DenseLeaka
       for (let column = 0; column <= row; column++)
         entries[(row * (row + 1)) / 2 + column] = entry(segments[row]!, segments[column]!);
   }
+  return storedMatrix(segments, store);
+}
+
+/** A stored matrix, its entries filled, behind the interface. */
+export function storedMatrix(segments: Int32Array, store: PackedStore): DenseLeakageMatrix {
+  const { size, entries } = store;
   const diagonal = Float64Array.from({ length: size }, (_, i) => entries[(i * (i + 3)) / 2]!);
-  return {
-    segments,
-    size,
-    entries,
-    diagonal,
-    ...packedOperator(store),
-  };
+  return { segments, size, entries, diagonal, ...packedOperator(store) };
 }
 
 /** Prepares the tables from which single entries of the leakage matrix are made, the same as in blocks. */
