@@ -1,7 +1,9 @@
 // The command line, bundled to plain files that Node 20 runs as they are.
 import { defineConfig } from 'vite';
+import { pageScriptDefinitions } from '../report/page-scripts.ts';
 
 export default defineConfig({
+  define: pageScriptDefinitions(),
   build: {
     ssr: true,
     target: 'node20',

@@ -1,16 +1,16 @@
 // The live sheet as static files that work from any plain host.
 import { defineConfig } from 'vite';
-import { engineDefinitions } from './engine-text.ts';
+import { pageScriptDefinitions } from './page-scripts.ts';
 
 export default defineConfig(({ isPreview }) => ({
   base: './',
-  define: isPreview === true ? {} : engineDefinitions(),
+  define: isPreview === true ? {} : pageScriptDefinitions(),
   build: {
     target: 'es2023',
     outDir: 'dist/site',
     emptyOutDir: true,
     modulePreload: false,
-    // the engine's text is one chunk of this size, kB; a test watches what the whole page transfers
+    // the scripts carried as text are one chunk of this size, kB; a test watches what the whole page transfers
     chunkSizeWarningLimit: 1000,
   },
   preview: { port: 4173, strictPort: false },

@@ -1,5 +1,5 @@
 // The computing that commands call, in one place, so that tests can put a quick one in its stead.
-import type { Renderer } from '@ohmstead/pack';
+import type { PageScripts, Renderer } from '@ohmstead/pack';
 import {
   type FieldPoint,
   type FieldValue,
@@ -36,6 +36,8 @@ export interface Engine {
   ) => Promise<readonly FieldValue[]>;
   /** what packs are drawn with; the sheet's own where left out */
   readonly renderer?: Renderer;
+  /** what the sheets of packs carry to be computed anew; nothing where left out */
+  readonly pageScripts?: () => Promise<PageScripts>;
   readonly version: string;
 }
 
@@ -46,5 +48,7 @@ export const engine: Engine = {
   fitSurvey,
   solveStudy,
   fieldAt,
+  // read only when wanted: it is as large as the program itself
+  pageScripts: async () => (await import('./page-scripts.ts')).pageScripts,
   version: programVersion,
 };

@@ -49,7 +49,9 @@ async function runSolve(given: Arguments, io: Io, engine: Engine): Promise<ExitS
       report('drawing the sheet', 0);
       // read only when wanted: what draws and packs is half the program
       const { writePack } = await import('@ohmstead/pack');
-      writeWhole(pack, await writePack(loaded, outcome, engine.version, engine.renderer));
+      const { renderer } = engine;
+      const scripts = await engine.pageScripts?.();
+      writeWhole(pack, await writePack(loaded, outcome, engine.version, { renderer, scripts }));
     }
     return outcome;
   });

@@ -27,10 +27,12 @@ export const verify: Command = {
 async function runVerify(given: Arguments, io: Io, engine: Engine): Promise<ExitStatus> {
   const bytes = readZipFile(given.operand);
   const { verifyPack } = await import('@ohmstead/pack');
+  const scripts = await engine.pageScripts?.();
   const { differences, checked } = await withProgress(io, (report) =>
     verifyPack(bytes, (loaded) => engine.solveStudy(loaded, { onProgress: report }), {
       file: given.operand,
       load: engine.loadStudy,
+      scripts,
       ...(engine.renderer === undefined ? {} : { renderer: engine.renderer }),
     }),
   );
@@ -51,7 +53,9 @@ function summary(checked: Verification['checked'], differences: number): readonl
   const versions =
     programVersion === null || programVersion === packVersion
       ? []
-      : [`written by version ${printable(packVersion)}, solved again by version ${programVersion}`];
+      : [
+          `written by version ${printable(packVersion)}, solved again by version ${programVersion}; the program that its sheet may carry is not compared`,
+        ];
   const verdict =
     differences === 0
       ? 'no difference'

@@ -1,4 +1,5 @@
 // Puts the live sheet on the page.
+import type { PageScripts } from '@ohmstead/pack';
 import { sheetCss } from '@ohmstead/sheet';
 import { render } from 'preact';
 import { blobWorker } from './engine/blob-worker.ts';
@@ -11,8 +12,8 @@ style.textContent = sheetCss;
 document.head.append(style);
 
 /** Read beside the page, so that the page is drawn first. */
-const engineText: Promise<string> = import('./engine/text.ts').then((module) => module.engineText);
-const begin: EnginePlatform['begin'] = (hear) => blobWorker(engineText, hear);
+const scripts: Promise<PageScripts> = import('./engine/page-scripts.ts').then((module) => module.pageScripts);
+const begin: EnginePlatform['begin'] = (hear) => blobWorker(scripts, hear);
 
 const root = document.getElementById('root');
 if (root === null) throw new Error('the page has no place for the sheet');

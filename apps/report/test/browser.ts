@@ -19,6 +19,10 @@ export interface LiveSheet {
   close(): Promise<void>;
 }
 
+export function openBrowser(): Promise<Browser> {
+  return chromium.launch({ executablePath: CHROMIUM, args: FLAGS });
+}
+
 /** Serves the built page and starts a browser; fails where either is missing. */
 export async function openLiveSheet(): Promise<LiveSheet> {
   const root = resolve(import.meta.dirname, '..');
@@ -28,7 +32,7 @@ export async function openLiveSheet(): Promise<LiveSheet> {
     logLevel: 'error',
     preview: { host: '127.0.0.1', port: 0 },
   });
-  const browser = await chromium.launch({ executablePath: CHROMIUM, args: FLAGS });
+  const browser = await openBrowser();
   return {
     browser,
     url: server.resolvedUrls?.local[0] ?? '',
@@ -41,7 +45,7 @@ export async function openLiveSheet(): Promise<LiveSheet> {
 
 /** A page that collects its own errors and every request it makes. */
 export async function watchedPage(
-  sheet: LiveSheet,
+  sheet: Pick<LiveSheet, 'browser'>,
 ): Promise<{ page: Page; errors: string[]; requests: string[] }> {
   const context = await sheet.browser.newContext({ viewport: { width: 1180, height: 900 } });
   const page = await context.newPage();

@@ -9,6 +9,11 @@ import type { Difference } from './difference.ts';
  */
 export const SAME_NUMBER_TOLERANCE: number = 1e-9;
 
+/** Whether two numbers count as the same result on two kinds of machine. */
+export function sameNumber(a: number, b: number): boolean {
+  return Math.abs(a - b) <= SAME_NUMBER_TOLERANCE * Math.max(1, Math.abs(a), Math.abs(b));
+}
+
 export interface Comparison {
   readonly differences: readonly Difference[];
   /** numbers compared, those that agree to the last bit, and those that agree within the tolerance only */
@@ -32,7 +37,7 @@ export function compareResults(stored: unknown, computed: unknown): Comparison {
     if (typeof a === 'number' && typeof b === 'number') {
       numbers++;
       if (a === b) exact++;
-      else if (Math.abs(a - b) <= SAME_NUMBER_TOLERANCE * Math.max(1, Math.abs(a), Math.abs(b))) close++;
+      else if (sameNumber(a, b)) close++;
       else differences.push({ kind: 'result', path, stored: String(a), computed: String(b) });
     } else if (isObject(a) && isObject(b) && Array.isArray(a) === Array.isArray(b)) {
       for (const key of [...new Set([...Object.keys(a), ...Object.keys(b)])]) {

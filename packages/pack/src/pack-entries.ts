@@ -1,4 +1,5 @@
 // Study and outcome → the entries of a review pack, without its manifest.
+import type { PageProgram } from '@ohmstead/sheet';
 import type { LoadedStudy, Outcome } from '@ohmstead/study';
 import { entryNameComplaint } from './entry-name.ts';
 import { jsonText } from './json-text.ts';
@@ -14,14 +15,14 @@ const TABLE_FOLDER = 'tables/';
  * Everything a review pack holds but the manifest.
  * @param loaded its files go into `study/` exactly as read
  * @param outcome of solving it
- * @param renderer draws sheet, figures and tables
+ * @param drawing what draws sheet, figures and tables, and the program that the sheet carries, if any
  * @returns contents by path
  * @throws Error where two entries would bear one name, or a name would leave the pack
  */
 export function packEntries(
   loaded: LoadedStudy,
   outcome: Outcome,
-  renderer: Renderer,
+  { renderer, program }: { readonly renderer: Renderer; readonly program: PageProgram | undefined },
 ): ReadonlyMap<string, Uint8Array> {
   const entries = new Map<string, Uint8Array>();
   const add = (path: string, content: Uint8Array): void => {
@@ -30,7 +31,7 @@ export function packEntries(
     entries.set(path, content);
   };
   const encoder = new TextEncoder();
-  add(SHEET_NAME, encoder.encode(renderer.sheetHtml(outcome)));
+  add(SHEET_NAME, encoder.encode(renderer.sheetHtml(outcome, program)));
   for (const { name, svg } of renderer.figures(outcome)) add(`${FIGURE_FOLDER}${name}`, encoder.encode(svg));
   for (const { name, csv } of renderer.tables(outcome)) add(`${TABLE_FOLDER}${name}`, encoder.encode(csv));
   add(RESULTS_NAME, encoder.encode(jsonText(outcome.results)));

@@ -1,4 +1,5 @@
 // Review pack → every difference between what it holds and what its own study gives when solved again.
+import { withoutProgram } from '@ohmstead/sheet';
 import {
   InputFaults,
   type LoadedStudy,
@@ -11,9 +12,11 @@ import { checkDigests } from './check-digests.ts';
 import { type Comparison, compareResults } from './compare-results.ts';
 import type { Difference } from './difference.ts';
 import { jsonText } from './json-text.ts';
-import { packEntries, RESULTS_NAME, STUDY_FOLDER } from './pack-entries.ts';
+import { packEntries, RESULTS_NAME, SHEET_NAME, STUDY_FOLDER } from './pack-entries.ts';
+import { type PageScripts, pageProgram } from './page-program.ts';
 import { type Pack, readPack } from './read-pack.ts';
 import type { Renderer } from './renderer.ts';
+import { sameRendering } from './same-rendering.ts';
 import { sheetRenderer } from './sheet-renderer.ts';
 
 export type Solve = (loaded: LoadedStudy) => Outcome | Promise<Outcome>;
@@ -24,6 +27,8 @@ export interface VerifyOptions {
   /** study from its files; throws InputFaults */
   readonly load?: (source: StudySource) => LoadedStudy;
   readonly renderer?: Renderer;
+  /** what the sheet of a pack of this version of the program carries */
+  readonly scripts?: PageScripts | undefined;
 }
 
 export interface Verification {
@@ -37,13 +42,13 @@ export interface Verification {
     readonly numbers: number;
     readonly exactNumbers: number;
     readonly closeNumbers: number;
-    /** sheet, figures and tables compared byte by byte */
+    /** sheet, figures and tables compared */
     readonly renderings: number;
   };
 }
 
 /**
- * Checks a review pack: digests, results number by number, sheet, figures and tables byte by byte.
+ * Checks a review pack: digests, results number by number, sheet and figures byte by byte, tables by their numbers.
  * @param bytes the zip
  * @param solve the chain from study to outcome
  * @param options the program's own reader and sheet where left out
@@ -54,10 +59,10 @@ export async function verifyPack(
   solve: Solve,
   options: VerifyOptions = {},
 ): Promise<Verification> {
-  const { file, load = loadStudy, renderer = sheetRenderer } = options;
+  const { file, load = loadStudy, renderer = sheetRenderer, scripts } = options;
   const pack = await readPack(bytes, file);
   const digests = await checkDigests(pack);
-  const recomputed = await recompute(pack, { load, solve, renderer });
+  const recomputed = await recompute(pack, { load, solve, renderer, scripts });
   return {
     differences: withoutRepeats([...digests, ...recomputed.differences]),
     checked: {
@@ -91,9 +96,14 @@ async function recompute(pack: Pack, tools: Tools): Promise<Recomputed> {
     ...solved.outcome,
     results: { ...solved.outcome.results, program_version: pack.manifest.program_version },
   };
-  const due = packEntries(solved.loaded, outcome, tools.renderer);
-  const results = compareResults(json(pack.entries.get(RESULTS_NAME)), JSON.parse(jsonText(outcome.results)));
-  const drawn = compareEntries(pack, due);
+  const { renderer, scripts } = tools;
+  const stored = json(pack.entries.get(RESULTS_NAME));
+  const sameProgram = programVersion === pack.manifest.program_version;
+  // the sheet's record is due to be the pack's own results, which are compared as numbers
+  const program = sameProgram ? scripts && (await pageProgram(scripts, solved.loaded, stored)) : undefined;
+  const due = packEntries(solved.loaded, outcome, { renderer, program });
+  const results = compareResults(stored, JSON.parse(jsonText(outcome.results)));
+  const drawn = compareEntries(sameProgram ? pack.entries : withPlainSheet(pack.entries), due);
   return {
     ...results,
     programVersion,
@@ -123,26 +133,30 @@ async function solveAgain(pack: Pack, tools: Tools): Promise<Solved> {
 
 /** Every entry but the results, which are compared as numbers; the study's own files are due as they are. */
 function compareEntries(
-  pack: Pack,
+  found: ReadonlyMap<string, Uint8Array>,
   due: ReadonlyMap<string, Uint8Array>,
 ): { readonly differences: readonly Difference[]; readonly compared: number } {
   const differences: Difference[] = [];
   let compared = 0;
-  for (const path of [...new Set([...due.keys(), ...pack.entries.keys()])].toSorted()) {
+  for (const path of [...new Set([...due.keys(), ...found.keys()])].toSorted()) {
     const expected = due.get(path);
-    const found = pack.entries.get(path);
-    if (found === undefined) differences.push({ kind: 'missing', path });
+    const content = found.get(path);
+    if (content === undefined) differences.push({ kind: 'missing', path });
     else if (expected === undefined) differences.push({ kind: 'extra', path });
     else if (path !== RESULTS_NAME && !path.startsWith(STUDY_FOLDER)) {
       compared++;
-      if (!sameBytes(expected, found)) differences.push({ kind: 'rendering', path });
+      if (!sameRendering(path, expected, content)) differences.push({ kind: 'rendering', path });
     }
   }
   return { differences, compared };
 }
 
-function sameBytes(a: Uint8Array, b: Uint8Array): boolean {
-  return a.length === b.length && a.every((byte, index) => byte === b[index]);
+/** Entries whose sheet has lost the program it carries, which another version of the program does not have. */
+function withPlainSheet(entries: ReadonlyMap<string, Uint8Array>): ReadonlyMap<string, Uint8Array> {
+  const sheet = entries.get(SHEET_NAME);
+  if (sheet === undefined) return entries;
+  const plain = withoutProgram(new TextDecoder().decode(sheet));
+  return new Map([...entries, [SHEET_NAME, new TextEncoder().encode(plain)]]);
 }
 
 function json(content: Uint8Array | undefined): unknown {

@@ -16,7 +16,10 @@ let honest: ReadonlyMap<string, Uint8Array>;
 
 beforeAll(async () => {
   const loaded = exampleLoad(sourceFromMap(exampleFiles));
-  honest = await readZip(await writePack(loaded, exampleSolve(loaded), '1.2.3', exampleRenderer), 'a.zip');
+  honest = await readZip(
+    await writePack(loaded, exampleSolve(loaded), '1.2.3', { renderer: exampleRenderer }),
+    'a.zip',
+  );
 });
 
 /** Changes entries (undefined removes one); `forged` makes the manifest agree with the changes. */

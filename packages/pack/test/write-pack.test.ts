@@ -11,7 +11,7 @@ import { rawZip } from './raw-zip.ts';
 
 const loaded = exampleLoad(sourceFromMap(exampleFiles));
 const outcome = exampleSolve(loaded);
-const pack = (): Promise<Uint8Array> => writePack(loaded, outcome, '1.2.3', exampleRenderer);
+const pack = (): Promise<Uint8Array> => writePack(loaded, outcome, '1.2.3', { renderer: exampleRenderer });
 
 test('entries, inputs exactly as read', async () => {
   const entries = await readZip(await pack(), 'a.zip');
@@ -50,11 +50,11 @@ test('a number that JSON cannot hold, or a name that leaves the pack, is a fault
       mesh: [{ segment_count: 1, resistance_ohm: Infinity, worst_touch_ratio: 0, worst_step_ratio: 0 }],
     },
   };
-  await expect(writePack(loaded, infinite, '1', exampleRenderer)).rejects.toThrow(
+  await expect(writePack(loaded, infinite, '1', { renderer: exampleRenderer })).rejects.toThrow(
     'resistance_ohm is Infinity',
   );
   const stray = { ...exampleRenderer, figures: () => [{ name: '../x.svg', svg: '' }] };
-  await expect(writePack(loaded, outcome, '1', stray)).rejects.toThrow('figures/../x.svg');
+  await expect(writePack(loaded, outcome, '1', { renderer: stray })).rejects.toThrow('figures/../x.svg');
   const twice = {
     ...exampleRenderer,
     tables: () => [
@@ -62,7 +62,7 @@ test('a number that JSON cannot hold, or a name that leaves the pack, is a fault
       { name: 'a', csv: '' },
     ],
   };
-  await expect(writePack(loaded, outcome, '1', twice)).rejects.toThrow('stands twice');
+  await expect(writePack(loaded, outcome, '1', { renderer: twice })).rejects.toThrow('stands twice');
 });
 
 test.each([

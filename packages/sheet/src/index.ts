@@ -15,7 +15,7 @@ export { place } from './format/length.ts';
 export { measured, percent, quantity } from './format/number.ts';
 export { quantityText } from './format/quantity-text.ts';
 export { sheetCss } from './page/css.ts';
-export { sheetHtml } from './page/html.tsx';
+export { type PageProgram, sheetHtml, withoutProgram } from './page/html.tsx';
 export { Questions } from './page/questions.tsx';
 export { Sheet } from './page/sheet.tsx';
 export type { TableFile } from './table/csv.ts';

@@ -1,19 +1,22 @@
 // A worker made from the text of the engine, so that one text serves a hosted page and a file alike.
+import type { PageScripts } from '@ohmstead/pack';
 import type { EngineWorker, Hearing } from './engine-worker.ts';
 import type { EngineAnswer, EngineRequest } from './messages.ts';
 
+type EngineScripts = Pick<PageScripts, 'engine'> & Partial<PageScripts>;
+
 /**
  * Starts an engine; requests wait until its text is there.
- * @param text of the engine's script
+ * @param scripts the engine's, and the starter where packs are to carry both
  * @param hear is told its answers
  */
-export function blobWorker(text: Promise<string>, hear: Hearing): EngineWorker {
+export function blobWorker(scripts: Promise<EngineScripts>, hear: Hearing): EngineWorker {
   let worker: Worker | undefined;
   let ended = false;
   const waiting: EngineRequest[] = [];
-  const begin = (script: string): void => {
+  const begin = ({ engine, starter }: EngineScripts): void => {
     if (ended) return;
-    const url = URL.createObjectURL(new Blob([script], { type: 'text/javascript' }));
+    const url = URL.createObjectURL(new Blob([engine], { type: 'text/javascript' }));
     const begun = new Worker(url, { name: 'engine' });
     worker = begun;
     begun.onmessage = (event: MessageEvent<EngineAnswer>) => {
@@ -26,9 +29,10 @@ export function blobWorker(text: Promise<string>, hear: Hearing): EngineWorker {
       event.preventDefault();
       hear.broken(event.message);
     };
+    if (starter !== undefined) begun.postMessage({ kind: 'carry', scripts: { engine, starter } });
     for (const request of waiting) begun.postMessage(request);
   };
-  text.then(begin).catch((error: unknown) => hear.broken(String(error)));
+  scripts.then(begin).catch((error: unknown) => hear.broken(String(error)));
   return {
     post(request) {
       if (worker === undefined) waiting.push(request);

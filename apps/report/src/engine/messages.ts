@@ -1,7 +1,10 @@
 // What the page and its engine say to each other.
+import type { Comparison, PageScripts, TextComparison } from '@ohmstead/pack';
 import type { Fault, Outcome } from '@ohmstead/study';
 
 export type EngineRequest =
+  /** the scripts that the sheets of packs are to carry; none do before it */
+  | { readonly kind: 'carry'; readonly scripts: PageScripts }
   | {
       readonly kind: 'solve';
       /** tells answers to this request from answers to one that it replaced */
@@ -13,9 +16,24 @@ export type EngineRequest =
   /** about the outcome of a run that is solved */
   | { readonly kind: 'ask'; readonly run: number; readonly ask: number; readonly question: Question };
 
-export type Question = { readonly kind: 'pack' };
+export type Question =
+  /** the review pack */
+  | { readonly kind: 'pack' }
+  /** whether a record says what was computed: its results, and the texts of its sheet in order */
+  | { readonly kind: 'check'; readonly results: unknown; readonly texts: readonly string[] }
+  /** the main results beside those of a record */
+  | { readonly kind: 'beside'; readonly results: unknown };
 
-export type Reply = { readonly kind: 'pack'; readonly pack: Uint8Array<ArrayBuffer> };
+export type Reply =
+  | { readonly kind: 'pack'; readonly pack: Uint8Array<ArrayBuffer> }
+  | { readonly kind: 'check'; readonly results: Comparison; readonly printed: TextComparison }
+  | { readonly kind: 'beside'; readonly rows: readonly BesideRow[] };
+
+export interface BesideRow {
+  readonly name: string;
+  readonly record: string;
+  readonly computed: string;
+}
 
 /** What is heard of a run; the last four end it. */
 export type RunAnswer =

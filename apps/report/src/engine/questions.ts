@@ -1,18 +1,47 @@
 // Questions about a solved study that are answered only when asked, since each costs time.
-import { writePack } from '@ohmstead/pack';
-import { programVersion } from '@ohmstead/study';
+import {
+  compareResults,
+  compareTexts,
+  jsonText,
+  type PageScripts,
+  sheetTexts,
+  writePack,
+} from '@ohmstead/pack';
+import { sheetHtml } from '@ohmstead/sheet';
+import { type Outcome, programVersion } from '@ohmstead/study';
+import { besideRows } from './beside-rows.ts';
 import type { Question, Reply } from './messages.ts';
 import type { SolvedRun } from './solved-run.ts';
 
-/** @returns the reply, and what of it may change hands instead of being copied */
+/**
+ * @param scripts that the sheet of a pack carries
+ * @returns the reply, and what of it may change hands instead of being copied
+ */
 export async function replyTo(
   question: Question,
   { loaded, outcome }: SolvedRun,
+  scripts: PageScripts | undefined,
 ): Promise<{ readonly reply: Reply; readonly transfer: Transferable[] }> {
   switch (question.kind) {
     case 'pack': {
-      const pack = new Uint8Array(await writePack(loaded, outcome, programVersion));
+      const pack = new Uint8Array(await writePack(loaded, outcome, programVersion, { scripts }));
       return { reply: { kind: 'pack', pack }, transfer: [pack.buffer] };
     }
+    case 'check':
+      return { reply: check(question.results, question.texts, outcome), transfer: [] };
+    case 'beside':
+      return {
+        reply: { kind: 'beside', rows: besideRows(question.results, outcome.results) },
+        transfer: [],
+      };
   }
+}
+
+function check(results: unknown, texts: readonly string[], outcome: Outcome): Reply {
+  return {
+    kind: 'check',
+    // through JSON as the record went
+    results: compareResults(results, JSON.parse(jsonText(outcome.results))),
+    printed: compareTexts(texts, sheetTexts(sheetHtml(outcome))),
+  };
 }

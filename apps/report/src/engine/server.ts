@@ -1,4 +1,5 @@
 // The engine's side: one run at a time, which hears between its stages that it is no longer wanted.
+import type { PageScripts } from '@ohmstead/pack';
 import { InputFaults, loadStudy, solveStudy } from '@ohmstead/study';
 import type { EngineAnswer, EngineRequest } from './messages.ts';
 import { replyTo } from './questions.ts';
@@ -20,6 +21,7 @@ class Unwanted extends Error {}
 export function engineServer({ say, pause }: ServerTools): (request: EngineRequest) => void {
   let wanted: number | undefined;
   let solved: SolvedRun | undefined;
+  let scripts: PageScripts | undefined;
   let before: Promise<void> = Promise.resolve();
 
   const solve = async (run: number, files: ReadonlyMap<string, Uint8Array>): Promise<void> => {
@@ -44,7 +46,7 @@ export function engineServer({ say, pause }: ServerTools): (request: EngineReque
     const { run, ask, question } = request;
     try {
       if (solved?.run !== run) throw new Error('the study has been computed anew since');
-      const { reply, transfer } = await replyTo(question, solved);
+      const { reply, transfer } = await replyTo(question, solved, scripts);
       say({ kind: 'told', ask, reply }, transfer);
     } catch (error) {
       say({ kind: 'untold', ask, message: messageOf(error) });
@@ -53,6 +55,9 @@ export function engineServer({ say, pause }: ServerTools): (request: EngineReque
 
   return (request) => {
     switch (request.kind) {
+      case 'carry':
+        scripts = request.scripts;
+        return;
       case 'solve': {
         const { run, files } = request;
         wanted = run;

@@ -21,8 +21,9 @@ export async function saveStudy(draft: Draft): Promise<void> {
 /** The review pack of the present outcome. */
 export async function takePack(engine: Engine, bench: Bench): Promise<void> {
   if (bench.solved === undefined) return;
-  const { pack } = await engine.ask(bench.solved.run, { kind: 'pack' });
-  download(`${fileStem(titleOf(draftOf(bench)))}-review.zip`, pack, 'application/zip');
+  const reply = await engine.ask(bench.solved.run, { kind: 'pack' });
+  if (reply.kind !== 'pack') return;
+  download(`${fileStem(titleOf(draftOf(bench)))}-review.zip`, reply.pack, 'application/zip');
 }
 
 /** A figure or a table by the name that it has in a review pack. */

@@ -3,6 +3,7 @@ import type { CaseMap, Polygon } from '@ohmstead/study';
 import type { Lattice } from './contours.ts';
 import { insideEvenOdd } from './polygon.ts';
 import { roundStep } from './ticks.ts';
+import { TIE_SHARE } from './ties.ts';
 
 export interface CoarseGrid {
   /** metres, rising */
@@ -64,7 +65,7 @@ export function worstIn(map: CaseMap, field: Float64Array, area: Polygon): AreaW
   for (let j = 0; j < map.ny; j += 1) {
     for (let i = 0; i < map.nx; i += 1) {
       const value = Math.abs(field[j * map.nx + i]);
-      if (worst !== undefined && !(value > worst.value)) continue;
+      if (worst !== undefined && !(value > worst.value * (1 + TIE_SHARE))) continue;
       const x = map.x0 + i * map.dx;
       const y = map.y0 + j * map.dy;
       if (insideEvenOdd([area], x, y)) worst = { value, x, y };

@@ -1,5 +1,6 @@
 // Thins a line to the points that matter (Ramer–Douglas–Peucker), so that figures stay small files.
 import type { Point } from '@ohmstead/study';
+import { TIE_SHARE } from './ties.ts';
 
 function squaredDistance(p: Point, a: Point, b: Point): number {
   const dx = b[0] - a[0];
@@ -27,7 +28,7 @@ export function simplifyLine(points: readonly Point[], tolerance: number): reado
     let farthest = limit;
     for (let i = first + 1; i < last; i += 1) {
       const d = squaredDistance(points[i], points[first], points[last]);
-      if (d > farthest) {
+      if (d > farthest * (1 + TIE_SHARE)) {
         farthest = d;
         far = i;
       }
@@ -47,7 +48,7 @@ export function simplifyRing(ring: readonly Point[], tolerance: number): readonl
   let farthest = -1;
   for (let i = 1; i < ring.length; i += 1) {
     const d = Math.hypot(ring[i][0] - ring[0][0], ring[i][1] - ring[0][1]);
-    if (d > farthest) {
+    if (d > farthest * (1 + TIE_SHARE)) {
       farthest = d;
       far = i;
     }

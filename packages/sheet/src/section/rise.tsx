@@ -9,6 +9,7 @@ import { fixedLength, lengthUnit } from '../format/length.ts';
 import { measured, powerOfTen, quantity, significant } from '../format/number.ts';
 import { measuredTold } from '../format/told.ts';
 import { conductorCurrents } from '../geometry/leakage.ts';
+import { levelled } from '../geometry/ties.ts';
 import { MOST_CONDUCTOR_ROWS } from './electrode.tsx';
 import { EquivalentUniformSoil } from './equivalent-uniform.tsx';
 import { Floating } from './floating.tsx';
@@ -127,7 +128,7 @@ function LeakageTable({ outcome, units }: { outcome: Outcome; units: DisplayUnit
   const { conductors } = outcome.plan;
   const currents = conductorCurrents(outcome);
   const order = [...conductors.keys()].sort(
-    (a, b) => Math.abs(currents[b].leakage) - Math.abs(currents[a].leakage) || a - b,
+    (a, b) => levelled(Math.abs(currents[b].leakage)) - levelled(Math.abs(currents[a].leakage)) || a - b,
   );
   const shown = order.slice(0, MOST_CONDUCTOR_ROWS);
   /* floating metal sums to nothing but rounding */

@@ -58,7 +58,7 @@ const progress = (run: number): RunAnswer => ({ kind: 'progress', run, stage: 's
 const failed = (run: number): RunAnswer => ({ kind: 'failed', run, message: 'no pivot' });
 const kinds = (played: Played): string[] =>
   played.requests.map((request) =>
-    request.kind === 'ask' ? `ask ${request.ask}` : `${request.kind} ${request.run}`,
+    request.kind === 'ask' ? `ask ${request.ask}` : `${request.kind} ${'run' in request ? request.run : ''}`,
   );
 
 test('a run is posted with its files, and its answers are heard', () => {

@@ -5,6 +5,7 @@ import { messageTurn } from '../../../src/engine/message-turn.ts';
 import type { EngineAnswer, EngineRequest } from '../../../src/engine/messages.ts';
 import { engineServer } from '../../../src/engine/server.ts';
 
+const scripts = { starter: 'start()', engine: 'serve()' };
 const study = {
   format: 'ohmstead-study',
   version: 1,
@@ -65,12 +66,15 @@ test('progress, an early outcome, the outcome; then its pack when asked', async 
   const { said, until } = served();
   await until('solved', solve(1));
   expect(ofRun(said, 1)).toEqual(['progress', 'first', 'solved']);
-  await until('told', askPack(1, 5));
+  await until('told', { kind: 'carry', scripts }, askPack(1, 5));
   const told = said.at(-1);
   if (told?.kind !== 'told' || told.reply.kind !== 'pack') throw new Error('no pack');
   expect(told.ask).toBe(5);
   const { entries } = await readPack(told.reply.pack);
   expect(entries.get('study/rod.csv')).toEqual(filesOf().get('rod.csv'));
+  expect(new TextDecoder().decode(entries.get('index.html'))).toContain(
+    `<script>${scripts.starter}</script>`,
+  );
 });
 
 test('a new run ends the one before between two stages', async () => {
