@@ -12,8 +12,8 @@ import { startPart } from './bench-start.ts';
 import { systemsPart } from './bench-systems.ts';
 import { folderSource } from './folder-source.ts';
 
-/** Rounds of the largest case: three, each some seconds; one in the second soil, which only shows that nothing changes. */
-const LARGE_ROUNDS = 3;
+/** Rounds of the largest case: five, each some seconds; one in the second soil, which only shows that nothing changes. */
+const LARGE_ROUNDS = 5;
 
 export function smallestParts(around: Surroundings): (() => Promise<Part>)[] {
   return [() => systemsPart(smallestCase, around), () => factorsPart(smallestCase, around)];
