@@ -46,7 +46,9 @@ export function EditableText(props: EditableTextProps): VNode {
   const id = useId();
   const [typed, setTyped] = useState<string | undefined>(undefined);
   const [refusal, setRefusal] = useState<string | undefined>(undefined);
-  const text = typed ?? shown;
+  const [focused, setFocused] = useState(false);
+  const standing = focused ? exact : shown;
+  const text = typed ?? standing;
   const told = refusal === undefined ? complaints : [refusal];
   const commit = (): void => {
     if (typed === undefined) return;
@@ -78,17 +80,21 @@ export function EditableText(props: EditableTextProps): VNode {
         {...(told.length > 0 ? { 'aria-invalid': true, 'aria-describedby': id } : {})}
         placeholder={placeholder}
         onFocus={(event) => {
+          setFocused(true);
           if (typed !== undefined || exact === shown) return;
+          /* selected here, because the text that comes with the next drawing would take the selection away */
           event.currentTarget.value = exact;
           event.currentTarget.select();
-          setTyped(exact);
         }}
         onInput={(event) => {
           setTyped(event.currentTarget.value);
           setRefusal(undefined);
         }}
         onKeyDown={keyed}
-        onBlur={commit}
+        onBlur={() => {
+          setFocused(false);
+          commit();
+        }}
       />
       {told.length > 0 && <Complaint id={id} texts={told} alert={refusal !== undefined} />}
     </span>

@@ -11,6 +11,7 @@ export const titles = {
   potential: (name: string): string => `Surface potential, ${name}`,
   touch: (name: string): string => `Touch voltage, ${name}`,
   step: (name: string): string => `Step voltage, ${name}`,
+  surface: 'Voltages over the plan',
   change: (name: string): string => `Change of touch voltage, ${name}`,
   profile: (name: string): string => `Profile through the worst touch voltage, ${name}`,
 } as const;

@@ -16,7 +16,7 @@ h1 input.in{height:auto;letter-spacing:inherit}
 .input-faults{margin:0 0 12px;padding:0 0 0 14px;list-style:none;border-left:3px solid var(--beyond);font-size:12.5px;color:var(--beyond);overflow-wrap:anywhere;max-width:58em}
 .word{appearance:none;background:none;border:0;margin:0;padding:2px 0;font-size:12.5px;line-height:1.4;color:var(--deep);text-decoration:underline dotted 1px;text-underline-offset:3px;cursor:pointer;text-align:inherit;font-variant-numeric:lining-nums tabular-nums}
 .edits{display:block}
-.edits .word{margin-right:14px}
+.edits .word{margin-right:14px;padding:4px 0}
 .pasting{margin-bottom:14px}
 .scroll+.download,.verdicts+.download{display:block;margin:-8px 0 14px}
 .verdicts .word,.scroll .word{font-size:inherit}
@@ -35,5 +35,5 @@ h1 input.in{height:auto;letter-spacing:inherit}
 .fig .change-iso{stroke-opacity:.7}
 .fig .edge-box{stroke:var(--soft);stroke-width:.6}
 @media (prefers-reduced-motion:no-preference){.part>.body,.title-block{transition:color .2s}.part>.body figure>svg{transition:filter .2s}}
-@media print{.word,.edits,.state,.pasting>.fold{display:none}.place .word,.scroll .word{display:inline;color:inherit;text-decoration:none}input.in,select.in{height:auto}}
+@media print{.word:not(.to-place),.edits,.state,.pasting>.fold{display:none}.to-place{color:inherit;text-decoration:none;font:inherit}input.in,select.in{height:auto}}
 `.trim();

@@ -2,6 +2,7 @@
 import type { Outcome } from '@ohmstead/study';
 import type { VNode } from 'preact';
 import { useDesk } from '../desk/use-desk.ts';
+import { Download } from '../field/download.tsx';
 import { undecidedReason } from '../verdict/finding.ts';
 import { type VerdictRow, verdictRows } from '../verdict/rows.ts';
 import { soilBandRows } from '../verdict/soil-band.ts';
@@ -42,6 +43,7 @@ function Soils({ outcome }: { outcome: Outcome }): VNode | null {
         pinned={before === undefined ? undefined : soilBandRows(before.results)}
         id="soils"
       />
+      <Download file="ground-consequence.csv" />
     </>
   );
 }

@@ -10,7 +10,7 @@ export function PlaceLink({ x, y }: { x: number; y: number }): VNode {
   const text = place(x, y, useUnits());
   if (desk === undefined || !Number.isFinite(x) || !Number.isFinite(y)) return <>{text}</>;
   return (
-    <button type="button" class="word" onClick={() => desk.goTo(x, y)}>
+    <button type="button" class="word to-place" onClick={() => desk.goTo(x, y)}>
       <span class="unseen">show on the plan </span>
       {text}
     </button>

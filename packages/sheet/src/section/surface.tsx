@@ -1,5 +1,5 @@
 // Surface: potential, touch and step voltage over the plan, and the profile through the worst place.
-import type { CaseResult, DisplayUnits, Outcome } from '@ohmstead/study';
+import type { Outcome } from '@ohmstead/study';
 import type { VNode } from 'preact';
 import { useDesk } from '../desk/use-desk.ts';
 import { useUnits } from '../desk/use-units.ts';
@@ -7,14 +7,15 @@ import { MapFigure } from '../figure/map.tsx';
 import { ProfileFigure } from '../figure/profile.tsx';
 import { titles } from '../figure/titles.ts';
 import { fixedLength, lengthUnit, place } from '../format/length.ts';
-import { fixed, givenQuantity, measured, percent, quantity } from '../format/number.ts';
-import { quantityText } from '../format/quantity-text.ts';
+import { fixed, percent, quantity } from '../format/number.ts';
 import { uniqueSlugs } from '../format/slug.ts';
 import { tally } from '../format/words.ts';
 import type { MapKind } from '../geometry/map-drawing.ts';
 import { profileDrawing } from '../geometry/profile-drawing.ts';
 import { governingCase } from '../verdict/rows.ts';
 import { DifferenceBlock } from './difference-block.tsx';
+import { Kept } from './kept.tsx';
+import { limitText, mapCaption, otherLimit } from './map-caption.ts';
 import { MapTable } from './map-table.tsx';
 import { Part } from './part.tsx';
 import { CaseName, DataTable, FigureBlock, Say } from './parts.tsx';
@@ -22,77 +23,38 @@ import { CaseName, DataTable, FigureBlock, Say } from './parts.tsx';
 /** Rows of a profile's table on the sheet, about; the table file has every point. */
 const PROFILE_ROWS = 24;
 
-function limitText(outcome: Outcome, of: CaseResult, kind: 'touch' | 'step', units: DisplayUnits): string {
-  const { limits } = outcome.results;
-  const covering =
-    limits.surfacing_thickness_m === null
-      ? 'no covering'
-      : of[kind].on_covering
-        ? `covering ${quantityText('thickness', limits.surfacing_thickness_m, units)}`
-        : 'on bare soil, where the worst lies';
-  return `${quantity(of[kind].limit_V, 'V')} (${limits.basis}, ${limits.body_mass_kg}\u202fkg, ${givenQuantity(of.duration_s, 's')}, ${covering})`;
-}
-
-/** The limit that holds where the map's own does not; empty without a covering. */
-function otherLimit(of: CaseResult, kind: 'touch' | 'step'): string {
-  const [bare, covered] =
-    kind === 'touch'
-      ? [of.bare_touch_limit_V, of.covering_touch_limit_V]
-      : [of.bare_step_limit_V, of.covering_step_limit_V];
-  if (covered === null) return '';
-  return of[kind].on_covering
-    ? ` The limit is that of the covering; where there is none it is ${quantity(bare, 'V')}.`
-    : ` On the covering the limit is ${quantity(covered, 'V')}.`;
-}
-
-function captionOf(outcome: Outcome, caseIndex: number, kind: MapKind, units: DisplayUnits): string {
-  const of = outcome.results.cases[caseIndex];
-  switch (kind) {
-    case 'potential':
-      return `Fill is the share of the rise of ${measured(of.gpr_V, of.gpr_uncertainty_V, 'V')}; lines carry volts.`;
-    case 'touch':
-      return `Voltage to the metal that can be reached from the place. Fill is the share of the limit of ${limitText(outcome, of, kind, units)}; the red-brown line is the limit, and what lies beyond it is hatched. Paler: outside the assessed area.${otherLimit(of, kind)}`;
-    case 'step':
-      return `Largest voltage over 1\u202fm about the place. Fill is the share of the limit of ${limitText(outcome, of, kind, units)}. The bar across the ring joins the two feet. Paler: outside the assessed area.${otherLimit(of, kind)}`;
-  }
-}
-
 interface MapBlockProps {
   readonly outcome: Outcome;
   readonly caseIndex: number;
   readonly kind: MapKind;
   readonly slug: string;
   readonly small?: boolean;
-  /** stands in for the map */
-  readonly instrument?: VNode;
 }
 
-function MapBlock({ outcome, caseIndex, kind, slug, small = false, instrument }: MapBlockProps): VNode {
+function MapBlock({ outcome, caseIndex, kind, slug, small = false }: MapBlockProps): VNode {
   const units = useUnits();
   const of = outcome.results.cases[caseIndex];
   const name = `${kind}-${slug}`;
   const title = titles[kind](of.name);
   const caption = small
     ? `Share of the limit of ${quantity(of.touch.limit_V, 'V')}; the worst is ${percent(of.touch.worst_V / of.touch.limit_V)} of it.`
-    : captionOf(outcome, caseIndex, kind, units);
+    : mapCaption(outcome, caseIndex, kind, units);
   return (
     <FigureBlock
       name={name}
       title={title}
       caption={caption}
       table={<MapTable outcome={outcome} caseIndex={caseIndex} kind={kind} />}
-      {...(instrument === undefined ? { by: [outcome, caseIndex, units] } : {})}
+      by={[outcome, caseIndex, units]}
     >
-      {instrument ?? (
-        <MapFigure
-          outcome={outcome}
-          caseIndex={caseIndex}
-          kind={kind}
-          name={name}
-          title={title}
-          small={small}
-        />
-      )}
+      <MapFigure
+        outcome={outcome}
+        caseIndex={caseIndex}
+        kind={kind}
+        name={name}
+        title={title}
+        small={small}
+      />
     </FigureBlock>
   );
 }
@@ -158,6 +120,33 @@ function ProfileBlock({
   );
 }
 
+interface InstrumentBlockProps extends Omit<MapBlockProps, 'kind' | 'small'> {
+  readonly instrument: VNode;
+}
+
+/** The instrument in the place of the maps, with what they tell of the governing case as tables. */
+function InstrumentBlock({ outcome, caseIndex, slug, instrument }: InstrumentBlockProps): VNode {
+  const units = useUnits();
+  const of = outcome.results.cases[caseIndex];
+  const kinds: readonly MapKind[] = ['touch', 'step', 'potential'];
+  return (
+    <FigureBlock
+      name={`touch-${slug}`}
+      title={titles.surface}
+      caption={`Limits of ${of.name}: touch ${limitText(outcome, of, 'touch', units)}; step ${limitText(outcome, of, 'step', units)}.${otherLimit(of, 'touch')}`}
+      table={
+        <Kept by={[outcome, caseIndex]}>
+          {kinds.map((kind) => (
+            <MapTable key={kind} outcome={outcome} caseIndex={caseIndex} kind={kind} />
+          ))}
+        </Kept>
+      }
+    >
+      {instrument}
+    </FigureBlock>
+  );
+}
+
 /** Touch, step and potential of the governing case with its profile, as figures or as one instrument. */
 function Governing({
   outcome,
@@ -183,7 +172,7 @@ function Governing({
   }
   return (
     <>
-      <MapBlock {...shared} kind="touch" instrument={instrument} />
+      <InstrumentBlock {...shared} instrument={instrument} />
       <DifferenceBlock {...shared} />
       <ProfileBlock {...shared} />
     </>

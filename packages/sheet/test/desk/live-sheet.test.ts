@@ -119,7 +119,7 @@ describe('sections on a desk', () => {
     const { x_m, y_m } = outcome.results.cases[0].touch;
     const people = section(live(deskOf(outcome.study)), 'people');
     expect(people).toMatch(
-      /<button type="button" class="word"><span class="unseen">show on the plan <\/span>\(/,
+      /<button type="button" class="word to-place"><span class="unseen">show on the plan <\/span>\(/,
     );
     expect(textOf(people)).toContain(`(${x_m.toFixed(1)}, ${y_m.toFixed(1)}) m`);
     expect(sheetHtml(outcome)).not.toContain('<button');
