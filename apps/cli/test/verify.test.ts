@@ -44,7 +44,7 @@ test('a changed entry', async () => {
     ['index.html', new Uint8Array()],
     ['added\u2028', new Uint8Array()],
   ]);
-  folder.write('b.zip', await writeZip(changed));
+  folder.write('b.zip', writeZip(changed));
   const { status, out, err } = await run(['verify', folder.at('b.zip')]);
   expect([status, err]).toEqual([3, '']);
   expect(out).toContain('difference: index.html: changed after the pack was written');

@@ -15,7 +15,7 @@ describe('round trip', () => {
     const name = fc.stringMatching(/^[a-zäΩ][a-z0-9 ._-]{0,8}(\/[a-z][a-z0-9]{0,5})?$/);
     await fc.assert(
       fc.asyncProperty(fc.dictionary(name, fc.uint8Array({ maxLength: 300 })), async (files) => {
-        const written = await writeZip(new Map(Object.entries(files)));
+        const written = writeZip(new Map(Object.entries(files)));
         const read = await readZip(written, 'a.zip');
         expect(Object.fromEntries(read)).toEqual({ ...files });
       }),
@@ -24,13 +24,13 @@ describe('round trip', () => {
   });
 
   test('the order in which files are given does not change a byte', async () => {
-    const one = await writeZip(
+    const one = writeZip(
       new Map([
         ['a', bytes('1')],
         ['b/c', bytes('2')],
       ]),
     );
-    const other = await writeZip(
+    const other = writeZip(
       new Map([
         ['b/c', bytes('2')],
         ['a', bytes('1')],
@@ -40,7 +40,7 @@ describe('round trip', () => {
   });
 
   test('the clock leaves no trace', async () => {
-    const zip = await writeZip(new Map([['a', bytes('1')]]));
+    const zip = writeZip(new Map([['a', bytes('1')]]));
     const stamp = new DataView(zip.buffer).getUint32(10, true);
     // MS-DOS time and date of the local header (APPNOTE.TXT 6.3.10, 4.4.6): midnight, first of January 1980
     expect(stamp).toBe(((0 << 9) | (1 << 5) | 1) * 0x10000);

@@ -14,7 +14,7 @@ function titleOf(draft: Draft): string {
 
 /** The study's files as a zip, exactly as they stand. */
 export async function saveStudy(draft: Draft): Promise<void> {
-  const zip = await writeZip(draft.files);
+  const zip = writeZip(draft.files);
   download(`${fileStem(titleOf(draft))}.zip`, new Uint8Array(zip), 'application/zip');
 }
 
