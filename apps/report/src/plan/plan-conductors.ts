@@ -36,3 +36,11 @@ export function planItems(draft: Draft): readonly PlanItem[] {
 export function itemName({ conductor: { id }, rod, row }: PlanItem): string {
   return `${rod ? 'rod' : 'conductor'} ${id ?? `in row ${row.line} of ${row.file}`}`;
 }
+
+/** Rows that still hold a conductor, after an edit or its undoing. */
+export function standing(draft: Draft, rows: readonly RowOrigin[]): readonly RowOrigin[] {
+  return rows.filter(({ file, line }) => {
+    const bytes = draft.files.get(file);
+    return bytes !== undefined && conductorFile(bytes)?.recordOnLine.has(line) === true;
+  });
+}

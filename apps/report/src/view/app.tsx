@@ -1,6 +1,6 @@
 // The live sheet: a study is opened, edited where it stands, computed at every edit, and taken away as a review pack.
 import { DeskContext, Questions, type SectionId, Sheet } from '@ohmstead/sheet';
-import { faultLine, type RowOrigin } from '@ohmstead/study';
+import { faultLine, type Point, type RowOrigin } from '@ohmstead/study';
 import type { VNode } from 'preact';
 import { useEffect, useMemo, useState } from 'preact/hooks';
 import type { Draft } from '../desk/draft.ts';
@@ -12,6 +12,9 @@ import type { EnginePlatform } from '../engine/client.ts';
 import { demoFiles } from '../files/demo.ts';
 import { openFiles } from '../files/open-files.ts';
 import { useDroppedFiles } from '../files/use-dropped-files.ts';
+import { Instrument } from '../plan/instrument.tsx';
+import { standing } from '../plan/plan-conductors.ts';
+import '../plan/plan.css';
 import { type Bench, draftOf, sectionState } from './bench.ts';
 import { ConductorTables } from './conductor-table.tsx';
 import { Contents } from './contents.tsx';
@@ -98,6 +101,8 @@ function Work({ control, bench, open, close, storage }: WorkProps): VNode {
   const [selected, select] = useState<readonly RowOrigin[]>([]);
   const draft = draftOf(bench);
   const units = unitsOf(draft);
+  const [goal, setGoal] = useState<{ readonly at: Point }>();
+  const present = useMemo(() => standing(draft, selected), [draft, selected]);
   const tell = (work: Promise<void>): void => {
     setWord(undefined);
     work.catch((error: unknown) => setWord(error instanceof Error ? error.message : String(error)));
@@ -106,8 +111,19 @@ function Work({ control, bench, open, close, storage }: WorkProps): VNode {
   const desk = useMemo(
     () =>
       deskOf(bench, act, {
-        instrument: undefined,
-        goTo: () => {},
+        instrument: (figure, shown) =>
+          figure === 'surface' ? (
+            <Instrument
+              outcome={shown}
+              draft={draft}
+              units={units}
+              selected={present}
+              select={select}
+              edit={({ draft: edited, label }) => act({ kind: 'edit', draft: edited, label })}
+              goal={goal}
+            />
+          ) : undefined,
+        goTo: (x, y) => setGoal({ at: [x, y] }),
         note: (section: SectionId) => (
           <NoteField
             section={section}
@@ -123,7 +139,7 @@ function Work({ control, bench, open, close, storage }: WorkProps): VNode {
         ),
         download: outcome && ((file) => takeFile(outcome, file)),
       }),
-    [bench, act, draft, outcome],
+    [bench, act, draft, outcome, present, goal, units],
   );
   return (
     <DeskContext.Provider value={desk}>
@@ -152,7 +168,7 @@ function Work({ control, bench, open, close, storage }: WorkProps): VNode {
             <Sheet outcome={outcome} />
           )}
           <div class="beside">
-            <ConductorTables draft={draft} units={units} act={act} selected={selected} select={select} />
+            <ConductorTables draft={draft} units={units} act={act} selected={present} select={select} />
             <Pins bench={bench} act={act} units={units} />
           </div>
         </main>

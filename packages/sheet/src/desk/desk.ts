@@ -67,7 +67,7 @@ export interface Desk {
   readonly before: Outcome | undefined;
   readonly units: DisplayUnits;
   /** stands in for a figure of the frozen sheet, e.g. the plan as an instrument; undefined: draw the figure */
-  readonly instrument: ((figure: 'surface' | 'electrode', outcome: Outcome) => VNode) | undefined;
+  readonly instrument: ((figure: 'surface' | 'electrode', outcome: Outcome) => VNode | undefined) | undefined;
   /** takes the reader to a place on the plan, m */
   readonly goTo: (x: number, y: number) => void;
   /** slot under a section's text: the engineer's note */

@@ -1,5 +1,5 @@
 // Draws a map of one case over the plan: bands of fill, lines in volts, what lies beyond the limit, the worst place.
-import type { DisplayUnits, Point } from '@ohmstead/study';
+import type { DisplayUnits } from '@ohmstead/study';
 import type { VNode } from 'preact';
 import { useUnits } from '../desk/use-units.ts';
 import { place } from '../format/length.ts';
@@ -7,17 +7,18 @@ import { measured, quantity } from '../format/number.ts';
 import { latticeExtent } from '../geometry/contours.ts';
 import { assessedFor, mapDrawing } from '../geometry/map-drawing.ts';
 import { occupancyOf } from '../geometry/occupancy.ts';
-import { type Plate, type PlateSize, plateOf } from '../geometry/plate.ts';
+import { type PlateSize, plateOf } from '../geometry/plate.ts';
 import { voltageFinding } from '../verdict/finding.ts';
 import { Path } from './drawn.tsx';
 import { Figure, PlanAxes, ScaleBar } from './frame.tsx';
+import { frameRing } from './frame-ring.ts';
 import { Hatch } from './hatch.tsx';
-import { Beyond, Fill, isolinePath } from './map-fill.tsx';
+import { MapGround } from './map-ground.tsx';
 import { MapKey } from './map-key.tsx';
 import { lineLabels, type MapSubject, type Taken, worstNote } from './map-notes.ts';
 import { Metal, metalLines } from './metal.tsx';
 import { Note, noteBoxes } from './note.tsx';
-import { polygonPath, px, ringPath } from './path.ts';
+import { px, ringPath } from './path.ts';
 
 export interface MapFigureProps extends MapSubject {
   readonly name: string;
@@ -37,17 +38,6 @@ const SMALL: PlateSize = {
   least: 130,
   margin: { left: 2, right: 2, top: 4, bottom: 26 },
 };
-
-/** Border of the ground of a plate, drawing units. */
-export function frameRing(plate: Plate): readonly Point[] {
-  const { left, top, right, bottom } = plate.frame;
-  return [
-    [left, top],
-    [right, top],
-    [right, bottom],
-    [left, bottom],
-  ];
-}
 
 /** Sentence for readers who do not see the picture. */
 function mapDescription(props: MapFigureProps, units: DisplayUnits): string {
@@ -95,23 +85,7 @@ export function MapFigure(props: MapFigureProps): VNode {
         </clipPath>
       </defs>
       <g clip-path={`url(#${name}-frame)`}>
-        <Fill plate={plate} drawing={drawing} />
-        <Path
-          class="iso"
-          d={isolinePath(
-            plate,
-            drawing.lines.flatMap((band) => band.lines),
-          )}
-        />
-        {area.length > 0 && (
-          <Path
-            class="veil"
-            fill-rule="evenodd"
-            d={ringPath([frameRing(plate)]) + polygonPath(plate, area)}
-          />
-        )}
-        <Beyond name={name} plate={plate} drawing={drawing} area={area} />
-        {area.length > 0 && <Path class="area" d={polygonPath(plate, area)} />}
+        <MapGround name={name} plate={plate} drawing={drawing} area={area} />
       </g>
       <Metal plate={plate} conductors={outcome.plan.conductors} small={small} />
       <g>

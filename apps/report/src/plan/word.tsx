@@ -1,0 +1,23 @@
+// A tool or a deed of the plan, set as a word.
+import type { VNode } from 'preact';
+
+export interface WordProps {
+  readonly children: string;
+  readonly press: () => void;
+  readonly held?: boolean;
+  readonly off?: boolean;
+}
+
+export function Word({ children, press, held, off = false }: WordProps): VNode {
+  return (
+    <button
+      type="button"
+      class={held === true ? 'word held' : 'word'}
+      disabled={off}
+      onClick={press}
+      {...(held === undefined ? {} : { 'aria-pressed': held })}
+    >
+      {children}
+    </button>
+  );
+}
