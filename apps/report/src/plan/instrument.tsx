@@ -58,7 +58,7 @@ export function Instrument(props: InstrumentProps): VNode {
   const [chosenCase, setChosenCase] = useState<number>();
   const caseIndex = Math.min(chosenCase ?? governingCase(outcome.results), outcome.cases.length - 1);
   const [tool, setTool] = useState(hold('select'));
-  const [making, setMaking] = useState<Making>(() => makingOf(items));
+  const [making, setMaking] = useState<Making>(() => makingOf(items, floating));
   const [gridStep, setGridStep] = useState(0.5);
   const [cursor, setCursor] = useState<Snapped>();
   const [profile, setProfile] = useState<readonly [Point, Point]>();
@@ -263,10 +263,11 @@ function shiftOf(from: Point, to: Point, step: number): Point {
   return [on(to[0] - from[0]), on(to[1] - from[1])];
 }
 
-/** What is drawn first is made as the last conductor and the last rod of the study are. */
-function makingOf(items: ReturnType<typeof planItems>): Making {
-  const last = items.findLast(({ rod }) => !rod)?.conductor;
-  const rod = items.findLast((item) => item.rod)?.conductor;
+/** What is drawn first is made as the last conductor and rod of the study that do not float. */
+function makingOf(items: ReturnType<typeof planItems>, floating: ReadonlySet<string>): Making {
+  const own = items.filter(({ conductor }) => !floating.has(conductor.electrode ?? 'main'));
+  const last = own.findLast(({ rod }) => !rod)?.conductor;
+  const rod = own.findLast((item) => item.rod)?.conductor;
   if (last === undefined) return FIRST_MAKING;
   return {
     ...FIRST_MAKING,
