@@ -7,6 +7,7 @@ export { adaptiveLattices, type Box, type Lattice, latticeValue } from './field/
 export { type LineProfile, lineProfile } from './field/line-profile.ts';
 export { type NearestNode, nearestNode, nodesReached } from './field/metal-nearby.ts';
 export { potentialAt } from './field/potential.ts';
+export { type ProgressiveMap, progressiveMaps } from './field/progressive-map.ts';
 export { areaRegion, partOf, type Region, regionMask } from './field/region.ts';
 export { latticeSummits } from './field/starts.ts';
 export { PACE_M, stepLattice, type WorstStep, worstStep } from './field/step.ts';

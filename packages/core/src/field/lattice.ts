@@ -175,28 +175,36 @@ function biquadratic(nine: Float64Array, u: number, v: number): number {
   );
 }
 
-/** Value between lattice points by bicubic convolution (Keys, IEEE Trans. ASSP 29, 1981); clamped at the border. */
+/** Value between lattice points by bicubic convolution (Keys 1981), with his condition at the border; outside, the border's. */
 export function latticeValue(lattice: Lattice, x: number, y: number): number {
   const { nx, ny, values } = lattice;
   const fx = Math.min(nx - 1, Math.max(0, (x - lattice.x0) / lattice.spacing));
   const fy = Math.min(ny - 1, Math.max(0, (y - lattice.y0) / lattice.spacing));
   const i = Math.min(nx - 2, Math.floor(fx));
   const j = Math.min(ny - 2, Math.floor(fy));
-  const u = fx - i;
-  const v = fy - j;
-  const wx = keysWeights(u);
-  const wy = keysWeights(v);
+  const wx = bordered(keysWeights(fx - i), i, nx);
+  const wy = bordered(keysWeights(fy - j), j, ny);
   let sum = 0;
   for (let b = 0; b < 4; b++) {
-    const row = Math.min(ny - 1, Math.max(0, j + b - 1)) * nx;
-    for (let a = 0; a < 4; a++)
-      sum += wy[b]! * wx[a]! * values[row + Math.min(nx - 1, Math.max(0, i + a - 1))]!;
+    if (wy[b] === 0) continue;
+    const row = (j + b - 1) * nx + i - 1;
+    for (let a = 0; a < 4; a++) if (wx[a] !== 0) sum += wy[b]! * wx[a]! * values[row + a]!;
   }
   return sum;
 }
 
+type FourWeights = readonly [number, number, number, number];
+
+/** The point beyond a border continues the parabola of the three before it: 3v₀ − 3v₁ + v₂ (Keys 1981). */
+function bordered([w0, w1, w2, w3]: FourWeights, first: number, count: number): FourWeights {
+  if (count < 3) return [0, w0 + w1, w2 + w3, 0];
+  if (first === 0) return [0, w1 + 3 * w0, w2 - 3 * w0, w3 + w0];
+  if (first === count - 2) return [w0 + w3, w1 - 3 * w3, w2 + 3 * w3, 0];
+  return [w0, w1, w2, w3];
+}
+
 /** Weights of the points −1, 0, 1 and 2 at a place between 0 and 1. */
-export function keysWeights(u: number): readonly [number, number, number, number] {
+export function keysWeights(u: number): FourWeights {
   return [keys(u + 1), keys(u), keys(1 - u), keys(2 - u)];
 }
 
