@@ -14,8 +14,8 @@ let perAll: f64 = 0;
 let perRest: f64 = 0;
 let ownWeight: f64 = 0;
 
-/** Bytes of one segment: centre, half vector, its square, two thresholds of distance², length, height² + radius², its rule. */
-const SEGMENT: usize = 80;
+/** Bytes of one segment: centre, half vector, two thresholds of distance², length, height² + radius², place of its rule. */
+const SEGMENT: usize = 72;
 
 /** Sums of the cases at one point: two lanes each, added at the end. */
 let sums: usize = 0;
@@ -62,27 +62,25 @@ export function level(
 }
 
 function run(count: i32, x: f64, y: f64): void {
-  const per = f64x2.splat(perAll);
-  const one = f64x2.splat(1);
   let seg = segments;
   let s = strength;
   for (let j: i32 = 0; j < count; j++) {
     const dx = x - load<f64>(seg);
     const dy = y - load<f64>(seg, 8);
     const distance = dx * dx + dy * dy;
-    const along = dx * load<f64>(seg, 16) + dy * load<f64>(seg, 24);
     let value: v128;
-    if (distance > load<f64>(seg, 40)) {
-      const across = 1.1547005383792515 * along;
-      const base = distance + load<f64>(seg, 32) * 0.3333333333333333;
-      value = f64x2.mul(f64x2.splat(0.5), radialPair(all, per, one, f64x2.replace_lane(f64x2.splat(base + across), 1, base - across)));
-    } else if (distance > load<f64>(seg, 48)) {
-      const across = 1.5491933384829668 * along;
-      const base = distance + load<f64>(seg, 32) * 0.6;
-      const outer = radialPair(all, per, one, f64x2.replace_lane(f64x2.splat(base + across), 1, base - across));
-      const middle = radialPair(all, per, one, f64x2.splat(distance));
-      value = f64x2.add(f64x2.mul(f64x2.splat(5.0 / 18.0), outer), f64x2.mul(f64x2.splat(4.0 / 18.0), middle));
-    } else value = near(seg, dx, dy);
+    if (distance > load<f64>(seg, 32)) {
+      const along = 0.5773502691896257 * (dx * load<f64>(seg, 16) + dy * load<f64>(seg, 24));
+      const ux = load<f64>(seg, 16);
+      const uy = load<f64>(seg, 24);
+      const base = distance + (ux * ux + uy * uy) * 0.3333333333333333;
+      const pair = f64x2.replace_lane(f64x2.splat(base + 2 * along), 1, base - 2 * along);
+      value = f64x2.mul(f64x2.splat(0.5), radialPair(all, f64x2.splat(perAll), f64x2.splat(1), pair));
+    } else if (distance > load<f64>(seg, 40)) value = points(rule, all, perAll, seg, dx, dy);
+    else {
+      value = f64x2.replace_lane(f64x2.splat(0), 0, near(seg, dx, dy));
+      if (rest != 0) value = f64x2.add(value, points(rule + <usize>load<f64>(seg, 64), rest, perRest, seg, dx, dy));
+    }
     for (let u: i32 = 0; u < cases; u++) {
       const sum = sums + (<usize>u << 4);
       v128.store(sum, f64x2.add(v128.load(sum), f64x2.mul(v128.load64_splat(s), value)));
@@ -92,31 +90,33 @@ function run(count: i32, x: f64, y: f64): void {
   }
 }
 
-/** Two lanes whose sum is the mean of all images along a near segment. */
-function near(seg: usize, dx: f64, dy: f64): v128 {
+/** Mean of the nearest images along a segment, by its closed form. */
+@inline
+function near(seg: usize, dx: f64, dy: f64): f64 {
   const ux = load<f64>(seg, 16);
   const uy = load<f64>(seg, 24);
-  const length = load<f64>(seg, 56);
-  const above = load<f64>(seg, 64);
+  const length = load<f64>(seg, 48);
+  const above = load<f64>(seg, 56);
   const ends =
     sqrt((dx - ux) * (dx - ux) + (dy - uy) * (dy - uy) + above) +
     sqrt((dx + ux) * (dx + ux) + (dy + uy) * (dy + uy) + above);
-  const own = (ownWeight * logarithm((ends + length) / (ends - length))) / length;
-  let sum = f64x2.replace_lane(f64x2.splat(0), 0, own);
-  if (rest == 0) return sum;
-  const per = f64x2.splat(perRest);
+  return (ownWeight * logarithm((ends + length) / (ends - length))) / length;
+}
+
+/** Two lanes whose sum is the mean of a table along a segment, by pairs of points on [−1, 1] and pairs of weights. */
+function points(at: usize, table: usize, perSquare: f64, seg: usize, dx: f64, dy: f64): v128 {
+  const ux = v128.load64_splat(seg, 16);
+  const uy = v128.load64_splat(seg, 24);
+  const per = f64x2.splat(perSquare);
   const one = f64x2.splat(1);
-  // pairs of points on [−1, 1] and pairs of weights, an odd one padded by weight nothing
-  let at = rule + <usize>load<f64>(seg, 72);
-  const pairs = <i32>load<f64>(at);
-  at += 8;
-  for (let k: i32 = 0; k < pairs; k++) {
+  const end = at + 8 + (<usize>load<f64>(at) << 5);
+  let sum = f64x2.splat(0);
+  for (at += 8; at < end; at += 32) {
     const t = v128.load(at);
-    const px = f64x2.sub(f64x2.splat(dx), f64x2.mul(t, f64x2.splat(ux)));
-    const py = f64x2.sub(f64x2.splat(dy), f64x2.mul(t, f64x2.splat(uy)));
-    const value = radialPair(rest, per, one, f64x2.add(f64x2.mul(px, px), f64x2.mul(py, py)));
+    const px = f64x2.sub(f64x2.splat(dx), f64x2.mul(t, ux));
+    const py = f64x2.sub(f64x2.splat(dy), f64x2.mul(t, uy));
+    const value = radialPair(table, per, one, f64x2.add(f64x2.mul(px, px), f64x2.mul(py, py)));
     sum = f64x2.add(sum, f64x2.mul(v128.load(at, 16), value));
-    at += 32;
   }
   return sum;
 }
@@ -131,7 +131,6 @@ export function upright(
   own: f64,
   z1: f64,
   z2: f64,
-  farRatio: f64,
   casesCount: i32,
   xs: usize,
   ys: usize,
@@ -140,7 +139,6 @@ export function upright(
 ): void {
   const per = f64x2.splat(perRestSquare);
   const one = f64x2.splat(1);
-  const centre = (z1 + z2) / 2;
   for (let p: i32 = 0; p < points; p++) {
     const x = load<f64>(xs + (<usize>p << 3));
     const y = load<f64>(ys + (<usize>p << 3));
@@ -153,12 +151,8 @@ export function upright(
       const rr = dx * dx + dy * dy;
       const aa = load<f64>(at, 16);
       const length = load<f64>(at, 24);
-      let value: f64;
-      if (rr > farRatio * length * (farRatio * length)) value = own / sqrt(rr + centre * centre);
-      else {
-        const ends = sqrt(rr + aa + z1 * z1) + sqrt(rr + aa + z2 * z2);
-        value = (own * logarithm((ends + length) / (ends - length))) / length;
-      }
+      const ends = sqrt(rr + aa + z1 * z1) + sqrt(rr + aa + z2 * z2);
+      let value = (own * logarithm((ends + length) / (ends - length))) / length;
       if (restAt != 0) value += f64x2.extract_lane(radialPair(restAt, per, one, f64x2.splat(rr)), 0);
       for (let u: i32 = 0; u < casesCount; u++) {
         const place = row + (<usize>u << 3);

@@ -1,88 +1,67 @@
 // The surface potential of one group of metal at a place, segment by segment, in plain code.
-import { CLOSED_FORM_RATIO } from '../leakage/pair-potential.ts';
-import { radialValue } from '../leakage/radial-table.ts';
+import { type RadialTable, radialValue } from '../leakage/radial-table.ts';
+import { logarithm } from '../numerics/elementary.ts';
 import { gaussLegendre } from '../numerics/gauss-legendre.ts';
-import { nearOrder, THREE_POINTS, TWO_POINTS } from './near-metal.ts';
+import { pointsAlong } from './near-metal.ts';
+import { uprightMean } from './rod-tables.ts';
 import type { SegmentGroup } from './segment-group.ts';
 
-/** Distance over length past which a vertical segment is a point at its middle depth. */
-export const UPRIGHT_FAR: number = CLOSED_FORM_RATIO * 100;
+/** Ratios of distance to length past which four, and two, Gauss points leave 1e-9 of a segment's potential: 2.3e-5·x⁸, x⁴/180. */
+export const FOUR_POINTS = 3.517;
+export const TWO_POINTS = 48.7;
 
-const TWO = Math.sqrt(1 / 3);
-const THREE = Math.sqrt(3 / 5);
+/** What Gauss points may leave of the farther images of a near segment. */
+const REST_LEFT = 1e-9;
+
+/** Gauss points of a near segment of a length, m, on the table of its farther images. */
+export function restOrder({ rest }: SegmentGroup, length: number): number {
+  return rest === undefined ? 0 : pointsAlong(length, rest.smoothness, REST_LEFT);
+}
 
 /** Adds the potential of each leakage of a group; `into` shape [leakages]. */
 export function addGroup(group: SegmentGroup, x: number, y: number, into: Float64Array): void {
-  if (group.vertical) addUpright(group, x, y, into);
-  else addLevel(group, x, y, into);
-}
-
-/** Gauss points on the table of all images when far, closed form and the rest's table when near. */
-function addLevel(group: SegmentGroup, x: number, y: number, into: Float64Array): void {
-  const { cx, cy, hx, hy, length, strength } = group;
-  const table = group.all!;
-  const zz = group.z1 * group.z1;
-  for (let j = 0; j < group.count; j++) {
+  const { count, cx, cy, strength } = group;
+  const cases = into.length;
+  for (let j = 0; j < count; j++) {
     const dx = x - cx[j]!;
     const dy = y - cy[j]!;
-    const ux = hx[j]!;
-    const uy = hy[j]!;
-    const distance = dx * dx + dy * dy;
-    const ratio = (distance + zz) / (length[j]! * length[j]!);
-    let value: number;
-    if (ratio > TWO_POINTS * TWO_POINTS) {
-      const across = 2 * TWO * (dx * ux + dy * uy);
-      const base = distance + TWO * TWO * (ux * ux + uy * uy);
-      value = 0.5 * (radialValue(table, base + across) + radialValue(table, base - across));
-    } else if (ratio > THREE_POINTS * THREE_POINTS) {
-      const across = 2 * THREE * (dx * ux + dy * uy);
-      const base = distance + THREE * THREE * (ux * ux + uy * uy);
-      const outer = radialValue(table, base + across) + radialValue(table, base - across);
-      value = (5 * outer + 8 * radialValue(table, distance)) / 18;
-    } else value = nearLevel(group, j, dx, dy);
-    addScaled(strength, j, value, into);
+    const value = group.vertical ? uprightMean(group, dx * dx + dy * dy) : levelMean(group, j, dx, dy);
+    for (let u = 0; u < cases; u++) into[u]! += strength[j * cases + u]! * value;
   }
 }
 
-function addScaled(strength: Float64Array, j: number, value: number, into: Float64Array): void {
-  const count = into.length;
-  for (let u = 0; u < count; u++) into[u]! += strength[j * count + u]! * value;
-}
-
-function nearLevel(group: SegmentGroup, j: number, dx: number, dy: number): number {
+/** Gauss points on the table of all images when far; closed form, and Gauss points for the farther images, when near. */
+function levelMean(group: SegmentGroup, j: number, dx: number, dy: number): number {
+  const length = group.length[j]!;
+  const zz = group.z1 * group.z1;
+  const ratio = (dx * dx + dy * dy + zz) / (length * length);
+  if (ratio > TWO_POINTS * TWO_POINTS) return pointsMean(group, group.all!, 2, j, dx, dy);
+  if (ratio > FOUR_POINTS * FOUR_POINTS) return pointsMean(group, group.all!, 4, j, dx, dy);
   const ux = group.hx[j]!;
   const uy = group.hy[j]!;
-  const above = group.z1 * group.z1 + group.radiusSquared[j]!;
-  const length = group.length[j]!;
+  const above = zz + group.radiusSquared;
   const ends =
     Math.sqrt((dx - ux) ** 2 + (dy - uy) ** 2 + above) + Math.sqrt((dx + ux) ** 2 + (dy + uy) ** 2 + above);
-  const own = (group.ownWeight * Math.log((ends + length) / (ends - length))) / length;
+  const own = (group.ownWeight * logarithm((ends + length) / (ends - length))) / length;
   if (group.rest === undefined) return own;
-  const { points, weights } = gaussLegendre(nearOrder(length, group.rest));
-  let rest = 0;
-  for (let a = 0; a < points.length; a++) {
-    const t = 2 * points[a]! - 1;
-    const px = dx - t * ux;
-    const py = dy - t * uy;
-    rest += weights[a]! * radialValue(group.rest, px * px + py * py);
-  }
-  return own + rest;
+  return own + pointsMean(group, group.rest, restOrder(group, length), j, dx, dy);
 }
 
-/** Vertical metal is one place in plan: closed form for its own distance, the table's mean for the rest. */
-function addUpright(group: SegmentGroup, x: number, y: number, into: Float64Array): void {
-  const { z1, z2, ownWeight, rest } = group;
-  for (let j = 0; j < group.count; j++) {
-    const dx = x - group.cx[j]!;
-    const dy = y - group.cy[j]!;
-    const rr = dx * dx + dy * dy;
-    const aa = group.radiusSquared[j]!;
-    const length = group.length[j]!;
-    const ends = Math.sqrt(rr + aa + z1 * z1) + Math.sqrt(rr + aa + z2 * z2);
-    const own =
-      rr > (UPRIGHT_FAR * length) ** 2
-        ? ownWeight / Math.sqrt(rr + ((z1 + z2) / 2) ** 2)
-        : (ownWeight * Math.log((ends + length) / (ends - length))) / length;
-    addScaled(group.strength, j, own + (rest === undefined ? 0 : radialValue(rest, rr)), into);
+function pointsMean(
+  { hx, hy }: SegmentGroup,
+  table: RadialTable,
+  order: number,
+  j: number,
+  dx: number,
+  dy: number,
+): number {
+  const { points, weights } = gaussLegendre(order);
+  let sum = 0;
+  for (let a = 0; a < order; a++) {
+    const t = 2 * points[a]! - 1;
+    const px = dx - t * hx[j]!;
+    const py = dy - t * hy[j]!;
+    sum += weights[a]! * radialValue(table, px * px + py * py);
   }
+  return sum;
 }

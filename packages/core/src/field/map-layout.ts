@@ -73,9 +73,8 @@ export function mapLayout(
   const cleared = next;
   const columns = widthOf(cells.levels[0]!.targets) * side;
   const rows = heightOf(cells.levels[0]!.targets) * side;
-  const list =
-    nearRoom(cases) *
-    Math.max(0, ...groups.map((g) => (g.pieces === undefined ? g.group.count : mostNear(g.pieces, cells))));
+  const most = (g: MapGroup): number => (g.pieces === undefined ? g.group.count : mostNear(g.pieces, cells));
+  const list = groups.reduce((room, g) => Math.max(room, nearRoom(g, cases) * most(g)), 0);
   const four = (): number => take(TERMS / ROWS);
   return {
     expansions,

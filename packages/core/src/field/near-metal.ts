@@ -5,27 +5,34 @@ import { type MapCells, placeIn } from './map-cells.ts';
 import type { MetalPieces } from './metal-pieces.ts';
 import type { SegmentGroup } from './segment-group.ts';
 
-/** Ratio of distance to length past which two, and three, Gauss points are enough (see gaussOrder). */
-export const TWO_POINTS = 7.93;
-export const THREE_POINTS = 3.187;
+/** Ratios of distance to length past which three, and two, Gauss points leave 1e-6 of a segment's potential: x⁶/2 800, x⁴/180. */
+const THREE_POINTS = 3.187;
+const TWO_POINTS = 7.93;
 
-/** Gauss points of a near horizontal segment on the table of its farther images, per length over the table's smoothness. */
-const NEAR_ORDER_LEAST = 4;
-const NEAR_ORDER_MOST = 12;
-
-/** Gauss points of a near segment of a length, m, on the table of its farther images. */
-export function nearOrder(length: number, rest: RadialTable | undefined): number {
-  const wanted = Math.ceil((NEAR_ORDER_LEAST * length) / (rest?.smoothness ?? length));
-  return Math.min(NEAR_ORDER_MOST, Math.max(NEAR_ORDER_LEAST, wanted));
+/** What Gauss points may leave of the farther images of a near segment. */
+const REST_LEFT = 1e-6;
+/**
+ * Gauss points on a segment for a table that is smooth on some length: n points leave ρ⁻²ⁿ, ρ = q + √(q² + 1), q twice
+ * the smoothness over the length (Trefethen 2013, theorem 19.3).
+ * @param left share of the potential that may be left out
+ */
+export function pointsAlong(length: number, smoothness: number, left: number): number {
+  return Math.max(2, Math.ceil(-Math.log(left) / (2 * Math.asinh((2 * smoothness) / length))));
 }
 
 /** Numbers of a piece of wire, and of a point, before its factors. */
 export const WIRE = 6;
 export const POINT = 2;
 
-/** Most numbers that a segment takes in one list. */
-export function nearRoom(cases: number): number {
-  return NEAR_ORDER_MOST * (POINT + cases) + WIRE;
+/** Most numbers that a segment of a group takes in one list. */
+export function nearRoom({ group }: MapGroup, cases: number): number {
+  const longest = group.length.reduce((most, length) => Math.max(most, length), 0);
+  const most = group.rest === undefined ? 3 : Math.max(3, restPoints(longest, group.rest));
+  return Math.max(WIRE + cases, most * (POINT + cases));
+}
+
+function restPoints(length: number, rest: RadialTable): number {
+  return pointsAlong(length, rest.smoothness, REST_LEFT);
 }
 
 /** Horizontal metal of one depth, and how a map sums it. */
@@ -158,7 +165,7 @@ function listPart(
       return;
     }
     if (group.rest !== undefined) {
-      const order = nearOrder(length, group.rest);
+      const order = restPoints(length, group.rest);
       writePoints(
         lists.numbers,
         lists.rest + lists.restCount * (POINT + cases),
@@ -182,7 +189,7 @@ function listPart(
   numbers[place++] = x + hx;
   numbers[place++] = y + hy;
   numbers[place++] = length;
-  numbers[place++] = zz + group.radiusSquared[j]!;
+  numbers[place++] = zz + group.radiusSquared;
   const perMetre = group.ownWeight / group.length[j]!;
   for (let u = 0; u < cases; u++) numbers[place++] = perMetre * group.strength[j * cases + u]!;
 }

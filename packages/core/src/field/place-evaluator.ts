@@ -1,5 +1,6 @@
 // The potential at any place of a map, from its expansions and the metal near the place's cell: for searches.
 import { radialValue } from '../leakage/radial-table.ts';
+import { logarithm } from '../numerics/elementary.ts';
 import { holds, type MapCells, placeIn } from './map-cells.ts';
 import {
   listNear,
@@ -61,7 +62,7 @@ export function placeEvaluator(
 }
 
 function emptyLists(group: MapGroup, cases: number): CellLists {
-  const room = nearRoom(cases) * group.group.count;
+  const room = nearRoom(group, cases) * group.group.count;
   return {
     group,
     parts: nearParts(group.group.count),
@@ -83,7 +84,7 @@ function listedValue(lists: CellLists, cases: number, u: number, x: number, y: n
       Math.sqrt((x - n[at]!) ** 2 + (y - n[at + 1]!) ** 2 + n[at + 5]!) +
       Math.sqrt((x - n[at + 2]!) ** 2 + (y - n[at + 3]!) ** 2 + n[at + 5]!);
     const length = n[at + 4]!;
-    sum += n[at + WIRE + u]! * Math.log((ends + length) / (ends - length));
+    sum += n[at + WIRE + u]! * logarithm((ends + length) / (ends - length));
   }
   for (let k = 0, at = lists.all; k < lists.allCount; k++, at += POINT + cases)
     sum += n[at + POINT + u]! * radialValue(group.group.all!, (x - n[at]!) ** 2 + (y - n[at + 1]!) ** 2);

@@ -1,5 +1,6 @@
 // The inner loops of a map in plain code: oracle of the compiled ones, and what takes their place where they are missing.
 import { radialValue } from '../leakage/radial-table.ts';
+import { logarithm } from '../numerics/elementary.ts';
 import type { CellSteps, CrossingPoints, MapArithmetic, PlacedTable } from './map-arithmetic.ts';
 import { ORDER, TERMS } from './plan-expansion.ts';
 
@@ -87,7 +88,7 @@ function wires(n: Float64Array, pieces: number, count: number, cases: number, po
       for (let i = 0; i < columns; i++) {
         const x = n[xs + i]!;
         const ends = Math.sqrt((x - x1) ** 2 + across1) + Math.sqrt((x - x2) ** 2 + across2);
-        const mean = Math.log((ends + length) / (ends - length));
+        const mean = logarithm((ends + length) / (ends - length));
         for (let u = 0; u < cases; u++) n[values + u * caseStep + j * rowStep + i]! += n[at + 6 + u]! * mean;
       }
     }

@@ -1,8 +1,7 @@
 // Potential at any point of the ground, straight from the image lists: exact, for few points.
 import type { SegmentMesh } from '../geometry/segments.ts';
-import { CLOSED_FORM_RATIO, gaussOrder, wireOf } from '../leakage/pair-potential.ts';
+import { wireOf } from '../leakage/pair-potential.ts';
 import { meanInverseDistanceToPoint } from '../leakage/wire-pair.ts';
-import { gaussLegendre } from '../numerics/gauss-legendre.ts';
 import type { SoilImages } from '../soil/image-list.ts';
 import { layerAt } from '../soil/layer-kernel.ts';
 
@@ -26,30 +25,12 @@ export function potentialAt(
     const list = images.list(mesh.layer[j]!, fieldLayer);
     const wire = wireOf(mesh, j);
     const { z1, z2 } = wire;
-    const length = mesh.length[j]!;
     const radius = mesh.radius[j]!;
-    const dx = x - (wire.x1 + wire.x2) / 2;
-    const dy = y - (wire.y1 + wire.y2) / 2;
     let mean = 0;
     for (let k = 0; k < list.count; k++) {
       wire.z1 = list.sign[k]! * z1 + list.offset[k]!;
       wire.z2 = list.sign[k]! * z2 + list.offset[k]!;
-      const dz = z - (wire.z1 + wire.z2) / 2;
-      const ratio = Math.sqrt(dx * dx + dy * dy + dz * dz) / length;
-      let one: number;
-      if (ratio < CLOSED_FORM_RATIO) one = meanInverseDistanceToPoint(wire, x, y, z, radius);
-      else {
-        const { points, weights } = gaussLegendre(gaussOrder(ratio));
-        one = 0;
-        for (let a = 0; a < points.length; a++) {
-          const t = points[a]!;
-          const px = x - wire.x1 - t * (wire.x2 - wire.x1);
-          const py = y - wire.y1 - t * (wire.y2 - wire.y1);
-          const pz = z - wire.z1 - t * (wire.z2 - wire.z1);
-          one += weights[a]! / Math.sqrt(px * px + py * py + pz * pz + radius * radius);
-        }
-      }
-      mean += list.weight[k]! * one;
+      mean += list.weight[k]! * meanInverseDistanceToPoint(wire, x, y, z, radius);
     }
     sum += leakage[j]! * list.factor * mean;
   }

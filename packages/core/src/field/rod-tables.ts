@@ -1,5 +1,6 @@
 // Vertical metal by place: all that leaks at one place in plan is one function of the distance from it, a table a leakage.
 import { type RadialTable, radialTable, radialValue, STRIDE } from '../leakage/radial-table.ts';
+import { logarithm } from '../numerics/elementary.ts';
 import type { SegmentGroup } from './segment-group.ts';
 
 /** The potentials of all vertical segments at one place. */
@@ -35,16 +36,13 @@ export function rodTables(groups: readonly SegmentGroup[], cases: number, reach:
   // rods of one kind share the tables of their parts
   const made = new Map<string, RadialTable>();
   return [...places.values()].map((parts) => {
-    const smoothness = Math.sqrt(
-      parts.reduce(
-        (least, { group, at }) => Math.min(least, group.z1 ** 2 + group.radiusSquared[at]!),
-        Infinity,
-      ),
+    const above = parts.reduce(
+      (least, { group }) => Math.min(least, group.z1 ** 2 + group.radiusSquared),
+      Infinity,
     );
-    const tables = parts.map(({ group, at }) => {
-      const square = group.radiusSquared[at]!;
-      const key = `${groups.indexOf(group)} ${square} ${smoothness}`;
-      const table = made.get(key) ?? radialTable((rr) => uprightMean(group, square, rr), smoothness, reach);
+    const tables = parts.map(({ group }) => {
+      const key = `${groups.indexOf(group)} ${above}`;
+      const table = made.get(key) ?? radialTable((rr) => uprightMean(group, rr), Math.sqrt(above), reach);
       made.set(key, table);
       return table;
     });
@@ -59,14 +57,15 @@ export function rodTables(groups: readonly SegmentGroup[], cases: number, reach:
 }
 
 /** Mean of all images along a vertical segment: closed form for its own distance, the table for the rest. */
-export function uprightMean(group: SegmentGroup, radiusSquared: number, rr: number): number {
-  const { z1, z2, ownWeight, rest } = group;
+export function uprightMean({ z1, z2, radiusSquared, ownWeight, rest }: SegmentGroup, rr: number): number {
   const length = z2 - z1;
   const a = z1 * z1 + radiusSquared + rr;
   const b = z2 * z2 + radiusSquared + rr;
-  // (z2 + √b)/(z1 + √a) − 1, without the loss of digits far away
-  const ratio = (length + (z2 * z2 - z1 * z1) / (Math.sqrt(a) + Math.sqrt(b))) / (z1 + Math.sqrt(a));
-  return (ownWeight * Math.log1p(ratio)) / length + (rest === undefined ? 0 : radialValue(rest, rr));
+  const ends = Math.sqrt(a) + Math.sqrt(b);
+  return (
+    (ownWeight * logarithm((ends + length) / (ends - length))) / length +
+    (rest === undefined ? 0 : radialValue(rest, rr))
+  );
 }
 
 function summed(tables: readonly RadialTable[], strengths: readonly number[]): RadialTable {

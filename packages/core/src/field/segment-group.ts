@@ -1,16 +1,18 @@
-// The segments of one depth class that leak, packed for the sum of their surface potentials.
+// Segments of one depth class and one radius that leak, packed for the sum of their surface potentials.
 import type { SegmentMesh } from '../geometry/segments.ts';
 import type { DepthClass } from '../leakage/depth-classes.ts';
-import type { RadialTable } from '../leakage/radial-table.ts';
+import { type RadialTable, radialTable, radialValue } from '../leakage/radial-table.ts';
 import { smoothKernel } from '../leakage/smooth-kernel.ts';
 import type { SoilImages } from '../soil/image-list.ts';
 import type { PlanBox } from './table-reach.ts';
 
-/** Segments of one depth class that leak; coordinates and currents packed, shape [count] each. */
+/** Coordinates and currents packed, shape [count] each. Tables are functions of the distance in plan, radius included. */
 export interface SegmentGroup {
   readonly vertical: boolean;
   readonly z1: number;
   readonly z2: number;
+  /** m² */
+  readonly radiusSquared: number;
   readonly count: number;
   /** centre and half vector in plan */
   readonly cx: Float64Array;
@@ -18,7 +20,6 @@ export interface SegmentGroup {
   readonly hx: Float64Array;
   readonly hy: Float64Array;
   readonly length: Float64Array;
-  readonly radiusSquared: Float64Array;
   /** leakages times the list's factor, shape [count × leakages] */
   readonly strength: Float64Array;
   /** weight of the images at the metal's own distance: the source and its reflection in the surface */
@@ -29,11 +30,14 @@ export interface SegmentGroup {
   readonly rest: RadialTable | undefined;
 }
 
+/** Longer segments, over the depth of their farther images, are summed in parts, so that a few Gauss points do for each. */
+const LONGEST = 4;
+
 /** An image offset below this is none, m. */
 const NO_OFFSET = 1e-12;
 
 /**
- * @param members segments of the class that leak
+ * @param members segments of the class that leak, of one radius
  * @param leakages current into the soil by segment, A; shape [mesh.count] each
  * @param reach largest distance that the tables hold, m
  */
@@ -42,30 +46,81 @@ export function segmentGroup(
   images: SoilImages,
   leakages: readonly Float64Array[],
   depths: DepthClass,
-  members: readonly number[],
+  members: readonly [number, ...number[]],
   reach: number,
 ): SegmentGroup {
   const list = images.list(depths.layer, 0);
-  const pick = (value: (i: number) => number): Float64Array => Float64Array.from(members, value);
   const every = Array.from({ length: list.count }, (_, k) => k);
   const own = every.filter((k) => Math.abs(list.offset[k]!) < NO_OFFSET);
   const others = every.filter((k) => Math.abs(list.offset[k]!) >= NO_OFFSET);
+  const ownWeight = own.reduce((sum, k) => sum + list.weight[k]!, 0);
+  const radius = mesh.radius[members[0]]!;
+  const thin = smoothKernel(list, others, depths, 0, Math.hypot(reach, radius));
+  const rest = thin && thickened(thin, radius, reach);
+  const longest = depths.vertical || rest === undefined ? Infinity : LONGEST * rest.smoothness;
+  const parts = members.flatMap((i) => evenParts(mesh, i, Math.ceil(mesh.length[i]! / longest) || 1));
+  const pick = (value: (part: Part) => number): Float64Array => Float64Array.from(parts, value);
   return {
     vertical: depths.vertical,
     z1: depths.z1,
     z2: depths.z2,
-    count: members.length,
-    cx: pick((i) => (mesh.x1[i]! + mesh.x2[i]!) / 2),
-    cy: pick((i) => (mesh.y1[i]! + mesh.y2[i]!) / 2),
-    hx: pick((i) => (mesh.x2[i]! - mesh.x1[i]!) / 2),
-    hy: pick((i) => (mesh.y2[i]! - mesh.y1[i]!) / 2),
-    length: pick((i) => mesh.length[i]!),
-    radiusSquared: pick((i) => mesh.radius[i]! ** 2),
-    strength: Float64Array.from(members.flatMap((i) => leakages.map((of) => of[i]! * list.factor))),
-    ownWeight: own.reduce((sum, k) => sum + list.weight[k]!, 0),
-    all: depths.vertical ? undefined : smoothKernel(list, every, depths, 0, reach),
-    rest: smoothKernel(list, others, depths, 0, reach),
+    radiusSquared: radius * radius,
+    count: parts.length,
+    cx: pick((part) => part.cx),
+    cy: pick((part) => part.cy),
+    hx: pick((part) => part.hx),
+    hy: pick((part) => part.hy),
+    length: pick((part) => part.share * mesh.length[part.segment]!),
+    strength: Float64Array.from(
+      parts.flatMap(({ segment, share }) => leakages.map((of) => share * of[segment]! * list.factor)),
+    ),
+    ownWeight,
+    all: depths.vertical ? undefined : allImages(ownWeight, rest, Math.hypot(depths.z1, radius), reach),
+    rest,
   };
+}
+
+interface Part {
+  readonly segment: number;
+  /** of the segment's length and current */
+  readonly share: number;
+  readonly cx: number;
+  readonly cy: number;
+  readonly hx: number;
+  readonly hy: number;
+}
+
+function evenParts(mesh: SegmentMesh, segment: number, count: number): Part[] {
+  const [x1, y1] = [mesh.x1[segment]!, mesh.y1[segment]!];
+  const [dx, dy] = [mesh.x2[segment]! - x1, mesh.y2[segment]! - y1];
+  return Array.from({ length: count }, (_, k) => {
+    const middle = (k + 0.5) / count;
+    return {
+      segment,
+      share: 1 / count,
+      cx: x1 + middle * dx,
+      cy: y1 + middle * dy,
+      hx: dx / (2 * count),
+      hy: dy / (2 * count),
+    };
+  });
+}
+
+/** The table of metal with a radius: its distance is that from the axis and the radius together, as near and far alike. */
+function thickened(thin: RadialTable, radius: number, reach: number): RadialTable {
+  return radialTable((rr) => radialValue(thin, rr + radius * radius), thin.smoothness, reach);
+}
+
+/** @param above depth and radius together, m */
+function allImages(
+  ownWeight: number,
+  rest: RadialTable | undefined,
+  above: number,
+  reach: number,
+): RadialTable {
+  const smoothness = Math.min(above, rest?.smoothness ?? above);
+  const own = (rr: number): number => ownWeight / Math.sqrt(rr + above * above);
+  return radialTable((rr) => own(rr) + (rest === undefined ? 0 : radialValue(rest, rr)), smoothness, reach);
 }
 
 /** Box around the metal of some groups; undefined where there is none. */

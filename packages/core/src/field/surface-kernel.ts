@@ -1,65 +1,55 @@
 // The surface potentials of one group of metal at many points, by the compiled kernel.
-import { doublesAt, type Kernel, kernelOf, place } from '../kernels/instance.ts';
+import { BYTES_A_DOUBLE, doublesAt, type Kernel, kernelOf, place } from '../kernels/instance.ts';
 import { surfaceBytes } from '../kernels/surface-bytes.ts';
 import type { RadialTable } from '../leakage/radial-table.ts';
 import { gaussLegendre } from '../numerics/gauss-legendre.ts';
+import { FOUR_POINTS, restOrder, TWO_POINTS } from './direct-sum.ts';
 import type { SegmentGroup } from './segment-group.ts';
 
 /** A group as the kernel reads it. */
 export interface PackedGroup {
   readonly vertical: boolean;
   readonly count: number;
-  /** ten doubles a horizontal segment, four a vertical one */
+  /** nine doubles a horizontal segment, four a vertical one */
   readonly segments: Float64Array;
   /** shape [count × cases] */
   readonly strength: Float64Array;
   readonly all: RadialTable | undefined;
   readonly rest: RadialTable | undefined;
-  /** Gauss rules of near segments, in pairs */
+  /** Gauss rules in pairs: that of four points, then those of near segments */
   readonly rules: Float64Array;
   readonly ownWeight: number;
   readonly z1: number;
   readonly z2: number;
 }
 
-/**
- * @param twoPoints ratio of distance to length past which two Gauss points are enough
- * @param threePoints the same for three
- * @param order Gauss points of a near segment of a length, m, on the rest's table
- */
-export function packGroup(
-  group: SegmentGroup,
-  twoPoints: number,
-  threePoints: number,
-  order: (length: number) => number,
-): PackedGroup {
+export function packGroup(group: SegmentGroup): PackedGroup {
   const { count, cx, cy, hx, hy, length, radiusSquared } = group;
   const zz = group.z1 * group.z1;
-  const rules: number[] = [];
+  const rules: number[] = pairedRule(FOUR);
   const ruleAt = new Map<number, number>();
-  const segments = new Float64Array(count * (group.vertical ? 4 : 10));
+  const segments = new Float64Array(count * (group.vertical ? 4 : 9));
   for (let j = 0; j < count; j++) {
     const l = length[j]!;
     if (group.vertical) {
-      segments.set([cx[j]!, cy[j]!, radiusSquared[j]!, l], j * 4);
+      segments.set([cx[j]!, cy[j]!, radiusSquared, l], j * 4);
       continue;
     }
-    const points = order(l);
-    if (!ruleAt.has(points)) {
-      ruleAt.set(points, rules.length * 8);
-      rules.push(...pairedRule(points));
+    const order = restOrder(group, l);
+    if (!ruleAt.has(order)) {
+      ruleAt.set(order, rules.length * BYTES_A_DOUBLE);
+      rules.push(...pairedRule(order));
     }
-    const ux = hx[j]!;
-    const uy = hy[j]!;
-    const two = twoPoints * twoPoints * l * l - zz;
-    const three = threePoints * threePoints * l * l - zz;
-    segments.set(
-      [cx[j]!, cy[j]!, ux, uy, ux * ux + uy * uy, two, three, l, zz + radiusSquared[j]!, ruleAt.get(points)!],
-      j * 10,
-    );
+    const two = TWO_POINTS * TWO_POINTS * l * l - zz;
+    const four = FOUR_POINTS * FOUR_POINTS * l * l - zz;
+    const rule = ruleAt.get(order)!;
+    segments.set([cx[j]!, cy[j]!, hx[j]!, hy[j]!, two, four, l, zz + radiusSquared, rule], j * 9);
   }
   return { ...group, segments, rules: Float64Array.from(rules) };
 }
+
+/** Points of the first rule, that of segments neither near nor far. */
+const FOUR = 4;
 
 /** Number of pairs, then for each pair its two points on [−1, 1] and its two weights. */
 function pairedRule(order: number): number[] {
@@ -87,7 +77,6 @@ export function addByKernel(
   kernel: Kernel,
   group: PackedGroup,
   cases: number,
-  farRatio: number,
   xs: Float64Array,
   ys: Float64Array,
   into: Float64Array,
@@ -103,23 +92,7 @@ export function addByKernel(
   const perRest = rest?.perSquare ?? 0;
   if (group.vertical) {
     const { ownWeight, z1, z2 } = group;
-    kernel.call(
-      'upright',
-      s,
-      count,
-      w,
-      restAt,
-      perRest,
-      ownWeight,
-      z1,
-      z2,
-      farRatio,
-      cases,
-      x,
-      y,
-      xs.length,
-      o,
-    );
+    kernel.call('upright', s, count, w, restAt, perRest, ownWeight, z1, z2, cases, x, y, xs.length, o);
   } else {
     const perAll = all?.perSquare ?? 0;
     kernel.call(

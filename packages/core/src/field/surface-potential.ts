@@ -2,9 +2,8 @@
 import type { SegmentMesh } from '../geometry/segments.ts';
 import { depthClasses } from '../leakage/depth-classes.ts';
 import type { SoilImages } from '../soil/image-list.ts';
-import { addGroup, UPRIGHT_FAR } from './direct-sum.ts';
+import { addGroup } from './direct-sum.ts';
 import type { Box } from './lattice.ts';
-import { nearOrder, THREE_POINTS, TWO_POINTS } from './near-metal.ts';
 import { potentialAt } from './potential.ts';
 import { type RodTables, rodTables } from './rod-tables.ts';
 import { metalBox, segmentGroup } from './segment-group.ts';
@@ -50,11 +49,11 @@ export function surfacePotentials(
   reach: number,
 ): SurfacePotentials {
   const { classes, of } = depthClasses(mesh);
-  const members = classes.map((): number[] => []);
-  for (let i = 0; i < mesh.count; i++) if (of[i]! >= 0 && mesh.leaking[i] === 1) members[of[i]!]!.push(i);
-  const groups = classes
-    .map((depths, c) => segmentGroup(mesh, images, leakages, depths, members[c]!, TABLE_REACH * reach))
-    .filter((group) => group.count > 0);
+  const groups = classes.flatMap((depths, c) =>
+    byRadius(mesh, of, c).map((members) =>
+      segmentGroup(mesh, images, leakages, depths, members, TABLE_REACH * reach),
+    ),
+  );
   const sloped = leakages.map((leakage) => leakage.map((current, i) => (of[i]! < 0 ? current : 0)));
   const anySloped = sloped.some((leakage) => leakage.some((current) => current !== 0));
   const count = leakages.length;
@@ -82,12 +81,10 @@ export function surfacePotentials(
       each(at);
       return;
     }
-    packed ??= groups.map((group) =>
-      packGroup(group, TWO_POINTS, THREE_POINTS, (length) => nearOrder(length, group.rest)),
-    );
+    packed ??= groups.map(packGroup);
     each(slopedAt);
     packed.forEach((group, k) => {
-      if (!addByKernel(kernel, group, count, UPRIGHT_FAR, xs, ys, into))
+      if (!addByKernel(kernel, group, count, xs, ys, into))
         each((x, y, sums) => addGroup(groups[k]!, x, y, sums));
     });
   };
@@ -113,6 +110,18 @@ export function surfacePotentials(
       );
     },
   };
+}
+
+/** Segments of a class that leak, those of each radius together, in the order of the mesh. */
+function byRadius(mesh: SegmentMesh, of: Int32Array, c: number): [number, ...number[]][] {
+  const found = new Map<number, [number, ...number[]]>();
+  for (let i = 0; i < mesh.count; i++) {
+    if (of[i] !== c || mesh.leaking[i] !== 1) continue;
+    const others = found.get(mesh.radius[i]!);
+    if (others === undefined) found.set(mesh.radius[i]!, [i]);
+    else others.push(i);
+  }
+  return [...found.values()];
 }
 
 function boxAround(xs: Float64Array, ys: Float64Array): PlanBox {

@@ -8,21 +8,10 @@ import type { Wire } from './wire-pair.ts';
  */
 export const CLOSED_FORM_RATIO = 1.987;
 
-/** Ratios of distance to length from which one, two and three Gauss points are enough. */
-const GAUSS_RATIOS: readonly number[] = [197.3, 7.93, 3.187];
-
 /**
- * Gauss points on a segment seen from a point at a given distance over its length, to 3e-6: the n-point rule on 1/r errs
- * by x²/12, x⁴/180, x⁶/2 800, 2.3e-5·x⁸ of the mean at length over distance x.
+ * Points on a segment of an entry by distance over length, to 1e-6: the n-point rule on 1/r errs by x²/12, x⁴/180,
+ * x⁶/2 800, 2.3e-5·x⁸ of the mean at length over distance x, and twice that where both segments have a length.
  */
-export function gaussOrder(ratio: number): number {
-  if (ratio >= GAUSS_RATIOS[0]!) return 1;
-  if (ratio >= GAUSS_RATIOS[1]!) return 2;
-  if (ratio >= GAUSS_RATIOS[2]!) return 3;
-  return 4;
-}
-
-/** The same for two segments that both have a length, to 1e-6 of an entry: twice the errors above. */
 export const PAIR_RATIOS: Float64Array = Float64Array.of(603.1, 10.37, 3.187);
 
 /** Points on a segment of an entry, by squared distance and squared length. */
