@@ -38,16 +38,34 @@ export function reusedLeakageMatrix(previous: KnownLeakage, mesh: SegmentMesh): 
   return { mesh, images, matrix: storedMatrix(segments, store), kept: kept.length, computed };
 }
 
+/** Copies entries between kept segments, by runs that lie side by side in both matrices. */
 function copyKept({ entries }: PackedStore, kept: Int32Array, places: Int32Array, known: Float64Array): void {
+  const from = kept.map((k) => places[k]!);
+  const runs = runsOf(kept, from);
   for (let a = 0; a < kept.length; a++) {
     const row = rowStart(kept[a]!);
-    const from = places[kept[a]!]!;
-    const knownRow = rowStart(from);
-    for (let b = 0; b <= a; b++) {
-      const other = places[kept[b]!]!;
-      entries[row + kept[b]!] = known[other <= from ? knownRow + other : rowStart(other) + from]!;
+    const own = from[a]!;
+    const knownRow = rowStart(own);
+    for (let r = 0; runs[r]! <= a; r++) {
+      const first = runs[r]!;
+      const last = Math.min(runs[r + 1]!, a + 1) - 1;
+      if (from[last]! <= own)
+        entries.set(known.subarray(knownRow + from[first]!, knownRow + from[last]! + 1), row + kept[first]!);
+      else
+        for (let b = first; b <= last; b++) {
+          const other = from[b]!;
+          entries[row + kept[b]!] = known[other <= own ? knownRow + other : rowStart(other) + own]!;
+        }
     }
   }
+}
+
+/** Where runs begin in which both lists count upward by one; then their length. */
+function runsOf(a: Int32Array, b: Int32Array): number[] {
+  const starts: number[] = [];
+  for (let k = 0; k < a.length; k++)
+    if (k === 0 || a[k]! !== a[k - 1]! + 1 || b[k]! !== b[k - 1]! + 1) starts.push(k);
+  return [...starts, a.length];
 }
 
 function computeChanged(
@@ -64,8 +82,11 @@ function computeChanged(
     const values = new Float64Array(rows.length * columns.length);
     fill(inMesh(rows), inMesh(columns), values);
     let at = 0;
-    for (const r of rows)
-      for (const c of columns) entries[r > c ? rowStart(r) + c : rowStart(c) + r] = values[at++]!;
+    for (let a = 0; a < rows.length; a++)
+      for (let b = 0; b < columns.length; b++) {
+        const [r, c] = [rows[a]!, columns[b]!];
+        entries[r > c ? rowStart(r) + c : rowStart(c) + r] = values[at++]!;
+      }
     return values.length;
   };
   let computed = put(changed, kept);
