@@ -19,7 +19,7 @@ afterAll(async () => {
 async function begun(page: Page): Promise<void> {
   await page.goto(sheet.url);
   await page.getByRole('button', { name: 'Try the demonstration study' }).click();
-  await page.getByText('Computed.').waitFor({ timeout: 60_000 });
+  await page.getByText('Computed.', { exact: true }).waitFor({ timeout: 60_000 });
 }
 
 async function retitled(page: Page, title: string): Promise<void> {

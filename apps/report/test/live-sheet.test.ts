@@ -25,7 +25,7 @@ describe('the live sheet', () => {
     const loaded = requests.length;
     await page.getByRole('button', { name: 'Try the demonstration study' }).click();
     await page.getByRole('heading', { level: 1, name: /Aldermoor/ }).waitFor({ timeout: 60_000 });
-    await page.getByText('Computed.').waitFor({ timeout: 60_000 });
+    await page.getByText('Computed.', { exact: true }).waitFor({ timeout: 60_000 });
     expect(await page.locator('.answer').getByText('exceeds a limit').isVisible()).toBe(true);
     const [download] = await Promise.all([
       page.waitForEvent('download'),
@@ -77,7 +77,7 @@ describe('the live sheet', () => {
     await page.getByRole('button', { name: 'cancel' }).click();
     await page.getByText('Not computed.').waitFor();
     await page.getByRole('button', { name: 'compute' }).click();
-    await page.getByText('Computed.').waitFor({ timeout: 60_000 });
+    await page.getByText('Computed.', { exact: true }).waitFor({ timeout: 60_000 });
     await page.close();
   });
 

@@ -249,7 +249,7 @@ it('a pack from the live sheet carries the same program, and verifies on another
     'input[type=file][accept]',
     [...files].map(([name, content]) => ({ name, mimeType: 'text/plain', buffer: Buffer.from(content) })),
   );
-  await page.getByText('Computed.').waitFor({ timeout: 60_000 });
+  await page.getByText('Computed.', { exact: true }).waitFor({ timeout: 60_000 });
   const [download] = await Promise.all([
     page.waitForEvent('download'),
     page.getByRole('button', { name: 'take the review pack' }).click(),

@@ -21,6 +21,7 @@ import { Contents } from './contents.tsx';
 import { deskOf, unitsOf } from './desk-of.ts';
 import { Faults } from './faults.tsx';
 import { KeptStudies } from './kept-studies.tsx';
+import { Missing } from './missing.tsx';
 import { NoteField } from './note-field.tsx';
 import { noteOf, withNote } from './note-of.ts';
 import { Pins } from './pins.tsx';
@@ -108,9 +109,12 @@ function Work({ control, bench, open, close, storage }: WorkProps): VNode {
     work.catch((error: unknown) => setWord(error instanceof Error ? error.message : String(error)));
   };
   const outcome = bench.solved?.outcome;
+  // the share that is done changes many times a second and is no concern of the sheet
+  const { history, solved, faults, pins, compared, running } = bench;
+  const still = useMemo(() => bench, [history, solved, faults, pins, compared, running === undefined]);
   const desk = useMemo(
     () =>
-      deskOf(bench, act, {
+      deskOf(still, act, {
         instrument: (figure, shown) =>
           figure === 'surface' ? (
             <Instrument
@@ -139,7 +143,7 @@ function Work({ control, bench, open, close, storage }: WorkProps): VNode {
         ),
         download: outcome && ((file) => takeFile(outcome, file)),
       }),
-    [bench, act, draft, outcome, present, goal, units],
+    [still, act, draft, outcome, present, goal, units],
   );
   return (
     <DeskContext.Provider value={desk}>
@@ -161,6 +165,7 @@ function Work({ control, bench, open, close, storage }: WorkProps): VNode {
         <main id="page">
           {outcome === undefined ? (
             <>
+              <Missing draft={draft} units={units} act={act} />
               <Faults faults={bench.faults} />
               <Questions />
             </>

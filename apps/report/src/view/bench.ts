@@ -1,8 +1,9 @@
 // The page as a value: the study worked at, what is computed of it, and the states that are pinned.
 import type { SectionId, SectionState } from '@ohmstead/sheet';
-import type { Fault, Outcome } from '@ohmstead/study';
+import { type Fault, type Outcome, STUDY_FILE } from '@ohmstead/study';
 import type { Draft } from '../desk/draft.ts';
 import { beginHistory, commit, type History, redo, undo } from '../desk/history.ts';
+import { questionsOf } from '../desk/missing.ts';
 import { addPin, type Pin, removePin, renamePin, stateOf } from '../desk/pins.ts';
 import type { RunAnswer } from '../engine/messages.ts';
 import { outdatedBy } from './dependence.ts';
@@ -123,10 +124,15 @@ function answered(bench: Bench, answer: Exclude<RunAnswer, { kind: 'ended' }>): 
     case 'solved':
       return { ...bench, running: undefined, solved: { outcome: answer.outcome, run, draft, early: false } };
     case 'faults':
-      return { ...bench, running: undefined, faults: answer.faults };
+      return { ...bench, running: undefined, faults: toldFaults(draft, answer.faults) };
     case 'failed':
       return { ...bench, running: undefined, failure: answer.message };
   }
+}
+
+/** Faults that are told: what study.json still lacks is asked for instead, as long as anything is. */
+function toldFaults(draft: Draft, faults: readonly Fault[]): readonly Fault[] {
+  return questionsOf(draft).length === 0 ? faults : faults.filter(({ file }) => file !== STUDY_FILE);
 }
 
 /** What an early outcome leaves out stands as it was, greyed, where it is still about the same seasons. */

@@ -1,9 +1,9 @@
 // Joins the page's state to the engine: every draft is computed, a newer one replaces the run of an older.
 import { useCallback, useEffect, useMemo, useReducer, useRef } from 'preact/hooks';
 import type { Draft } from '../desk/draft.ts';
-import { questionsOf } from '../desk/missing.ts';
 import { createEngine, type Engine, type EnginePlatform } from '../engine/client.ts';
 import { type Bench, type BenchAction, beginBench, draftOf, reduceBench } from './bench.ts';
+import { markEdit, measureShown } from './page-times.ts';
 
 export interface BenchControl {
   /** undefined before a study is open */
@@ -35,12 +35,9 @@ export function useBench(begin: EnginePlatform['begin']): BenchControl {
   useEffect(() => () => engine.stop(), [engine]);
   const compute = useCallback(
     (draft: Draft): void => {
-      if (questionsOf(draft).length > 0) {
-        engine.cancel();
-        act({ kind: 'cancelled' });
-        return;
-      }
-      act({ kind: 'began', run: engine.solve(draft.files), draft });
+      const run = engine.solve(draft.files);
+      markEdit(run);
+      act({ kind: 'began', run, draft });
     },
     [engine],
   );
@@ -51,6 +48,10 @@ export function useBench(begin: EnginePlatform['begin']): BenchControl {
     computed.current = draft;
     compute(draft);
   }, [draft, compute]);
+  const solved = bench?.solved;
+  useEffect(() => {
+    if (solved !== undefined) measureShown(solved.run, solved.early);
+  }, [solved]);
   const cancel = useCallback(() => {
     engine.cancel();
     act({ kind: 'cancelled' });
