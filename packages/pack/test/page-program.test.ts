@@ -110,6 +110,7 @@ test('verification compares the program in the sheet, and the record with the re
     (page: string) => page.replace(" 'wasm-unsafe-eval'", " 'unsafe-inline'"),
     (page: string) => page.replace('<main', '<script>evil()</script><main'),
     (page: string) => page.replace('</main>', '<script>evil()</script></main>'),
+    (page: string) => page.replace('</main>', '<br></main>'),
     (page: string) => page.replace(/(?<=class="res">)\d/, '9'),
   ])
     expect(await renderingsThatDiffer(await withSheet(change))).toEqual(['index.html']);

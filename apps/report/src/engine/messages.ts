@@ -1,6 +1,6 @@
 // What the page and its engine say to each other.
 import type { Comparison, PageScripts, TextComparison } from '@ohmstead/pack';
-import type { Fault, Outcome } from '@ohmstead/study';
+import type { Fault, FieldPoint, FieldValue, Outcome, Profile } from '@ohmstead/study';
 
 export type EngineRequest =
   /** the scripts that the sheets of packs are to carry; none do before it */
@@ -21,12 +21,22 @@ export type Question =
   | { readonly kind: 'pack' }
   /** whether a record says what was computed: its results, and the texts of its sheet in order */
   | { readonly kind: 'check'; readonly results: unknown; readonly texts: readonly string[] }
+  /** potential and touch voltage along a line on the surface, m, or at places of any depth */
+  | {
+      readonly kind: 'profile';
+      readonly caseIndex: number;
+      readonly from: readonly [number, number];
+      readonly to: readonly [number, number];
+    }
+  | { readonly kind: 'field'; readonly caseIndex: number; readonly points: readonly FieldPoint[] }
   /** the main results beside those of a record */
   | { readonly kind: 'beside'; readonly results: unknown };
 
 export type Reply =
   | { readonly kind: 'pack'; readonly pack: Uint8Array<ArrayBuffer> }
   | { readonly kind: 'check'; readonly results: Comparison; readonly printed: TextComparison }
+  | { readonly kind: 'profile'; readonly profile: Profile }
+  | { readonly kind: 'field'; readonly values: readonly FieldValue[] }
   | { readonly kind: 'beside'; readonly rows: readonly BesideRow[] };
 
 export interface BesideRow {

@@ -19,7 +19,7 @@ import type { SolvedRun } from './solved-run.ts';
  */
 export async function replyTo(
   question: Question,
-  { loaded, outcome }: SolvedRun,
+  { loaded, outcome, field }: SolvedRun,
   scripts: PageScripts | undefined,
 ): Promise<{ readonly reply: Reply; readonly transfer: Transferable[] }> {
   switch (question.kind) {
@@ -29,6 +29,22 @@ export async function replyTo(
     }
     case 'check':
       return { reply: check(question.results, question.texts, outcome), transfer: [] };
+    case 'profile': {
+      if (field === undefined) throw new Error('no field was kept');
+      const profile = field.profile(question.caseIndex, question.from, question.to);
+      const { distance, potential, touch } = profile;
+      return {
+        reply: { kind: 'profile', profile },
+        transfer: [distance.buffer, potential.buffer, touch.buffer],
+      };
+    }
+    case 'field': {
+      if (field === undefined) throw new Error('no field was kept');
+      return {
+        reply: { kind: 'field', values: field.at(question.caseIndex, question.points) },
+        transfer: [],
+      };
+    }
     case 'beside':
       return {
         reply: { kind: 'beside', rows: besideRows(question.results, outcome.results) },

@@ -1,6 +1,6 @@
 // The engine's side: one run at a time, which hears between its stages that it is no longer wanted.
 import type { PageScripts } from '@ohmstead/pack';
-import { InputFaults, loadStudy, solveStudy } from '@ohmstead/study';
+import { InputFaults, loadStudy, type SolvedField, solveStudy } from '@ohmstead/study';
 import type { EngineAnswer, EngineRequest } from './messages.ts';
 import { replyTo } from './questions.ts';
 import type { SolvedRun } from './solved-run.ts';
@@ -30,15 +30,19 @@ export function engineServer({ say, pause }: ServerTools): (request: EngineReque
     };
     stillWanted();
     const loaded = loadStudy(await studySource(files));
+    let field: SolvedField | undefined;
     const outcome = await solveStudy(loaded, {
       onProgress: async (stage, share) => {
         say({ kind: 'progress', run, stage, share });
         await pause();
         stillWanted();
       },
+      onField: (solution) => {
+        field = solution;
+      },
       onFirst: (first) => say({ kind: 'first', run, outcome: first }),
     });
-    solved = { run, loaded, outcome };
+    solved = { run, loaded, outcome, field };
     say({ kind: 'solved', run, outcome });
   };
 

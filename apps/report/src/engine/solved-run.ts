@@ -1,8 +1,9 @@
 // What the engine keeps of the run it solved last.
-import type { LoadedStudy, Outcome } from '@ohmstead/study';
+import type { LoadedStudy, Outcome, SolvedField } from '@ohmstead/study';
 
 export interface SolvedRun {
   readonly run: number;
   readonly loaded: LoadedStudy;
   readonly outcome: Outcome;
+  readonly field: SolvedField | undefined;
 }

@@ -1,7 +1,7 @@
 // What figures are drawn from: conductors, joints and areas in metres, and leakage and current by segment.
 
 import { type Box, isRod, type Lattice, lineProfile } from '@ohmstead/core';
-import type { CaseFigures, CaseMap, Plan, SegmentTable } from '../outcome.ts';
+import type { CaseFigures, CaseMap, Plan, Profile, SegmentTable } from '../outcome.ts';
 import type { Solved, UnitField } from './levels.ts';
 import type { Prepared } from './prepare.ts';
 import { isEnergised } from './roles.ts';
@@ -88,11 +88,21 @@ function caseProfile(
   unit: UnitField,
   box: Box,
   through: { readonly x: number; readonly y: number },
-): CaseFigures['profile'] {
+): Profile {
   const { x, y } = through;
   const eastward = box.east - box.west >= box.north - box.south;
   const from: [number, number] = eastward ? [box.west, y] : [x, box.south];
   const to: [number, number] = eastward ? [box.east, y] : [x, box.north];
+  return profileAlong(current, unit, from, to);
+}
+
+/** Potential and touch voltage along a line on the surface, from its first point to its second. */
+export function profileAlong(
+  current: number,
+  unit: UnitField,
+  from: readonly [number, number],
+  to: readonly [number, number],
+): Profile {
   const line = lineProfile(unit.surface, unit.metal, from, to, PROFILE_POINTS);
   return {
     from,

@@ -12,6 +12,7 @@ import { limitsOf } from './limits-of.ts';
 import { type Prepared, prepare } from './prepare.ts';
 import { type Beside, NOTHING_BESIDE, resultsOf } from './results-of.ts';
 import { seasonResults } from './seasons.ts';
+import { type SolvedField, solvedField } from './solved-field.ts';
 
 export interface SolveOptions {
   /** told of long work: a stage in words and the share done, 0 to 1 */
@@ -21,6 +22,8 @@ export interface SolveOptions {
    * seasons, without the fit's consequence, without the uniform comparison
    */
   readonly onFirst?: (first: Outcome) => void | Promise<void>;
+  /** given the field of the solved study, for lines and places that are asked for later; it keeps the solution in memory */
+  readonly onField?: (field: SolvedField) => void;
 }
 
 /** @throws InputFaults when the drawing has faults; SolverStalled or NotPositiveDefinite for a fault of the program */
@@ -35,6 +38,12 @@ export async function solveStudy(loaded: LoadedStudy, options: SolveOptions = {}
     onFirst: onFirst && ((first) => onFirst(outcomeOf(prepared, ground, first, NOTHING_BESIDE))),
   });
   const base = judged(prepared, solved).map(({ result }) => result);
+  options.onField?.(
+    solvedField(
+      solved,
+      base.map(({ grid_current_A }) => grid_current_A),
+    ),
+  );
   const { fitted } = ground;
   return outcomeOf(prepared, ground, solved, {
     seasonal: await seasonResults(prepared, progress),

@@ -77,6 +77,27 @@ test('progress, an early outcome, the outcome; then its pack when asked', async 
   );
 });
 
+test('a line and places of the solved field, equal to what the outcome holds', async () => {
+  const { said, until } = served();
+  await until('solved', solve(1));
+  const solved = said.at(-1);
+  if (solved?.kind !== 'solved') throw new Error('not solved');
+  const { from, to, potential, touch } = solved.outcome.cases[0]!.profile;
+  const question = { kind: 'profile', caseIndex: 0, from, to } as const;
+  await until('told', { kind: 'ask', run: 1, ask: 1, question });
+  expect(said.at(-1)).toMatchObject({ reply: { kind: 'profile', profile: { from, to, potential, touch } } });
+  const points = [{ x_m: from[0], y_m: from[1], depth_m: 0 }];
+  await until('told', { kind: 'ask', run: 1, ask: 2, question: { kind: 'field', caseIndex: 0, points } });
+  const told = said.at(-1);
+  if (told?.kind !== 'told' || told.reply.kind !== 'field') throw new Error('no field');
+  const [value] = told.reply.values;
+  // one is summed by the kernel of the surface, the other by the plain formula; both are the same sum
+  expect(Math.abs(value!.potential_V / potential[0]! - 1)).toBeLessThan(1e-6);
+  expect(Math.abs(value!.touch_V / touch[0]! - 1)).toBeLessThan(1e-6);
+  await until('untold', { kind: 'ask', run: 1, ask: 3, question: { ...question, caseIndex: 1 } });
+  expect(said.at(-1)).toMatchObject({ ask: 3, message: 'no case 1' });
+});
+
 test('a new run ends the one before between two stages', async () => {
   const { said, until } = served();
   await until('progress', solve(1));
