@@ -10,13 +10,18 @@ const VALUES: usize = 16;
 const MIRRORED: usize = 20;
 const BLOCK: usize = 24;
 
-/** y_rows += B x_columns for each block, and y_columns += Bᵀ x_rows where it is mirrored. */
-export function multiply(list: usize, count: i32, x: usize, y: usize): void {
+/**
+ * y += Σ B x over the blocks, and Σ Bᵀ x of those that are mirrored, summed in `part` first. All that blocks touch lies in
+ * places `low … high − 1`; the place after is there and may be written to.
+ */
+export function multiply(list: usize, count: i32, x: usize, y: usize, part: usize, low: i32, high: i32): void {
+  memory.fill(part + (<usize>low << 3), 0, <usize>(high - low + 1) << 3);
   const end = list + <usize>count * BLOCK;
   for (let b = list; b < end; b += BLOCK) {
-    if (load<u32>(b, MIRRORED) == 0) forward(b, x, y);
-    else mirrored(b, x, y);
+    if (load<u32>(b, MIRRORED) == 0) forward(b, x, part);
+    else mirrored(b, x, part);
   }
+  for (let at = <usize>low << 3; at < <usize>high << 3; at += 8) add(y + at, load<f64>(part + at));
 }
 
 /** v_columns += Bᵀ v_rows, block after block. */
@@ -164,11 +169,12 @@ function transposed(b: usize, x: usize, y: usize): void {
 }
 
 /**
- * Gaussian elimination with full pivoting until the largest entry left is at most `tolerance` of the largest of all.
- * @param a rows of `columns` doubles, an even number; overwritten
+ * Gaussian elimination in single precision with full pivoting, until the largest entry left is at most `tolerance` of the
+ * largest of all.
+ * @param a rows of `columns` doubles, a multiple of four; overwritten
  * @param order row numbers, i32; the chosen ones come first
- * @param lower multipliers by place in `order`, `most` doubles a row
- * @param largest room for a double a row
+ * @param lower by place in `order`, `most` doubles a row: multipliers for the chosen, then weights with which those make the rest
+ * @param largest room for a float a row
  * @returns how many rows were chosen
  */
 export function skeleton(
@@ -181,29 +187,26 @@ export function skeleton(
   lower: usize,
   largest: usize,
 ): i32 {
-  const width = <usize>columns << 3;
+  const width = <usize>columns << 2;
   const stride = <usize>most << 3;
   for (let r: i32 = 0; r < count; r++) {
     store<i32>(order + (<usize>r << 2), r);
-    const row = a + <usize>r * width;
-    let top = f64x2.splat(0);
-    for (let at = row; at < row + width; at += 16) top = f64x2.pmax(top, f64x2.abs(v128.load(at)));
-    store<f64>(largest + (<usize>r << 3), max<f64>(f64x2.extract_lane(top, 0), f64x2.extract_lane(top, 1)));
+    store<f32>(largest + (<usize>r << 2), narrow(a + 2 * <usize>r * width, a + <usize>r * width, width));
   }
-  let first: f64 = 0;
+  let first: f32 = 0;
   let rank: i32 = 0;
   for (; rank < most; rank++) {
     let at = rank;
-    let size = load<f64>(largest + (<usize>load<i32>(order + (<usize>rank << 2)) << 3));
-    for (let k = rank + 1; k < count; k++) {
-      const own = load<f64>(largest + (<usize>load<i32>(order + (<usize>k << 2)) << 3));
+    let size: f32 = -1;
+    for (let k = rank; k < count; k++) {
+      const own = load<f32>(largest + (<usize>load<i32>(order + (<usize>k << 2)) << 2));
       if (own > size) {
         size = own;
         at = k;
       }
     }
     if (rank == 0) first = size;
-    if (!(size > tolerance * first)) break;
+    if (!(<f64>size > tolerance * <f64>first)) break;
     const row = load<i32>(order + (<usize>at << 2));
     store<i32>(order + (<usize>at << 2), load<i32>(order + (<usize>rank << 2)));
     store<i32>(order + (<usize>rank << 2), row);
@@ -216,24 +219,70 @@ export function skeleton(
     }
     const pivotRow = a + <usize>row * width;
     let column: usize = 0;
-    while (abs(load<f64>(pivotRow + column)) != size) column += 8;
-    const pivot = load<f64>(pivotRow + column);
+    while (abs(load<f32>(pivotRow + column)) != size) column += 4;
+    const pivot = load<f32>(pivotRow + column);
     for (let k = rank + 1; k < count; k++) {
       const r = load<i32>(order + (<usize>k << 2));
       const own = a + <usize>r * width;
-      const share = load<f64>(own + column) / pivot;
+      const share = load<f32>(own + column) / pivot;
       store<f64>(lower + <usize>k * stride + (<usize>rank << 3), share);
-      const s = f64x2.splat(share);
-      let top = f64x2.splat(0);
-      for (let c: usize = 0; c < width; c += 16) {
-        const left = f64x2.sub(v128.load(own + c), f64x2.mul(s, v128.load(pivotRow + c)));
-        v128.store(own + c, left);
-        top = f64x2.pmax(top, f64x2.abs(left));
-      }
-      store<f64>(largest + (<usize>r << 3), max<f64>(f64x2.extract_lane(top, 0), f64x2.extract_lane(top, 1)));
+      store<f32>(largest + (<usize>r << 2), reduced(own, pivotRow, width, share));
     }
   }
+  for (let k = rank; k < count; k++) weigh(lower + <usize>k * stride, lower, stride, rank);
   return rank;
+}
+
+/** Largest magnitude of four lanes of highest and of lowest values. */
+@inline
+function largestOf(high: v128, low: v128): f32 {
+  const most = f32x4.pmax(high, f32x4.neg(low));
+  return max<f32>(
+    max<f32>(f32x4.extract_lane(most, 0), f32x4.extract_lane(most, 1)),
+    max<f32>(f32x4.extract_lane(most, 2), f32x4.extract_lane(most, 3)),
+  );
+}
+
+/** Writes doubles as floats, to the same place or one before, and returns the largest magnitude. */
+function narrow(from: usize, into: usize, width: usize): f32 {
+  let high = f32x4.splat(0);
+  let low = f32x4.splat(0);
+  for (let c: usize = 0; c < width; c += 16) {
+    const first = f32x4.demote_f64x2_zero(v128.load(from + 2 * c));
+    const second = f32x4.demote_f64x2_zero(v128.load(from + 2 * c, 16));
+    const value = v128.shuffle<f32>(first, second, 0, 1, 4, 5);
+    v128.store(into + c, value);
+    high = f32x4.pmax(high, value);
+    low = f32x4.pmin(low, value);
+  }
+  return largestOf(high, low);
+}
+
+/** own −= share·pivot; the largest magnitude left. */
+function reduced(own: usize, pivot: usize, width: usize, share: f32): f32 {
+  const s = f32x4.splat(share);
+  let high = f32x4.splat(0);
+  let low = f32x4.splat(0);
+  for (let c: usize = 0; c < width; c += 16) {
+    const left = f32x4.sub(v128.load(own + c), f32x4.mul(s, v128.load(pivot + c)));
+    v128.store(own + c, left);
+    high = f32x4.pmax(high, left);
+    low = f32x4.pmin(low, left);
+  }
+  return largestOf(high, low);
+}
+
+/** Solves w L = multipliers in place, L the unit lower triangle of the chosen rows' multipliers. */
+function weigh(row: usize, lower: usize, stride: usize, rank: i32): void {
+  for (let j = rank - 1; j > 0; j--) {
+    const weight = f64x2.splat(load<f64>(row + (<usize>j << 3)));
+    const other = lower + <usize>j * stride;
+    const whole = <usize>(j & ~1) << 3;
+    for (let i: usize = 0; i < whole; i += 16)
+      v128.store(row + i, f64x2.sub(v128.load(row + i), f64x2.mul(weight, v128.load(other + i))));
+    if (j & 1)
+      store<f64>(row + whole, load<f64>(row + whole) - f64x2.extract_lane(weight, 0) * load<f64>(other + whole));
+  }
 }
 
 /**

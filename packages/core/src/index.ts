@@ -63,7 +63,7 @@ export {
   leakageMatrix,
   planReach,
 } from './leakage/leakage-matrix.ts';
-export { leakageOperator } from './leakage/leakage-operator.ts';
+export { leakageBytes, leakageOperator, leakageStorage } from './leakage/leakage-operator.ts';
 export { type PartInputs, type PartMatrix, partMatrix } from './leakage/part-matrix.ts';
 export { type KnownLeakage, type ReusedLeakage, reusedLeakageMatrix } from './leakage/reused-matrix.ts';
 export { type ConductorMaterial, conductorMaterials } from './materials/conductor-materials.ts';

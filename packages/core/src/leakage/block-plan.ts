@@ -13,7 +13,7 @@ export interface CompressionOptions {
   readonly tolerance: number;
 }
 
-export const COMPRESSION: CompressionOptions = { leaf: 32, admissible: 2, tolerance: 3e-6 };
+export const COMPRESSION: CompressionOptions = { leaf: 48, admissible: 2.5, tolerance: 5e-6 };
 
 /** What one worker does on its own. */
 export interface BlockPart {

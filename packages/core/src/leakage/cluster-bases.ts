@@ -11,7 +11,7 @@ export interface ClusterBases {
    * W: potentials of a cluster's segments are W times those of the telling ones; shape [rows × rank], the rows being the
    * segments of a leaf, or the telling ones of the first half and then of the second
    */
-  readonly weights: readonly Float64Array[];
+  readonly weights: readonly Float32Array[];
   /** entries computed */
   readonly evaluations: number;
 }
@@ -32,23 +32,25 @@ export function clusterBases(
   const chosen = Array.from(from, (_, c) => below?.chosen[c] ?? NO_SEGMENTS);
   const weights = Array.from(from, (_, c) => below?.weights[c] ?? NO_WEIGHTS);
   let evaluations = below?.evaluations ?? 0;
+  let block = new Float64Array(0);
   for (const c of clusters) {
     const sample = samples[c]!;
     if (sample.length === 0) continue;
     const first = half[c]!;
     const rows = first < 0 ? order.subarray(from[c]!, to[c]!) : joined(chosen[first]!, chosen[first + 1]!);
-    const block = new Float64Array(rows.length * sample.length);
+    const count = rows.length * sample.length;
+    if (block.length < count) block = new Float64Array(count);
     entries(rows, sample, block);
-    evaluations += block.length;
+    evaluations += count;
     const found = skeletonRows(block, rows.length, sample.length, options.tolerance);
     chosen[c] = found.rows.map((r) => rows[r]!);
-    weights[c] = found.weights;
+    weights[c] = Float32Array.from(found.weights);
   }
   return { chosen, weights, evaluations };
 }
 
 const NO_SEGMENTS = new Int32Array(0);
-const NO_WEIGHTS = new Float64Array(0);
+const NO_WEIGHTS = new Float32Array(0);
 
 function joined(a: Int32Array, b: Int32Array): Int32Array {
   const both = new Int32Array(a.length + b.length);

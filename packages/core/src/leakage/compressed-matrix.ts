@@ -1,6 +1,5 @@
 // The leakage matrix of a large electrode: near blocks whole, far ones through the few segments that tell of a cluster.
 import type { SegmentMesh } from '../geometry/segments.ts';
-import type { Product } from '../numerics/conjugate-gradients.ts';
 import { type BlockRoom, blockRoom, type DenseBlocks, denseBlocks, SHAPE } from '../numerics/dense-blocks.ts';
 import type { SoilImages } from '../soil/image-list.ts';
 import { type BlockPart, type BlockPlan, type CompressionOptions, planBlocks } from './block-plan.ts';
@@ -42,8 +41,11 @@ export function compressedLeakageMatrix(
     systems: matrices.map((part) => part.system),
     bytes: matrices.reduce((sum, part) => sum + part.bytes, 0),
     evaluations: matrices.reduce((sum, part) => sum + part.evaluations, 0),
-    multiply: (x, into) => {
-      for (const part of matrices) part.multiply(x, into);
+    products: {
+      kind: 'here',
+      multiply: () => {
+        for (const part of matrices) part.multiply();
+      },
     },
   });
 }
@@ -91,8 +93,19 @@ export interface PartProducts {
   readonly systems: readonly Float64Array[];
   readonly bytes: number;
   readonly evaluations: number;
-  /** adds the parts' products, each summed apart, in their order */
-  readonly multiply: Product;
+  readonly products: PartsHere | PartsAway;
+}
+
+/** Parts in the room of the rest of the matrix: `multiply` adds their products to its y, in their order. */
+export interface PartsHere {
+  readonly kind: 'here';
+  multiply(): void;
+}
+
+/** Parts elsewhere: `multiply` adds their products of x to y, each summed apart, in their order. */
+export interface PartsAway {
+  readonly kind: 'away';
+  multiply(x: Float64Array, y: Float64Array): Promise<void>;
 }
 
 /** Last step: the matrix, whoever multiplies its parts. @throws NotPositiveDefinite, MemoryRefused */
@@ -120,24 +133,32 @@ export function assembleMatrix(
     stored: (own.bytes + views.bytes + inverse.bytes + parts.bytes) / Float64Array.BYTES_PER_ELEMENT,
     evaluations: leaves.evaluations + bases.evaluations + parts.evaluations,
     multiply(given, into) {
-      const x = new Float64Array(layout.length);
-      const y = new Float64Array(layout.length);
-      gather(order, given, x);
-      views.fold(x);
-      own.multiply(x, y);
+      const [x, y] = [room.x(), room.y()];
+      gather(order, given, x.fill(0));
+      views.fold();
+      y.fill(0);
       const finish = (): void => {
-        views.unfold(y);
+        own.multiply();
+        views.unfold();
         scatter(order, y, into);
       };
-      const others = parts.multiply(x, y);
-      return others === undefined ? finish() : others.then(finish);
+      if (parts.products.kind === 'here') {
+        parts.products.multiply();
+        return finish();
+      }
+      // another product may use the room meanwhile
+      const [sent, sum] = [x.slice(), new Float64Array(layout.length)];
+      return parts.products.multiply(sent, sum).then(() => {
+        x.set(sent);
+        y.set(sum);
+        finish();
+      });
     },
     precondition(given, into) {
-      const r = new Float64Array(layout.length);
-      const z = new Float64Array(layout.length);
-      gather(order, given, r);
-      inverse.apply(r, z);
-      scatter(order, z, into);
+      gather(order, given, room.x());
+      room.y().fill(0);
+      inverse.apply();
+      scatter(order, room.y(), into);
     },
   };
 }

@@ -5,11 +5,11 @@ import { boxDistance, type ClusterTree, diameter } from './cluster-tree.ts';
  * A far cluster is sampled piece by piece, a piece being at most this share of its distance across. With this and the
  * numbers below, errors stay near the tolerance; fewer samples leave ten times as much on electrodes of unequal spacing.
  */
-const PIECE = 0.6;
+const PIECE = 0.7;
 /** Samples of a piece; a leaf that is too large for one gets more, by area. */
 const EACH = 3;
 /** Samples kept of those of the cluster above: what is far from that is farther still from its halves, and smoother. */
-const INHERITED = 48;
+const INHERITED = 32;
 
 /**
  * @param far pairs of far clusters; shape [pairs × 2]

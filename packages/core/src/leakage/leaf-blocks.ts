@@ -35,10 +35,7 @@ export function leafBlocks({ tree }: BlockPlan, entries: LeakageBlocks, clusters
   for (const c of leaves) {
     const n = sizeOf(tree, c);
     const segments = tree.order.subarray(tree.from[c]!, tree.to[c]!);
-    const block = new Float64Array(n * n);
-    entries(segments, segments, block);
-    // one value on both sides of the diagonal, whatever the order of a pair does to its last bit
-    for (let i = 0; i < n; i++) for (let j = 0; j < i; j++) block[j * n + i] = block[i * n + j]!;
+    const block = symmetricBlock(entries, segments);
     own.set(block, square);
     for (let i = 0; i < n; i++) diagonal[place + i] = block[i * (n + 1)]!;
     invertPositive(block, n);
@@ -47,7 +44,44 @@ export function leafBlocks({ tree }: BlockPlan, entries: LeakageBlocks, clusters
     place += n;
     square += n * n;
   }
-  return { leaves, diagonal, current, own, inverse, evaluations: squares };
+  return {
+    leaves,
+    diagonal,
+    current,
+    own,
+    inverse,
+    evaluations: leaves.reduce((sum, c) => sum + computed(sizeOf(tree, c)), 0),
+  };
+}
+
+/** Rows whose entries are asked for together, up to the last one's own column: the rest follows by symmetry. */
+const ROWS = 8;
+
+function symmetricBlock(entries: LeakageBlocks, segments: Int32Array): Float64Array {
+  const n = segments.length;
+  const block = new Float64Array(n * n);
+  const values = new Float64Array(ROWS * n);
+  for (let from = 0; from < n; from += ROWS) {
+    const to = Math.min(n, from + ROWS);
+    entries(segments.subarray(from, to), segments.subarray(0, to), values);
+    for (let i = from; i < to; i++)
+      for (let j = 0; j <= i; j++) {
+        const value = values[(i - from) * to + j]!;
+        block[i * n + j] = value;
+        block[j * n + i] = value;
+      }
+  }
+  return block;
+}
+
+/** Entries computed for a block of n segments with itself. */
+function computed(n: number): number {
+  let sum = 0;
+  for (let from = 0; from < n; from += ROWS) {
+    const to = Math.min(n, from + ROWS);
+    sum += (to - from) * to;
+  }
+  return sum;
 }
 
 /** The leaves of several parts as one. */

@@ -1,14 +1,39 @@
-// The leakage matrix stored in the way that suits its size.
+// The leakage matrix stored in the way that suits its size, and the memory that takes.
 import type { SegmentMesh } from '../geometry/segments.ts';
 import type { SoilImages } from '../soil/image-list.ts';
+import { planBlocks, plannedBytes } from './block-plan.ts';
 import { compressedLeakageMatrix } from './compressed-matrix.ts';
 import { type LeakageMatrix, leakageMatrix, leakingSegments } from './leakage-matrix.ts';
 
-/** Beyond this many leaking segments far blocks are compressed: the whole matrix would take longer to fill and 0.04 GB. */
-export const WHOLE_AT_MOST = 3000;
+/** Segments up to which the whole matrix is filled and solved as fast: both take the same time at 1 700, measured. */
+const WHOLE_AT_MOST = 2000;
+/**
+ * Right-hand sides, one a piece of metal at least, from which a factor of the whole matrix pays up to more segments: it
+ * costs as much as 25 to 55 compressed solutions between 3 000 and 4 000, from operation counts.
+ */
+const MANY = 32;
+const WHOLE_FOR_MANY = 4000;
 
+/** @param pieces of metal not joined to each other, each of which brings a right-hand side */
+export function leakageStorage(segments: number, pieces: number): 'whole' | 'compressed' {
+  return segments <= WHOLE_AT_MOST || (segments <= WHOLE_FOR_MANY && pieces >= MANY) ? 'whole' : 'compressed';
+}
+
+/** @throws NotPositiveDefinite, MemoryRefused */
 export function leakageOperator(mesh: SegmentMesh, images: SoilImages): LeakageMatrix {
-  return leakingSegments(mesh).length <= WHOLE_AT_MOST
+  return leakageStorage(leakingSegments(mesh).length, mesh.componentCount) === 'whole'
     ? leakageMatrix(mesh, images)
     : compressedLeakageMatrix(mesh, images);
+}
+
+/** Of a compressed matrix while it is made, over what stays: bases in doubles, leaves before they are in place. */
+const MAKING = 1.6;
+
+/** Bytes that making and solving a mesh's leakage matrix will take, foreseen without computing an entry; to a fifth. */
+export function leakageBytes(mesh: SegmentMesh): number {
+  const size = leakingSegments(mesh).length;
+  // a whole matrix and its factor
+  if (leakageStorage(size, mesh.componentCount) === 'whole')
+    return size * (size + 1) * Float64Array.BYTES_PER_ELEMENT;
+  return MAKING * plannedBytes(planBlocks(mesh));
 }

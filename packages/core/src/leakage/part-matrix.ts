@@ -20,8 +20,8 @@ export interface PartMatrix {
   readonly evaluations: number;
   /** its share of the packed system of the pieces; plain data */
   readonly system: Float64Array;
-  /** y += its share of the product, both as `vectorLayout` lays them out */
-  multiply(x: Float64Array, y: Float64Array): void;
+  /** y += its share of the product, in the vectors of its room, laid out as `vectorLayout` says */
+  multiply(): void;
 }
 
 /** Where a vector's values lie: segments in the tree's order, then what each cluster's telling segments carry. */
@@ -57,19 +57,23 @@ export function partMatrix(
   const system = new Float64Array((pieces.count * (pieces.count + 1)) / 2);
   let evaluations = 0;
   let block = 0;
-  const filled = (rows: Int32Array, columns: Int32Array): Float64Array => {
-    const values = new Float64Array(rows.length * columns.length);
+  let values = new Float64Array(0);
+  const fill = (rows: Int32Array, columns: Int32Array): void => {
+    const count = rows.length * columns.length;
+    if (values.length < count) values = new Float64Array(count);
     entries(rows, columns, values);
     blocks.set(block++, values);
-    evaluations += values.length;
-    return values;
+    evaluations += count;
   };
   for (const [row, column] of near) {
-    const values = filled(order.subarray(from[row]!, to[row]!), order.subarray(from[column]!, to[column]!));
+    fill(order.subarray(from[row]!, to[row]!), order.subarray(from[column]!, to[column]!));
     const [a, b] = [current.subarray(from[row]!, to[row]!), current.subarray(from[column]!, to[column]!)];
     addShare(system, pieces.first[row]!, pieces.first[column]!, between(a, values, b));
   }
-  for (const pair of far) addFarShare(pieces, pair, filled(chosen[pair[0]]!, chosen[pair[1]]!), system);
+  for (const pair of far) {
+    fill(chosen[pair[0]]!, chosen[pair[1]]!);
+    addFarShare(pieces, pair, values, system);
+  }
   return { bytes: blocks.bytes, evaluations, system, multiply: blocks.multiply };
 }
 

@@ -6,8 +6,8 @@ import type { PartInputs } from './part-matrix.ts';
 
 export interface TwoLevelPreconditioner {
   readonly bytes: number;
-  /** z += M⁻¹ r, by place in the tree's order */
-  apply(r: Float64Array, z: Float64Array): void;
+  /** y += M⁻¹ x of the room's vectors, by place in the tree's order */
+  apply(): void;
 }
 
 /**
@@ -37,8 +37,9 @@ export function twoLevelPreconditioner(
   factorPacked(system, pieces.count);
   return {
     bytes: inverse.bytes + system.byteLength,
-    apply(r, z) {
-      inverse.multiply(r, z);
+    apply() {
+      inverse.multiply();
+      const [r, z] = [room.x(), room.y()];
       const sums = new Float64Array(pieces.count);
       for (let i = 0; i < size; i++) sums[pieceAt[i]!]! += current[i]! * r[i]!;
       const alone = sums.map((sum, p) => sum / conductance[p]!);

@@ -3,14 +3,16 @@ import { blocksBytes } from '../kernels/blocks-bytes.ts';
 import { doublesAt, type Store, storeOf, take } from '../kernels/instance.ts';
 import { foldPlain, LISTED, multiplyPlain, padded, unfoldPlain } from './dense-blocks-plain.ts';
 
-/** What blocks of one matrix share: memory of a compiled kernel, with room for a vector and a product. */
+/** A vector and a sum of products, which blocks read and add to, in the memory that holds the blocks. */
 export interface BlockRoom {
-  /** of the vectors */
   readonly length: number;
-  readonly store: Store | undefined;
-  /** addresses of the vector and the product, where there is a kernel */
-  readonly x: number;
-  readonly y: number;
+  /** views, valid until more blocks are made; shape [length] */
+  x(): Float64Array;
+  y(): Float64Array;
+  /** memory of the kernel, where there is one, with the addresses of the vector, the sum, and a sum apart */
+  readonly kernel:
+    | { readonly store: Store; readonly x: number; readonly y: number; readonly part: number }
+    | undefined;
 }
 
 /** Numbers of a block: first row, rows, first column, columns, 1 where the mirrored block across the diagonal counts too. */
@@ -19,14 +21,14 @@ export const SHAPE = 5;
 export interface DenseBlocks {
   /** taken for the values */
   readonly bytes: number;
-  /** sets a block from doubles row after row */
+  /** sets a block from values row after row, and rounds them */
   set(block: number, values: Float64Array | Float32Array): void;
   /** y += Σ B x, summed apart from y first */
-  multiply(x: Float64Array, y: Float64Array): void;
-  /** v_columns += Bᵀ v_rows, block after block, whose rows and columns must not overlap */
-  fold(v: Float64Array): void;
-  /** v_rows += B v_columns, from the last block to the first, likewise */
-  unfold(v: Float64Array): void;
+  multiply(): void;
+  /** x_columns += Bᵀ x_rows, block after block, whose rows and columns must not overlap */
+  fold(): void;
+  /** y_rows += B y_columns, from the last block to the first, likewise */
+  unfold(): void;
 }
 
 /** Memory that a machine refused. */
@@ -43,11 +45,17 @@ export function blockRoom(length: number): BlockRoom {
   const store = storeOf(blocksBytes);
   // one more than the length: columns of odd count are padded
   const bytes = (length + 1) * Float64Array.BYTES_PER_ELEMENT;
-  const x = store && take(store, bytes);
-  const y = store && take(store, bytes);
-  return x === undefined || y === undefined
-    ? { length, store: undefined, x: 0, y: 0 }
-    : { length, store, x, y };
+  const [x, y, part] = [0, 1, 2].map(() => store && take(store, bytes));
+  if (store === undefined || x === undefined || y === undefined || part === undefined) {
+    const [own, sum] = [new Float64Array(length), new Float64Array(length)];
+    return { length, x: () => own, y: () => sum, kernel: undefined };
+  }
+  return {
+    length,
+    x: () => doublesAt(store.kernel, x, length),
+    y: () => doublesAt(store.kernel, y, length),
+    kernel: { store, x, y, part },
+  };
 }
 
 /** Bytes that blocks will take. @param shapes shape [blocks × SHAPE] */
@@ -58,84 +66,89 @@ export function blockBytes(shapes: Uint32Array): number {
 }
 
 /**
- * Room for blocks, in the kernel's memory or, where there is none or not enough, in plain arrays.
+ * Room for blocks, in the kernel's memory or, where there is none or not enough, in a plain array.
  * @param shapes shape [blocks × SHAPE]
  * @param given values of all blocks, one after the other, where they are known already
  * @throws MemoryRefused
  */
 export function denseBlocks(room: BlockRoom, shapes: Uint32Array, given?: Float32Array): DenseBlocks {
-  const count = shapes.length / SHAPE;
   const bytes = blockBytes(shapes);
   const list = listOf(shapes);
-  const [low, high] = touched(shapes);
-  const { store } = room;
-  const valuesAt = store && take(store, bytes);
-  const listAt = valuesAt === undefined ? undefined : store && take(store, list.byteLength);
-  const inKernel = store !== undefined && valuesAt !== undefined && listAt !== undefined;
-  if (inKernel) {
-    const placed = new Uint32Array(store.kernel.memory.buffer, listAt, list.length);
-    placed.set(list);
-    for (let at = 0; at < list.length; at += LISTED) {
-      placed[at + 3] = padded(list[at + 3]!);
-      placed[at + 4] = valuesAt + list[at + 4]! * Float32Array.BYTES_PER_ELEMENT;
+  const { products, values } = inKernel(room, list, bytes, touched(shapes)) ?? inArray(room, list, bytes);
+  const set = (block: number, from: Float64Array | Float32Array): void => {
+    const at = block * LISTED;
+    const [rows, columns] = [list[at + 1]!, list[at + 3]!];
+    const into = values();
+    let read = 0;
+    for (let r = 0; r < rows; r++) {
+      const row = list[at + 4]! + r * padded(columns);
+      for (let c = 0; c < columns; c++) into[row + c] = from[read++]!;
+    }
+  };
+  if (given !== undefined) {
+    let at = 0;
+    for (let b = 0; b < list.length / LISTED; b++) {
+      set(b, given.subarray(at));
+      at += list[b * LISTED + 1]! * list[b * LISTED + 3]!;
     }
   }
-  const own = inKernel ? undefined : plainValues(bytes);
-  const values = (): Float32Array =>
-    inKernel
-      ? new Float32Array(store.kernel.memory.buffer, valuesAt, bytes / Float32Array.BYTES_PER_ELEMENT)
-      : own!;
-  const inPlace = (name: 'fold' | 'unfold', v: Float64Array): void => {
-    if (!inKernel) {
-      (name === 'fold' ? foldPlain : unfoldPlain)(list, own!, v);
-      return;
-    }
-    const held = doublesAt(store.kernel, room.x, room.length + 1);
-    held.set(v);
-    held[room.length] = 0;
-    store.kernel.call(name, listAt, count, room.x);
-    v.set(held.subarray(0, room.length));
-  };
-  const blocks: DenseBlocks = {
-    bytes,
-    set(block, from) {
-      const [rows, columns] = [shapes[block * SHAPE + 1]!, shapes[block * SHAPE + 3]!];
-      const width = padded(columns);
-      const at = list[block * LISTED + 4]!;
-      const into = values();
-      if (width === columns) into.set(from.subarray(0, rows * columns), at);
-      else
-        for (let r = 0; r < rows; r++)
-          into.set(from.subarray(r * columns, (r + 1) * columns), at + r * width);
-    },
-    multiply(x, y) {
-      let sum: Float64Array;
-      if (inKernel) {
-        const held = doublesAt(store.kernel, room.x, room.length + 1);
-        held.set(x.subarray(low, high), low);
-        held[high] = 0;
-        sum = doublesAt(store.kernel, room.y, room.length + 1).fill(0, low, high + 1);
-        store.kernel.call('multiply', listAt, count, room.x, room.y);
-      } else {
-        sum = new Float64Array(room.length + 1);
-        multiplyPlain(list, own!, x, sum);
-      }
-      for (let i = low; i < high; i++) y[i]! += sum[i]!;
-    },
-    fold: (v) => inPlace('fold', v),
-    unfold: (v) => inPlace('unfold', v),
-  };
-  if (given !== undefined) setAll(blocks, shapes, given);
-  return blocks;
+  return { bytes, set, ...products };
 }
 
-function setAll(blocks: DenseBlocks, shapes: Uint32Array, given: Float32Array): void {
-  let at = 0;
-  for (let b = 0; b < shapes.length / SHAPE; b++) {
-    const next = at + shapes[b * SHAPE + 1]! * shapes[b * SHAPE + 3]!;
-    blocks.set(b, given.subarray(at, next));
-    at = next;
+interface Home {
+  readonly products: Pick<DenseBlocks, 'multiply' | 'fold' | 'unfold'>;
+  values(): Float32Array;
+}
+
+function inKernel(
+  { kernel }: BlockRoom,
+  list: Uint32Array,
+  bytes: number,
+  [low, high]: readonly [number, number],
+): Home | undefined {
+  if (kernel === undefined) return undefined;
+  const { store, x, y, part } = kernel;
+  const valuesAt = take(store, bytes);
+  const listAt = valuesAt === undefined ? undefined : take(store, list.byteLength);
+  if (valuesAt === undefined || listAt === undefined) return undefined;
+  const placed = new Uint32Array(store.kernel.memory.buffer, listAt, list.length);
+  placed.set(list);
+  for (let at = 0; at < list.length; at += LISTED) {
+    placed[at + 3] = padded(list[at + 3]!);
+    placed[at + 4] = valuesAt + list[at + 4]! * Float32Array.BYTES_PER_ELEMENT;
   }
+  const count = list.length / LISTED;
+  const size = bytes / Float32Array.BYTES_PER_ELEMENT;
+  let view = new Float32Array(store.kernel.memory.buffer, valuesAt, size);
+  return {
+    products: {
+      multiply: () => void store.kernel.call('multiply', listAt, count, x, y, part, low, high),
+      fold: () => void store.kernel.call('fold', listAt, count, x),
+      unfold: () => void store.kernel.call('unfold', listAt, count, y),
+    },
+    values: () => {
+      // growth of the memory moves its buffer
+      if (view.buffer !== store.kernel.memory.buffer) view = new Float32Array(store.kernel.memory.buffer, valuesAt, size); // biome-ignore format: one line
+      return view;
+    },
+  };
+}
+
+function inArray(room: BlockRoom, list: Uint32Array, bytes: number): Home {
+  const values = plainValues(bytes);
+  return {
+    products: {
+      multiply: () => {
+        const part = new Float64Array(room.length);
+        multiplyPlain(list, values, room.x(), part);
+        const y = room.y();
+        for (let i = 0; i < part.length; i++) y[i]! += part[i]!;
+      },
+      fold: () => foldPlain(list, values, room.x()),
+      unfold: () => unfoldPlain(list, values, room.y()),
+    },
+    values: () => values,
+  };
 }
 
 /** Shapes with the place of each block's values, counted in values, before the last number. */
@@ -152,8 +165,9 @@ function listOf(shapes: Uint32Array): Uint32Array {
 }
 
 /** First place that any block reads or writes, and the one after the last. */
-function touched(shapes: Uint32Array): [low: number, high: number] {
-  let low = shapes.length === 0 ? 0 : Number.POSITIVE_INFINITY;
+function touched(shapes: Uint32Array): readonly [low: number, high: number] {
+  if (shapes.length === 0) return [0, 0];
+  let low = Number.POSITIVE_INFINITY;
   let high = 0;
   for (let at = 0; at < shapes.length; at += SHAPE) {
     low = Math.min(low, shapes[at]!, shapes[at + 2]!);

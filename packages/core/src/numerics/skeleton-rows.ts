@@ -9,10 +9,13 @@ export interface RowSkeleton {
   readonly weights: Float64Array;
 }
 
+/** Least tolerance: elimination runs in single precision, which leaves a few of its units in the last place, 6e-8. */
+export const LEAST_TOLERANCE = 5e-7;
+
 /**
  * Chooses rows by Gaussian elimination with full pivoting until what is left is small; by the compiled kernel where
  * there is one.
- * @param a shape [count × columns], row after row; may be overwritten
+ * @param a shape [count × columns], row after row
  * @param tolerance of the largest entry left, of the largest entry
  */
 export function skeletonRows(
@@ -21,59 +24,67 @@ export function skeletonRows(
   columns: number,
   tolerance: number,
 ): RowSkeleton {
+  const least = Math.max(tolerance, LEAST_TOLERANCE);
+  const found = byKernel(a, count, columns, least) ?? plain(a, count, columns, least);
+  const { rank, order, lower } = found;
   const most = Math.min(count, columns);
-  const { rank, order, lower } =
-    eliminatedByKernel(a, count, columns, most, tolerance) ?? eliminated(a, count, columns, most, tolerance);
-  return { rows: order.slice(0, rank), weights: weightsOf(order, lower, count, most, rank) };
+  const weights = new Float64Array(count * rank);
+  for (let k = 0; k < count; k++) {
+    const into = order[k]! * rank;
+    if (k < rank) weights[into + k] = 1;
+    else for (let j = 0; j < rank; j++) weights[into + j] = lower[k * most + j]!;
+  }
+  return { rows: order.slice(0, rank), weights };
 }
 
 interface Elimination {
   readonly rank: number;
   /** rows, the chosen ones first */
   readonly order: Int32Array;
-  /** multipliers by place in `order`; shape [count × most] */
+  /** by place in `order`, the lesser of count and columns a row: multipliers of the chosen rows, then weights of the rest */
   readonly lower: Float64Array;
 }
 
-function eliminatedByKernel(
+/** Columns that the kernel takes at once. */
+const LANES = 4;
+
+function byKernel(
   a: Float64Array,
   count: number,
   columns: number,
-  most: number,
   tolerance: number,
 ): Elimination | undefined {
   const kernel = kernelOf(blocksBytes);
   if (kernel === undefined) return undefined;
-  const even = columns + (columns & 1);
-  const at = place(kernel, [even === columns ? a : widened(a, count, columns, even)], count * (most + 2));
+  const most = Math.min(count, columns);
+  const width = Math.ceil(columns / LANES) * LANES;
+  const at = place(kernel, [], count * (width + most + 1 + 1));
   if (at === undefined) return undefined;
-  const [rows = 0, lower = 0] = at;
+  const [rows = 0] = at;
+  const held = doublesAt(kernel, rows, count * width);
+  if (width === columns) held.set(a.subarray(0, count * columns));
+  else
+    for (let r = 0; r < count; r++) {
+      held.set(a.subarray(r * columns, (r + 1) * columns), r * width);
+      held.fill(0, r * width + columns, (r + 1) * width);
+    }
+  const lower = rows + held.byteLength;
   const largest = lower + count * most * Float64Array.BYTES_PER_ELEMENT;
   const order = largest + count * Float64Array.BYTES_PER_ELEMENT;
-  const rank = kernel.call('skeleton', rows, count, even, tolerance, most, order, lower, largest);
+  const rank = kernel.call('skeleton', rows, count, width, tolerance, most, order, lower, largest);
   return {
     rank,
-    order: new Int32Array(kernel.memory.buffer, order, count).slice(),
+    order: new Int32Array(kernel.memory.buffer, order, count),
     lower: doublesAt(kernel, lower, count * most),
   };
 }
 
-function widened(a: Float64Array, count: number, columns: number, width: number): Float64Array {
-  const wide = new Float64Array(count * width);
-  for (let r = 0; r < count; r++) wide.set(a.subarray(r * columns, (r + 1) * columns), r * width);
-  return wide;
-}
-
-function eliminated(
-  a: Float64Array,
-  count: number,
-  columns: number,
-  most: number,
-  tolerance: number,
-): Elimination {
+function plain(given: Float64Array, count: number, columns: number, tolerance: number): Elimination {
+  const a = Float32Array.from(given.subarray(0, count * columns));
+  const most = Math.min(count, columns);
   const order = Int32Array.from({ length: count }, (_, r) => r);
   const lower = new Float64Array(count * most);
-  const largest = Float64Array.from({ length: count }, (_, r) => largestOf(a, r * columns, columns));
+  const largest = Float32Array.from({ length: count }, (_, r) => largestOf(a, r * columns, columns));
   let rank = 0;
   let first = 0;
   for (; rank < most; rank++) {
@@ -95,46 +106,22 @@ function eliminated(
     const pivot = a[start + column]!;
     for (let k = rank + 1; k < count; k++) {
       const own = order[k]! * columns;
-      const share = a[own + column]! / pivot;
+      const share = Math.fround(a[own + column]! / pivot);
       lower[k * most + rank] = share;
-      let left = 0;
-      for (let c = 0; c < columns; c++) {
-        const value = a[own + c]! - share * a[start + c]!;
-        a[own + c] = value;
-        left = Math.max(left, Math.abs(value));
-      }
-      largest[order[k]!] = left;
+      for (let c = 0; c < columns; c++) a[own + c]! -= Math.fround(share * a[start + c]!);
+      largest[order[k]!] = largestOf(a, own, columns);
     }
   }
+  for (let k = rank; k < count; k++)
+    for (let j = rank - 1; j > 0; j--) {
+      const weight = lower[k * most + j]!;
+      for (let i = 0; i < j; i++) lower[k * most + i]! -= weight * lower[j * most + i]!;
+    }
   return { rank, order, lower };
 }
 
-function largestOf(a: Float64Array, from: number, columns: number): number {
+function largestOf(a: Float32Array, from: number, columns: number): number {
   let most = 0;
   for (let c = from; c < from + columns; c++) most = Math.max(most, Math.abs(a[c]!));
   return most;
-}
-
-/** W = L_rest L_chosen⁻¹, L the unit lower triangle of multipliers. */
-function weightsOf(
-  order: Int32Array,
-  lower: Float64Array,
-  count: number,
-  most: number,
-  rank: number,
-): Float64Array {
-  const weights = new Float64Array(count * rank);
-  for (let k = 0; k < count; k++) {
-    const into = order[k]! * rank;
-    if (k < rank) {
-      weights[into + k] = 1;
-      continue;
-    }
-    for (let j = rank - 1; j >= 0; j--) {
-      let value = lower[k * most + j]!;
-      for (let i = j + 1; i < rank; i++) value -= weights[into + i]! * lower[i * most + j]!;
-      weights[into + j] = value;
-    }
-  }
-  return weights;
 }
