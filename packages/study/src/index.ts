@@ -39,6 +39,7 @@ export type * from './outcome.ts';
 export type * from './results.ts';
 export { fieldAt } from './run/field-at.ts';
 export { layeredSoil } from './run/prepare.ts';
+export { type SolveMemory, solveMemory } from './run/solve-memory.ts';
 export { type SolveOptions, solveStudy } from './run/solve-study.ts';
 export type { FieldPoint, FieldValue, SolvedField } from './run/solved-field.ts';
 export { fitSurvey, type SurveyFit } from './run/survey-fit.ts';

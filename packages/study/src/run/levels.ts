@@ -3,13 +3,11 @@ import {
   type Box,
   type GraphSolution,
   interfaceDepths,
-  leakageOperator,
   MODEL_FLOOR,
   refinementUncertainty,
   type SegmentMesh,
   type SoilImages,
   segmentMesh,
-  soilImages,
   solveGraph,
   type WorstPlace,
   type WorstStep,
@@ -22,6 +20,7 @@ import { assessedBox } from './extent.ts';
 import { type Field, type Level, levelOf, stepAt, touchAt } from './level.ts';
 import { type Found, look } from './look.ts';
 import type { Prepared } from './prepare.ts';
+import { noMemory, type SolveMemory } from './solve-memory.ts';
 import type { Footing } from './zones.ts';
 
 /** A worst place with its numerical uncertainty. */
@@ -90,11 +89,13 @@ export interface LevelsOptions {
   readonly progress: Progress;
   /** given what the first two meshes tell, with its uncertainty, before the finer ones are solved */
   readonly onFirst?: ((first: Solved) => void | Promise<void>) | undefined;
+  /** what earlier computations left; nothing where undefined */
+  readonly memory?: SolveMemory | undefined;
 }
 
 export async function solveLevels(prepared: Prepared, options: LevelsOptions): Promise<Solved> {
-  const { progress, onFirst } = options;
-  const images = soilImages(prepared.soil);
+  const { progress, onFirst, memory = noMemory } = options;
+  const images = memory.images(prepared.soil);
   const interfaces = interfaceDepths(prepared.soil);
   const distinct = [...new Set(prepared.injectionNodes)];
   const box = assessedBox(prepared);
@@ -108,7 +109,7 @@ export async function solveLevels(prepared: Prepared, options: LevelsOptions): P
     const model = prepared.loaded.study.metal_model ?? DEFAULT_METAL_MODEL;
     const graph = await solveGraph(
       mesh,
-      leakageOperator(mesh, images),
+      memory.matrix(mesh, images, level),
       distinct,
       prepared.resistancePerMetre,
       model,

@@ -14,6 +14,7 @@ import { type Progress, solveLevels } from './levels.ts';
 import { limitsOf } from './limits-of.ts';
 import { layeredSoil, type Prepared } from './prepare.ts';
 import { layersOf } from './soil-results.ts';
+import type { SolveMemory } from './solve-memory.ts';
 
 /** Name under which the soil of the study itself stands in the envelope. */
 export const AS_GIVEN = 'as given';
@@ -24,19 +25,28 @@ export interface Seasonal {
   readonly warnings: readonly ResultsWarning[];
 }
 
-export async function seasonResults(prepared: Prepared, progress: Progress): Promise<Seasonal[]> {
+export async function seasonResults(
+  prepared: Prepared,
+  progress: Progress,
+  memory: SolveMemory,
+): Promise<Seasonal[]> {
   const results: Seasonal[] = [];
   for (const season of prepared.loaded.study.seasons ?? [])
-    results.push(await seasonResult(prepared, season, progress));
+    results.push(await seasonResult(prepared, season, progress, memory));
   return results;
 }
 
-async function seasonResult(prepared: Prepared, season: SeasonInput, progress: Progress): Promise<Seasonal> {
+async function seasonResult(
+  prepared: Prepared,
+  season: SeasonInput,
+  progress: Progress,
+  memory: SolveMemory,
+): Promise<Seasonal> {
   const { study } = prepared.loaded;
   const soil = soilIn(season, prepared.soil);
   const solved = await solveLevels(
     { ...prepared, soil },
-    { progress: (stage, share) => progress(`${season.name}: ${stage}`, share) },
+    { progress: (stage, share) => progress(`${season.name}: ${stage}`, share), memory },
   );
   const limits = limitsOf(study, soil.layers[0]!.resistivity);
   const first = solved.units[solved.unitOfCase[0]!]!;

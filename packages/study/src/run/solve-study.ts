@@ -6,12 +6,13 @@ import { consequenceOf } from './consequence.ts';
 import { caseFigures, planOf, segmentTable } from './drawing.ts';
 import { equivalentUniform } from './equivalent-uniform.ts';
 import { assessedBox } from './extent.ts';
-import { type Ground, groundOf } from './ground-of.ts';
+import type { Ground } from './ground-of.ts';
 import { type Progress, type Solved, solveLevels } from './levels.ts';
 import { limitsOf } from './limits-of.ts';
 import { type Prepared, prepare } from './prepare.ts';
 import { type Beside, NOTHING_BESIDE, resultsOf } from './results-of.ts';
 import { seasonResults } from './seasons.ts';
+import { noMemory, type SolveMemory } from './solve-memory.ts';
 import { type SolvedField, solvedField } from './solved-field.ts';
 
 export interface SolveOptions {
@@ -24,17 +25,21 @@ export interface SolveOptions {
   readonly onFirst?: (first: Outcome) => void | Promise<void>;
   /** given the field of the solved study, for lines and places that are asked for later; it keeps the solution in memory */
   readonly onField?: (field: SolvedField) => void;
+  /** what earlier computations of an edited study left; leave it out for numbers that are recorded */
+  readonly memory?: SolveMemory;
 }
 
 /** @throws InputFaults when the drawing has faults; SolverStalled or NotPositiveDefinite for a fault of the program */
 export async function solveStudy(loaded: LoadedStudy, options: SolveOptions = {}): Promise<Outcome> {
   const progress = options.onProgress ?? (() => {});
   await progress('joining conductors', 0);
-  const ground = groundOf(loaded);
+  const { memory = noMemory } = options;
+  const ground = memory.ground(loaded);
   const prepared = prepare(loaded, ground.soil);
   const { onFirst } = options;
   const solved = await solveLevels(prepared, {
     progress,
+    memory,
     onFirst: onFirst && ((first) => onFirst(outcomeOf(prepared, ground, first, NOTHING_BESIDE))),
   });
   const base = judged(prepared, solved).map(({ result }) => result);
@@ -46,7 +51,7 @@ export async function solveStudy(loaded: LoadedStudy, options: SolveOptions = {}
   );
   const { fitted } = ground;
   return outcomeOf(prepared, ground, solved, {
-    seasonal: await seasonResults(prepared, progress),
+    seasonal: await seasonResults(prepared, progress, memory),
     ground: fitted && {
       fit: fitted.fit,
       consequence: await consequenceOf(prepared, solved, base, fitted.members, progress),
