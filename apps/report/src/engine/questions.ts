@@ -8,7 +8,7 @@ import {
   writePack,
 } from '@ohmstead/pack';
 import { sheetHtml } from '@ohmstead/sheet';
-import { type Outcome, programVersion } from '@ohmstead/study';
+import { type Outcome, programVersion, solveStudy } from '@ohmstead/study';
 import { besideRows } from './beside-rows.ts';
 import type { Question, Reply } from './messages.ts';
 import type { SolvedRun } from './solved-run.ts';
@@ -24,7 +24,9 @@ export async function replyTo(
 ): Promise<{ readonly reply: Reply; readonly transfer: Transferable[] }> {
   switch (question.kind) {
     case 'pack': {
-      const pack = new Uint8Array(await writePack(loaded, outcome, programVersion, { scripts }));
+      // a record holds nothing that was taken over from the study before an edit
+      const recorded = await solveStudy(loaded);
+      const pack = new Uint8Array(await writePack(loaded, recorded, programVersion, { scripts }));
       return { reply: { kind: 'pack', pack }, transfer: [pack.buffer] };
     }
     case 'check':

@@ -1,6 +1,6 @@
 // The engine's side: one run at a time, which hears between its stages that it is no longer wanted.
 import type { PageScripts } from '@ohmstead/pack';
-import { InputFaults, loadStudy, type SolvedField, solveStudy } from '@ohmstead/study';
+import { InputFaults, loadStudy, type SolvedField, solveMemory, solveStudy } from '@ohmstead/study';
 import type { EngineAnswer, EngineRequest } from './messages.ts';
 import { replyTo } from './questions.ts';
 import type { SolvedRun } from './solved-run.ts';
@@ -22,6 +22,7 @@ export function engineServer({ say, pause }: ServerTools): (request: EngineReque
   let wanted: number | undefined;
   let solved: SolvedRun | undefined;
   let scripts: PageScripts | undefined;
+  const memory = solveMemory();
   let before: Promise<void> = Promise.resolve();
 
   const solve = async (run: number, files: ReadonlyMap<string, Uint8Array>): Promise<void> => {
@@ -32,6 +33,7 @@ export function engineServer({ say, pause }: ServerTools): (request: EngineReque
     const loaded = loadStudy(await studySource(files));
     let field: SolvedField | undefined;
     const outcome = await solveStudy(loaded, {
+      memory,
       onProgress: async (stage, share) => {
         say({ kind: 'progress', run, stage, share });
         await pause();
