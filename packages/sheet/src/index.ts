@@ -12,12 +12,23 @@ export {
 export { pathText, sectionOfInput } from './desk/study-path.ts';
 export { type FigureFile, figures } from './figure/figures.tsx';
 export { Hatch } from './figure/hatch.tsx';
+export { LeakageFigure, leakageClassText, leakageThickness, rodRadius } from './figure/leakage.tsx';
+export { MapFigure } from './figure/map.tsx';
 export { MapGround } from './figure/map-ground.tsx';
+export { MapKey } from './figure/map-key.tsx';
+export { PlanFigure, planPlate } from './figure/plan.tsx';
 export { ProfileFigure } from './figure/profile.tsx';
+export { titles } from './figure/titles.ts';
 export { lengthUnit, place } from './format/length.ts';
 export { measured, percent, quantity } from './format/number.ts';
 export { quantityText } from './format/quantity-text.ts';
 export { latticeExtent } from './geometry/contours.ts';
+export {
+  type ConductorCurrent,
+  conductorCurrents,
+  type LeakageDrawing,
+  leakageDrawing,
+} from './geometry/leakage.ts';
 export { assessedFor, type MapDrawing, type MapKind, mapDrawing } from './geometry/map-drawing.ts';
 export { type Plate, plateOf } from './geometry/plate.ts';
 export { roundLength, ticksIn } from './geometry/ticks.ts';

@@ -211,7 +211,7 @@ export function copyConductors(draft: Draft, rows: readonly RowOrigin[], shift: 
 }
 
 /** A free id after that of the original, `EW-01` → `EW-01-2`; none where the original has none. */
-function copyId(id: string | undefined, taken: ReadonlySet<string>): string | undefined {
+export function copyId(id: string | undefined, taken: ReadonlySet<string>): string | undefined {
   if (id === undefined) return undefined;
   for (let n = 2; ; n++) {
     const tried = `${id}-${n}`;

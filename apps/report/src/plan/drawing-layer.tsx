@@ -11,18 +11,29 @@ export interface DrawingLayerProps {
   /** meshes each way of a mesh that is drawn */
   readonly meshes: readonly [number, number];
   readonly profile: readonly [Point, Point] | undefined;
+  /** name of what the pointer is on */
+  readonly name: string | undefined;
   readonly view: View;
   readonly size: Size;
 }
 
-export function DrawingLayer({ tool, pointer, band, meshes, profile, view, size }: DrawingLayerProps): VNode {
+export function DrawingLayer(props: DrawingLayerProps): VNode {
+  const { tool, pointer, band, meshes, profile, name, view, size } = props;
   const on = (place: Point): string => toScreen(view, size, place).join(' ');
   const { taken } = tool;
   const [first] = taken;
   const open = pointer === undefined ? taken : [...taken, pointer];
   return (
     <g class="drawing">
-      {profile !== undefined && <path class="profile-line" d={`M${on(profile[0])}L${on(profile[1])}`} />}
+      {profile !== undefined && (
+        <>
+          <path class="profile-line" d={`M${on(profile[0])}L${on(profile[1])}`} />
+          {profile.map((place, k) => {
+            const [x, y] = toScreen(view, size, place);
+            return <circle key={k} class="taken" cx={x} cy={y} r={3.5} />;
+          })}
+        </>
+      )}
       {tool.tool === 'mesh' && first !== undefined && pointer !== undefined ? (
         <path class="about" d={meshPath(first, pointer, meshes, on)} />
       ) : (
@@ -33,7 +44,10 @@ export function DrawingLayer({ tool, pointer, band, meshes, profile, view, size 
         return <circle key={`${x} ${y}`} class="taken" cx={x} cy={y} r={3.5} />;
       })}
       {band !== undefined && <path class="band" d={rectangle(band[0], band[1], on)} />}
-      {pointer !== undefined && tool.tool !== 'select' && <Cross at={toScreen(view, size, pointer)} />}
+      {pointer !== undefined && <Cross at={toScreen(view, size, pointer)} faint={tool.tool === 'select'} />}
+      {pointer !== undefined && name !== undefined && (
+        <Name at={toScreen(view, size, pointer)} text={name} size={size} />
+      )}
     </g>
   );
 }
@@ -60,6 +74,27 @@ function meshPath(
   return lines.join('');
 }
 
-function Cross({ at: [x, y] }: { readonly at: Point }): VNode {
-  return <path class="cross" d={`M${x - 9} ${y}h18M${x} ${y - 9}v18`} />;
+interface CrossProps {
+  readonly at: Point;
+  readonly faint: boolean;
+}
+
+function Cross({ at: [x, y], faint }: CrossProps): VNode {
+  return <path class={faint ? 'cross faint' : 'cross'} d={`M${x - 9} ${y}h18M${x} ${y - 9}v18`} />;
+}
+
+interface NameProps {
+  readonly at: Point;
+  readonly text: string;
+  readonly size: Size;
+}
+
+/** Beside the pointer, on the side that has room. */
+function Name({ at: [x, y], text, size }: NameProps): VNode {
+  const right = x < size.width / 2;
+  return (
+    <text class={right ? 'halo' : 'halo end'} x={right ? x + 12 : x - 12} y={y < 24 ? y + 20 : y - 9}>
+      {text}
+    </text>
+  );
 }

@@ -31,7 +31,7 @@ export function FrameLayer({ view, size, units }: FrameLayerProps): VNode {
           <g key={x}>
             <line class="tick" x1={px} x2={px} y1={size.height} y2={size.height - 5} />
             <text class="soft halo mid" x={px} y={size.height - 9}>
-              {x.toFixed(digits)}
+              {written(x, digits)}
             </text>
           </g>
         );
@@ -42,7 +42,7 @@ export function FrameLayer({ view, size, units }: FrameLayerProps): VNode {
           <g key={y}>
             <line class="tick" x1={0} x2={5} y1={py} y2={py} />
             <text class="soft halo" x={9} y={py} dy="0.35em">
-              {y.toFixed(digits)}
+              {written(y, digits)}
             </text>
           </g>
         );
@@ -51,4 +51,8 @@ export function FrameLayer({ view, size, units }: FrameLayerProps): VNode {
       <text class="halo end" x={size.width - 14} y={14}>{`${bar}\u202f${sign}`}</text>
     </g>
   );
+}
+
+function written(value: number, digits: number): string {
+  return value.toFixed(digits).replace('-', '\u2212');
 }

@@ -2,17 +2,24 @@
 import type { Point } from '@ohmstead/study';
 import type { PlanItem } from './plan-conductors.ts';
 
-/** Place on a conductor in plan that is nearest to a point, and the distance, m. */
-export function nearestOn(
-  { conductor }: PlanItem,
-  [x, y]: Point,
-): { readonly at: Point; readonly distance: number } {
-  const { x1, y1, x2, y2 } = conductor;
+export interface Nearest {
+  readonly at: Point;
+  /** m */
+  readonly distance: number;
+}
+
+/** Place on a straight line between two others that is nearest to a point. */
+export function nearestOnLine([x1, y1]: Point, [x2, y2]: Point, [x, y]: Point): Nearest {
   const [dx, dy] = [x2 - x1, y2 - y1];
   const square = dx * dx + dy * dy;
   const share = square === 0 ? 0 : Math.min(1, Math.max(0, ((x - x1) * dx + (y - y1) * dy) / square));
   const at: Point = [x1 + share * dx, y1 + share * dy];
   return { at, distance: Math.hypot(x - at[0], y - at[1]) };
+}
+
+/** Place on a conductor in plan that is nearest to a point. */
+export function nearestOn({ conductor: { x1, y1, x2, y2 } }: PlanItem, place: Point): Nearest {
+  return nearestOnLine([x1, y1], [x2, y2], place);
 }
 
 /** The conductor under a place; a rod before the conductors that it stands on. */

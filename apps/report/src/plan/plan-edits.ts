@@ -6,6 +6,7 @@ import {
   addConductors,
   conductorsAt,
   copyConductors,
+  copyId,
   deleteConductors,
   idsOf,
   moveConductors,
@@ -15,6 +16,8 @@ import {
 import type { Draft } from '../desk/draft.ts';
 import { conductorsLabel, moveLabel } from '../desk/labels.ts';
 import { line, type Make, mesh, rod } from '../desk/shapes.ts';
+import { areaWords } from './plan-areas.ts';
+import type { PlanItem } from './plan-conductors.ts';
 import type { Drawn } from './tool-state.ts';
 
 /** What is drawn next is made of this. */
@@ -26,6 +29,9 @@ export interface Making extends Make {
   readonly nx: number;
   readonly ny: number;
 }
+
+/** Of a study without metal. Common practice, no source. */
+const FIRST_MAKING: Making = { depth: 0.6, diameter: 0.012, material: undefined, rodLength: 3, nx: 4, ny: 4 };
 
 /** An edit of the draft, with the rows that it leaves chosen. */
 export interface PlanEdit {
@@ -61,7 +67,7 @@ export function drawnInto(draft: Draft, drawn: Drawn, making: Making): PlanEdit 
     case 'area':
       return {
         draft: addPolygon(draft, drawn.area, drawn.corners),
-        label: `${drawn.area} area drawn`,
+        label: `${areaWords(drawn.area)} drawn`,
         rows: [],
       };
   }
@@ -77,6 +83,17 @@ export function copied(draft: Draft, rows: readonly RowOrigin[], shift: Shift): 
     ...copyConductors(draft, rows, shift),
     label: conductorsLabel(conductorsAt(draft, rows), 'copied'),
   };
+}
+
+/** Puts in conductors that were copied from this or an earlier draft, shifted; an id that is taken is followed by a number. */
+export function pasted(draft: Draft, conductors: readonly Conductor[], { dx, dy }: Shift): PlanEdit {
+  const ids = new Set(idsOf(draft));
+  const placed = conductors.map((one): Conductor => {
+    const id = one.id !== undefined && ids.has(one.id) ? copyId(one.id, ids) : one.id;
+    if (id !== undefined) ids.add(id);
+    return { ...one, id, x1: one.x1 + dx, y1: one.y1 + dy, x2: one.x2 + dx, y2: one.y2 + dy };
+  });
+  return { ...addConductors(draft, placed), label: conductorsLabel(conductors, 'copied') };
 }
 
 export function deleted(draft: Draft, rows: readonly RowOrigin[]): PlanEdit {
@@ -109,5 +126,21 @@ export function laidAt(draft: Draft, rows: readonly RowOrigin[], depth: number):
     })),
     label: conductorsLabel(conductorsAt(draft, rows), 'changed'),
     rows,
+  };
+}
+
+/** What is drawn first is made as the last conductor and rod of the study that do not float. */
+export function makingOf(items: readonly PlanItem[], floating: ReadonlySet<string>): Making {
+  const own = items.filter(({ conductor }) => !floating.has(conductor.electrode ?? 'main'));
+  const last = own.findLast(({ rod }) => !rod)?.conductor;
+  const lastRod = own.findLast((item) => item.rod)?.conductor;
+  if (last === undefined) return FIRST_MAKING;
+  return {
+    ...FIRST_MAKING,
+    depth: last.depth1,
+    diameter: last.diameter,
+    material: last.material,
+    electrode: last.electrode,
+    rodLength: lastRod === undefined ? FIRST_MAKING.rodLength : Math.abs(lastRod.depth2 - lastRod.depth1),
   };
 }

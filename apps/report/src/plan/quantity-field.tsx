@@ -7,6 +7,8 @@ import { quantityText } from '../desk/quantity-text.ts';
 
 export interface QuantityFieldProps {
   readonly label: string;
+  /** completes the label for those who hear it */
+  readonly of?: string;
   readonly kind: QuantityKind;
   /** in SI; undefined where nothing is to be shown */
   readonly value: number | undefined;
@@ -14,7 +16,7 @@ export interface QuantityFieldProps {
   readonly take: (value: number) => void;
 }
 
-export function QuantityField({ label, kind, value, units, take }: QuantityFieldProps): VNode {
+export function QuantityField({ label, of, kind, value, units, take }: QuantityFieldProps): VNode {
   const id = useId();
   const [typed, setTyped] = useState<string>();
   const [complaint, setComplaint] = useState<string>();
@@ -35,7 +37,8 @@ export function QuantityField({ label, kind, value, units, take }: QuantityField
   };
   return (
     <label class="plan-field">
-      {label}{' '}
+      {label}
+      {of !== undefined && <span class="unseen"> of {of}</span>}{' '}
       <input
         class="in"
         size={7}

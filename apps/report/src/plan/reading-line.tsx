@@ -2,6 +2,7 @@
 import { type MapKind, percent, place, quantity } from '@ohmstead/sheet';
 import type { DisplayUnits, Outcome, Point } from '@ohmstead/study';
 import type { VNode } from 'preact';
+import { useEffect, useState } from 'preact/hooks';
 import { readingAt } from './reading.ts';
 
 export interface ReadingLineProps {
@@ -25,10 +26,23 @@ export function readingText({ outcome, caseIndex, at, why, units }: ReadingLineP
   return `${told}: potential ${quantity(reading.potential, 'V')}, touch ${share(reading.touch, 'touch')}, step ${share(reading.step, 'step')}`;
 }
 
+/** Pause after which a reading is spoken, ms: a moving pointer is not talked over. */
+const SPOKEN_AFTER_MS = 300;
+
 export function ReadingLine(props: ReadingLineProps): VNode {
+  const text = readingText(props);
+  const [spoken, speak] = useState('');
+  useEffect(() => {
+    if (props.at === undefined) return;
+    const timer = setTimeout(() => speak(text), SPOKEN_AFTER_MS);
+    return () => clearTimeout(timer);
+  }, [text]);
   return (
-    <p class="plan-reading" aria-live="polite">
-      {readingText(props)}
-    </p>
+    <>
+      <p class="plan-reading">{text}</p>
+      <p class="unseen" aria-live="polite">
+        {spoken}
+      </p>
+    </>
   );
 }

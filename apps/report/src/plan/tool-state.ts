@@ -1,9 +1,12 @@
 // The instrument's tools as a value: which one is held, the points it has taken, and what it is about to draw.
 import type { Point } from '@ohmstead/study';
+import type { AreaKind } from '../desk/areas.ts';
 
-export type Tool = 'select' | 'conductor' | 'rod' | 'mesh' | 'profile' | 'touch area' | 'step area';
+type AreaTool = 'touch area' | 'step area' | 'covered area';
+export type Tool = 'select' | 'conductor' | 'rod' | 'mesh' | 'profile' | AreaTool;
 export const TOOLS: readonly Tool[] = [
-  ...(['select', 'conductor', 'rod', 'mesh', 'profile', 'touch area', 'step area'] as const),
+  ...(['select', 'conductor', 'rod', 'mesh', 'profile'] as const),
+  ...(['touch area', 'step area', 'covered area'] as const),
 ];
 
 export interface ToolState {
@@ -18,7 +21,7 @@ export type Drawn =
   | { readonly kind: 'rod'; readonly at: Point }
   | { readonly kind: 'mesh'; readonly from: Point; readonly to: Point }
   | { readonly kind: 'profile'; readonly from: Point; readonly to: Point }
-  | { readonly kind: 'area'; readonly area: 'touch' | 'step'; readonly corners: readonly Point[] };
+  | { readonly kind: 'area'; readonly area: AreaKind; readonly corners: readonly Point[] };
 
 export interface Taking {
   readonly state: ToolState;
@@ -56,7 +59,8 @@ export function take(state: ToolState, at: Point): Taking {
         return { state, drawn: undefined };
       return { state: hold(tool), drawn: { kind: tool, from: last, to: at } };
     case 'touch area':
-    case 'step area': {
+    case 'step area':
+    case 'covered area': {
       const [first] = taken;
       const closes = first !== undefined && first[0] === at[0] && first[1] === at[1];
       return closes ? close(state) : { state: again ? state : more, drawn: undefined };
@@ -64,13 +68,15 @@ export function take(state: ToolState, at: Point): Taking {
   }
 }
 
+const AREA_OF: Readonly<Partial<Record<Tool, AreaKind>>> = {
+  'touch area': 'touch',
+  'step area': 'step',
+  'covered area': 'covering',
+};
+
 /** Ends what is being drawn: an area with enough corners is closed, anything else is dropped. */
-export function close(state: ToolState): Taking {
-  const { tool, taken } = state;
-  const isArea = tool === 'touch area' || tool === 'step area';
-  if (!isArea || taken.length < LEAST_CORNERS) return { state: hold(tool), drawn: undefined };
-  return {
-    state: hold(tool),
-    drawn: { kind: 'area', area: tool === 'touch area' ? 'touch' : 'step', corners: taken },
-  };
+export function close({ tool, taken }: ToolState): Taking {
+  const area = AREA_OF[tool];
+  const enough = area !== undefined && taken.length >= LEAST_CORNERS;
+  return { state: hold(tool), drawn: enough ? { kind: 'area', area, corners: taken } : undefined };
 }

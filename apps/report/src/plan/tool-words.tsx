@@ -1,18 +1,17 @@
 // What the plan shows and what is in hand, as words in a line.
-import type { MapKind } from '@ohmstead/sheet';
 import type { DisplayUnits, Outcome } from '@ohmstead/study';
 import type { VNode } from 'preact';
 import { QuantityField } from './quantity-field.tsx';
+import { SHOWN, type Shown } from './shown.ts';
 import { TOOLS, type Tool } from './tool-state.ts';
 import { Word } from './word.tsx';
 
-const KINDS: readonly MapKind[] = ['touch', 'step', 'potential'];
 const ENLARGED = 1.5;
 
 export interface ToolWordsProps {
   readonly outcome: Outcome;
-  readonly kind: MapKind;
-  readonly setKind: (kind: MapKind) => void;
+  readonly shown: Shown;
+  readonly show: (shown: Shown) => void;
   readonly caseIndex: number;
   readonly setCase: (index: number) => void;
   readonly tool: Tool;
@@ -26,13 +25,13 @@ export interface ToolWordsProps {
 }
 
 export function ToolWords(props: ToolWordsProps): VNode {
-  const { outcome, kind, caseIndex, tool, units } = props;
+  const { outcome, shown, caseIndex, tool, units } = props;
   return (
     <>
       <p class="plan-words">
         <span class="soft">show</span>{' '}
-        {KINDS.map((one) => (
-          <Word key={one} press={() => props.setKind(one)} held={one === kind}>
+        {SHOWN.map((one) => (
+          <Word key={one} press={() => props.show(one)} held={one === shown}>
             {one}
           </Word>
         ))}

@@ -1,29 +1,40 @@
 // The plan by keyboard: a cross that moves, and everything that a pointer does.
-import type { DisplayUnits, Point, RowOrigin } from '@ohmstead/study';
+import type { Point } from '@ohmstead/study';
 import { useRef } from 'preact/hooks';
-import type { Draft } from '../desk/draft.ts';
-import { copied, deleted, moved, type PlanEdit } from './plan-edits.ts';
-import type { ToolState } from './tool-state.ts';
-import type { Size, View } from './view.ts';
+import type { Conductor } from '../desk/conductor.ts';
 
+/** What keys do; a deed that is undefined leaves its key to the page. */
 export interface PlanKeys {
-  readonly tool: ToolState;
+  /** m; 0 for none */
   readonly gridStep: number;
-  readonly selected: readonly RowOrigin[];
   readonly cursor: Point | undefined;
-  readonly draft: Draft;
-  readonly units: DisplayUnits;
   /** where the cross appears first */
   readonly middle: Point;
-  readonly moveCursor: (place: Point) => void;
-  readonly look: (change: (view: View) => View) => void;
-  readonly size: Size;
-  readonly edit: (edit: PlanEdit) => void;
-  readonly select: (rows: readonly RowOrigin[]) => void;
-  readonly enter: (place: Point) => void;
-  readonly finish: () => void;
+  readonly moveCross: (to: Point) => void;
+  /** moves what is in hand; undefined: arrows move the cross */
+  readonly nudge: ((by: Point) => void) | undefined;
+  readonly remove: (() => void) | undefined;
+  readonly copy: (() => readonly Conductor[]) | undefined;
+  readonly paste: (conductors: readonly Conductor[], by: Point) => void;
+  readonly all: () => void;
+  readonly zoom: (factor: number) => void;
+  /** @param more adds to what is chosen */
+  readonly enter: (place: Point, more: boolean) => void;
+  /** ends what is being drawn */
+  readonly finish: (() => void) | undefined;
   readonly leave: () => void;
 }
+
+export const KEYS_WORDS: readonly string[] = [
+  'Arrow keys move the cross, or what is chosen; with Shift ten times as far.',
+  'Enter chooses what lies under the cross, or sets a point; with Shift it chooses one more, or closes an area.',
+  'Plus and minus enlarge. Escape leaves what is in hand. Delete removes what is chosen.',
+  'Ctrl with C and V copies and pastes, with A chooses all.',
+];
+export const POINTER_WORDS: readonly string[] = [
+  'Drag the ground to look elsewhere; drag metal, a corner or an end of the profile to move it. A double click enlarges, and so does the wheel once the plan has been pressed; two fingers enlarge on a touch screen.',
+  'With Shift, a drag chooses what lies in a rectangle and a click one more. With Alt, points fall where they are.',
+];
 
 const ARROWS: Readonly<Record<string, Point>> = {
   ArrowLeft: [-1, 0],
@@ -36,76 +47,66 @@ const LONG = 10;
 const ENLARGED = 1.25;
 /** Step of the cross where points fall on no grid, m. */
 const FREE_STEP_M = 0.5;
-/** The cross stays within this share of the window from its middle. */
-const WINDOW = 0.45;
+
+type Press = Pick<KeyboardEvent, 'key' | 'shiftKey' | 'ctrlKey' | 'metaKey' | 'altKey'>;
 
 export function usePlanKeys(keys: PlanKeys): (event: KeyboardEvent) => void {
-  const clipboard = useRef<readonly RowOrigin[]>([]);
+  const clipboard = useRef<readonly Conductor[]>([]);
   return (event) => {
-    if (act(keys, event, clipboard)) {
-      event.preventDefault();
-      event.stopPropagation();
-    }
+    const deed = keyDeed(keys, event, clipboard);
+    if (deed === undefined) return;
+    event.preventDefault();
+    event.stopPropagation();
+    deed();
   };
 }
 
-/** @returns whether the key was one of the plan's */
-function act(keys: PlanKeys, event: KeyboardEvent, clipboard: { current: readonly RowOrigin[] }): boolean {
-  const { selected, draft, gridStep } = keys;
-  const step = (gridStep > 0 ? gridStep : FREE_STEP_M) * (event.shiftKey ? LONG : 1);
-  const control = event.ctrlKey || event.metaKey;
-  const arrow = ARROWS[event.key];
-  if (arrow !== undefined && !control) {
-    if (keys.tool.tool === 'select' && selected.length > 0)
-      keys.edit(moved(draft, selected, { dx: arrow[0] * step, dy: arrow[1] * step }, keys.units));
-    else moveCross(keys, arrow, step);
-    return true;
+/** What a key does on the plan; undefined where it is none of the plan's. */
+export function keyDeed(
+  keys: PlanKeys,
+  press: Press,
+  clipboard: { current: readonly Conductor[] },
+): (() => void) | undefined {
+  if (press.altKey) return undefined;
+  const step = (keys.gridStep > 0 ? keys.gridStep : FREE_STEP_M) * (press.shiftKey ? LONG : 1);
+  if (press.ctrlKey || press.metaKey) return controlDeed(keys, press.key.toLowerCase(), step, clipboard);
+  const at = keys.cursor ?? keys.middle;
+  const arrow = ARROWS[press.key];
+  if (arrow !== undefined) {
+    const by: Point = [arrow[0] * step, arrow[1] * step];
+    const { nudge } = keys;
+    return nudge === undefined ? () => keys.moveCross([at[0] + by[0], at[1] + by[1]]) : () => nudge(by);
   }
-  const key = event.key.toLowerCase();
-  if (control) {
-    if (key === 'c' && selected.length > 0) clipboard.current = selected;
-    else if (key === 'v' && clipboard.current.length > 0)
-      keys.edit(copied(draft, clipboard.current, { dx: step, dy: step }));
-    else return false;
-    return true;
-  }
-  switch (event.key) {
+  switch (press.key) {
     case 'Enter':
-      if (event.shiftKey) keys.finish();
-      else keys.enter(keys.cursor ?? keys.middle);
-      return true;
+      return press.shiftKey && keys.finish !== undefined ? keys.finish : () => keys.enter(at, press.shiftKey);
     case '+':
     case '=':
-      keys.look((view) => ({ ...view, scale: view.scale * ENLARGED }));
-      return true;
+      return () => keys.zoom(ENLARGED);
     case '-':
-      keys.look((view) => ({ ...view, scale: view.scale / ENLARGED }));
-      return true;
+      return () => keys.zoom(1 / ENLARGED);
     case 'Escape':
-      keys.leave();
-      return true;
+      return keys.leave;
     case 'Delete':
     case 'Backspace':
-      if (selected.length === 0) return false;
-      keys.edit(deleted(draft, selected));
-      return true;
+      return keys.remove;
     default:
-      return false;
+      return undefined;
   }
 }
 
-/** One step of the cross; the ground follows where it would leave the window. */
-function moveCross(keys: PlanKeys, arrow: Point, step: number): void {
-  const [x, y] = keys.cursor ?? keys.middle;
-  const to: Point = [x + arrow[0] * step, y + arrow[1] * step];
-  keys.moveCursor(to);
-  keys.look((view) => {
-    const reach = [
-      (WINDOW * keys.size.width) / view.scale,
-      (WINDOW * keys.size.height) / view.scale,
-    ] as const;
-    const kept = (middle: number, place: number, by: number): number =>
-      Math.min(Math.max(middle, place - by), place + by);
-    return { ...view, x: kept(view.x, to[0], reach[0]), y: kept(view.y, to[1], reach[1]) };
-  });
+function controlDeed(
+  keys: PlanKeys,
+  key: string,
+  step: number,
+  clipboard: { current: readonly Conductor[] },
+): (() => void) | undefined {
+  const { copy } = keys;
+  if (key === 'a') return keys.all;
+  if (key === 'c' && copy !== undefined)
+    return () => {
+      clipboard.current = copy();
+    };
+  if (key === 'v' && clipboard.current.length > 0) return () => keys.paste(clipboard.current, [step, step]);
+  return undefined;
 }

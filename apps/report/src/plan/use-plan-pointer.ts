@@ -1,21 +1,23 @@
 // Pointers on the plan: one drags the ground or what is chosen, or draws; two pinch; the wheel enlarges.
 import type { Point } from '@ohmstead/study';
-import { useRef, useState } from 'preact/hooks';
-import { type Drag, panStep, pinchOf } from './pointer-drag.ts';
-import { panned, type Size, toGround, type View, zoomed } from './view.ts';
+import { useEffect, useRef, useState } from 'preact/hooks';
+import { type Drag, dragStep, type Held, pinchOf } from './pointer-drag.ts';
+import { type Size, toGround, type View, zoomed } from './view.ts';
 
 /** Factor of one notch of a wheel, for its usual 100 pixels. */
 const WHEEL_FACTOR = 1.25;
 const WHEEL_PX = 100;
 
-export interface PointerDeeds {
-  /** a pointer that is not held, or a click about to happen, m */
+export interface PointerDeeds<G> {
+  /** a pointer that is not held; undefined where it has left, m */
   readonly hover: (place: Point | undefined, free: boolean) => void;
   /** a click that was no drag */
   readonly click: (place: Point, keys: Keys) => void;
-  /** whether a press at a place picks up what is chosen, after choosing it if it was not */
-  readonly pickUp: (place: Point, keys: Keys) => boolean;
-  readonly drop: (from: Point, to: Point, free: boolean) => void;
+  /** what a press at a place takes up; undefined where it drags the ground */
+  readonly pickUp: (place: Point, keys: Keys) => G | undefined;
+  readonly drop: (grip: G, from: Point, to: Point, free: boolean) => void;
+  /** a press on what can be taken up that did not move it */
+  readonly tap: (grip: G) => void;
   readonly band: (a: Point, b: Point) => void;
 }
 
@@ -25,10 +27,8 @@ export interface Keys {
   readonly free: boolean;
 }
 
-export interface PlanPointer {
-  readonly drag: Drag | undefined;
-  /** where what is moved is held now, m */
-  readonly held: Point | undefined;
+export interface PlanPointer<G> {
+  readonly drag: Drag<G> | undefined;
   readonly handlers: {
     readonly onPointerDown: (event: PointerEvent) => void;
     readonly onPointerMove: (event: PointerEvent) => void;
@@ -36,6 +36,7 @@ export interface PlanPointer {
     readonly onPointerCancel: (event: PointerEvent) => void;
     readonly onPointerLeave: () => void;
     readonly onWheel: (event: WheelEvent) => void;
+    readonly onDblClick: (event: MouseEvent) => void;
   };
 }
 
@@ -49,100 +50,113 @@ function keysOf(event: MouseEvent): Keys {
   return { shift: event.shiftKey, free: event.altKey };
 }
 
-export function usePlanPointer(
+/**
+ * @param look changes where the plan is looked at
+ * @param deeds what pointers do to what lies there; moves reach them at most once a frame
+ */
+export function usePlanPointer<G>(
   view: View,
   size: Size,
   look: (change: (view: View) => View) => void,
-  deeds: PointerDeeds,
-): PlanPointer {
-  const [drag, setDrag] = useState<Drag>();
-  const [held, setHeld] = useState<Point>();
+  deeds: PointerDeeds<G>,
+): PlanPointer<G> {
+  const [shown, show] = useState<Drag<G>>();
+  const drag = useRef<Drag<G>>(undefined);
   const down = useRef(new Map<number, Point>());
+  const waiting = useRef<Omit<Held, 'down'> & { readonly frame: number }>(undefined);
   const ground = (pixel: Point): Point => toGround(view, size, pixel);
-  const end = (): void => {
-    setDrag(undefined);
-    setHeld(undefined);
+  const set = (next: Drag<G> | undefined): void => {
+    drag.current = next;
+    show(next);
+  };
+  // the frame that comes calls what was last rendered
+  const step = useRef<() => void>(() => {});
+  step.current = (): void => {
+    const held = waiting.current;
+    if (held === undefined) return;
+    cancelAnimationFrame(held.frame);
+    waiting.current = undefined;
+    const now = drag.current;
+    if (now === undefined) {
+      deeds.hover(ground(held.at), held.free);
+      return;
+    }
+    const next = dragStep(now, { ...held, down: [...down.current.values()] }, view, size);
+    set(next.drag);
+    if (next.view !== view) look(() => next.view);
+  };
+  useEffect(() => () => cancelAnimationFrame(waiting.current?.frame ?? 0), []);
+  const drop = (): void => {
+    cancelAnimationFrame(waiting.current?.frame ?? 0);
+    waiting.current = undefined;
   };
   const begin = (event: PointerEvent): void => {
     if (event.button !== 0) return;
+    drop();
     const pixel = pixelOf(event);
     if (event.currentTarget instanceof Element) event.currentTarget.setPointerCapture(event.pointerId);
     down.current.set(event.pointerId, pixel);
     const [a, b] = [...down.current.values()];
     if (a !== undefined && b !== undefined) {
-      setHeld(undefined);
-      setDrag(pinchOf(a, b));
+      set(pinchOf(a, b));
       return;
     }
     const place = ground(pixel);
     const keys = keysOf(event);
-    if (deeds.pickUp(place, keys)) setDrag({ kind: 'move', from: place });
-    else if (keys.shift) setDrag({ kind: 'band', from: place, to: place });
-    else setDrag({ kind: 'pan', begun: pixel, last: pixel, far: false });
+    const grip = deeds.pickUp(place, keys);
+    if (grip !== undefined)
+      set({ kind: 'move', grip, begun: pixel, from: place, to: place, far: false, free: keys.free });
+    else if (keys.shift) set({ kind: 'band', from: place, to: place });
+    else set({ kind: 'pan', begun: pixel, last: pixel, far: false });
   };
   const move = (event: PointerEvent): void => {
-    const pixel = pixelOf(event);
-    if (down.current.has(event.pointerId)) down.current.set(event.pointerId, pixel);
-    switch (drag?.kind) {
-      case undefined:
-        deeds.hover(ground(pixel), event.altKey);
-        return;
-      case 'pan': {
-        const { drag: next, by } = panStep(drag, pixel);
-        setDrag(next);
-        if (by[0] !== 0 || by[1] !== 0) look((now) => panned(now, by[0], by[1]));
-        return;
-      }
-      case 'move':
-        setHeld(ground(pixel));
-        return;
-      case 'band':
-        setDrag({ ...drag, to: ground(pixel) });
-        return;
-      case 'pinch': {
-        const [a, b] = [...down.current.values()];
-        if (a === undefined || b === undefined) return;
-        const next = pinchOf(a, b);
-        setDrag(next);
-        look((now) =>
-          zoomed(
-            panned(now, next.middle[0] - drag.middle[0], next.middle[1] - drag.middle[1]),
-            size,
-            next.middle,
-            next.distance / Math.max(1, drag.distance),
-          ),
-        );
-      }
-    }
+    const at = pixelOf(event);
+    if (down.current.has(event.pointerId)) down.current.set(event.pointerId, at);
+    const frame = waiting.current?.frame ?? requestAnimationFrame(() => step.current());
+    waiting.current = { at, free: event.altKey, frame };
   };
   const release = (event: PointerEvent): void => {
-    const pixel = pixelOf(event);
+    const last = drag.current;
+    const held: Held = { at: pixelOf(event), down: [...down.current.values()], free: event.altKey };
+    drop();
     down.current.delete(event.pointerId);
-    const place = ground(pixel);
-    if (drag?.kind === 'pan' && !drag.far) deeds.click(place, keysOf(event));
-    else if (drag?.kind === 'move') {
-      if (held !== undefined) deeds.drop(drag.from, held, event.altKey);
-    } else if (drag?.kind === 'band') deeds.band(drag.from, place);
-    end();
+    set(undefined);
+    if (last === undefined || last.kind === 'pinch') return;
+    const end = dragStep(last, held, view, size);
+    if (end.view !== view) look(() => end.view);
+    if (end.drag.kind === 'pan' && !end.drag.far) deeds.click(ground(held.at), keysOf(event));
+    else if (end.drag.kind === 'band') deeds.band(end.drag.from, end.drag.to);
+    else if (end.drag.kind === 'move' && end.drag.far)
+      deeds.drop(end.drag.grip, end.drag.from, end.drag.to, held.free);
+    else if (end.drag.kind === 'move') deeds.tap(end.drag.grip);
   };
   return {
-    drag,
-    held,
+    drag: shown,
     handlers: {
       onPointerDown: begin,
       onPointerMove: move,
       onPointerUp: release,
       onPointerCancel: (event) => {
+        drop();
         down.current.delete(event.pointerId);
-        end();
+        set(undefined);
       },
       onPointerLeave: () => {
-        if (drag === undefined) deeds.hover(undefined, false);
+        if (drag.current !== undefined) return;
+        drop();
+        deeds.hover(undefined, false);
       },
       onWheel: (event) => {
+        // the page scrolls on under a plan that is not in use
+        const inUse = event.ctrlKey || document.activeElement === event.currentTarget;
+        if (!inUse) return;
         event.preventDefault();
         const at = pixelOf(event);
         look((now) => zoomed(now, size, at, WHEEL_FACTOR ** (-event.deltaY / WHEEL_PX)));
+      },
+      onDblClick: (event) => {
+        const at = pixelOf(event);
+        look((now) => zoomed(now, size, at, 2));
       },
     },
   };

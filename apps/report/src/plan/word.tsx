@@ -6,9 +6,11 @@ export interface WordProps {
   readonly press: () => void;
   readonly held?: boolean;
   readonly off?: boolean;
+  /** completes the word for those who hear it: `remove` of `corner 2` */
+  readonly of?: string;
 }
 
-export function Word({ children, press, held, off = false }: WordProps): VNode {
+export function Word({ children, press, held, off = false, of }: WordProps): VNode {
   return (
     <button
       type="button"
@@ -18,6 +20,7 @@ export function Word({ children, press, held, off = false }: WordProps): VNode {
       {...(held === undefined ? {} : { 'aria-pressed': held })}
     >
       {children}
+      {of !== undefined && <span class="unseen"> {of}</span>}
     </button>
   );
 }

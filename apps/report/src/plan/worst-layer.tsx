@@ -1,21 +1,22 @@
 // Rings the worst place of what the map shows, and a place that the reader was taken to.
-import { type MapKind, measured } from '@ohmstead/sheet';
+import { measured } from '@ohmstead/sheet';
 import type { Outcome, Point } from '@ohmstead/study';
 import type { VNode } from 'preact';
+import type { Shown } from './shown.ts';
 import { type Size, toScreen, type View } from './view.ts';
 
 export interface WorstLayerProps {
   readonly outcome: Outcome;
   readonly caseIndex: number;
-  readonly kind: MapKind;
+  readonly shown: Shown;
   readonly goal: Point | undefined;
   readonly view: View;
   readonly size: Size;
 }
 
-export function WorstLayer({ outcome, caseIndex, kind, goal, view, size }: WorstLayerProps): VNode {
+export function WorstLayer({ outcome, caseIndex, shown, goal, view, size }: WorstLayerProps): VNode {
   const result = outcome.results.cases[caseIndex];
-  const worst = kind === 'potential' ? undefined : result?.[kind];
+  const worst = shown === 'touch' || shown === 'step' ? result?.[shown] : undefined;
   return (
     <g>
       {worst !== undefined && (

@@ -2,7 +2,7 @@
 import { DeskContext, Questions, type SectionId, Sheet } from '@ohmstead/sheet';
 import { faultLine, type Point, type RowOrigin } from '@ohmstead/study';
 import type { VNode } from 'preact';
-import { useEffect, useMemo, useState } from 'preact/hooks';
+import { useCallback, useEffect, useMemo, useState } from 'preact/hooks';
 import type { Draft } from '../desk/draft.ts';
 import { setLabel } from '../desk/labels.ts';
 import { openDraft } from '../desk/open-draft.ts';
@@ -12,8 +12,10 @@ import type { EnginePlatform } from '../engine/client.ts';
 import { demoFiles } from '../files/demo.ts';
 import { openFiles } from '../files/open-files.ts';
 import { useDroppedFiles } from '../files/use-dropped-files.ts';
+import { ElectrodePlan } from '../plan/electrode-plan.tsx';
 import { Instrument } from '../plan/instrument.tsx';
 import { standing } from '../plan/plan-conductors.ts';
+import { type PlanDesk, PlanDeskContext } from '../plan/plan-desk.ts';
 import '../plan/plan.css';
 import { type Bench, draftOf, sectionState } from './bench.ts';
 import { ConductorTables } from './conductor-table.tsx';
@@ -103,6 +105,7 @@ function Work({ control, bench, open, close, storage }: WorkProps): VNode {
   const draft = draftOf(bench);
   const units = unitsOf(draft);
   const [goal, setGoal] = useState<{ readonly at: Point }>();
+  const goTo = useCallback((x: number, y: number): void => setGoal({ at: [x, y] }), []);
   const present = useMemo(() => standing(draft, selected), [draft, selected]);
   const tell = (work: Promise<void>): void => {
     setWord(undefined);
@@ -116,18 +119,8 @@ function Work({ control, bench, open, close, storage }: WorkProps): VNode {
     () =>
       deskOf(still, act, {
         instrument: (figure, shown) =>
-          figure === 'surface' ? (
-            <Instrument
-              outcome={shown}
-              draft={draft}
-              units={units}
-              selected={present}
-              select={select}
-              edit={({ draft: edited, label }) => act({ kind: 'edit', draft: edited, label })}
-              goal={goal}
-            />
-          ) : undefined,
-        goTo: (x, y) => setGoal({ at: [x, y] }),
+          figure === 'surface' ? <Instrument outcome={shown} /> : <ElectrodePlan outcome={shown} />,
+        goTo,
         note: (section: SectionId) => (
           <NoteField
             section={section}
@@ -143,8 +136,22 @@ function Work({ control, bench, open, close, storage }: WorkProps): VNode {
         ),
         download: outcome && ((file) => takeFile(outcome, file)),
       }),
-    [still, act, draft, outcome, present, goal, units],
+    [still, act, draft, outcome, goTo],
   );
+  const plan = useMemo(
+    (): PlanDesk => ({
+      draft,
+      units,
+      selected: present,
+      select,
+      edit: ({ draft: edited, label }) => act({ kind: 'edit', draft: edited, label }),
+      goal,
+      goTo,
+    }),
+    [draft, units, present, goal, goTo, act],
+  );
+  // what is chosen on the plan draws no section anew: contexts reach into the sheet
+  const sheet = useMemo(() => outcome && <Sheet outcome={outcome} />, [outcome]);
   return (
     <DeskContext.Provider value={desk}>
       <div class="live">
@@ -170,7 +177,7 @@ function Work({ control, bench, open, close, storage }: WorkProps): VNode {
               <Questions />
             </>
           ) : (
-            <Sheet outcome={outcome} />
+            <PlanDeskContext.Provider value={plan}>{sheet}</PlanDeskContext.Provider>
           )}
           <div class="beside">
             <ConductorTables draft={draft} units={units} act={act} selected={present} select={select} />

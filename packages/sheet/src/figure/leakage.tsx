@@ -22,7 +22,8 @@ const THICKEST = 8;
 const ROD_SMALLEST = 2.5;
 const ROD_LARGEST = 9;
 
-function thickness(index: number): number {
+/** Thickness of the lines of a class, drawing units. */
+export function leakageThickness(index: number): number {
   return (THICKEST * (index + 0.6)) / (LEAKAGE_STEPS.length - 0.4);
 }
 
@@ -44,8 +45,8 @@ function Lines({ plate, drawing }: { plate: Plate; drawing: LeakageDrawing }): V
         const back = piecesPath(plate, group.in);
         return (
           <g key={group.upTo}>
-            {out !== '' && <Path class="leak" d={out} stroke-width={px(thickness(k))} />}
-            {back !== '' && <Hollow d={back} width={thickness(k)} />}
+            {out !== '' && <Path class="leak" d={out} stroke-width={px(leakageThickness(k))} />}
+            {back !== '' && <Hollow d={back} width={leakageThickness(k)} />}
           </g>
         );
       })}
@@ -56,11 +57,13 @@ function Lines({ plate, drawing }: { plate: Plate; drawing: LeakageDrawing }): V
 /** Rods with more than this many times the mean have the largest disc. */
 const ROD_MOST = 3;
 
-function rodRadius(times: number): number {
+/** Radius of a rod's disc, drawing units. @param times the mean that it leaks along its length */
+export function rodRadius(times: number): number {
   return ROD_SMALLEST + (ROD_LARGEST - ROD_SMALLEST) * Math.min(1, Math.abs(times) / ROD_MOST);
 }
 
-function classText(k: number): string {
+/** Times the mean that a class holds, in words. */
+export function leakageClassText(k: number): string {
   const last = LEAKAGE_STEPS.length - 1;
   if (k === 0) return `up to ${given(LEAKAGE_STEPS[0])}`;
   if (k === last) return `above ${given(LEAKAGE_STEPS[last - 1])}`;
@@ -70,8 +73,8 @@ function classText(k: number): string {
 function signsOf(drawing: LeakageDrawing): readonly Sign[] {
   const steps = drawing.classes.map((_, k): Sign => {
     return {
-      text: classText(k),
-      drawing: <Path class="leak" d="M-10,0H10" stroke-width={px(thickness(k))} />,
+      text: leakageClassText(k),
+      drawing: <Path class="leak" d="M-10,0H10" stroke-width={px(leakageThickness(k))} />,
     };
   });
   const back = drawing.classes.some((group) => group.in.length > 0);

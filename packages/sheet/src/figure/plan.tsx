@@ -77,18 +77,23 @@ function InjectionNotes({ outcome, plate }: { outcome: Outcome; plate: Plate }):
   );
 }
 
-/** The electrode in plan. */
-export function PlanFigure({ outcome, name, title, css }: PlanFigureProps): VNode {
-  const { plan, results } = outcome;
-  const signs = signsOf(plan.conductors);
-  const rows = Math.ceil((signs.length + 1) / SIGN_COLUMNS);
+/** Where the ground lies on the drawing of the electrode. */
+export function planPlate(outcome: Outcome): Plate {
+  const rows = Math.ceil((signsOf(outcome.plan.conductors).length + 1) / SIGN_COLUMNS);
   const size: PlateSize = {
     width: 760,
     most: 600,
     least: 120,
     margin: { ...MARGIN, bottom: 56 + rows * SIGN_ROW },
   };
-  const plate = plateOf(latticeExtent(outcome.cases[0].map), size);
+  return plateOf(latticeExtent(outcome.cases[0].map), size);
+}
+
+/** The electrode in plan. */
+export function PlanFigure({ outcome, name, title, css }: PlanFigureProps): VNode {
+  const { plan, results } = outcome;
+  const signs = signsOf(plan.conductors);
+  const plate = planPlate(outcome);
   const floating = plan.conductors.some((c) => c.role === 'floating') ? ' Floating metal is dashed.' : '';
   const description = `Plan with ${results.electrode.conductor_count} conductors and ${results.electrode.rod_count} ground rods of the energised metal, places of injection and assessed areas.${floating}`;
   return (

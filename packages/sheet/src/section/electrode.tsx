@@ -177,7 +177,7 @@ export function Electrode({ outcome }: { outcome: Outcome }): VNode {
         title={titles.plan}
         caption={`Metal is ink, floating metal dashed. Tinted: where touch voltage is assessed. Axes in ${words}.`}
         table={<ConductorTable outcome={outcome} units={units} />}
-        {...(instrument === undefined ? { by: [outcome, units] } : {})}
+        by={[outcome, units]}
       >
         {instrument ?? <PlanFigure outcome={outcome} name="electrode-plan" title={titles.plan} />}
       </FigureBlock>
