@@ -22,6 +22,8 @@ export const AT_LENGTH: usize = 96;
 export const AT_RANK: usize = 104;
 /** a whole number of 32 bits */
 export const AT_CLASS: usize = 112;
+/** squared distance in plan from which tables of all images hold */
+export const AT_LEAST: usize = 120;
 
 /** A class pair: four doubles, then whole numbers of 32 bits; an address of 0 is none. */
 export const PAIR_FACTOR: usize = 0;
@@ -30,11 +32,13 @@ export const PAIR_REST_PER: usize = 16;
 export const PAIR_SMOOTH: usize = 24;
 export const PAIR_FAR: usize = 32;
 export const PAIR_REST: usize = 36;
+/** all images, and those that neither rest nor nodes hold */
 export const PAIR_IMAGES: usize = 40;
-export const PAIR_PRIMARY: usize = 44;
-export const PAIR_COUNT: usize = 48;
-export const PAIR_NODES: usize = 52;
-export const PAIR_WEIGHTS: usize = 56;
+export const PAIR_COUNT: usize = 44;
+export const PAIR_SINGLY: usize = 48;
+export const PAIR_SINGLY_COUNT: usize = 52;
+export const PAIR_NODES: usize = 56;
+export const PAIR_WEIGHTS: usize = 60;
 
 /** A rule: 32 points on [−1, 1], 32 weights; an odd one repeats its last point with weight nothing. */
 export const RULE: usize = 512;

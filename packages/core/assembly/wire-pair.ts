@@ -2,8 +2,8 @@
 import { angle } from './arctangent';
 import { logarithm } from './radial';
 
-/** Sine of the angle below which two axes are taken as parallel. */
-const PARALLEL_SINE_SQUARED: f64 = 1e-14;
+/** Share of their gap by which two axes part over their lengths, squared, below which they are taken as parallel. */
+const PARALLEL_SQUARED: f64 = 1e-14;
 
 @inline
 function parallelTerm(u: f64, gap: f64, perGap: f64): f64 {
@@ -32,12 +32,16 @@ export function meanInverseDistance(
   const cy = uz * vx - ux * vz;
   const cz = ux * vy - uy * vx;
   const ss = cx * cx + cy * cy + cz * cz;
-  if (ss < PARALLEL_SINE_SQUARED) {
-    const along = wx * ux + wy * uy + wz * uz;
-    const px = wx - along * ux;
-    const py = wy - along * uy;
-    const pz = wz - along * uz;
-    const gap = sqrt(px * px + py * py + pz * pz + aa);
+  const along = wx * ux + wy * uy + wz * uz;
+  // from the axis of the one to the middle of the other
+  const half = 0.5 * lq;
+  const middle = along + half * cosine;
+  const px = wx + half * vx - middle * ux;
+  const py = wy + half * vy - middle * uy;
+  const pz = wz + half * vz - middle * uz;
+  const gapSquared = px * px + py * py + pz * pz + aa;
+  if (ss * (lp + lq) * (lp + lq) < PARALLEL_SQUARED * gapSquared) {
+    const gap = sqrt(gapSquared);
     const perGap = 1 / gap;
     const end = along + (cosine < 0 ? -lq : lq);
     const from = min<f64>(along, end);
@@ -48,14 +52,12 @@ export function meanInverseDistance(
     ) / (lp * lq);
   }
   const sine = sqrt(ss);
-  const mx = wy * vz - wz * vy;
-  const my = wz * vx - wx * vz;
-  const mz = wx * vy - wy * vx;
   const nx = wy * uz - wz * uy;
   const ny = wz * ux - wx * uz;
   const nz = wx * uy - wy * ux;
-  const s1 = -(mx * cx + my * cy + mz * cz) / ss;
   const t1 = -(nx * cx + ny * cy + nz * cz) / ss;
+  // nearly parallel wires meet far away: differences of coordinates from there are made without them
+  const s1 = t1 * cosine - along;
   const s2 = s1 + lp;
   const t2 = t1 + lq;
   const height = (wx * cx + wy * cy + wz * cz) / sine;
@@ -65,18 +67,20 @@ export function meanInverseDistance(
   const ws2 = s2 * s2 * ss + dd;
   const wt1 = t1 * t1 * ss + dd;
   const wt2 = t2 * t2 * ss + dd;
-  const x11 = t1 - s1 * cosine;
-  const x12 = t2 - s1 * cosine;
-  const x21 = t1 - s2 * cosine;
-  const x22 = t2 - s2 * cosine;
+  const x11 = t1 * ss + along * cosine;
+  const x12 = x11 + lq;
+  const x21 = x11 - lp * cosine;
+  const x22 = x21 + lq;
+  const y1 = -along;
+  const y2 = -along - lq * cosine;
   const r11 = sqrt(x11 * x11 + ws1);
   const r12 = sqrt(x12 * x12 + ws1);
   const r21 = sqrt(x21 * x21 + ws2);
   const r22 = sqrt(x22 * x22 + ws2);
   const logs =
     s2 * logRatio(x21, r21, x22, r22, ws2) - s1 * logRatio(x11, r11, x12, r12, ws1) +
-    (t2 * logRatio(s1 - t2 * cosine, r12, s2 - t2 * cosine, r22, wt2) -
-      t1 * logRatio(s1 - t1 * cosine, r11, s2 - t1 * cosine, r21, wt1));
+    (t2 * logRatio(y2, r12, y2 + lp, r22, wt2) -
+      t1 * logRatio(y1, r11, y1 + lp, r21, wt1));
   const base = dd * cosine;
   const ds = d * sine;
   const n11 = base + s1 * t1 * ss;

@@ -11,12 +11,12 @@ interface NodeGroup {
   readonly sign: number;
   readonly side: number;
   readonly nearest: number;
-  readonly low: number;
-  readonly high: number;
   /** first of its nodes */
   readonly from: number;
   /** x of the nodes: Chebyshev points of [low, high] */
   readonly nodes: Float64Array;
+  /** weights of the barycentric formula: (−1)^k·sin of the point's angle */
+  readonly barycentric: Float64Array;
 }
 
 export interface DepthNodes {
@@ -36,8 +36,8 @@ export interface DepthRange {
   readonly z2: number;
 }
 
-/** Share of an image that interpolation between nodes may miss: below the tables' own 6e-10. */
-const NODE_ERROR = 3e-10;
+/** Share of an image that interpolation between nodes may miss, of the order of the tables' own 6e-10. */
+const NODE_ERROR = 1e-9;
 /** More nodes than this cost more than they save. */
 const MOST_NODES = 160;
 
@@ -75,7 +75,16 @@ export function depthNodes(
     const nodes = chebyshev(ends[0], ends[1]);
     const from = count;
     count += nodes.length;
-    return { sign, side, nearest, low: ends[0], high: ends[1], from, nodes };
+    return {
+      sign,
+      side,
+      nearest,
+      from,
+      nodes,
+      barycentric: nodes.map(
+        (_, k) => (k % 2 === 0 ? 1 : -1) * Math.sin((Math.PI * (k + 0.5)) / nodes.length),
+      ),
+    };
   });
   if (count > MOST_NODES) return undefined;
   const even = count + (count & 1);
@@ -157,23 +166,23 @@ export function nodeWeights(
 }
 
 /** Adds a share of the Lagrange polynomials at x, by the barycentric formula for Chebyshev points (Berrut and Trefethen, SIAM Review 46, 2004). */
-function addLagrange({ nodes, from }: NodeGroup, x: number, share: number, weights: Float64Array): void {
-  const count = nodes.length;
+function addLagrange(
+  { nodes, barycentric, from }: NodeGroup,
+  x: number,
+  share: number,
+  weights: Float64Array,
+): void {
   let total = 0;
-  for (let k = 0; k < count; k++) {
+  for (let k = 0; k < nodes.length; k++) {
     const gap = x - nodes[k]!;
     if (gap === 0) {
       weights[from + k]! += share;
       return;
     }
-    total += barycentric(k, count) / gap;
+    total += barycentric[k]! / gap;
   }
-  for (let k = 0; k < count; k++)
-    weights[from + k]! += (share * barycentric(k, count)) / ((x - nodes[k]!) * total);
-}
-
-function barycentric(k: number, count: number): number {
-  return (k % 2 === 0 ? 1 : -1) * Math.sin((Math.PI * (k + 0.5)) / count);
+  for (let k = 0; k < nodes.length; k++)
+    weights[from + k]! += (share * barycentric[k]!) / ((x - nodes[k]!) * total);
 }
 
 /** The table of one mean over depths: the weighted sum of the nodes' tables. */

@@ -6,14 +6,16 @@ import { type DepthClass, depthClasses } from './depth-classes.ts';
 import { collapsed, type DepthNodes, type DepthRange, depthNodes, nodeWeights } from './depth-nodes.ts';
 import { smoothOrder } from './pair-potential.ts';
 import { type RadialTable, radialTable, radialValue } from './radial-table.ts';
-import { smoothImages, smoothKernel } from './smooth-kernel.ts';
+import { smoothKernel } from './smooth-kernel.ts';
 import { logRatio, parallelMean } from './wire-pair.ts';
 
 export interface DepthPair {
   readonly list: ImageList;
+  /** images that neither rest nor nodes hold */
+  readonly singly: ImageList;
   /** mean of all images over two far segments; absent where too few pairs would use it */
   readonly far?: RadialTable;
-  /** the same of images past the primary ones, for near segments too */
+  /** the same of images that keep away from both depths, for near segments too */
   readonly rest?: RadialTable;
   /** these images for two vertical classes: weights of the layers' nodes */
   readonly nodes?: DepthNodes;
@@ -27,6 +29,8 @@ export interface DepthPairs {
   readonly classOf: Int32Array;
   /** whether a class is of vertical segments; shape [count] */
   readonly upright: readonly boolean[];
+  /** distance in plan from which tables of all images of a vertical segment hold, m */
+  readonly uprightLeast: number;
   /** the same pair at [a, b] and [b, a]; shape [count × count] */
   readonly pairs: readonly DepthPair[];
 }
@@ -45,12 +49,15 @@ const UPRIGHT_TABLE_PAIRS = 4000;
 const TABLE_ERROR = 1e-8;
 /** Tables from which others are made reach this much farther: those end up to two bins past the reach, 1.12 of it. */
 const WIDER = 1.2;
+/** Least distance in plan of a vertical segment's tables of all images, over the reach: few pairs are nearer, and half of the bins would serve them. */
+const UPRIGHT_LEAST = 0.01;
 /** Least distance between points of two far segments, over the longer length: between centres 1.987, less a half and the outermost of four points. */
 const APART = 1;
 
 interface Class extends DepthClass {
-  /** shortest length, m */
+  /** shortest and mean length, m */
   readonly shortest: number;
+  readonly typical: number;
 }
 
 /** @param reach largest horizontal distance between two points of the metal, m */
@@ -68,11 +75,11 @@ export function depthPairs(mesh: SegmentMesh, images: SoilImages, reach: number)
       const [s, f] = layerOf(a) <= layerOf(b) ? [a, b] : [b, a];
       const list = images.list(layerOf(s), layerOf(f));
       const [source, field] = [classes[s], classes[f]];
-      const pair = source === undefined || field === undefined ? { list } : classPair(list, field, source, nodesOf(source.layer, field.layer), reach); // biome-ignore format: one choice
+      const pair = source === undefined || field === undefined ? { list, singly: list } : classPair(list, field, source, nodesOf(source.layer, field.layer), reach); // biome-ignore format: one choice
       pairs[a * count + b] = pair;
       pairs[b * count + a] = pair;
     }
-  return { count, classOf, upright: Array.from({ length: count }, (_, at) => classes[at]?.vertical ?? false), pairs }; // biome-ignore format: one row a field
+  return { count, classOf, uprightLeast: UPRIGHT_LEAST * reach, upright: Array.from({ length: count }, (_, at) => classes[at]?.vertical ?? false), pairs }; // biome-ignore format: one row a field
 }
 
 /** The most populous classes, and the class of each segment; −1 for one that slopes or is alone. */
@@ -80,6 +87,7 @@ function chosenClasses(mesh: SegmentMesh): { classes: Class[]; classOf: Int32Arr
   const { classes, of } = depthClasses(mesh);
   const members = new Int32Array(classes.length);
   const shortest = new Float64Array(classes.length).fill(Number.POSITIVE_INFINITY);
+  const total = new Float64Array(classes.length);
   let leaking = 0;
   for (let i = 0; i < mesh.count; i++) {
     if (mesh.leaking[i] !== 1) continue;
@@ -87,6 +95,7 @@ function chosenClasses(mesh: SegmentMesh): { classes: Class[]; classOf: Int32Arr
     const at = of[i]!;
     if (at < 0) continue;
     members[at]!++;
+    total[at]! += mesh.length[i]!;
     shortest[at] = Math.min(shortest[at]!, mesh.length[i]!);
   }
   const chosen = Array.from(classes.keys())
@@ -98,7 +107,12 @@ function chosenClasses(mesh: SegmentMesh): { classes: Class[]; classOf: Int32Arr
     placeOf[at] = place;
   });
   return {
-    classes: chosen.map((at) => ({ ...classes[at]!, members: members[at]!, shortest: shortest[at]! })),
+    classes: chosen.map((at) => ({
+      ...classes[at]!,
+      members: members[at]!,
+      shortest: shortest[at]!,
+      typical: total[at]! / members[at]!,
+    })),
     classOf: of.map((at) => (at < 0 ? -1 : placeOf[at]!)),
   };
 }
@@ -107,24 +121,34 @@ function pairCount(a: Class, b: Class): number {
   return a === b ? (a.members * (a.members + 1)) / 2 : a.members * b.members;
 }
 
-/** Nodes by source and field layer, made when first asked for; undefined where they would not pay. */
+/** Nodes made for a soil: meshes of one electrode, coarse to fine, have the same depths. */
+const known = new WeakMap<SoilImages, Map<string, DepthNodes | undefined>>();
+
+/** Nodes by source and field layer; undefined where they would not pay. */
 function layerNodes(
   classes: readonly Class[],
   images: SoilImages,
   reach: number,
 ): (s: number, f: number) => DepthNodes | undefined {
-  const known = new Map<string, DepthNodes | undefined>();
-  return (s, f) => {
-    const key = `${s} ${f}`;
-    if (known.has(key)) return known.get(key);
+  const made = known.get(images) ?? new Map<string, DepthNodes | undefined>();
+  known.set(images, made);
+  const here = new Map<string, DepthNodes | undefined>();
+  const find = (s: number, f: number): DepthNodes | undefined => {
     const [sources, fields] = [s, f].map((layer) => classes.filter((one) => one.layer === layer));
     let uprightPairs = 0;
     for (const a of sources!)
       for (const b of fields!) if (a.vertical || b.vertical) uprightPairs += a.members * b.members;
     if (s === f) uprightPairs /= 2;
-    const nodes = uprightPairs < NODES_PAIRS ? undefined : depthNodes(images.list(s, f), extent(fields!), extent(sources!), WIDER * reach); // biome-ignore format: one choice
-    known.set(key, nodes);
-    return nodes;
+    if (uprightPairs < NODES_PAIRS) return undefined;
+    const [source, field] = [extent(sources!), extent(fields!)];
+    const key = [s, f, source.z1, source.z2, field.z1, field.z2, reach].join(' ');
+    if (!made.has(key)) made.set(key, depthNodes(images.list(s, f), field, source, WIDER * reach));
+    return made.get(key);
+  };
+  return (s, f) => {
+    const key = `${s} ${f}`;
+    if (!here.has(key)) here.set(key, find(s, f));
+    return here.get(key);
   };
 }
 
@@ -143,22 +167,58 @@ function classPair(
   reach: number,
 ): DepthPair {
   const size = pairCount(field, source);
+  const primary = range(0, list.primaryCount);
   const smooth = list.count > list.primaryCount;
-  const anyUpright = field.vertical || source.vertical;
-  if (!anyUpright) {
-    if (size < TABLE_PAIRS) return { list };
-    const rest = smooth
-      ? accurate(smoothKernel(list, smoothImages(list), source, field.z1, WIDER * reach))
-      : undefined;
-    return smooth && rest === undefined ? { list } : withFar(list, field, source, rest, reach);
+  const plain = { list, singly: list };
+  if (!field.vertical && !source.vertical) {
+    if (size < TABLE_PAIRS) return plain;
+    const others = range(list.primaryCount, list.count);
+    const height = (k: number): number => Math.abs(field.z1 - list.sign[k]! * source.z1 - list.offset[k]!);
+    // a primary image that is as far away as the others costs nothing among them
+    const away = Math.min(
+      Math.max(field.typical, source.typical),
+      others.reduce((least, k) => Math.min(least, height(k)), Number.POSITIVE_INFINITY),
+    );
+    const folded = primary.filter((k) => height(k) >= away);
+    const rest = smoothKernel(list, [...folded, ...others], source, field.z1, WIDER * reach);
+    if (rest !== undefined && !(rest.error <= TABLE_ERROR)) return plain;
+    const singly = primary.filter((k) => height(k) < away);
+    return withFar({ list, singly: someImages(list, singly), ...(rest && { rest }) }, field, source, reach);
   }
-  if (smooth && nodes === undefined) return { list };
   const weights = nodes && weightsOf(nodes, field, source);
-  if (smooth && weights === undefined) return { list };
-  const both = field.vertical && source.vertical;
-  if (both && size < UPRIGHT_TABLE_PAIRS) return nodes && weights ? { list, nodes, weights } : { list };
-  if (size < (smooth ? COLLAPSED_PAIRS : TABLE_PAIRS)) return { list };
-  return withFar(list, field, source, nodes && weights && collapsed(nodes, weights), reach);
+  if (smooth && (nodes === undefined || weights === undefined)) return plain;
+  const singly = smooth ? primaryImages(list) : list;
+  if (
+    size >= (field.vertical && source.vertical ? UPRIGHT_TABLE_PAIRS : smooth ? COLLAPSED_PAIRS : TABLE_PAIRS)
+  ) {
+    const rest = nodes && weights && collapsed(nodes, weights);
+    return withFar({ list, singly, ...(rest && { rest }) }, field, source, reach);
+  }
+  return { list, singly, ...(nodes && weights && { nodes, weights }) };
+}
+
+function range(from: number, to: number): number[] {
+  return Array.from({ length: to - from }, (_, k) => from + k);
+}
+
+const primaries = new WeakMap<ImageList, ImageList>();
+
+/** The primary images of a list, the same object each time. */
+function primaryImages(list: ImageList): ImageList {
+  const made = primaries.get(list) ?? someImages(list, range(0, list.primaryCount));
+  primaries.set(list, made);
+  return made;
+}
+
+function someImages(list: ImageList, chosen: readonly number[]): ImageList {
+  return {
+    ...list,
+    count: chosen.length,
+    primaryCount: chosen.length,
+    sign: Int8Array.from(chosen, (k) => list.sign[k]!),
+    offset: Float64Array.from(chosen, (k) => list.offset[k]!),
+    weight: Float64Array.from(chosen, (k) => list.weight[k]!),
+  };
 }
 
 /** Weights for two classes; undefined where an extent is too long for points on the nearest image. */
@@ -168,38 +228,31 @@ function weightsOf(nodes: DepthNodes, field: Class, source: Class): Float64Array
   return order === 0 ? undefined : nodeWeights(nodes, field, source, (length) => smoothOrder(nodes.smoothness ** 2, length)); // biome-ignore format: one choice
 }
 
-function accurate(table: RadialTable | undefined): RadialTable | undefined {
-  return table !== undefined && table.error <= TABLE_ERROR ? table : undefined;
-}
-
 /**
- * A table of all images for far segments: the primary ones over the extents, and the rest from its own table. Its bins
- * begin so small that at the least distance of far segments a singularity is as far from a bin as if it were s away.
+ * Adds a table of all images for far segments: those summed singly over the extents, and the rest from its own table.
+ * Its bins begin so small that at the least distance of far segments a singularity is as far from a bin as if it were
+ * s away.
  */
-function withFar(
-  list: ImageList,
-  field: Class,
-  source: Class,
-  rest: RadialTable | undefined,
-  reach: number,
-): DepthPair {
+function withFar(pair: DepthPair, field: Class, source: Class, reach: number): DepthPair {
+  const { singly, rest } = pair;
+  const means = Array.from({ length: singly.count }, (_, k) => extentMean(singly, k, field, source));
+  const nearest = means.reduce((least, one) => Math.min(least, one.nearest), Number.POSITIVE_INFINITY);
   const apart = APART * Math.max(field.shortest, source.shortest);
-  const primaries = Array.from({ length: list.primaryCount }, (_, k) => primaryMean(list, k, field, source));
-  const nearest = primaries.reduce((least, one) => Math.min(least, one.nearest), Number.POSITIVE_INFINITY);
-  const least = Math.max(0, apart ** 2 - nearest ** 2);
+  const inPlan = field.vertical || source.vertical ? (UPRIGHT_LEAST * reach) ** 2 : 0;
+  const least = Math.max(inPlan, apart ** 2 - nearest ** 2);
   // with bins for s, r² + h² ≥ (8/9)(r² + s²) must hold from the least r² on
   const scale = Math.sqrt((9 / 8) * (nearest ** 2 + least / 9));
   const all = (rr: number): number => {
     let sum = rest === undefined ? 0 : radialValue(rest, rr);
-    for (const { mean } of primaries) sum += mean(rr);
+    for (const { mean } of means) sum += mean(rr);
     return sum;
   };
-  const far = accurate(radialTable(all, scale, reach, least));
-  return { list, ...(rest && { rest }), ...(far && { far }) };
+  const far = radialTable(all, scale, reach, least);
+  return far.error <= TABLE_ERROR ? { ...pair, far } : pair;
 }
 
 /** One image's mean over the extents of two classes, as a function of r², and its least height. */
-function primaryMean(
+function extentMean(
   list: ImageList,
   k: number,
   field: Class,
@@ -214,10 +267,7 @@ function primaryMean(
   if (!field.vertical && !source.vertical)
     return { nearest, mean: (rr) => weight / Math.sqrt(rr + low * low) };
   if (!field.vertical || !source.vertical)
-    return {
-      nearest,
-      mean: (rr) => (weight * logRatio(low, Math.sqrt(rr + low * low), high, Math.sqrt(rr + high * high), rr)) / (high - low), // biome-ignore format: one formula
-    };
+    return { nearest, mean: (rr) => weight * heightMean(rr, low, high) };
   const [lf, ls] = [field.z2 - field.z1, source.z2 - source.z1];
   const from = Math.min(s1!, s2!) - field.z1;
   const farSquare = (FAR_EXTENTS * Math.max(lf, ls)) ** 2;
@@ -225,8 +275,28 @@ function primaryMean(
     nearest,
     mean: (rr) =>
       weight *
-      (rr > farSquare ? extentMean(rr, lf, ls, from) : parallelMean(lf, ls, from, from + ls, Math.sqrt(rr))),
+      (rr > farSquare
+        ? extentPoints(rr, lf, ls, from)
+        : parallelMean(lf, ls, from, from + ls, Math.sqrt(rr))),
   };
+}
+
+/** Distance over half the extent from which four derivatives leave 2e-10 of a mean. */
+const FEW_DERIVATIVES = 30;
+
+/** (1/(h2 − h1))∫ dh/√(r² + h²): by value, second and fourth derivative at the middle when far, else in closed form. */
+function heightMean(rr: number, h1: number, h2: number): number {
+  const half = (h2 - h1) / 2;
+  const hh = ((h1 + h2) / 2) ** 2;
+  const square = rr + hh;
+  if (square > FEW_DERIVATIVES * FEW_DERIVATIVES * half * half) {
+    const per = 1 / square;
+    const e = half * half * per * per;
+    const second = (2 * hh - rr) / 6;
+    const fourth = (8 * hh * hh - 24 * hh * rr + 3 * rr * rr) / 40;
+    return Math.sqrt(per) * (1 + e * (second + e * fourth));
+  }
+  return logRatio(h1, Math.sqrt(rr + h1 * h1), h2, Math.sqrt(rr + h2 * h2), rr) / (h2 - h1);
 }
 
 /** Horizontal distance over the longer extent from which points keep more digits than differences: three leave 1e-9. */
@@ -234,7 +304,7 @@ const FAR_EXTENTS = 10;
 const POINTS = 3;
 
 /** Mean of 1/√(r² + (t − s)²) over t in [0, lf] and s in [from, from + ls], by points. */
-function extentMean(rr: number, lf: number, ls: number, from: number): number {
+function extentPoints(rr: number, lf: number, ls: number, from: number): number {
   const { points, weights } = gaussLegendre(POINTS);
   let sum = 0;
   for (let a = 0; a < POINTS; a++)

@@ -3,8 +3,15 @@ import { type Kernel, kernelOf, ownKernel, place, reserve } from '../kernels/ins
 import { leakageBytes } from '../kernels/leakage-bytes.ts';
 import { gaussLegendre } from '../numerics/gauss-legendre.ts';
 import type { ImageList } from '../soil/image-list.ts';
+import type { DepthNodes } from './depth-nodes.ts';
 import type { DepthPair, DepthPairs } from './depth-pairs.ts';
-import { PAIR_RATIOS, SMOOTH_ORDERS } from './pair-potential.ts';
+import {
+  FARTHEST_SHARE,
+  HALVES_RATIO,
+  PAIR_RATIOS,
+  QUARTERS_RATIO,
+  SMOOTH_ORDERS,
+} from './pair-potential.ts';
 import { CLASS, RECORD } from './segment-records.ts';
 
 export interface LeakageKernel {
@@ -19,7 +26,7 @@ const PAIR = 64;
 const WORD = 4;
 const DOUBLE = 8;
 /** Entries of a triangle that are taken over at a time. */
-const BATCH = 1 << 16;
+const BATCH = 1 << 13;
 
 /**
  * Places segments and tables in a kernel's memory.
@@ -111,15 +118,15 @@ function layOut(
   };
   keep(records, () => records);
   keep(RULES, () => RULES);
-  keep(RATIOS, () => RATIOS);
+  for (const array of [RATIOS, SMOOTH, MOMENTS]) keep(array, () => array);
   const distinct = [...new Set(pairs)];
-  for (const { list, far, rest, nodes, weights } of distinct) {
+  for (const { list, singly, far, rest, nodes, weights } of distinct) {
     keep(list, () => packedImages(list));
+    keep(singly, () => packedImages(singly));
     if (far) keep(far, () => far.bins);
     if (rest) keep(rest, () => rest.bins);
     if (weights) keep(weights, () => weights);
-    // 1/s², count, room for values, bins
-    if (nodes) keep(nodes, () => Float64Array.of(nodes.perSquare, 0, ...new Float64Array(nodes.count), ...nodes.bins)); // biome-ignore format: one row
+    if (nodes) keep(nodes, () => packedNodes(nodes));
   }
   const room = (distinct.length * PAIR + Math.ceil(pairs.length / 2) * DOUBLE) / DOUBLE;
   const addresses = place(kernel, arrays, room);
@@ -140,7 +147,7 @@ function layOut(
   for (let i = 0; i < classOf.length; i++)
     view.setInt32(segments + (i * RECORD + CLASS) * DOUBLE, classOf[i]!, true);
   for (const { nodes } of distinct) if (nodes) view.setInt32(addressOf(nodes) + DOUBLE, nodes.count, true);
-  kernel.call('prepare', segments, table, count, addressOf(RULES), addressOf(RATIOS));
+  kernel.call('prepare', segments, table, count, addressOf(RULES), addressOf(RATIOS), addressOf(SMOOTH), SMOOTH_ORDERS.length, addressOf(MOMENTS)); // biome-ignore format: one call
   return start + room * DOUBLE;
 }
 
@@ -150,15 +157,23 @@ function writePair(
   pair: DepthPair,
   addressOf: (key: object | undefined) => number,
 ): void {
-  const { list, far, rest, nodes, weights } = pair;
+  const { list, singly, far, rest, nodes, weights } = pair;
   view.setFloat64(at, list.factor, true);
   view.setFloat64(at + 8, far?.perSquare ?? 0, true);
   view.setFloat64(at + 16, rest?.perSquare ?? 0, true);
   view.setFloat64(at + 24, (rest?.smoothness ?? 0) ** 2, true);
-  const whole = [addressOf(far), addressOf(rest), addressOf(list), list.primaryCount, list.count, addressOf(nodes), addressOf(weights)]; // biome-ignore format: one row
+  const whole = [addressOf(far), addressOf(rest), addressOf(list), list.count, addressOf(singly), singly.count, addressOf(nodes), addressOf(weights)]; // biome-ignore format: one row
   whole.forEach((value, k) => {
     view.setUint32(at + 32 + k * WORD, value, true);
   });
+}
+
+/** 1/s², place of their count, room for values, bins. */
+function packedNodes(nodes: DepthNodes): Float64Array {
+  const found = new Float64Array(2 + nodes.count + nodes.bins.length);
+  found[0] = nodes.perSquare;
+  found.set(nodes.bins, 2 + nodes.count);
+  return found;
 }
 
 /** Weight, sign, offset, nothing. */
@@ -168,8 +183,12 @@ function packedImages(list: ImageList): Float64Array {
   return found;
 }
 
-/** Squared ratios of pairs, then of smooth images. */
-const RATIOS: Float64Array = Float64Array.from([...PAIR_RATIOS, ...SMOOTH_ORDERS.map(([ratio]) => ratio)], (ratio) => ratio * ratio); // biome-ignore format: one row
+/** Squared ratios of pairs. */
+const RATIOS: Float64Array = Float64Array.from([...PAIR_RATIOS, HALVES_RATIO, QUARTERS_RATIO, FARTHEST_SHARE], (ratio) => ratio * ratio); // biome-ignore format: one row
+/** Squared ratios of smooth images, each with its order. */
+const SMOOTH: Float64Array = Float64Array.from(SMOOTH_ORDERS.flatMap(([ratio, order]) => [ratio * ratio, order])); // biome-ignore format: one row
+/** As radialMean uses them. */
+const MOMENTS: Float64Array = Float64Array.of(4 / 3, 0.8, 4 / 9, 3.2, 16 / 3, 3.2, 64 / 15, 3, 6, 4, 10, 5);
 
 /** Rules of order 0 (none) to 32: points on [−1, 1], then weights; an odd one repeats its last point with weight nothing. */
 const RULES: Float64Array = rules();

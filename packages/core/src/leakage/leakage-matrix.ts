@@ -99,7 +99,7 @@ interface Prepared {
 
 function prepared(mesh: SegmentMesh, images: SoilImages, lasting: boolean): Prepared {
   const depths = depthPairs(mesh, images, planReach(mesh));
-  const records = segmentRecords(mesh, (i) => depths.upright[depths.classOf[i]!]!);
+  const records = segmentRecords(mesh, (i) => depths.upright[depths.classOf[i]!]!, depths.uprightLeast);
   return { records, depths, kernel: leakageKernel(records, depths, lasting) };
 }
 

@@ -12,7 +12,7 @@ export const CLOSED_FORM_RATIO = 1.987;
  * Points on a segment of an entry by distance over length, to 1e-6: the n-point rule on 1/r errs by x²/12, x⁴/180,
  * x⁶/2 800, 2.3e-5·x⁸ of the mean at length over distance x, and twice that where both segments have a length.
  */
-export const PAIR_RATIOS: Float64Array = Float64Array.of(603.1, 10.37, 3.187);
+export const PAIR_RATIOS: Float64Array = Float64Array.of(20011, 10.73, 3.187);
 
 /** Points on a segment of an entry, by squared distance and squared length. */
 export function pairOrder(distance: number, lengthSquared: number): number {
@@ -23,22 +23,29 @@ export function pairOrder(distance: number, lengthSquared: number): number {
 }
 
 /**
- * Distance over the longer length from which value and curvature of a table at the mean squared distance do for both
- * segments: what is left out is 0.16·x⁴ of 1/r for two segments in line, up to four times that where layers make the
- * potential fall faster.
+ * Distance over the longer length in plan from which one bin of a table does for both segments (radialMean): what is
+ * left out is of the sixth order.
  */
-export const SINGLE_RATIO = 28.3;
+export const SINGLE_RATIO = 10.73;
+/** Share of that ratio from which the second moment alone does: 0.16·x⁴ of 1/r is left out, up to four times that in layers. */
+export const FARTHEST_SHARE = 2.64;
+/** The same as SINGLE_RATIO with the longer wire in halves, and with both. */
+export const HALVES_RATIO = 7.31;
+export const QUARTERS_RATIO = 5.37;
 
 /**
- * Distance from images over the longer length from which so many points suffice for their mean, a part of an entry, to
- * 5e-7: n points leave ρ⁻²ⁿ, ρ = q + √(q² + 1), q twice that ratio (Trefethen 2013, theorem 19.3).
+ * Distance from images over the length from which so many points suffice for their mean, a part of an entry, to 1e-6:
+ * n points leave ρ⁻²ⁿ, ρ = q + √(q² + 1), q twice that ratio (Trefethen 2013, theorem 19.3).
  */
 export const SMOOTH_ORDERS: readonly (readonly [ratio: number, order: number])[] = [
-  [10.37, 2],
-  [3.187, 3],
-  [1.987, 4],
-  [0.993, 6],
-  [0.497, 10],
+  [8.03, 2],
+  [2.53, 3],
+  [1.487, 4],
+  [0.993, 5],
+  [0.747, 6],
+  [0.497, 8],
+  [0.397, 10],
+  [0.333, 12],
   [0.253, 16],
   [0.121, 32],
 ];

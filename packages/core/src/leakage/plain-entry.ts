@@ -3,8 +3,8 @@ import { gaussLegendre } from '../numerics/gauss-legendre.ts';
 import type { ImageList } from '../soil/image-list.ts';
 import { nodeReader } from './depth-nodes.ts';
 import type { DepthPairs } from './depth-pairs.ts';
-import { pairOrder, smoothOrder } from './pair-potential.ts';
-import { type RadialTable, radialMean, radialValue } from './radial-table.ts';
+import { FARTHEST_SHARE, HALVES_RATIO, pairOrder, QUARTERS_RATIO, smoothOrder } from './pair-potential.ts';
+import { type RadialTable, radialFarMean, radialMean, radialValue } from './radial-table.ts';
 import {
   AA,
   CX,
@@ -12,6 +12,7 @@ import {
   CZ,
   HX,
   HY,
+  LEAST,
   LENGTH,
   NEAR,
   RANK,
@@ -40,7 +41,8 @@ export function plainEntry(records: Float64Array, { count, classOf, pairs }: Dep
     const first = r[i * RECORD + RANK]! <= r[j * RECORD + RANK]!;
     const source = (first ? i : j) * RECORD;
     const field = (first ? j : i) * RECORD;
-    const { list, far, rest, nodes, weights } = pairs[classOf[i]! * count + classOf[j]!]!;
+    const { list, singly, far, rest, nodes, weights } = pairs[classOf[i]! * count + classOf[j]!]!;
+    const { factor } = list;
     const dx = r[field + CX]! - r[source + CX]!;
     const dy = r[field + CY]! - r[source + CY]!;
     const dz = r[field + CZ]! - r[source + CZ]!;
@@ -49,39 +51,143 @@ export function plainEntry(records: Float64Array, { count, classOf, pairs }: Dep
     const aa = Math.max(r[field + AA]!, r[source + AA]!);
     const lf = r[field + LENGTH]!;
     const ls = r[source + LENGTH]!;
-    const some = nodes === undefined ? list.count : list.primaryCount;
     if (distance >= Math.max(r[field + NEAR]!, r[source + NEAR]!)) {
-      if (far !== undefined) {
-        if (distance >= Math.max(r[field + SINGLE]!, r[source + SINGLE]!)) {
-          const across = dx * r[field + HX]! + dy * r[field + HY]!;
-          const along = dx * r[source + HX]! + dy * r[source + HY]!;
-          const rr = plan + aa + (r[field + THIRD]! + r[source + THIRD]!);
-          return list.factor * radialMean(far, rr, (4 / 3) * (across * across + along * along));
-        }
-        const orderF = pairOrder(distance, 12 * r[field + THIRD]!);
-        const orderS = pairOrder(distance, 12 * r[source + THIRD]!);
-        return list.factor * planMean(r, field, source, aa, orderF, orderS, far);
-      }
-      const orderF = pairOrder(distance, lf * lf);
-      const orderS = pairOrder(distance, ls * ls);
-      let sum = pointSum(r, field, source, aa, orderF, orderS, list, 0, some);
+      if (far !== undefined && plan >= Math.max(r[field + LEAST]!, r[source + LEAST]!))
+        return factor * farMean(r, field, source, distance, aa, far);
+      let sum = pointSum(r, field, source, aa, pairOrder(distance, lf * lf), pairOrder(distance, ls * ls), singly, 0, singly.count); // biome-ignore format: one call
       if (nodes !== undefined) sum += nodeMean(nodes, weights!, plan + aa);
-      return list.factor * sum;
+      if (rest !== undefined) sum += pointMean(r, field, source, distance, aa, rest);
+      return factor * sum;
     }
-    let sum = imageSum(r, field, source, aa, list, 0, list.primaryCount);
-    if (list.count === list.primaryCount) return list.factor * sum;
-    if (nodes !== undefined) return list.factor * (sum + nodeMean(nodes, weights!, plan + aa));
-    const gap = leastGap(r, field, source, dx, dy, dz, distance);
-    const order = rest === undefined ? 0 : smoothOrder(gap * gap + rest.smoothness ** 2, Math.max(lf, ls));
-    if (rest === undefined || order === 0)
-      sum += imageSum(r, field, source, aa, list, list.primaryCount, list.count);
-    else {
-      const orderF = r[field + THIRD]! > 0 ? order : 1;
-      const orderS = r[source + THIRD]! > 0 ? order : 1;
-      sum += planMean(r, field, source, aa, orderF, orderS, rest);
+    if (rest !== undefined) {
+      const gap = leastGap(r, field, source, dx, dy, dz, distance);
+      const smooth = gap * gap + rest.smoothness ** 2;
+      const orderF = r[field + THIRD]! > 0 ? smoothOrder(smooth, lf) : 1;
+      const orderS = r[source + THIRD]! > 0 ? smoothOrder(smooth, ls) : 1;
+      // images that are too close for points: all by closed form
+      if (orderF === 0 || orderS === 0) return factor * imageSum(r, field, source, aa, list);
+      return (
+        factor *
+        (imageSum(r, field, source, aa, singly) + planMean(r, field, source, aa, orderF, orderS, rest))
+      );
     }
-    return list.factor * sum;
+    const sum = imageSum(r, field, source, aa, singly);
+    return factor * (nodes === undefined ? sum : sum + nodeMean(nodes, weights!, plan + aa));
   };
+}
+
+/** Mean of a table of all images over two far segments, by as few places of it as their distance allows. */
+function farMean(
+  r: Float64Array,
+  field: number,
+  source: number,
+  distance: number,
+  aa: number,
+  table: RadialTable,
+): number {
+  const limit = Math.max(r[field + SINGLE]!, r[source + SINGLE]!);
+  if (distance >= limit)
+    return distance >= FARTHEST_SHARE ** 2 * limit
+      ? farthestMean(r, field, source, aa, table)
+      : wholeMean(r, field, source, aa, table);
+  const longer = 12 * Math.max(r[field + THIRD]!, r[source + THIRD]!);
+  if (distance >= HALVES_RATIO ** 2 * longer) return halvesMean(r, field, source, aa, table);
+  if (distance >= QUARTERS_RATIO ** 2 * longer) return quartersMean(r, field, source, aa, table);
+  return pointMean(r, field, source, distance, aa, table);
+}
+
+function farthestMean(
+  r: Float64Array,
+  field: number,
+  source: number,
+  aa: number,
+  table: RadialTable,
+): number {
+  const dx = r[field + CX]! - r[source + CX]!;
+  const dy = r[field + CY]! - r[source + CY]!;
+  const rr = dx * dx + dy * dy + aa + (r[field + THIRD]! + r[source + THIRD]!);
+  const ch = dx * r[field + HX]! + dy * r[field + HY]!;
+  return radialFarMean(table, rr, ch, dx * r[source + HX]! + dy * r[source + HY]!);
+}
+
+/** Mean of a table over points in plan, as many as the distance asks for. */
+function pointMean(
+  r: Float64Array,
+  field: number,
+  source: number,
+  distance: number,
+  aa: number,
+  table: RadialTable,
+): number {
+  const orderF = pairOrder(distance, 12 * r[field + THIRD]!);
+  const orderS = pairOrder(distance, 12 * r[source + THIRD]!);
+  return planMean(r, field, source, aa, orderF, orderS, table);
+}
+
+/** Mean of a table over two wires in plan by one place of it. */
+function wholeMean(r: Float64Array, field: number, source: number, aa: number, table: RadialTable): number {
+  const dx = r[field + CX]! - r[source + CX]!;
+  const dy = r[field + CY]! - r[source + CY]!;
+  return partMean(r, field, source, dx, dy, 1, 1, aa, table);
+}
+
+/** The same with the longer wire in halves. */
+function halvesMean(r: Float64Array, field: number, source: number, aa: number, table: RadialTable): number {
+  const [whole, halved] = r[field + THIRD]! > r[source + THIRD]! ? [source, field] : [field, source];
+  const dx = r[whole + CX]! - r[halved + CX]!;
+  const dy = r[whole + CY]! - r[halved + CY]!;
+  const ox = 0.5 * r[halved + HX]!;
+  const oy = 0.5 * r[halved + HY]!;
+  return (
+    0.5 *
+    (partMean(r, whole, halved, dx + ox, dy + oy, 1, 0.5, aa, table) +
+      partMean(r, whole, halved, dx - ox, dy - oy, 1, 0.5, aa, table))
+  );
+}
+
+/** The same with both wires in halves. */
+function quartersMean(
+  r: Float64Array,
+  field: number,
+  source: number,
+  aa: number,
+  table: RadialTable,
+): number {
+  const dx = r[field + CX]! - r[source + CX]!;
+  const dy = r[field + CY]! - r[source + CY]!;
+  const hx = 0.5 * r[field + HX]!;
+  const hy = 0.5 * r[field + HY]!;
+  const ox = 0.5 * r[source + HX]!;
+  const oy = 0.5 * r[source + HY]!;
+  return (
+    0.25 *
+    (partMean(r, field, source, dx - hx + ox, dy - hy + oy, 0.5, 0.5, aa, table) +
+      partMean(r, field, source, dx - hx - ox, dy - hy - oy, 0.5, 0.5, aa, table) +
+      partMean(r, field, source, dx + hx + ox, dy + hy + oy, 0.5, 0.5, aa, table) +
+      partMean(r, field, source, dx + hx - ox, dy + hy - oy, 0.5, 0.5, aa, table))
+  );
+}
+
+/** Mean of a table over parts of two wires, whose centres are (dx, dy) apart: shares `f` and `s` of their lengths. */
+function partMean(
+  r: Float64Array,
+  field: number,
+  source: number,
+  dx: number,
+  dy: number,
+  f: number,
+  s: number,
+  aa: number,
+  table: RadialTable,
+): number {
+  const hx = f * r[field + HX]!;
+  const hy = f * r[field + HY]!;
+  const ox = s * r[source + HX]!;
+  const oy = s * r[source + HY]!;
+  const h3 = f * f * r[field + THIRD]!;
+  const k3 = s * s * r[source + THIRD]!;
+  const rr = dx * dx + dy * dy + aa + (h3 + k3);
+  return radialMean(table, rr, dx * hx + dy * hy, dx * ox + dy * oy, hx * ox + hy * oy, h3, k3);
 }
 
 /** A distance that no two points of the segments fall below: along the line of their centres. */
@@ -170,16 +276,8 @@ function pointSum(
   return sum;
 }
 
-/** Images `from` to `to` − 1, each by its own distance: closed form when near, Gauss points when far. */
-function imageSum(
-  r: Float64Array,
-  field: number,
-  source: number,
-  aa: number,
-  list: ImageList,
-  from: number,
-  to: number,
-): number {
+/** Images, each by its own distance: closed form when near, Gauss points when far. */
+function imageSum(r: Float64Array, field: number, source: number, aa: number, list: ImageList): number {
   const lf = r[field + LENGTH]!;
   const ls = r[source + LENGTH]!;
   const ux = r[field + UX]!;
@@ -195,7 +293,7 @@ function imageSum(
   const wx = 0.5 * (lf * ux - ls * vx) - dx;
   const wy = 0.5 * (lf * uy - ls * vy) - dy;
   let sum = 0;
-  for (let k = from; k < to; k++) {
+  for (let k = 0; k < list.count; k++) {
     const sign = list.sign[k]!;
     const dz = r[field + CZ]! - sign * r[source + CZ]! - list.offset[k]!;
     const distance = plan + dz * dz;

@@ -9,7 +9,7 @@ export interface RadialTable {
   readonly bins: Float64Array;
   /** the function stays smooth on distances down to this, m */
   readonly smoothness: number;
-  /** largest error seen when it was built, at the end of each bin that is nearest to a singularity, of the size there */
+  /** largest error seen when it was built, at ends of bins that are nearest to a singularity, of the size there */
   readonly error: number;
 }
 
@@ -30,6 +30,8 @@ export interface RadialGrid {
  */
 const BIN_BITS = 3;
 const SHIFT = 20 - BIN_BITS;
+/** One bin of so many is checked: the first of each half octave, whose low end is nearest to a singularity for its width. */
+const CHECKED = 4;
 /** Coefficients of a bin. */
 export const TERMS = 6;
 /** Doubles of a bin. */
@@ -124,16 +126,18 @@ export function radialTable(
   size: (rr: number) => number = (rr) => Math.abs(f(rr)),
 ): RadialTable {
   const { perSquare, count, centre, half, squares } = radialGrid(smoothness, reach);
-  const values = Float64Array.from(squares, f);
+  const values = new Float64Array(TERMS);
   const bins = new Float64Array(count * STRIDE);
   let error = 0;
   for (let k = 0; k < count; k++) {
     const at = k * STRIDE;
     bins[at] = centre[k]!;
     bins[at + 1] = 1 / half[k]!;
-    toPowers(values, k * TERMS, bins, at + 2, 1);
+    if ((centre[k]! + half[k]! - 1) / perSquare < least) continue;
+    for (let p = 0; p < TERMS; p++) values[p] = f(squares[k * TERMS + p]!);
+    toPowers(values, 0, bins, at + 2, 1);
     const low = (centre[k]! - half[k]! - 1) / perSquare;
-    if (low < least) continue;
+    if (low < least || k % CHECKED !== 0) continue;
     error = Math.max(error, Math.abs(polynomial(bins, at, -1) - f(low)) / size(low));
   }
   return { perSquare, bins, smoothness, error };
@@ -156,24 +160,70 @@ function polynomial(b: Float64Array, at: number, u: number): number {
 }
 
 /**
- * Mean of f over a range of r² about its mean: f + variance·f″/2, the rest being of the fourth order in the range.
- * @param variance of r², m⁴
+ * Mean of f over two wires far from each other, to the fourth order in length over distance. With c from the one centre
+ * to the other, h and k the half vectors, r² = |c + t h − s k|² (+ a²) for t and s in [−1, 1] has the moments about its mean
+ * E₂ = (4/3)[(c·h)² + (c·k)²] + (4/45)(h⁴ + k⁴) + (4/9)(h·k)²,
+ * E₃ = (16/15)[(c·h)² h² + (c·k)² k²] + (16/3)(c·h)(c·k)(h·k),
+ * E₄ = (16/5)[(c·h)² + (c·k)²]² + (64/15)(c·h)²(c·k)², and what is left out is of the sixth order. A bin's polynomial in
+ * u, linear in r², then has the mean Σ c_k·m_k, m_k the moments of u.
+ * @param rr mean of r², m²
+ * @param ch c·h, m²
+ * @param ck c·k, m²
+ * @param hk h·k, m²
+ * @param h3 |h|²/3, m²
+ * @param k3 |k|²/3, m²
  */
-export function radialMean(table: RadialTable, rr: number, variance: number): number {
+export function radialMean(
+  table: RadialTable,
+  rr: number,
+  ch: number,
+  ck: number,
+  hk: number,
+  h3: number,
+  k3: number,
+): number {
+  // biome-ignore format: one row
   const y = 1 + rr * table.perSquare;
   asNumber[0] = y;
   const at = ((asWords[UPPER]! >>> SHIFT) - FIRST) * STRIDE;
   const b = table.bins;
-  const u = (y - b[at]!) * b[at + 1]!;
-  const c2 = b[at + 4]!;
-  const c3 = b[at + 5]!;
-  const c4 = b[at + 6]!;
-  const c5 = b[at + 7]!;
+  const scale = b[at + 1]!;
+  const u = (y - b[at]!) * scale;
+  const stretch = table.perSquare * scale;
+  const p = stretch * ch;
+  const q = stretch * ck;
+  const r = stretch * hk;
+  const t = stretch * h3;
+  const v = stretch * k3;
+  const both = p * p + q * q;
+  const e2 = (4 / 3) * both + (0.8 * (t * t + v * v) + (4 / 9) * (r * r));
+  const e3 = 3.2 * (p * p * t + q * q * v) + (16 / 3) * (p * q * r);
+  const e4 = 3.2 * (both * both) + (64 / 15) * (p * q * (p * q));
   const uu = u * u;
-  const value = b[at + 2]! + u * b[at + 3]! + uu * (c2 + u * c3 + uu * (c4 + u * c5));
-  const bend = c2 + u * (3 * c3) + uu * (6 * c4 + u * (10 * c5));
-  const stretch = table.perSquare * b[at + 1]!;
-  return value + variance * (stretch * stretch) * bend;
+  const m3 = u * (uu + 3 * e2) + e3;
+  const m4 = uu * (uu + 6 * e2) + (4 * (u * e3) + e4);
+  const m5 = u * (uu * (uu + 10 * e2) + (10 * (u * e3) + 5 * e4));
+  return (
+    b[at + 2]! +
+    u * b[at + 3]! +
+    ((uu + e2) * b[at + 4]! + m3 * b[at + 5]! + (m4 * b[at + 6]! + m5 * b[at + 7]!))
+  );
+}
+
+/** The same to the second order, for wires so far that E₂ = (4/3)[(c·h)² + (c·k)²] alone counts. */
+export function radialFarMean(table: RadialTable, rr: number, ch: number, ck: number): number {
+  const y = 1 + rr * table.perSquare;
+  asNumber[0] = y;
+  const at = ((asWords[UPPER]! >>> SHIFT) - FIRST) * STRIDE;
+  const b = table.bins;
+  const scale = b[at + 1]!;
+  const u = (y - b[at]!) * scale;
+  const stretch = table.perSquare * scale;
+  const e = stretch * stretch * (4 / 3) * (ch * ch + ck * ck);
+  const uu = u * u;
+  const odd = b[at + 3]! + (uu + 3 * e) * b[at + 5]! + uu * (uu + 10 * e) * b[at + 7]!;
+  const even = b[at + 2]! + (uu + e) * b[at + 4]! + uu * (uu + 6 * e) * b[at + 6]!;
+  return even + u * odd;
 }
 
 /** Number of the bin of r² in a table whose first bin begins at r = 0. */

@@ -24,16 +24,23 @@ export const LENGTH = 12;
 export const RANK = 13;
 /** Place of the class number, left for the kernel. */
 export const CLASS = 14;
+/** Squared distance in plan from which tables of all images hold. */
+export const LEAST = 15;
 
 /** Segments of one layer before those of the next: more than a mesh can have. */
 const LAYER_RANK = 2 ** 31;
 
 /**
  * @param upright whether a segment belongs to a class of vertical ones
+ * @param uprightLeast distance in plan from which tables of all images of a vertical segment hold, m
  * @returns shape [mesh.count × RECORD]
  * @throws RangeError where a coordinate is not a number: an entry of it would be read from beyond its table
  */
-export function segmentRecords(mesh: SegmentMesh, upright: (i: number) => boolean): Float64Array {
+export function segmentRecords(
+  mesh: SegmentMesh,
+  upright: (i: number) => boolean,
+  uprightLeast: number,
+): Float64Array {
   const records = new Float64Array(mesh.count * RECORD);
   for (let i = 0; i < mesh.count; i++) {
     const at = i * RECORD;
@@ -46,7 +53,8 @@ export function segmentRecords(mesh: SegmentMesh, upright: (i: number) => boolea
     const cz = (mesh.z1[i]! + mesh.z2[i]!) / 2;
     if (!(length > 0 && Number.isFinite(length + cx + cy + cz)))
       throw new RangeError(`segment ${i} has no length or place: ${length} m at ${cx}, ${cy}, ${cz}`);
-    const share = upright(i) ? 0 : 0.5;
+    const vertical = upright(i);
+    const share = vertical ? 0 : 0.5;
     const hx = share * dx;
     const hy = share * dy;
     const third = (hx * hx + hy * hy) / 3;
@@ -64,6 +72,7 @@ export function segmentRecords(mesh: SegmentMesh, upright: (i: number) => boolea
     records[at + UY] = dy / length;
     records[at + UZ] = dz / length;
     records[at + LENGTH] = length;
+    records[at + LEAST] = vertical ? uprightLeast ** 2 : 0;
     records[at + RANK] = mesh.layer[i]! * LAYER_RANK + i;
   }
   return records;

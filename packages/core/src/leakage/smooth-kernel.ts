@@ -3,11 +3,6 @@ import type { ImageList } from '../soil/image-list.ts';
 import type { DepthClass } from './depth-classes.ts';
 import { type RadialTable, radialTable } from './radial-table.ts';
 
-/** Images past the primary ones, as indices into the list. */
-export function smoothImages(images: ImageList): number[] {
-  return Array.from({ length: images.count - images.primaryCount }, (_, k) => images.primaryCount + k);
-}
-
 /**
  * Mean over a vertical source (or value for a horizontal one) of Σ weight/√(r² + h²) over the chosen images, for a
  * field point at depth z; undefined where none is chosen. For a vertical extent the mean is
@@ -39,20 +34,25 @@ export function smoothKernel(
     far[k] = Math.max(h1, h2);
     smoothness = Math.min(smoothness, near[k]!);
   }
-  const level = (rr: number): number => {
-    let sum = 0;
-    for (let k = 0; k < count; k++) sum += weight[k]! / Math.sqrt(rr + near[k]! * near[k]!);
-    return sum;
+  const sum = (rr: number, weights: Float64Array): number => {
+    let total = 0;
+    if (source.vertical)
+      for (let k = 0; k < count; k++) total += weights[k]! * extentMean(near[k]!, far[k]!, rr);
+    else for (let k = 0; k < count; k++) total += weights[k]! / Math.sqrt(rr + near[k]! * near[k]!);
+    return total;
   };
-  const upright = (rr: number): number => {
-    let sum = 0;
-    for (let k = 0; k < count; k++) {
-      const h1 = near[k]!;
-      const h2 = far[k]!;
-      const ratio = (h2 + Math.sqrt(rr + h2 * h2)) / (h1 + Math.sqrt(rr + h1 * h1));
-      sum += (weight[k]! * Math.log(ratio)) / (h2 - h1);
-    }
-    return sum;
-  };
-  return radialTable(source.vertical ? upright : level, smoothness, reach);
+  // images of both signs may cancel: an error counts against their sizes
+  const sizes = weight.map(Math.abs);
+  return radialTable(
+    (rr) => sum(rr, weight),
+    smoothness,
+    reach,
+    0,
+    (rr) => sum(rr, sizes),
+  );
+}
+
+/** (1/(h2 − h1))∫ dh/√(r² + h²), 0 ≤ h1 < h2. */
+function extentMean(h1: number, h2: number, rr: number): number {
+  return Math.log((h2 + Math.sqrt(rr + h2 * h2)) / (h1 + Math.sqrt(rr + h1 * h1))) / (h2 - h1);
 }

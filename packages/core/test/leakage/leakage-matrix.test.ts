@@ -35,7 +35,7 @@ function meshOf(bars: readonly Bar[], interfaces: readonly number[], level: numb
 
 describe('leakage matrix', () => {
   it.each(cases)(
-    'holds in entries what the images integrate to one by one, to 2e-6: %s',
+    'holds in entries what the images integrate to one by one, to 1e-6: %s',
     (_, model, interfaces) => {
       for (const bars of [yard, station]) {
         const mesh = meshOf(bars, interfaces, 1);
@@ -51,7 +51,7 @@ describe('leakage matrix', () => {
           const exact = integratedEntry(mesh, images, segments[i]!, segments[j]!);
           worst = Math.max(worst, Math.abs(entries[(i * (i + 1)) / 2 + j]! / exact - 1));
         }
-        expect(worst).toBeLessThan(2e-6);
+        expect(worst).toBeLessThan(1e-6);
       }
     },
   );

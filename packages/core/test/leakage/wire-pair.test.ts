@@ -50,6 +50,18 @@ describe('mean inverse distance of two wires', () => {
     expect(Math.abs(meanInverseDistance(p, q, a) / integrated(p, q, a) - 1)).toBeLessThan(1e-10);
   });
 
+  it.each([1e-3, 1e-5, 1e-6, 1e-7, 1e-8, 1e-9, 1e-12])(
+    'equals numerical integration to 1e-8 where axes a fifth of a metre apart part by %d of their length',
+    (slope) => {
+      for (const z of [0, 0.1]) {
+        const [p, q] = [wire(0, 0, 0, 5, 0, 0), wire(1, 0.2, z, 6, 0.2 + 5 * slope, z)];
+        const exact = integrated(p, q, a);
+        expect(Math.abs(meanInverseDistance(p, q, a) / exact - 1)).toBeLessThan(1e-8);
+        expect(Math.abs(meanInverseDistance(q, p, a) / exact - 1)).toBeLessThan(1e-8);
+      }
+    },
+  );
+
   it('equals numerical integration for random wires, and does not depend on which comes first', () => {
     const random = randomNumbers(4);
     const any = (): Wire => wire(random(), random(), random(), random(), random(), random());
