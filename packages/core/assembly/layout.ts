@@ -22,7 +22,7 @@ export const AT_LENGTH: usize = 96;
 export const AT_RANK: usize = 104;
 /** a whole number of 32 bits */
 export const AT_CLASS: usize = 112;
-/** squared distance in plan from which tables of all images hold */
+/** squared distance in plan of the centre from which tables of all images hold */
 export const AT_LEAST: usize = 120;
 
 /** A class pair: four doubles, then whole numbers of 32 bits; an address of 0 is none. */

@@ -12,7 +12,7 @@ let segments: usize = 0;
 let pairs: usize = 0;
 let classes: usize = 0;
 let rules: usize = 0;
-/** squared ratios of distance to length: from which 1, 2 and 3 points do; halves of the longer wire, halves of both; and from which
+/** squared ratios of distance to length: from which 1, 2 and 3 points do; halves of one wire, halves of both; and from which
  * the second moment alone does, over the one of which one bin does */
 let ratios: usize = 0;
 /** squared ratios of smoothness to length, each with the points that then do; their number */
@@ -266,7 +266,10 @@ function entry(one: usize, other: usize, pair: usize): f64 {
       const longer = 12 * max<f64>(tf, ts);
       const per = load<f64>(pair, PAIR_FAR_PER);
       if (distance >= load<f64>(ratios, 24) * longer) {
-        return factor * (tf > ts ? halves(source, field, -dx, -dy, aa, far, per) : halves(field, source, dx, dy, aa, far, per));
+        // the wire that points more to the other, so that it does not depend on their order
+        const ofField = abs<f64>(dx * load<f64>(field, AT_HX) + dy * load<f64>(field, AT_HY));
+        const ofSource = abs<f64>(dx * load<f64>(source, AT_HX) + dy * load<f64>(source, AT_HY));
+        return factor * (ofField > ofSource ? halves(source, field, -dx, -dy, aa, far, per) : halves(field, source, dx, dy, aa, far, per));
       }
       if (distance >= load<f64>(ratios, 32) * longer) return factor * quarters(field, source, dx, dy, aa, far, per);
       return factor * planMean(field, source, dx, dy, aa, order(distance, 12 * tf), order(distance, 12 * ts), far, per);

@@ -29,7 +29,7 @@ export interface DepthPairs {
   readonly classOf: Int32Array;
   /** whether a class is of vertical segments; shape [count] */
   readonly upright: readonly boolean[];
-  /** distance in plan from which tables of all images of a vertical segment hold, m */
+  /** distance in plan of a point from which tables of all images of a vertical segment hold, m */
   readonly uprightLeast: number;
   /** the same pair at [a, b] and [b, a]; shape [count × count] */
   readonly pairs: readonly DepthPair[];
@@ -51,6 +51,8 @@ const TABLE_ERROR = 1e-8;
 const WIDER = 1.2;
 /** Least distance in plan of a vertical segment's tables of all images, over the reach: few pairs are nearer, and half of the bins would serve them. */
 const UPRIGHT_LEAST = 0.01;
+/** Share of the scale that would do: 1 + r²/s² is then r²/s² within a hundredth wherever a table is asked. */
+const SMALL_SCALE = 1 / 8;
 /** Least distance between points of two far segments, over the longer length: between centres 1.987, less a half and the outermost of four points. */
 const APART = 1;
 
@@ -241,7 +243,9 @@ function withFar(pair: DepthPair, field: Class, source: Class, reach: number): D
   const inPlan = field.vertical || source.vertical ? (UPRIGHT_LEAST * reach) ** 2 : 0;
   const least = Math.max(inPlan, apart ** 2 - nearest ** 2);
   // with bins for s, r² + h² ≥ (8/9)(r² + s²) must hold from the least r² on
-  const scale = Math.sqrt((9 / 8) * (nearest ** 2 + least / 9));
+  const largest = (9 / 8) * (nearest ** 2 + least / 9);
+  // the reach over a power of √2, and small: bins then stay where they are when a shorter segment is drawn
+  const scale = (SMALL_SCALE * reach) / 2 ** (Math.ceil(Math.log2(reach ** 2 / largest)) / 2);
   const all = (rr: number): number => {
     let sum = rest === undefined ? 0 : radialValue(rest, rr);
     for (const { mean } of means) sum += mean(rr);

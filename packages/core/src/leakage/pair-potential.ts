@@ -12,7 +12,7 @@ export const CLOSED_FORM_RATIO = 1.987;
  * Points on a segment of an entry by distance over length, to 1e-6: the n-point rule on 1/r errs by x²/12, x⁴/180,
  * x⁶/2 800, 2.3e-5·x⁸ of the mean at length over distance x, and twice that where both segments have a length.
  */
-export const PAIR_RATIOS: Float64Array = Float64Array.of(20011, 10.73, 3.187);
+export const PAIR_RATIOS: Float64Array = Float64Array.of(20011, 12.37, 3.187);
 
 /** Points on a segment of an entry, by squared distance and squared length. */
 export function pairOrder(distance: number, lengthSquared: number): number {
@@ -26,10 +26,10 @@ export function pairOrder(distance: number, lengthSquared: number): number {
  * Distance over the longer length in plan from which one bin of a table does for both segments (radialMean): what is
  * left out is of the sixth order.
  */
-export const SINGLE_RATIO = 10.73;
+export const SINGLE_RATIO = 12.37;
 /** Share of that ratio from which the second moment alone does: 0.16·x⁴ of 1/r is left out, up to four times that in layers. */
-export const FARTHEST_SHARE = 2.64;
-/** The same as SINGLE_RATIO with the longer wire in halves, and with both. */
+export const FARTHEST_SHARE = 2.29;
+/** The same as SINGLE_RATIO with the wire in halves that points more to the other, and with both. */
 export const HALVES_RATIO = 7.31;
 export const QUARTERS_RATIO = 5.37;
 

@@ -131,11 +131,13 @@ function wholeMean(r: Float64Array, field: number, source: number, aa: number, t
   return partMean(r, field, source, dx, dy, 1, 1, aa, table);
 }
 
-/** The same with the longer wire in halves. */
+/** The same with the wire in halves that points more to the other. */
 function halvesMean(r: Float64Array, field: number, source: number, aa: number, table: RadialTable): number {
-  const [whole, halved] = r[field + THIRD]! > r[source + THIRD]! ? [source, field] : [field, source];
-  const dx = r[whole + CX]! - r[halved + CX]!;
-  const dy = r[whole + CY]! - r[halved + CY]!;
+  const cx = r[field + CX]! - r[source + CX]!;
+  const cy = r[field + CY]! - r[source + CY]!;
+  const ofField = Math.abs(cx * r[field + HX]! + cy * r[field + HY]!);
+  const ofSource = Math.abs(cx * r[source + HX]! + cy * r[source + HY]!);
+  const [whole, halved, dx, dy] = ofField > ofSource ? [source, field, -cx, -cy] : [field, source, cx, cy];
   const ox = 0.5 * r[halved + HX]!;
   const oy = 0.5 * r[halved + HY]!;
   return (

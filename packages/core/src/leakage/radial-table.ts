@@ -115,7 +115,7 @@ export function toPowers(
  * @param f function of r², m²
  * @param smoothness s, the shortest length on which f changes at any r ≥ `least`, m
  * @param reach largest r, m
- * @param least r² below which the table will not be asked, m²: there f may be singular
+ * @param least r² below which the table will not be asked, m²: there f may be singular, and the table gives no number
  * @param size what the error is measured against, of r²; default |f|
  */
 export function radialTable(
@@ -133,7 +133,10 @@ export function radialTable(
     const at = k * STRIDE;
     bins[at] = centre[k]!;
     bins[at + 1] = 1 / half[k]!;
-    if ((centre[k]! + half[k]! - 1) / perSquare < least) continue;
+    if ((centre[k]! + half[k]! - 1) / perSquare < least) {
+      bins.fill(Number.NaN, at + 2, at + STRIDE);
+      continue;
+    }
     for (let p = 0; p < TERMS; p++) values[p] = f(squares[k * TERMS + p]!);
     toPowers(values, 0, bins, at + 2, 1);
     const low = (centre[k]! - half[k]! - 1) / perSquare;

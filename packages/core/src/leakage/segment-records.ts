@@ -24,7 +24,7 @@ export const LENGTH = 12;
 export const RANK = 13;
 /** Place of the class number, left for the kernel. */
 export const CLASS = 14;
-/** Squared distance in plan from which tables of all images hold. */
+/** Squared distance in plan between centres from which tables of all images hold. */
 export const LEAST = 15;
 
 /** Segments of one layer before those of the next: more than a mesh can have. */
@@ -32,7 +32,7 @@ const LAYER_RANK = 2 ** 31;
 
 /**
  * @param upright whether a segment belongs to a class of vertical ones
- * @param uprightLeast distance in plan from which tables of all images of a vertical segment hold, m
+ * @param uprightLeast distance in plan of a point from which tables of all images of a vertical segment hold, m
  * @returns shape [mesh.count × RECORD]
  * @throws RangeError where a coordinate is not a number: an entry of it would be read from beyond its table
  */
@@ -72,7 +72,8 @@ export function segmentRecords(
     records[at + UY] = dy / length;
     records[at + UZ] = dz / length;
     records[at + LENGTH] = length;
-    records[at + LEAST] = vertical ? uprightLeast ** 2 : 0;
+    // points on a level wire are then at least half as far as its centre
+    records[at + LEAST] = vertical ? 4 * uprightLeast ** 2 : 12 * third;
     records[at + RANK] = mesh.layer[i]! * LAYER_RANK + i;
   }
   return records;

@@ -50,6 +50,7 @@ describe('radial table', () => {
   it('may be singular below the least distance it is asked for', () => {
     const far = radialTable((rr) => 1 / Math.sqrt(rr), 0.4, 300, 1.28);
     expect(far.error).toBeLessThan(2e-9);
+    expect(radialValue(far, 0.5)).toBeNaN();
     for (const r of [1.14, 1.5, 9, 300]) expect(Math.abs(radialValue(far, r * r) * r - 1)).toBeLessThan(3e-9);
   });
 
