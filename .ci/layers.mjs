@@ -23,6 +23,7 @@ const NODE_ONLY = 'apps/cli';
 const CORE_ORDER = [
   'kernels',
   'numerics',
+  'crew',
   'materials',
   'soil',
   'geometry',

@@ -14,6 +14,7 @@ export default defineConfig({
     rollupOptions: {
       input: {
         ohmstead: 'src/ohmstead.ts',
+        helper: 'src/helper.ts',
         bench: 'src/bench.ts',
         agreement: 'src/agreement.ts',
         schema: 'src/schema.ts',

@@ -1,4 +1,5 @@
 // The computing that commands call, in one place, so that tests can put a quick one in its stead.
+import type { Crew } from '@ohmstead/core';
 import type { PageScripts, Renderer } from '@ohmstead/pack';
 import {
   type FieldPoint,
@@ -41,14 +42,25 @@ export interface Engine {
   readonly version: string;
 }
 
-export const engine: Engine = {
-  loadStudy,
-  loadPoints,
-  loadSurvey,
-  fitSurvey,
-  solveStudy,
-  fieldAt,
-  // read only when wanted: it is as large as the program itself
-  pageScripts: async () => (await import('./page-scripts.ts')).pageScripts,
-  version: programVersion,
-};
+/** @param crew shares in large work, and is ended with it */
+export function engineWith(crew?: Crew): Engine {
+  const ending = async <T>(work: Promise<T>): Promise<T> => {
+    try {
+      return await work;
+    } finally {
+      crew?.end();
+    }
+  };
+  return {
+    loadStudy,
+    loadPoints,
+    loadSurvey,
+    fitSurvey,
+    solveStudy: (loaded, options) => ending(solveStudy(loaded, { ...options, crew })),
+    fieldAt: (loaded, points, caseName, onProgress) =>
+      ending(fieldAt(loaded, points, caseName, onProgress, crew)),
+    // read only when wanted: it is as large as the program itself
+    pageScripts: async () => (await import('./page-scripts.ts')).pageScripts,
+    version: programVersion,
+  };
+}

@@ -1,10 +1,11 @@
 #!/usr/bin/env node
 // The program `ohmstead`: joins the command line to the process it runs in.
-import { engine } from './engine.ts';
+import { engineWith } from './engine.ts';
 import { PROGRAM_FAULT } from './exit-status.ts';
 import type { Io } from './io.ts';
 import { main } from './main.ts';
 import { systemComplaint } from './system-complaint.ts';
+import { threadCrew } from './thread-crew.ts';
 
 for (const stream of [process.stdout, process.stderr]) {
   stream.on('error', (error: NodeJS.ErrnoException) => {
@@ -27,6 +28,8 @@ const io: Io = {
   env: process.env,
   now: () => performance.now(),
 };
+
+const engine = engineWith(threadCrew(new URL('helper.js', import.meta.url)));
 
 // Not awaited at the top: chunks that are read when wanted import from this file, which must be done by then.
 void main(process.argv.slice(2), io, engine).then((status) => {

@@ -1,5 +1,8 @@
 // All computing, pure: no file, clock, network, console or DOM.
 
+export { type Crew, HelperLost } from './crew/crew.ts';
+export { crewOf, type Helper, type HelperHearing, type Platform } from './crew/helpers.ts';
+export { type Order, type Said, type Work, workshop } from './crew/workshop.ts';
 export { decrementFactor } from './fault/decrement.ts';
 export { type FaultToGround, gridCurrent } from './fault/grid-current.ts';
 export { worstTouchNearLines } from './field/floating-touch.ts';
@@ -56,6 +59,7 @@ export {
   type PartStart,
   startPart,
 } from './leakage/compressed-matrix.ts';
+export { partWorks } from './leakage/held-parts.ts';
 export {
   type LeakageBlocks,
   type LeakageMatrix,

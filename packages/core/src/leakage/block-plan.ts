@@ -154,15 +154,35 @@ function rankOf(tree: ClusterTree, cluster: number): number {
 }
 
 /** Bytes that a plan's blocks, bases and preconditioner will take, from the ranks expected; ranks seen differ by a tenth. */
-export function plannedBytes({ tree, near, far }: BlockPlan): number {
+export function plannedBytes(plan: BlockPlan): number {
+  // a leaf's own block and its inverse
+  const values = plannedPairs(plan) + plannedClusters(plan, (rows, rank, own) => rows * rank + 2 * own);
+  return values * Float32Array.BYTES_PER_ELEMENT;
+}
+
+/** Entries that will be computed to build a plan's matrix, from the same ranks. */
+export function plannedEntries(plan: BlockPlan): number {
+  return (
+    plannedPairs(plan) + plannedClusters(plan, (rows, _, own, c) => rows * plan.samples[c]!.length + own)
+  );
+}
+
+function plannedPairs({ tree, near, far }: BlockPlan): number {
   let values = 0;
   for (let p = 0; p < near.length; p += 2) values += sizeOf(tree, near[p]!) * sizeOf(tree, near[p + 1]!);
   for (let p = 0; p < far.length; p += 2) values += rankOf(tree, far[p]!) * rankOf(tree, far[p + 1]!);
+  return values;
+}
+
+/** Σ over the clusters. @param of rows of its basis, its rank, values of its own block if it is a leaf, and the cluster */
+function plannedClusters(
+  { tree }: BlockPlan,
+  of: (rows: number, rank: number, own: number, cluster: number) => number,
+): number {
+  let sum = 0;
   tree.half.forEach((first, c) => {
     const rows = first < 0 ? sizeOf(tree, c) : rankOf(tree, first) + rankOf(tree, first + 1);
-    values += rows * rankOf(tree, c);
-    // a leaf's own block and its inverse
-    if (first < 0) values += 2 * rows * rows;
+    sum += of(rows, rankOf(tree, c), first < 0 ? rows * rows : 0, c);
   });
-  return values * Float32Array.BYTES_PER_ELEMENT;
+  return sum;
 }

@@ -28,7 +28,15 @@ export function compressedLeakageMatrix(
   images: SoilImages,
   options?: CompressionOptions,
 ): CompressedLeakageMatrix {
-  const plan = planBlocks(mesh, options);
+  return compressedByPlan(mesh, images, planBlocks(mesh, options));
+}
+
+/** The same by a plan made before. @throws NotPositiveDefinite, MemoryRefused */
+export function compressedByPlan(
+  mesh: SegmentMesh,
+  images: SoilImages,
+  plan: BlockPlan,
+): CompressedLeakageMatrix {
   const entries = leakageBlocks(mesh, images);
   const joined = joinParts(
     plan,

@@ -6,7 +6,7 @@ import { packedOperator } from '../numerics/packed-operator.ts';
 import { type PackedStore, packedStore } from '../numerics/packed-store.ts';
 import type { SoilImages } from '../soil/image-list.ts';
 import { type DepthPairs, depthPairs } from './depth-pairs.ts';
-import { type LeakageKernel, leakageKernel } from './leakage-kernel.ts';
+import { leakageKernel } from './leakage-kernel.ts';
 import { type LeakageEntry, plainEntry } from './plain-entry.ts';
 import { segmentRecords } from './segment-records.ts';
 
@@ -42,7 +42,8 @@ export function leakageMatrix(mesh: SegmentMesh, images: SoilImages): DenseLeaka
   const size = segments.length;
   const store = packedStore(size);
   const { entries } = store;
-  const { records, depths, kernel } = prepared(mesh, images, false);
+  const { records, depths } = leakageTables(mesh, images);
+  const kernel = leakageKernel(records, depths, false);
   if (kernel?.triangle(segments, entries) !== true) {
     const entry = plainEntry(records, depths);
     for (let row = 0; row < size; row++)
@@ -77,30 +78,37 @@ export function leakageEntries(mesh: SegmentMesh, images: SoilImages): LeakageEn
  */
 export type LeakageBlocks = (rows: Int32Array, columns: Int32Array, into: Float64Array) => void;
 
+/** What entries are made of: segments and tables; plain data. */
+export interface LeakageTables {
+  readonly records: Float64Array;
+  readonly depths: DepthPairs;
+}
+
+export function leakageTables(mesh: SegmentMesh, images: SoilImages): LeakageTables {
+  const depths = depthPairs(mesh, images, planReach(mesh));
+  return {
+    records: segmentRecords(mesh, (i) => depths.upright[depths.classOf[i]!]!, depths.uprightLeast),
+    depths,
+  };
+}
+
 /**
  * Prepares the tables from which blocks of the leakage matrix are made. An entry is the same to the last bit in whatever
  * block it is asked for.
  */
 export function leakageBlocks(mesh: SegmentMesh, images: SoilImages): LeakageBlocks {
-  const { records, depths, kernel } = prepared(mesh, images, true);
+  return blocksFrom(leakageTables(mesh, images));
+}
+
+/** The same from tables prepared before. */
+export function blocksFrom({ records, depths }: LeakageTables): LeakageBlocks {
+  const kernel = leakageKernel(records, depths, true);
   const entry = plainEntry(records, depths);
   return (rows, columns, into) => {
     if (kernel?.block(rows, columns, into) === true) return;
     for (let r = 0; r < rows.length; r++)
       for (let c = 0; c < columns.length; c++) into[r * columns.length + c] = entry(rows[r]!, columns[c]!);
   };
-}
-
-interface Prepared {
-  readonly records: Float64Array;
-  readonly depths: DepthPairs;
-  readonly kernel: LeakageKernel | undefined;
-}
-
-function prepared(mesh: SegmentMesh, images: SoilImages, lasting: boolean): Prepared {
-  const depths = depthPairs(mesh, images, planReach(mesh));
-  const records = segmentRecords(mesh, (i) => depths.upright[depths.classOf[i]!]!, depths.uprightLeast);
-  return { records, depths, kernel: leakageKernel(records, depths, lasting) };
 }
 
 export function leakingSegments(mesh: SegmentMesh): Int32Array {

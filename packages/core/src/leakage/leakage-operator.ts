@@ -1,8 +1,10 @@
 // The leakage matrix stored in the way that suits its size, and the memory that takes.
+import type { Crew } from '../crew/crew.ts';
 import type { SegmentMesh } from '../geometry/segments.ts';
 import type { SoilImages } from '../soil/image-list.ts';
 import { planBlocks, plannedBytes } from './block-plan.ts';
-import { compressedLeakageMatrix } from './compressed-matrix.ts';
+import { compressedByPlan } from './compressed-matrix.ts';
+import { crewMatrix, crewPays } from './crew-matrix.ts';
 import { type LeakageMatrix, leakageMatrix, leakingSegments } from './leakage-matrix.ts';
 
 /** Segments up to which the whole matrix is filled and solved as fast: both take the same time at 1 700, measured. */
@@ -19,11 +21,21 @@ export function leakageStorage(segments: number, pieces: number): 'whole' | 'com
   return segments <= WHOLE_AT_MOST || (segments <= WHOLE_FOR_MANY && pieces >= MANY) ? 'whole' : 'compressed';
 }
 
-/** @throws NotPositiveDefinite, MemoryRefused */
-export function leakageOperator(mesh: SegmentMesh, images: SoilImages): LeakageMatrix {
-  return leakageStorage(leakingSegments(mesh).length, mesh.componentCount) === 'whole'
-    ? leakageMatrix(mesh, images)
-    : compressedLeakageMatrix(mesh, images);
+/**
+ * @param crew shares in a compressed matrix that is large enough; whether there is one or not changes no bit
+ * @throws NotPositiveDefinite, MemoryRefused
+ */
+export async function leakageOperator(
+  mesh: SegmentMesh,
+  images: SoilImages,
+  crew?: Crew,
+): Promise<LeakageMatrix> {
+  if (leakageStorage(leakingSegments(mesh).length, mesh.componentCount) === 'whole')
+    return leakageMatrix(mesh, images);
+  const plan = planBlocks(mesh);
+  return crew !== undefined && crew.size > 0 && crewPays(plan)
+    ? crewMatrix(mesh, images, plan, crew)
+    : compressedByPlan(mesh, images, plan);
 }
 
 /** Of a compressed matrix while it is made, over what stays: bases in doubles, leaves before they are in place. */

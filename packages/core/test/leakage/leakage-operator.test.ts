@@ -23,10 +23,10 @@ describe('the storage of the leakage matrix', () => {
     expect(leakageStorage(4001, 500)).toBe('compressed');
   });
 
-  it('is what the matrix made has', () => {
-    const small = leakageOperator(meshOf(gridBars(20, 20, 4, 4, 0.5, 0.005)), images);
+  it('is what the matrix made has', async () => {
+    const small = await leakageOperator(meshOf(gridBars(20, 20, 4, 4, 0.5, 0.005)), images);
     expect(small.entries?.length).toBe((small.size * (small.size + 1)) / 2);
-    const large = leakageOperator(meshOf(gridBars(120, 120, 24, 24, 0.5, 0.005)), images);
+    const large = await leakageOperator(meshOf(gridBars(120, 120, 24, 24, 0.5, 0.005)), images);
     expect(large.size).toBeGreaterThan(2000);
     expect(large.entries).toBeUndefined();
   });

@@ -16,7 +16,7 @@ import {
 import type { GroundResult, Spread } from '../ground.ts';
 import type { CaseResult } from '../results.ts';
 import { assessedBox, lineReach } from './extent.ts';
-import type { Progress, Solved } from './levels.ts';
+import type { Running, Solved } from './levels.ts';
 import type { Prepared } from './prepare.ts';
 
 /** Soils of the family that are solved: with 40, the 5 % and 95 % marks are the second from either end. */
@@ -47,15 +47,15 @@ export async function consequenceOf(
   solved: Solved,
   cases: readonly CaseResult[],
   members: readonly FamilyMember[],
-  progress: Progress,
+  { progress, crew }: Running,
 ): Promise<GroundResult['consequence']> {
   const places = placesOf(prepared, solved);
   const chosen = strided(members, SOLVED_MEMBERS);
-  const best = await respond(prepared, solved, prepared.soil, places);
+  const best = await respond(prepared, solved, prepared.soil, places, crew);
   const responses: Response[][] = [];
   for (const { soil } of chosen) {
     await progress('solving soils that the readings allow', responses.length / chosen.length);
-    responses.push(await respond(prepared, solved, soil, places));
+    responses.push(await respond(prepared, solved, soil, places, crew));
   }
   const spread = (unit: number, value: number, pick: (response: Response) => number): Spread => ({
     best: value,
@@ -102,6 +102,7 @@ async function respond(
   solved: Solved,
   soil: SoilModel,
   places: Places,
+  crew: Running['crew'],
 ): Promise<Response[]> {
   const mesh = segmentMesh(prepared.loaded.conductors, prepared.joints, interfaceDepths(soil), 0);
   const images = soilImages(soil, IMAGE_TOLERANCE);
@@ -109,7 +110,7 @@ async function respond(
   const model = prepared.loaded.study.metal_model ?? 'resistive';
   const graph = await solveGraph(
     mesh,
-    leakageOperator(mesh, images),
+    await leakageOperator(mesh, images, crew),
     nodes,
     prepared.resistancePerMetre,
     model,

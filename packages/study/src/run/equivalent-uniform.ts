@@ -7,15 +7,19 @@ import {
   solveGraph,
 } from '@ohmstead/core';
 import type { EquivalentUniform } from '../ground.ts';
-import type { Solved } from './levels.ts';
+import type { Running, Solved } from './levels.ts';
 import type { Prepared } from './prepare.ts';
 
 /** Empty in uniform soil, and in soils of more layers than the hand rules are made for. */
-export async function equivalentUniform(prepared: Prepared, solved: Solved): Promise<EquivalentUniform[]> {
+export async function equivalentUniform(
+  prepared: Prepared,
+  solved: Solved,
+  crew: Running['crew'],
+): Promise<EquivalentUniform[]> {
   const values = equivalentUniformResistivities(prepared.soil);
   if (values.length === 0) return [];
   const { resistance, injectionNode } = solved.units[solved.unitOfCase[0]!]!;
-  const perOhmMetre = await resistanceInUniformSoil(prepared, solved, injectionNode);
+  const perOhmMetre = await resistanceInUniformSoil(prepared, solved, injectionNode, crew);
   return values.map(({ name, source, resistivity }) => ({
     name,
     source,
@@ -30,10 +34,15 @@ export async function equivalentUniform(prepared: Prepared, solved: Solved): Pro
  * coarsest mesh, and carried to the finest by what refinement did to the soil as given: what is left of the mesh's
  * error is a hundredth of what hand values are off by.
  */
-async function resistanceInUniformSoil(prepared: Prepared, solved: Solved, node: number): Promise<number> {
+async function resistanceInUniformSoil(
+  prepared: Prepared,
+  solved: Solved,
+  node: number,
+  crew: Running['crew'],
+): Promise<number> {
   const mesh = segmentMesh(prepared.loaded.conductors, prepared.joints, [], 0);
   const images = soilImages({ layers: [{ resistivity: 1, thickness: Number.POSITIVE_INFINITY }] });
-  const matrix = leakageOperator(mesh, images);
+  const matrix = await leakageOperator(mesh, images, crew);
   const { units } = await solveGraph(mesh, matrix, [node], prepared.resistancePerMetre, 'equipotential');
   const at = solved.unitOfCase[0]!;
   const coarse = solved.series[0]!.graph.units[at]!.resistance;

@@ -1,4 +1,5 @@
 // Potential and touch voltage of one case at places the user names.
+import type { Crew } from '@ohmstead/core';
 import { type Fault, InputFaults } from '../fault.ts';
 import { STUDY_FILE } from '../input/read-study-json.ts';
 import type { LoadedStudy } from '../study.ts';
@@ -18,11 +19,12 @@ export async function fieldAt(
   points: readonly FieldPoint[],
   caseName?: string,
   onProgress: Progress = () => {},
+  crew?: Crew,
 ): Promise<FieldValue[]> {
   const at = caseName === undefined ? 0 : loaded.study.cases.findIndex((c) => c.name === caseName);
   if (at < 0) throw new InputFaults([unknownCase(loaded, caseName ?? '')]);
   const prepared = prepare(loaded, groundOf(loaded).soil);
-  const solved = await solveLevels(prepared, { progress: onProgress });
+  const solved = await solveLevels(prepared, { progress: onProgress, crew });
   const limits = limitsOf(loaded.study, prepared.soil.layers[0]!.resistivity);
   const currents = loaded.study.cases.map(
     (input, c) =>

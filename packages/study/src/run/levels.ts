@@ -1,6 +1,7 @@
 // Solves the graph on ever finer meshes until refinement moves the headline numbers little enough.
 import {
   type Box,
+  type Crew,
   type GraphSolution,
   interfaceDepths,
   MODEL_FLOOR,
@@ -85,16 +86,22 @@ const SCOUT_TOLERANCE = 1e-2;
 /** The map must also show the worst touch and step voltage found by the scout, to this share of them. */
 const MAP_SHARE = 0.02;
 
-export interface LevelsOptions {
+/** What goes with long work. */
+export interface Running {
   readonly progress: Progress;
-  /** given what the first two meshes tell, with its uncertainty, before the finer ones are solved */
-  readonly onFirst?: ((first: Solved) => void | Promise<void>) | undefined;
+  /** shares in large work; changes no bit of what is found */
+  readonly crew?: Crew | undefined;
   /** what earlier computations left; nothing where undefined */
   readonly memory?: SolveMemory | undefined;
 }
 
+export interface LevelsOptions extends Running {
+  /** given what the first two meshes tell, with its uncertainty, before the finer ones are solved */
+  readonly onFirst?: ((first: Solved) => void | Promise<void>) | undefined;
+}
+
 export async function solveLevels(prepared: Prepared, options: LevelsOptions): Promise<Solved> {
-  const { progress, onFirst, memory = noMemory } = options;
+  const { progress, crew, onFirst, memory = noMemory } = options;
   const images = memory.images(prepared.soil);
   const interfaces = interfaceDepths(prepared.soil);
   const distinct = [...new Set(prepared.injectionNodes)];
@@ -109,7 +116,7 @@ export async function solveLevels(prepared: Prepared, options: LevelsOptions): P
     const model = prepared.loaded.study.metal_model ?? DEFAULT_METAL_MODEL;
     const graph = await solveGraph(
       mesh,
-      memory.matrix(mesh, images, level),
+      await memory.matrix(mesh, images, level, crew),
       distinct,
       prepared.resistancePerMetre,
       model,

@@ -10,11 +10,10 @@ import type {
 } from '../results.ts';
 import type { SeasonInput } from '../study.ts';
 import { caseResult } from './case-results.ts';
-import { type Progress, solveLevels } from './levels.ts';
+import { type Running, solveLevels } from './levels.ts';
 import { limitsOf } from './limits-of.ts';
 import { layeredSoil, type Prepared } from './prepare.ts';
 import { layersOf } from './soil-results.ts';
-import type { SolveMemory } from './solve-memory.ts';
 
 /** Name under which the soil of the study itself stands in the envelope. */
 export const AS_GIVEN = 'as given';
@@ -25,28 +24,19 @@ export interface Seasonal {
   readonly warnings: readonly ResultsWarning[];
 }
 
-export async function seasonResults(
-  prepared: Prepared,
-  progress: Progress,
-  memory: SolveMemory,
-): Promise<Seasonal[]> {
+export async function seasonResults(prepared: Prepared, running: Running): Promise<Seasonal[]> {
   const results: Seasonal[] = [];
   for (const season of prepared.loaded.study.seasons ?? [])
-    results.push(await seasonResult(prepared, season, progress, memory));
+    results.push(await seasonResult(prepared, season, running));
   return results;
 }
 
-async function seasonResult(
-  prepared: Prepared,
-  season: SeasonInput,
-  progress: Progress,
-  memory: SolveMemory,
-): Promise<Seasonal> {
+async function seasonResult(prepared: Prepared, season: SeasonInput, running: Running): Promise<Seasonal> {
   const { study } = prepared.loaded;
   const soil = soilIn(season, prepared.soil);
   const solved = await solveLevels(
     { ...prepared, soil },
-    { progress: (stage, share) => progress(`${season.name}: ${stage}`, share), memory },
+    { ...running, progress: (stage, share) => running.progress(`${season.name}: ${stage}`, share) },
   );
   const limits = limitsOf(study, soil.layers[0]!.resistivity);
   const first = solved.units[solved.unitOfCase[0]!]!;

@@ -1,5 +1,6 @@
 // What one computation leaves for the next of an edited study: image lists of a soil, and leakage matrices of its meshes.
 import {
+  type Crew,
   type KnownLeakage,
   type LeakageMatrix,
   leakageOperator,
@@ -18,7 +19,12 @@ export interface SolveMemory {
   /** lists of a soil, made once */
   readonly images: (soil: SoilModel) => SoilImages;
   /** the matrix of a mesh; entries between segments that the last one of this level had too are taken from it */
-  readonly matrix: (mesh: SegmentMesh, images: SoilImages, level: number) => LeakageMatrix;
+  readonly matrix: (
+    mesh: SegmentMesh,
+    images: SoilImages,
+    level: number,
+    crew?: Crew,
+  ) => Promise<LeakageMatrix>;
 }
 
 /** Soils whose lists are kept. Reason: the study's own and a few seasons, while one of them is edited. */
@@ -30,7 +36,7 @@ const KEPT_MATRICES = 6;
 export const noMemory: SolveMemory = {
   ground: groundOf,
   images: (soil) => soilImages(soil),
-  matrix: (mesh, images) => leakageOperator(mesh, images),
+  matrix: (mesh, images, _, crew) => leakageOperator(mesh, images, crew),
 };
 
 /**
@@ -54,12 +60,14 @@ export function solveMemory(): SolveMemory {
       keep(soils, key, known, KEPT_SOILS);
       return known;
     },
-    matrix(mesh, images, level) {
+    async matrix(mesh, images, level, crew) {
       const key = [...soils].find(([, kept]) => kept === images)?.[0];
-      if (key === undefined) return leakageOperator(mesh, images);
+      if (key === undefined) return leakageOperator(mesh, images, crew);
       const place = `${level} ${key}`;
       const before = matrices.get(place);
-      const matrix = before === undefined ? leakageOperator(mesh, images) : reusedOperator(before, mesh);
+      const matrix = await (before === undefined
+        ? leakageOperator(mesh, images, crew)
+        : reusedOperator(before, mesh, crew));
       if (isWhole(matrix)) keep(matrices, place, { mesh, images, matrix }, KEPT_MATRICES);
       else matrices.delete(place);
       return matrix;
@@ -72,9 +80,9 @@ function isWhole(matrix: LeakageMatrix): matrix is KnownLeakage['matrix'] {
 }
 
 /** Only where the new mesh would be stored whole too. */
-function reusedOperator(before: KnownLeakage, mesh: SegmentMesh): LeakageMatrix {
+async function reusedOperator(before: KnownLeakage, mesh: SegmentMesh, crew?: Crew): Promise<LeakageMatrix> {
   const fits = mesh.count <= MOST_GROWTH * before.mesh.count;
-  return fits ? reusedLeakageMatrix(before, mesh).matrix : leakageOperator(mesh, before.images);
+  return fits ? reusedLeakageMatrix(before, mesh).matrix : leakageOperator(mesh, before.images, crew);
 }
 
 /** A mesh that grew by more than this has little in common with the one before. */

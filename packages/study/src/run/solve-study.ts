@@ -1,4 +1,5 @@
 // The chain from a loaded study to everything that the sheet, the pack and the command line show.
+import type { Crew } from '@ohmstead/core';
 import type { Outcome } from '../outcome.ts';
 import type { LoadedStudy } from '../study.ts';
 import { caseResult } from './case-results.ts';
@@ -16,6 +17,8 @@ import { noMemory, type SolveMemory } from './solve-memory.ts';
 import { type SolvedField, solvedField } from './solved-field.ts';
 
 export interface SolveOptions {
+  /** shares in large work; changes no bit of the outcome */
+  readonly crew?: Crew | undefined;
   /** told of long work: a stage in words and the share done, 0 to 1 */
   readonly onProgress?: Progress;
   /**
@@ -33,13 +36,12 @@ export interface SolveOptions {
 export async function solveStudy(loaded: LoadedStudy, options: SolveOptions = {}): Promise<Outcome> {
   const progress = options.onProgress ?? (() => {});
   await progress('joining conductors', 0);
-  const { memory = noMemory } = options;
+  const { onFirst, crew, memory = noMemory } = options;
   const ground = memory.ground(loaded);
   const prepared = prepare(loaded, ground.soil);
-  const { onFirst } = options;
+  const running = { progress, crew, memory };
   const solved = await solveLevels(prepared, {
-    progress,
-    memory,
+    ...running,
     onFirst: onFirst && ((first) => onFirst(outcomeOf(prepared, ground, first, NOTHING_BESIDE))),
   });
   const base = judged(prepared, solved).map(({ result }) => result);
@@ -51,12 +53,12 @@ export async function solveStudy(loaded: LoadedStudy, options: SolveOptions = {}
   );
   const { fitted } = ground;
   return outcomeOf(prepared, ground, solved, {
-    seasonal: await seasonResults(prepared, progress, memory),
+    seasonal: await seasonResults(prepared, running),
     ground: fitted && {
       fit: fitted.fit,
-      consequence: await consequenceOf(prepared, solved, base, fitted.members, progress),
+      consequence: await consequenceOf(prepared, solved, base, fitted.members, running),
     },
-    uniform: await equivalentUniform(prepared, solved),
+    uniform: await equivalentUniform(prepared, solved, crew),
   });
 }
 

@@ -1,0 +1,41 @@
+// A crew of threads of this process, started when first asked.
+import { availableParallelism } from 'node:os';
+import { Worker } from 'node:worker_threads';
+import { type Crew, crewOf, type Helper, type HelperHearing, type Said } from '@ohmstead/core';
+
+/** Beside the caller: four members take two parts each of a matrix, and memory is not read faster by more. */
+const MOST_HELPERS = 3;
+
+/**
+ * @param script of a helper
+ * @param size helpers at most; one a processor, but for the caller's, where left out
+ */
+export function threadCrew(
+  script: URL,
+  size: number = Math.min(MOST_HELPERS, availableParallelism() - 1),
+): Crew {
+  return crewOf(size, { shared: true, start: (hear) => thread(script, hear) });
+}
+
+function thread(script: URL, { said, broken }: HelperHearing): Helper {
+  const worker = new Worker(script);
+  let awaited = 0;
+  // one that nobody waits for must not keep the process from ending
+  worker.unref();
+  worker.on('message', (told: Said) => {
+    awaited--;
+    if (awaited === 0) worker.unref();
+    said(told);
+  });
+  worker.on('messageerror', (error: Error) => broken(error.message));
+  worker.on('error', (error: Error) => broken(error.message));
+  worker.on('exit', () => broken('its thread ended'));
+  return {
+    post(order, moved) {
+      worker.postMessage(order, [...moved]);
+      awaited++;
+      worker.ref();
+    },
+    end: () => void worker.terminate(),
+  };
+}
