@@ -274,8 +274,9 @@ export function sources(
 }
 
 /**
- * Largest magnitude of the drops over paces at the inner points of a lattice. A stencil: number of taps, then for each
- * its offset in bytes and its weight; the points opposite are subtracted.
+ * Largest magnitude of the drops over paces at the inner points of a lattice, eight at a time: past the last ones, up to
+ * seven more are written. A stencil: number of taps, then for each its offset in bytes (a whole number of 32 bits) and
+ * its weight; the points opposite are subtracted.
  */
 export function drops(
   values: usize,
@@ -289,23 +290,39 @@ export function drops(
 ): void {
   for (let j = first; j < end; j++) {
     const row = <usize>(j * nx + first) << 3;
-    // an odd last pair reaches one point into the margin
-    for (let i: usize = 0; i < <usize>columns << 3; i += 16) {
+    for (let i: usize = 0; i < <usize>columns << 3; i += 64) {
       const at = values + row + i;
-      let most = f64x2.splat(0);
+      let most0 = f64x2.splat(0);
+      let most1 = f64x2.splat(0);
+      let most2 = f64x2.splat(0);
+      let most3 = f64x2.splat(0);
       let tap = taps;
       for (let s: i32 = 0; s < stencils; s++) {
-        const last = tap + 8 + (<usize>load<f64>(tap) << 4);
-        let drop = f64x2.splat(0);
+        const last = tap + 8 + (<usize>load<i32>(tap) << 4);
+        let drop0 = f64x2.splat(0);
+        let drop1 = f64x2.splat(0);
+        let drop2 = f64x2.splat(0);
+        let drop3 = f64x2.splat(0);
         for (tap += 8; tap < last; tap += 16) {
-          const offset = <isize>load<f64>(tap);
-          const ahead = v128.load(at + offset);
-          const behind = v128.load(at - offset);
-          drop = f64x2.add(drop, f64x2.mul(v128.load64_splat(tap, 8), f64x2.sub(ahead, behind)));
+          const offset = <isize>load<i32>(tap);
+          const weight = v128.load64_splat(tap, 8);
+          const ahead = at + offset;
+          const behind = at - offset;
+          drop0 = f64x2.add(drop0, f64x2.mul(weight, f64x2.sub(v128.load(ahead), v128.load(behind))));
+          drop1 = f64x2.add(drop1, f64x2.mul(weight, f64x2.sub(v128.load(ahead, 16), v128.load(behind, 16))));
+          drop2 = f64x2.add(drop2, f64x2.mul(weight, f64x2.sub(v128.load(ahead, 32), v128.load(behind, 32))));
+          drop3 = f64x2.add(drop3, f64x2.mul(weight, f64x2.sub(v128.load(ahead, 48), v128.load(behind, 48))));
         }
-        most = f64x2.pmax(most, f64x2.abs(drop));
+        most0 = f64x2.pmax(most0, f64x2.abs(drop0));
+        most1 = f64x2.pmax(most1, f64x2.abs(drop1));
+        most2 = f64x2.pmax(most2, f64x2.abs(drop2));
+        most3 = f64x2.pmax(most3, f64x2.abs(drop3));
       }
-      v128.store(into + row + i, most);
+      const to = into + row + i;
+      v128.store(to, most0);
+      v128.store(to, most1, 16);
+      v128.store(to, most2, 32);
+      v128.store(to, most3, 48);
     }
   }
 }

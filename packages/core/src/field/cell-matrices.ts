@@ -1,6 +1,5 @@
 // Matrices from the moments of a cell to the expansion of their field in another of the same side, by cells between them.
-import { type RadialTable, radialValue } from '../leakage/radial-table.ts';
-import type { MapArithmetic } from './map-arithmetic.ts';
+import type { MapArithmetic, PlacedTable } from './map-arithmetic.ts';
 import { DEGREES, FROM_VALUES, ORDER, ROOTS, TERMS } from './plan-expansion.ts';
 import { radialReach } from './table-reach.ts';
 
@@ -53,7 +52,7 @@ const SIGNS: readonly Float64Array[] = [0, 1, 2, 3].map((turned) =>
 );
 
 /** Numbers that a maker of cell matrices needs. */
-export const MATRIX_ROOM: number = 4 * TERMS * TERMS;
+export const MATRIX_ROOM: number = 4 * TERMS * TERMS + 2 * TERMS + 4;
 
 /** Makes the matrices of one table and side of cells, by cells from source to target; those mirrored share their values. */
 export interface CellMatrices {
@@ -68,28 +67,40 @@ export interface CellMatrices {
  */
 export function cellMatrices(
   a: MapArithmetic,
-  table: RadialTable,
+  placed: PlacedTable,
   half: number,
   room: number,
   full: number,
 ): CellMatrices {
   const size = TERMS * TERMS;
   const [transform, values, once, twice] = [room, room + size, room + 2 * size, room + 3 * size];
+  const xs = room + 4 * size;
+  const ys = xs + TERMS;
+  const source = ys + TERMS;
   const n = a.numbers;
   n.set(TO_COEFFICIENTS, transform);
-  const reach = radialReach(table);
+  const reach = radialReach(placed.table);
   const made = new Map<number, Float64Array>();
   /** coefficients by pairs of degrees, x slowest, for 0 ≤ up ≤ across */
   const coefficients = (across: number, up: number): Float64Array => {
-    const [xx, yy] = [across, up].map((cells) =>
-      PAIRS.map(([i, k]) => (half * (ROOTS[i]! - ROOTS[k]! + 2 * cells)) ** 2),
-    );
     if (Math.hypot(across + 1, up + 1) * 2 * half > reach)
       throw new RangeError(`cells of ${(2 * half).toFixed(1)} m reach past a table of ${reach.toFixed(1)} m`);
-    for (let q = 0; q < TERMS; q++)
-      for (let p = 0; p < TERMS; p++) n[values + q * TERMS + p] = radialValue(table, xx![p]! + yy![q]!);
+    PAIRS.forEach(([i, k], pair) => {
+      n[xs + pair] = half * (ROOTS[i]! - ROOTS[k]! + 2 * across);
+      n[ys + pair] = half * (ROOTS[i]! - ROOTS[k]! + 2 * up);
+    });
+    n.set([0, 0, 1], source);
+    n.fill(0, values, values + 3 * size);
+    a.sources(source, 1, 1, placed, {
+      xs,
+      ys,
+      columns: TERMS,
+      rows: TERMS,
+      values,
+      rowStep: TERMS,
+      caseStep: 0,
+    });
     const cells = (at: number) => ({ at, eastward: TERMS, northward: 0 });
-    n.fill(0, once, once + 2 * size);
     a.transfer(transform, full, cells(values), cells(once), TERMS, 1);
     for (let q = 0; q < TERMS; q++)
       for (let r = 0; r < TERMS; r++) n[values + r * TERMS + q] = n[once + q * TERMS + r]!;

@@ -5,6 +5,7 @@ import type { Grid } from './lattice.ts';
 import type { CrossingPoints, MapArithmetic } from './map-arithmetic.ts';
 import { cellCount, type MapCells, mapCells } from './map-cells.ts';
 import { type MapLayout, mapLayout, writeLimits } from './map-layout.ts';
+import { addFarRods, addNearRods } from './map-rods.ts';
 import { addMoments, passAcross, passDown, passUp } from './map-transfers.ts';
 import { metalPieces } from './metal-pieces.ts';
 import { listNear, type MapGroup, type NearLists, nearParts, squareOf } from './near-metal.ts';
@@ -56,12 +57,13 @@ export function gridPotentials(metal: MapMetal, grid: Grid): GridPotentials {
     passUp(a, cells, cases, layout, places.moments);
     passAcross(a, cells, cases, layout, places, smooth);
   });
+  addFarRods(a, layout, metal.rods, cells, cases);
   passDown(a, cells, cases, layout);
   const perCase = cellCount(cells.levels[0]!.targets) * TERMS;
   const first = layout.expansions[0]!;
   spreadAll(a, layout, cases, side, perCase);
   addNear(a, layout, groups, cells, cases, side);
-  addRods(a, layout, metal.rods);
+  addNearRods(a, layout, metal.rods, cells, side);
   const expansions = a.numbers.slice(first, first + cases * perCase);
   return {
     values: Array.from({ length: cases }, (_, u) => cropped(a.numbers, layout, u, grid)),
@@ -135,19 +137,6 @@ function addNear(
         if (lists.restCount > 0 && rest) a.sources(lists.rest, lists.restCount, cases, rest, points);
       });
     }
-}
-
-function addRods(a: MapArithmetic, layout: MapLayout, rods: readonly RodTables[]): void {
-  const { columns, rows, one, xs, ys } = layout;
-  rods.forEach(({ x, y }, r) => {
-    a.numbers[one] = x;
-    a.numbers[one + 1] = y;
-    a.numbers[one + 2] = 1;
-    layout.rods[r]!.forEach((table, u) => {
-      const values = layout.values + u * rows * columns;
-      a.sources(one, 1, 1, table, { xs, ys, columns, rows, values, rowStep: columns, caseStep: 0 });
-    });
-  });
 }
 
 /** The values of the grid, without the points that only fill the last cells. */

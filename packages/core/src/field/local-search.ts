@@ -65,6 +65,28 @@ export function climb(
   return { at, value, outcome: step < finest ? 'converged' : 'limit' };
 }
 
+/**
+ * The highest of the summits reached from several starts. A start within a first step of a summit already reached would
+ * only climb to it again, and is left out.
+ */
+export function highestSummit(
+  f: (at: readonly number[]) => number,
+  starts: readonly (readonly number[])[],
+  scale: readonly number[],
+  along: (at: readonly number[]) => readonly (readonly number[])[],
+  finest: number,
+): Summit | undefined {
+  const reached: Summit[] = [];
+  for (const start of starts) {
+    const again = reached.some(({ at }) => at.every((c, k) => Math.abs(c - start[k]!) <= scale[k]!));
+    if (!again) reached.push(climb(f, start, scale, along, finest));
+  }
+  return reached.reduce<Summit | undefined>(
+    (best, summit) => (best === undefined || summit.value > best.value ? summit : best),
+    undefined,
+  );
+}
+
 function unitBasis(n: number): number[][] {
   return Array.from({ length: n }, (_, i) => Array.from({ length: n }, (_, k) => (i === k ? 1 : 0)));
 }

@@ -2,9 +2,9 @@
 import { MATRIX_ROOM } from './cell-matrices.ts';
 import type { MapArithmetic, PlacedTable } from './map-arithmetic.ts';
 import { type CellRange, cellCount, heightOf, type MapCells, widthOf } from './map-cells.ts';
-import { mostNear } from './metal-pieces.ts';
-import { type MapGroup, nearRoom } from './near-metal.ts';
+import { type MapGroup, mostNear, nearRoom } from './near-metal.ts';
 import { DEGREES, ORDER, TERMS } from './plan-expansion.ts';
+import { ROD_LEVEL, type RodPoints, rodPoints } from './rod-points.ts';
 import type { RodTables } from './rod-tables.ts';
 
 export interface GroupPlaces {
@@ -32,6 +32,8 @@ export interface MapLayout {
   /** end of what begins at nothing: moments and expansions stand before all else */
   readonly cleared: number;
   readonly groups: readonly GroupPlaces[];
+  /** by level from ROD_LEVEL on; none where there are no rods */
+  readonly rodPoints: readonly (RodPoints | undefined)[];
   /** by rod and leakage */
   readonly rods: readonly (readonly PlacedTable[])[];
   /** coordinates of the points of all cells, and how many there are each way */
@@ -73,8 +75,7 @@ export function mapLayout(
   const cleared = next;
   const columns = widthOf(cells.levels[0]!.targets) * side;
   const rows = heightOf(cells.levels[0]!.targets) * side;
-  const most = (g: MapGroup): number => (g.pieces === undefined ? g.group.count : mostNear(g.pieces, cells));
-  const list = groups.reduce((room, g) => Math.max(room, nearRoom(g, cases) * most(g)), 0);
+  const list = groups.reduce((room, g) => Math.max(room, nearRoom(g, cases) * mostNear(g, cells)), 0);
   const four = (): number => take(TERMS / ROWS);
   return {
     expansions,
@@ -84,6 +85,9 @@ export function mapLayout(
       rest: group.rest && { table: group.rest, at: take(group.rest.bins.length) },
       moments: moments[g]!,
     })),
+    rodPoints: cells.levels.map(({ targets }, k) =>
+      k < ROD_LEVEL || rods.length === 0 ? undefined : rodPoints(targets, cases, take),
+    ),
     rods: rods.map((rod) => rod.tables.map((table) => ({ table, at: take(table.bins.length) }))),
     limits: { full: four(), two: four(), three: four(), near: four() },
     matrix: take(TERMS * TERMS),
@@ -111,7 +115,7 @@ const POINT_NUMBERS = 3;
  * Entries of a matrix fall with the sum of the degrees of source and target, faster the farther the cells: those above
  * these sums are left out, which moves a map by less than a tenth of what the highest degree leaves.
  */
-const MOST_DEGREES = { two: 9, three: 6, near: 8 } as const;
+const MOST_DEGREES = { two: 9, three: 6, near: 10 } as const;
 
 export function writeLimits({ numbers }: MapArithmetic, limits: LimitPlaces): void {
   const write = (at: number, most: number): void => {

@@ -29,9 +29,10 @@ export function addMoments(
   cases: number,
   moments: readonly number[],
 ): void {
-  const rule = gaussLegendre(MOMENT_ORDER);
+  const { points, weights } = gaussLegendre(MOMENT_ORDER);
   const tx = new Float64Array(ORDER);
   const ty = new Float64Array(ORDER);
+  const mean = new Float64Array(TERMS);
   for (let p = 0; p < pieces.count; p++) {
     const j = pieces.segment[p]!;
     const k = pieces.level[p]!;
@@ -43,15 +44,19 @@ export function addMoments(
     const hy = group.hy[j]! / half;
     const from = pieces.from[p]!;
     const span = pieces.to[p]! - from;
-    const cell = moments[k]! + placeIn(sources, pieces.column[p]!, pieces.row[p]!) * TERMS;
-    const perCase = cellCount(sources) * TERMS;
+    mean.fill(0);
     for (let g = 0; g < MOMENT_ORDER; g++) {
-      const t = from + rule.points[g]! * span;
+      const t = from + points[g]! * span;
       polynomials(x + t * hx, tx);
       polynomials(y + t * hy, ty);
-      const share = (rule.weights[g]! * span) / 2;
-      for (let u = 0; u < cases; u++)
-        addTerms(share * group.strength[j * cases + u]!, tx, ty, n, cell + u * perCase);
+      addTerms((weights[g]! * span) / 2, tx, ty, mean);
+    }
+    const cell = moments[k]! + placeIn(sources, pieces.column[p]!, pieces.row[p]!) * TERMS;
+    const perCase = cellCount(sources) * TERMS;
+    for (let u = 0; u < cases; u++) {
+      const strength = group.strength[j * cases + u]!;
+      const at = cell + u * perCase;
+      for (let term = 0; term < TERMS; term++) n[at + term]! += strength * mean[term]!;
     }
   }
 }
@@ -185,13 +190,13 @@ export function passAcross(
         );
     };
     const half = level.side / 2;
-    const far = cellMatrices(a, all.table, half, layout.matrixRoom, limits.full);
+    const far = cellMatrices(a, all, half, layout.matrixRoom, limits.full);
     for (const [across, up] of OFFSETS) {
       const apart = Math.max(Math.abs(across), Math.abs(up));
       if (apart >= 2) pass(across, up, apart === 2 ? limits.two : limits.three, far.write);
     }
     if (k > 0 || rest === undefined || !smooth) return;
-    const near = cellMatrices(a, rest.table, half, layout.matrixRoom, limits.full);
+    const near = cellMatrices(a, rest, half, layout.matrixRoom, limits.full);
     for (const [across, up] of OFFSETS)
       if (Math.max(Math.abs(across), Math.abs(up)) < 2) pass(across, up, limits.near, near.write);
   });

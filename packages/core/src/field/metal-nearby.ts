@@ -32,27 +32,27 @@ export function nearestNode(mesh: SegmentMesh, component: number): NearestNode {
   const sorted = new Int32Array(nodes.length);
   for (const node of nodes) sorted[next[cellOf(node)]!++] = node;
 
+  // places asked for one after another are near each other: the last answer bounds the next
+  let last = sorted[0]!;
   return (x, y) => {
     const i = clamped(x - west, columns);
     const j = clamped(y - south, rows);
-    let best = -1;
-    let least = Number.POSITIVE_INFINITY;
-    const look = (column: number, row: number): void => {
-      const cell = row * columns + column;
-      for (let k = start[cell]!; k < start[cell + 1]!; k++) {
-        const node = sorted[k]!;
-        const squared = (nodeX[node]! - x) ** 2 + (nodeY[node]! - y) ** 2;
-        if (squared < least || (squared === least && node < best)) {
-          least = squared;
-          best = node;
-        }
-      }
-    };
+    let best = last;
+    let least = (nodeX[last]! - x) ** 2 + (nodeY[last]! - y) ** 2;
     for (let ring = 0; ; ring++) {
       for (let row = Math.max(0, j - ring); row <= Math.min(rows - 1, j + ring); row++) {
         const stride = Math.abs(row - j) === ring ? 1 : Math.max(1, 2 * ring);
-        for (let column = i - ring; column <= i + ring; column += stride)
-          if (column >= 0 && column < columns) look(column, row);
+        for (let column = i - ring; column <= i + ring; column += stride) {
+          if (column < 0 || column >= columns) continue;
+          const cell = row * columns + column;
+          for (let k = start[cell]!; k < start[cell + 1]!; k++) {
+            const node = sorted[k]!;
+            const squared = (nodeX[node]! - x) ** 2 + (nodeY[node]! - y) ** 2;
+            if (squared > least || (squared === least && node > best)) continue;
+            least = squared;
+            best = node;
+          }
+        }
       }
       // distance to the nearest cell not looked at, on each side where there is one
       const beyond = Math.min(
@@ -61,7 +61,10 @@ export function nearestNode(mesh: SegmentMesh, component: number): NearestNode {
         j - ring > 0 ? y - (south + (j - ring) * side) : Infinity,
         j + ring < rows - 1 ? south + (j + ring + 1) * side - y : Infinity,
       );
-      if (beyond === Infinity || (beyond > 0 && beyond * beyond > least)) return best;
+      if (beyond === Infinity || (beyond > 0 && beyond * beyond > least)) {
+        last = best;
+        return best;
+      }
     }
   };
 }

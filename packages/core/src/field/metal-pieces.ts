@@ -99,18 +99,3 @@ function byCell(
     if (level[p] === 0) order[next[placeIn(sources, column[p]!, row[p]!)]!++] = p;
   return { start, order };
 }
-
-/** Most pieces in a cell of the finest level and its neighbours. */
-export function mostNear({ start }: MetalPieces, cells: MapCells): number {
-  const { sources } = cells.levels[0]!;
-  const width = widthOf(sources);
-  const rows = Array.from({ length: heightOf(sources) }, (_, r) => r * width);
-  let most = 0;
-  for (let c = 0; c < width; c++) {
-    const three = rows.map((row) => start[row + Math.min(width, c + 2)]! - start[row + Math.max(0, c - 1)]!);
-    three.forEach((count, r) => {
-      most = Math.max(most, count + (three[r - 1] ?? 0) + (three[r + 1] ?? 0));
-    });
-  }
-  return most;
-}

@@ -1,7 +1,7 @@
 // What a map's cell is near to, as the inner loops take it: pieces of straight wire, and points that stand for others.
 import type { RadialTable } from '../leakage/radial-table.ts';
 import { gaussLegendre } from '../numerics/gauss-legendre.ts';
-import { type MapCells, placeIn } from './map-cells.ts';
+import { heightOf, type MapCells, placeIn, widthOf } from './map-cells.ts';
 import type { MetalPieces } from './metal-pieces.ts';
 import type { SegmentGroup } from './segment-group.ts';
 
@@ -244,4 +244,21 @@ export function listNear(
   gatherNear(pieces, cells, column, row, parts);
   for (let k = 0; k < parts.count; k++)
     listPart(group, cases, parts.segment[k]!, parts.from[k]!, parts.to[k]!, square, !smooth, lists);
+}
+
+/** Most pieces of a group that are near to one cell. */
+export function mostNear({ group, pieces }: MapGroup, cells: MapCells): number {
+  if (pieces === undefined) return group.count;
+  const { start } = pieces;
+  const { sources } = cells.levels[0]!;
+  const width = widthOf(sources);
+  const rows = Array.from({ length: heightOf(sources) }, (_, r) => r * width);
+  let most = 0;
+  for (let c = 0; c < width; c++) {
+    const three = rows.map((row) => start[row + Math.min(width, c + 2)]! - start[row + Math.max(0, c - 1)]!);
+    three.forEach((count, r) => {
+      most = Math.max(most, count + (three[r - 1] ?? 0) + (three[r + 1] ?? 0));
+    });
+  }
+  return most;
 }

@@ -1,5 +1,5 @@
 // Drops over one pace about every point of a lattice, in several directions: weights of the points around it.
-import { doublesAt, place } from '../kernels/instance.ts';
+import { BYTES_A_DOUBLE, doublesAt, place } from '../kernels/instance.ts';
 import { keysWeights, type Lattice } from './lattice.ts';
 import { surfaceKernel } from './surface-kernel.ts';
 
@@ -67,6 +67,9 @@ function widened({ nx, ny, values }: Lattice, margin: number): Float64Array {
   return wide;
 }
 
+/** Points that the kernel works on at once, the last ones past the end. */
+const AT_ONCE = 8;
+
 function dropsByKernel(
   values: Float64Array,
   width: number,
@@ -77,14 +80,19 @@ function dropsByKernel(
   offsets: readonly (readonly number[])[],
 ): Float64Array | undefined {
   const kernel = surfaceKernel();
-  // number of taps, then an offset in bytes and a weight of each, stencil after stencil
-  const list = Float64Array.from(
-    stencils.flatMap(({ weight }, s) => [
-      weight.length,
-      ...weight.flatMap((w, k) => [offsets[s]![k]! * Float64Array.BYTES_PER_ELEMENT, w]),
-    ]),
-  );
-  const [taps, from, to] = (kernel && place(kernel, [list, values], values.length + 1)) ?? [];
+  // number of taps, then an offset in bytes and a weight of each, stencil after stencil; numbers that are not weights
+  // stand as whole ones in the first half of theirs
+  const list = new Float64Array(stencils.reduce((sum, { weight }) => sum + 1 + 2 * weight.length, 0));
+  const whole = new Int32Array(list.buffer);
+  let next = 0;
+  stencils.forEach(({ weight }, s) => {
+    whole[2 * next++] = weight.length;
+    weight.forEach((w, k) => {
+      whole[2 * next++] = offsets[s]![k]! * BYTES_A_DOUBLE;
+      list[next++] = w;
+    });
+  });
+  const [taps, from, to] = (kernel && place(kernel, [list, values], values.length + AT_ONCE)) ?? [];
   if (kernel === undefined || taps === undefined || from === undefined || to === undefined) return undefined;
   kernel.call('drops', from, width, margin, margin + ny, nx, taps, stencils.length, to);
   return doublesAt(kernel, to, values.length);

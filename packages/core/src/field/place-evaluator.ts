@@ -1,10 +1,12 @@
 // The potential at any place of a map, from its expansions and the metal near the place's cell: for searches.
-import { radialValue } from '../leakage/radial-table.ts';
+import { type RadialTable, radialValue } from '../leakage/radial-table.ts';
 import { logarithm } from '../numerics/elementary.ts';
 import { holds, type MapCells, placeIn } from './map-cells.ts';
+import { nearRods } from './map-rods.ts';
 import {
   listNear,
   type MapGroup,
+  mostNear,
   type NearLists,
   type NearParts,
   nearParts,
@@ -15,14 +17,20 @@ import {
 } from './near-metal.ts';
 import { expansionValue, ORDER, polynomials, TERMS } from './plan-expansion.ts';
 import type { RodTables } from './rod-tables.ts';
+import type { SegmentGroup } from './segment-group.ts';
 
 /** Potential of one of several leakages at a place; undefined outside the map's cells. */
 export type PlaceEvaluator = (u: number, x: number, y: number) => number | undefined;
 
-/** One group's lists for the cell asked for last. */
-interface CellLists extends NearLists {
-  readonly group: MapGroup;
-  readonly parts: NearParts;
+/** Metal of one group near a cell, as lists; and the rods that are. */
+interface CellMetal {
+  readonly lists: readonly {
+    readonly group: SegmentGroup;
+    readonly wires: Float64Array;
+    readonly all: Float64Array;
+    readonly rest: Float64Array;
+  }[];
+  readonly rods: readonly RodTables[];
 }
 
 /** @param expansions of the finest level, shape [cases × targets × TERMS] */
@@ -35,60 +43,91 @@ export function placeEvaluator(
 ): PlaceEvaluator {
   const perCase = expansions.length / cases;
   const { targets } = cells.levels[0]!;
-  let made: readonly CellLists[] | undefined;
-  let cellColumn = -1;
-  let cellRow = -1;
+  // a search goes to and fro between few cells
+  const known = new Map<number, CellMetal>();
+  let scratch: readonly Scratch[] | undefined;
+  const metalOf = (column: number, row: number): CellMetal => {
+    scratch ??= groups.map((group) => scratchOf(group, cells, cases));
+    const square = squareOf(cells, column, row);
+    const lists = scratch.map(({ group, parts, lists: of }) => {
+      listNear(group, cases, cells, column, row, square, parts, of);
+      const taken = (from: number, count: number, each: number): Float64Array =>
+        of.numbers.slice(from, from + count * (each + cases));
+      return {
+        group: group.group,
+        wires: taken(of.wires, of.wireCount, WIRE),
+        all: taken(of.all, of.allCount, POINT),
+        rest: taken(of.rest, of.restCount, POINT),
+      };
+    });
+    return { lists, rods: nearRods(rods, cells, column, row) };
+  };
   const tx = new Float64Array(ORDER);
   const ty = new Float64Array(ORDER);
   return (u, x, y) => {
     const column = cells.column(x);
     const row = cells.row(y);
     if (!holds(targets, column, row)) return undefined;
-    const square = squareOf(cells, column, row);
-    made ??= groups.map((group): CellLists => emptyLists(group, cases));
-    if (column !== cellColumn || row !== cellRow) {
-      cellColumn = column;
-      cellRow = row;
-      for (const of of made) listNear(of.group, cases, cells, column, row, square, of.parts, of);
+    const place = placeIn(targets, column, row);
+    let metal = known.get(place);
+    if (metal === undefined) {
+      metal = metalOf(column, row);
+      known.set(place, metal);
     }
-    polynomials((x - square.x) / square.half, tx);
-    polynomials((y - square.y) / square.half, ty);
-    const first = u * perCase + placeIn(targets, column, row) * TERMS;
-    let sum = expansionValue(expansions, first, tx, ty);
-    for (const lists of made) sum += listedValue(lists, cases, u, x, y);
-    for (const rod of rods) sum += radialValue(rod.tables[u]!, (x - rod.x) ** 2 + (y - rod.y) ** 2);
+    const half = cells.levels[0]!.side / 2;
+    polynomials((x - cells.west(0, column)) / half - 1, tx);
+    polynomials((y - cells.south(0, row)) / half - 1, ty);
+    let sum = expansionValue(expansions, u * perCase + place * TERMS, tx, ty);
+    for (const { group, wires, all, rest } of metal.lists) {
+      sum += wiresValue(wires, cases, u, x, y);
+      if (all.length > 0) sum += pointsValue(all, group.all!, cases, u, x, y);
+      if (rest.length > 0) sum += pointsValue(rest, group.rest!, cases, u, x, y);
+    }
+    for (const rod of metal.rods) sum += radialValue(rod.tables[u]!, (x - rod.x) ** 2 + (y - rod.y) ** 2);
     return sum;
   };
 }
 
-function emptyLists(group: MapGroup, cases: number): CellLists {
-  const room = nearRoom(group, cases) * group.group.count;
+/** Room for one group's lists of any cell. */
+interface Scratch {
+  readonly group: MapGroup;
+  readonly parts: NearParts;
+  readonly lists: NearLists;
+}
+
+function scratchOf(group: MapGroup, cells: MapCells, cases: number): Scratch {
+  const room = nearRoom(group, cases) * mostNear(group, cells);
+  const numbers = new Float64Array(3 * room);
   return {
     group,
     parts: nearParts(group.group.count),
-    numbers: new Float64Array(3 * room),
-    wires: 0,
-    all: room,
-    rest: 2 * room,
-    wireCount: 0,
-    allCount: 0,
-    restCount: 0,
+    lists: { numbers, wires: 0, all: room, rest: 2 * room, wireCount: 0, allCount: 0, restCount: 0 },
   };
 }
 
-function listedValue(lists: CellLists, cases: number, u: number, x: number, y: number): number {
-  const { numbers: n, group } = lists;
+function wiresValue(n: Float64Array, cases: number, u: number, x: number, y: number): number {
   let sum = 0;
-  for (let k = 0, at = lists.wires; k < lists.wireCount; k++, at += WIRE + cases) {
+  for (let at = 0; at < n.length; at += WIRE + cases) {
+    const above = n[at + 5]!;
     const ends =
-      Math.sqrt((x - n[at]!) ** 2 + (y - n[at + 1]!) ** 2 + n[at + 5]!) +
-      Math.sqrt((x - n[at + 2]!) ** 2 + (y - n[at + 3]!) ** 2 + n[at + 5]!);
+      Math.sqrt((x - n[at]!) ** 2 + (y - n[at + 1]!) ** 2 + above) +
+      Math.sqrt((x - n[at + 2]!) ** 2 + (y - n[at + 3]!) ** 2 + above);
     const length = n[at + 4]!;
     sum += n[at + WIRE + u]! * logarithm((ends + length) / (ends - length));
   }
-  for (let k = 0, at = lists.all; k < lists.allCount; k++, at += POINT + cases)
-    sum += n[at + POINT + u]! * radialValue(group.group.all!, (x - n[at]!) ** 2 + (y - n[at + 1]!) ** 2);
-  for (let k = 0, at = lists.rest; k < lists.restCount; k++, at += POINT + cases)
-    sum += n[at + POINT + u]! * radialValue(group.group.rest!, (x - n[at]!) ** 2 + (y - n[at + 1]!) ** 2);
+  return sum;
+}
+
+function pointsValue(
+  n: Float64Array,
+  table: RadialTable,
+  cases: number,
+  u: number,
+  x: number,
+  y: number,
+): number {
+  let sum = 0;
+  for (let at = 0; at < n.length; at += POINT + cases)
+    sum += n[at + POINT + u]! * radialValue(table, (x - n[at]!) ** 2 + (y - n[at + 1]!) ** 2);
   return sum;
 }

@@ -34,15 +34,9 @@ export function polynomials(at: number, into: Float64Array): void {
   for (let a = 2; a < ORDER; a++) into[a] = 2 * at * into[a - 1]! - into[a - 2]!;
 }
 
-/** Adds a multiple of every term to an expansion that begins at an index. */
-export function addTerms(
-  weight: number,
-  tx: Float64Array,
-  ty: Float64Array,
-  into: Float64Array,
-  at: number,
-): void {
-  let t = at;
+/** Adds a multiple of every term to an expansion. */
+export function addTerms(weight: number, tx: Float64Array, ty: Float64Array, into: Float64Array): void {
+  let t = 0;
   for (let d = 0; d < ORDER; d++) for (let b = 0; b <= d; b++) into[t++]! += weight * tx[d - b]! * ty[b]!;
 }
 

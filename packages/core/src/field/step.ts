@@ -1,9 +1,9 @@
 // Step voltage: between two feet one metre apart, in the worst direction, and its worst place.
 import type { Lattice } from './lattice.ts';
-import { climb } from './local-search.ts';
+import { highestSummit } from './local-search.ts';
 import { paceStencil, steepestDrops } from './pace-stencils.ts';
 import { edgeDirections, edgePlaces, onEdge, type Region } from './region.ts';
-import { bestStarts, latticeSummits, likeliest } from './starts.ts';
+import { bestStarts, type Guess, latticeSummits, likeliest } from './starts.ts';
 import type { SurfacePotential } from './surface-potential.ts';
 import type { WorstPlace } from './touch.ts';
 
@@ -23,15 +23,26 @@ const FINEST_STEP = 1 / 64;
 /** First turn of the search, rad. */
 const TURN = Math.PI / 12;
 
+/** From the midpoint of a pace to its foot ahead, and the direction. */
+type HalfPace = readonly [ex: number, ey: number, angle: number];
+
+/** Half paces evenly over a turn, or half of one: then the foot behind has the other half. */
+function halfPaces(turn: number): HalfPace[] {
+  return Array.from({ length: DIRECTIONS }, (_, d) => {
+    const angle = (turn * d) / DIRECTIONS;
+    return [...halfPace(angle), angle];
+  });
+}
+const HALF_TURN = halfPaces(Math.PI);
+const FULL_TURN = halfPaces(2 * Math.PI);
+
 /** Midpoint and direction of a pace: [x, y, angle]. */
 type Pace = readonly [number, number, number];
 
 /** Largest voltage over one metre centred at each lattice point, from a lattice of surface potentials. */
 export function stepLattice(potential: Lattice): Lattice {
-  const stencils = Array.from({ length: DIRECTIONS }, (_, d) => {
-    const [ex, ey] = halfPace((Math.PI * d) / DIRECTIONS);
-    return paceStencil(ex / potential.spacing, ey / potential.spacing);
-  });
+  const { spacing } = potential;
+  const stencils = HALF_TURN.map(([ex, ey]) => paceStencil(ex / spacing, ey / spacing));
   return { ...potential, values: steepestDrops(potential, stencils) };
 }
 
@@ -60,15 +71,21 @@ export function worstStep(
     const [ex, ey] = halfPace(angle);
     return region.inside(x, y) ? drop(over, x, y, ex, ey) : Number.NEGATIVE_INFINITY;
   };
-  // one pace a place: the likeliest direction about a midpoint, and from a foot by the metal
-  const likely = [...latticeSummits(step, within), ...edgePlaces(region)].flatMap((midpoint) =>
-    likeliest(turned(midpoint), (pace) => voltage(pace, rough)),
-  );
+  // one pace a place: in the likeliest direction about a midpoint, and from a foot by the metal
+  const likely: Guess<Pace>[] = [];
+  for (const [x, y] of [...latticeSummits(step, within), ...edgePlaces(region)]) {
+    if (!region.inside(x, y)) continue;
+    for (const { candidate, value } of likeliest(HALF_TURN, ([ex, ey]) => drop(rough, x, y, ex, ey)))
+      likely.push({ candidate: [x, y, candidate[2]], value });
+  }
   for (const [x, y] of beside) {
+    const inside = FULL_TURN.filter(([ex, ey]) => region.inside(x + ex, y + ey));
+    if (inside.length === 0) continue;
     const here = surface(x, y);
-    const fromHere = ([mx, my]: Pace): number =>
-      region.inside(mx, my) ? Math.abs(rough(2 * mx - x, 2 * my - y) - here) : Number.NEGATIVE_INFINITY;
-    likely.push(...likeliest(steppedFrom([x, y]), fromHere));
+    for (const { candidate, value } of likeliest(inside, ([ex, ey]) =>
+      Math.abs(rough(x + 2 * ex, y + 2 * ey) - here),
+    ))
+      likely.push({ candidate: [x + candidate[0], y + candidate[1], candidate[2]], value });
   }
   const f = (at: readonly number[]): number => voltage(at as Pace, surface);
   const starts = bestStarts(likely, f, STARTS).flatMap(([x, y, angle]): Pace[] => [
@@ -77,11 +94,7 @@ export function worstStep(
   ]);
   const directions = edgeDirections(region, step.spacing);
   const along = ([x, y]: readonly number[]): number[][] => directions(x!, y!).map(([u, v]) => [u, v, 0]);
-  let best: { at: readonly number[]; value: number } | undefined;
-  for (const start of starts) {
-    const summit = climb(f, start, [step.spacing, step.spacing, TURN], along, FINEST_STEP);
-    if (summit.value > (best?.value ?? Number.NEGATIVE_INFINITY)) best = summit;
-  }
+  const best = highestSummit(f, starts, [step.spacing, step.spacing, TURN], along, FINEST_STEP);
   if (best === undefined) return undefined;
   const [x, y, angle] = best.at as Pace;
   const [ex, ey] = halfPace(angle);
@@ -89,20 +102,6 @@ export function worstStep(
   const behind = [x - ex, y - ey] as const;
   const falls = surface(ahead[0], ahead[1]) >= surface(behind[0], behind[1]);
   return { x, y, value: best.value, from: falls ? ahead : behind, to: falls ? behind : ahead };
-}
-
-/** Paces in every direction about a midpoint. */
-function turned([x, y]: readonly [number, number]): Pace[] {
-  return Array.from({ length: DIRECTIONS }, (_, d) => [x, y, (Math.PI * d) / DIRECTIONS]);
-}
-
-/** Paces with one foot at a place, all the way round. */
-function steppedFrom([x, y]: readonly [number, number]): Pace[] {
-  return Array.from({ length: DIRECTIONS }, (_, d) => {
-    const angle = (2 * Math.PI * d) / DIRECTIONS;
-    const [ex, ey] = halfPace(angle);
-    return [x + ex, y + ey, angle];
-  });
 }
 
 function halfPace(angle: number): [number, number] {

@@ -1,6 +1,6 @@
 // Touch voltage: potential of the metal within reach minus the potential of the soil under the feet, and its worst place.
 import type { Lattice } from './lattice.ts';
-import { climb } from './local-search.ts';
+import { highestSummit } from './local-search.ts';
 import { edgeDirections, edgePlaces, onEdge, type Region } from './region.ts';
 import { bestStarts, type Guess, latticeSummits } from './starts.ts';
 import type { SurfacePotential } from './surface-potential.ts';
@@ -74,10 +74,6 @@ export function climbFromBest(
   ]);
   const directions = edgeDirections(region, step);
   const along = ([x, y]: readonly number[]): readonly (readonly number[])[] => directions(x!, y!);
-  let worst: WorstPlace | undefined;
-  for (const start of starts) {
-    const { at, value } = climb(f, start, [step, step], along, FINEST_STEP);
-    if (value > (worst?.value ?? Number.NEGATIVE_INFINITY)) worst = { x: at[0]!, y: at[1]!, value };
-  }
-  return worst;
+  const summit = highestSummit(f, starts, [step, step], along, FINEST_STEP);
+  return summit && { x: summit.at[0]!, y: summit.at[1]!, value: summit.value };
 }
