@@ -75,7 +75,7 @@ async function mapRow(one: MapCase): Promise<{ cells: string[]; median: number }
   const mesh = segmentMesh(conductors, joinConductors(conductors), interfaceDepths(soil), 0);
   const images = soilImages(soil);
   const ohm = new Float64Array(conductors.count).fill(1e-4);
-  const { units } = await solveGraph(mesh, leakageOperator(mesh, images), [0], ohm, 'equipotential');
+  const { units } = await solveGraph(mesh, await leakageOperator(mesh, images), [0], ohm, 'equipotential');
   const { leakage, resistance } = units[0]!;
   const width = conductors.x2.reduce((most, x) => Math.max(most, x), 0);
   const box = { west: -MARGIN, south: -MARGIN, east: width + MARGIN, north: width + MARGIN };
