@@ -10,6 +10,7 @@ export {
   type StudyPath,
 } from './desk/desk.ts';
 export { pathText, sectionOfInput } from './desk/study-path.ts';
+export { useTurn } from './desk/use-turn.ts';
 export { type FigureFile, figures } from './figure/figures.tsx';
 export { Hatch } from './figure/hatch.tsx';
 export { LeakageFigure, leakageClassText, leakageThickness, rodRadius } from './figure/leakage.tsx';

@@ -8,6 +8,7 @@ import {
   mapDrawing,
   type Plate,
   plateOf,
+  useTurn,
 } from '@ohmstead/sheet';
 import type { Outcome } from '@ohmstead/study';
 import type { VNode } from 'preact';
@@ -28,19 +29,23 @@ export interface MapLayerProps {
 }
 
 export function MapLayer({ outcome, caseIndex, kind, view, size, name }: MapLayerProps): VNode {
-  const map = outcome.cases[caseIndex]?.map;
+  const asked = useMemo(() => ({ outcome, caseIndex, kind }), [outcome, caseIndex, kind]);
+  // contours are drawn in a task of their own, the old ones standing meanwhile
+  const shown = useTurn<typeof asked | undefined>(asked, undefined);
+  const map = shown?.outcome.cases[shown.caseIndex]?.map;
   const plate = useMemo(() => (map === undefined ? undefined : plateOf(latticeExtent(map), WHOLE)), [map]);
   const ground = useMemo(
     () =>
-      plate && (
+      plate &&
+      shown && (
         <MapGround
           name={name}
           plate={plate}
-          drawing={mapDrawing(outcome, caseIndex, kind, false)}
-          area={assessedFor(outcome, kind)}
+          drawing={mapDrawing(shown.outcome, shown.caseIndex, shown.kind, false)}
+          area={assessedFor(shown.outcome, shown.kind)}
         />
       ),
-    [plate, outcome, caseIndex, kind, name],
+    [plate, shown, name],
   );
   if (plate === undefined) return <g />;
   return (

@@ -21,6 +21,8 @@ h1 input.in{height:auto;letter-spacing:inherit}
 .scroll+.download,.verdicts+.download{display:block;margin:-8px 0 14px}
 .verdicts .word,.scroll .word{font-size:inherit}
 .verdicts .place{color:var(--soft);white-space:nowrap;font-weight:400}
+.not-yet{min-height:12em}
+details .not-yet{min-height:0}
 .state{margin:0 0 3px;font-size:12.5px;color:var(--soft);font-style:italic}
 .fault>.margin .state{color:var(--beyond)}
 .change{font-weight:400;font-size:.8em;color:var(--soft);white-space:nowrap}
