@@ -22,14 +22,16 @@ export function nearestOn({ conductor: { x1, y1, x2, y2 } }: PlanItem, place: Po
   return nearestOnLine([x1, y1], [x2, y2], place);
 }
 
-/** The conductor under a place; a rod before the conductors that it stands on. */
+/** Share of the reach within which a rod is hit before what passes through it. Reason: that is where its ring is drawn. */
+const ROD_FIRST = 0.5;
+
+/** The conductor under a place; a rod before the conductors that it stands on, of which one is always nearer. */
 export function itemAt(items: readonly PlanItem[], place: Point, tolerance: number): PlanItem | undefined {
   let best: PlanItem | undefined;
   let least = Number.POSITIVE_INFINITY;
   for (const item of items) {
     const { distance } = nearestOn(item, place);
-    // rods are points in plan and would never win against the line through them
-    const weighed = item.rod ? distance / 2 - tolerance / 1e3 : distance;
+    const weighed = item.rod && distance <= ROD_FIRST * tolerance ? distance - tolerance : distance;
     if (distance <= tolerance && weighed < least) {
       best = item;
       least = weighed;
