@@ -1,4 +1,5 @@
 // The computing that commands call, in one place, so that tests can put a quick one in its stead.
+import { freemem } from 'node:os';
 import type { Crew } from '@ohmstead/core';
 import type { PageScripts, Renderer } from '@ohmstead/pack';
 import {
@@ -42,6 +43,9 @@ export interface Engine {
   readonly version: string;
 }
 
+/** Of the memory that is free; the rest is left to the machine. */
+const MEMORY_SHARE = 0.8;
+
 /** @param crew shares in large work, and is ended with it */
 export function engineWith(crew?: Crew): Engine {
   const ending = async <T>(work: Promise<T>): Promise<T> => {
@@ -56,7 +60,8 @@ export function engineWith(crew?: Crew): Engine {
     loadPoints,
     loadSurvey,
     fitSurvey,
-    solveStudy: (loaded, options) => ending(solveStudy(loaded, { ...options, crew })),
+    solveStudy: (loaded, options) =>
+      ending(solveStudy(loaded, { ...options, crew, memoryBytes: MEMORY_SHARE * freemem() })),
     fieldAt: (loaded, points, caseName, onProgress) =>
       ending(fieldAt(loaded, points, caseName, onProgress, crew)),
     // read only when wanted: it is as large as the program itself

@@ -4,6 +4,7 @@ import {
   type Crew,
   type GraphSolution,
   interfaceDepths,
+  leakageBytes,
   MODEL_FLOOR,
   refinementUncertainty,
   type SegmentMesh,
@@ -66,10 +67,12 @@ const SEGMENT_CEILING = 4000;
 /** Meshes that show a ratio of changes. */
 const WANTED_LEVELS = 3;
 const LAST_LEVEL = 6;
-/** Most segments of the second mesh, which every study needs: a compressed leakage matrix of 0.4 GB and about a minute of one core. */
-const MOST_SEGMENTS = 60_000;
-/** Memory that a large electrode takes, a segment: 5.5 kB of compressed matrix were seen at 52 000, and the mesh besides. */
-const BYTES_A_SEGMENT = 7000;
+/** Memory that may be taken where the caller does not know of more: what a browser's tab and a small machine have. */
+const USUAL_MEMORY_BYTES = 2e9;
+/** Below this many segments no machine that runs the program is too small: 0.1 GB. */
+const UNPLANNED_SEGMENTS = 10_000;
+/** Of the mesh, its graph and its fields besides the leakage matrix, a segment; 0.6 kB were seen at 50 000. */
+const MESH_BYTES = 1000;
 /**
  * Lattice spacing, m: half a metre shows a mesh of 3 m. Small plans get this many points along the longer side, down to
  * the finest spacing; large ones at most this many.
@@ -93,6 +96,8 @@ export interface Running {
   readonly crew?: Crew | undefined;
   /** what earlier computations left; nothing where undefined */
   readonly memory?: SolveMemory | undefined;
+  /** memory that may be taken, bytes */
+  readonly memoryBytes?: number | undefined;
 }
 
 export interface LevelsOptions extends Running {
@@ -109,7 +114,8 @@ export async function solveLevels(prepared: Prepared, options: LevelsOptions): P
   const spacing = latticeSpacing(box);
   const meshAt = (level: number): SegmentMesh =>
     segmentMesh(prepared.loaded.conductors, prepared.joints, interfaces, level);
-  refuseBeyondMemory(meshAt(1).count);
+  // every study needs its second mesh
+  refuseBeyond(options.memoryBytes ?? USUAL_MEMORY_BYTES, meshAt(1));
   const at = async (level: number): Promise<Level> => {
     await progress('solving the graph', level / (LAST_LEVEL + 2));
     const mesh = meshAt(level);
@@ -171,15 +177,17 @@ function unitField(series: readonly Level[], u: number, found: Found): UnitField
 }
 
 /** @throws InputFaults when the two meshes that every study needs cannot be held */
-function refuseBeyondMemory(segments: number): void {
-  if (segments <= MOST_SEGMENTS) return;
-  const gigabytes = ((segments * BYTES_A_SEGMENT) / 1e9).toFixed(1);
+function refuseBeyond(most: number, mesh: SegmentMesh): void {
+  if (mesh.count <= UNPLANNED_SEGMENTS) return;
+  const bytes = leakageBytes(mesh) + MESH_BYTES * mesh.count;
+  if (bytes <= most) return;
+  const gigabytes = (value: number): string => `${(value / 1e9).toFixed(1)} GB`;
   throw new InputFaults([
     {
       file: STUDY_FILE,
       place: 'conductors',
       code: 'too-large',
-      message: `the electrode needs ${segments} segments, about ${gigabytes} GB; at most ${MOST_SEGMENTS} segments are solved`,
+      message: `the electrode needs ${mesh.count} segments and about ${gigabytes(bytes)} of memory; this machine has ${gigabytes(most)} for it`,
     },
   ]);
 }

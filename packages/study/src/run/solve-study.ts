@@ -30,6 +30,8 @@ export interface SolveOptions {
   readonly onField?: (field: SolvedField) => void;
   /** what earlier computations of an edited study left; leave it out for numbers that are recorded */
   readonly memory?: SolveMemory;
+  /** memory that may be taken, bytes; a study that needs more is refused with the figure */
+  readonly memoryBytes?: number;
 }
 
 /** @throws InputFaults when the drawing has faults; SolverStalled or NotPositiveDefinite for a fault of the program */
@@ -42,6 +44,7 @@ export async function solveStudy(loaded: LoadedStudy, options: SolveOptions = {}
   const running = { progress, crew, memory };
   const solved = await solveLevels(prepared, {
     ...running,
+    memoryBytes: options.memoryBytes,
     onFirst: onFirst && ((first) => onFirst(outcomeOf(prepared, ground, first, NOTHING_BESIDE))),
   });
   const base = judged(prepared, solved).map(({ result }) => result);
