@@ -85,7 +85,9 @@ export interface LeakageTables {
 }
 
 export function leakageTables(mesh: SegmentMesh, images: SoilImages): LeakageTables {
-  const depths = depthPairs(mesh, images, planReach(mesh));
+  // tables are read at r² + a²
+  const thickest = mesh.radius.reduce((most, radius) => Math.max(most, radius), 0);
+  const depths = depthPairs(mesh, images, Math.hypot(planReach(mesh), thickest));
   return {
     records: segmentRecords(mesh, (i) => depths.upright[depths.classOf[i]!]!, depths.uprightLeast),
     depths,

@@ -5,6 +5,7 @@ import { leakageBlocks, leakageMatrix } from '../../src/leakage/leakage-matrix.t
 import { soilImages } from '../../src/soil/image-list.ts';
 import { type Bar, conductorTable, gridBars, rodBar } from '../support/electrodes.ts';
 import { integratedEntry } from '../support/entry-reference.ts';
+import { looseMesh } from '../support/loose-mesh.ts';
 import { randomNumbers } from '../support/random.ts';
 import { soil } from '../support/soils.ts';
 
@@ -98,6 +99,17 @@ describe('leakage matrix', () => {
     fillWide(places, places, again);
     expect(again).toEqual(a);
     expect(b).not.toEqual(a);
+  });
+
+  it('holds for a thick shaft by itself, whose plan has no extent', () => {
+    const shaft = Array.from({ length: 150 }, (_, k) => rodBar(0, 0, 0.6 + 0.2 * k, 0.8 + 0.2 * k, 0.4));
+    const mesh = looseMesh(shaft, [0.3, 0.6]);
+    const images = soilImages(soil([2000, 0.3], [50, 0.3], [400]));
+    const { entries } = leakageMatrix(mesh, images);
+    for (const [i, j] of [[0, 0], [1, 0], [9, 4], [80, 3], [149, 0]] as const) // biome-ignore format: one row
+      expect(
+        Math.abs(entries[(i * (i + 1)) / 2 + j]! / integratedEntry(mesh, images, i, j) - 1),
+      ).toBeLessThan(1e-6);
   });
 
   it('leaves out insulated conductors', () => {
