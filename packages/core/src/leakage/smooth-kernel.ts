@@ -3,6 +3,10 @@ import type { ImageList } from '../soil/image-list.ts';
 import type { DepthClass } from './depth-classes.ts';
 import { type RadialTable, radialTable } from './radial-table.ts';
 
+/** Tables kept of each list. Reason: meshes of one electrode, coarse to fine, ask for the same depths. */
+const MOST_KEPT = 64;
+const known = new WeakMap<ImageList, Map<string, RadialTable | undefined>>();
+
 /**
  * Mean over a vertical source (or value for a horizontal one) of Σ weight/√(r² + h²) over the chosen images, for a
  * field point at depth z; undefined where none is chosen. For a vertical extent the mean is
@@ -13,6 +17,24 @@ import { type RadialTable, radialTable } from './radial-table.ts';
  * @param reach largest horizontal distance asked of the table, m
  */
 export function smoothKernel(
+  images: ImageList,
+  chosen: readonly number[],
+  source: DepthClass,
+  fieldDepth: number,
+  reach: number,
+): RadialTable | undefined {
+  const made = known.get(images) ?? new Map<string, RadialTable | undefined>();
+  known.set(images, made);
+  const key = [source.z1, source.z2, source.vertical, fieldDepth, reach, ...chosen].join(' ');
+  if (!made.has(key)) {
+    const [oldest] = made.keys();
+    if (made.size >= MOST_KEPT && oldest !== undefined) made.delete(oldest);
+    made.set(key, tabulated(images, chosen, source, fieldDepth, reach));
+  }
+  return made.get(key);
+}
+
+function tabulated(
   images: ImageList,
   chosen: readonly number[],
   source: DepthClass,
