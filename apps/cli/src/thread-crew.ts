@@ -1,19 +1,10 @@
 // A crew of threads of this process, started when first asked.
 import { availableParallelism } from 'node:os';
 import { Worker } from 'node:worker_threads';
-import { type Crew, crewOf, type Helper, type HelperHearing, type Said } from '@ohmstead/core';
+import { type Crew, crewOf, type Helper, type HelperHearing, helperCount, type Said } from '@ohmstead/core';
 
-/** Beside the caller: four members take two parts each of a matrix, and memory is not read faster by more. */
-const MOST_HELPERS = 3;
-
-/**
- * @param script of a helper
- * @param size helpers at most; one a processor, but for the caller's, where left out
- */
-export function threadCrew(
-  script: URL,
-  size: number = Math.min(MOST_HELPERS, availableParallelism() - 1),
-): Crew {
+/** @param script of a helper @param size helpers at most */
+export function threadCrew(script: URL, size: number = helperCount(availableParallelism())): Crew {
   return crewOf(size, { shared: true, start: (hear) => thread(script, hear) });
 }
 

@@ -1,7 +1,7 @@
 // All computing, pure: no file, clock, network, console or DOM.
 
 export { type Crew, HelperLost } from './crew/crew.ts';
-export { crewOf, type Helper, type HelperHearing, type Platform } from './crew/helpers.ts';
+export { crewOf, type Helper, type HelperHearing, helperCount, type Platform } from './crew/helpers.ts';
 export { type Order, type Said, type Work, workshop } from './crew/workshop.ts';
 export { decrementFactor } from './fault/decrement.ts';
 export { type FaultToGround, gridCurrent } from './fault/grid-current.ts';

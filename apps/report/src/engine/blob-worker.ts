@@ -1,9 +1,6 @@
 // A worker made from the text of the engine, so that one text serves a hosted page and a file alike.
-import type { PageScripts } from '@ohmstead/pack';
 import type { EngineWorker, Hearing } from './engine-worker.ts';
-import type { EngineAnswer, EngineRequest } from './messages.ts';
-
-type EngineScripts = Pick<PageScripts, 'engine'> & Partial<PageScripts>;
+import type { EngineAnswer, EngineRequest, EngineScripts } from './messages.ts';
 
 /**
  * Starts an engine; requests wait until its text is there.
@@ -14,9 +11,9 @@ export function blobWorker(scripts: Promise<EngineScripts>, hear: Hearing): Engi
   let worker: Worker | undefined;
   let ended = false;
   const waiting: EngineRequest[] = [];
-  const begin = ({ engine, starter }: EngineScripts): void => {
+  const begin = (texts: EngineScripts): void => {
     if (ended) return;
-    const url = URL.createObjectURL(new Blob([engine], { type: 'text/javascript' }));
+    const url = URL.createObjectURL(new Blob([texts.engine], { type: 'text/javascript' }));
     const begun = new Worker(url, { name: 'engine' });
     worker = begun;
     begun.onmessage = (event: MessageEvent<EngineAnswer>) => {
@@ -29,7 +26,7 @@ export function blobWorker(scripts: Promise<EngineScripts>, hear: Hearing): Engi
       event.preventDefault();
       hear.broken(event.message);
     };
-    if (starter !== undefined) begun.postMessage({ kind: 'carry', scripts: { engine, starter } });
+    begun.postMessage({ kind: 'carry', scripts: texts });
     for (const request of waiting) begun.postMessage(request);
   };
   scripts.then(begin).catch((error: unknown) => hear.broken(String(error)));

@@ -2,9 +2,12 @@
 import type { Comparison, PageScripts, TextComparison } from '@ohmstead/pack';
 import type { Fault, FieldPoint, FieldValue, Outcome, Profile } from '@ohmstead/study';
 
+/** The engine's own text, and what starts it in a pack, where packs are to carry both. */
+export type EngineScripts = Pick<PageScripts, 'engine'> & Partial<PageScripts>;
+
 export type EngineRequest =
-  /** the scripts that the sheets of packs are to carry; none do before it */
-  | { readonly kind: 'carry'; readonly scripts: PageScripts }
+  /** what helpers are started from, and what the sheets of packs are to carry; neither is before it */
+  | { readonly kind: 'carry'; readonly scripts: EngineScripts }
   | {
       readonly kind: 'solve';
       /** tells answers to this request from answers to one that it replaced */

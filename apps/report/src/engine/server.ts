@@ -1,4 +1,5 @@
 // The engine's side: one run at a time, which hears between its stages that it is no longer wanted.
+import type { Crew } from '@ohmstead/core';
 import type { PageScripts } from '@ohmstead/pack';
 import { InputFaults, loadStudy, type SolvedField, solveMemory, solveStudy } from '@ohmstead/study';
 import type { EngineAnswer, EngineRequest } from './messages.ts';
@@ -10,6 +11,8 @@ export interface ServerTools {
   readonly say: (answer: EngineAnswer, transfer?: Transferable[]) => void;
   /** lets requests that have come in meanwhile be heard */
   readonly pause: () => Promise<void>;
+  /** shares in large work, and is ended with each run */
+  readonly crew?: Crew;
 }
 
 /** Thrown through the solver by a run that is no longer wanted. */
@@ -18,7 +21,7 @@ class Unwanted extends Error {}
 /**
  * @returns takes requests; a new `solve` ends the one before, and answers of an ended run are followed by none
  */
-export function engineServer({ say, pause }: ServerTools): (request: EngineRequest) => void {
+export function engineServer({ say, pause, crew }: ServerTools): (request: EngineRequest) => void {
   let wanted: number | undefined;
   let solved: SolvedRun | undefined;
   let scripts: PageScripts | undefined;
@@ -33,6 +36,7 @@ export function engineServer({ say, pause }: ServerTools): (request: EngineReque
     const loaded = loadStudy(await studySource(files));
     let field: SolvedField | undefined;
     const outcome = await solveStudy(loaded, {
+      crew,
       memory,
       onProgress: async (stage, share) => {
         say({ kind: 'progress', run, stage, share });
@@ -61,13 +65,18 @@ export function engineServer({ say, pause }: ServerTools): (request: EngineReque
 
   return (request) => {
     switch (request.kind) {
-      case 'carry':
-        scripts = request.scripts;
+      case 'carry': {
+        const { engine, starter } = request.scripts;
+        scripts = starter === undefined ? undefined : { engine, starter };
         return;
+      }
       case 'solve': {
         const { run, files } = request;
         wanted = run;
-        before = before.then(() => solve(run, files).catch((error: unknown) => say(ending(run, error))));
+        before = before
+          .then(() => solve(run, files))
+          .catch((error: unknown) => say(ending(run, error)))
+          .finally(() => crew?.end());
         return;
       }
       case 'cancel':

@@ -27,6 +27,8 @@ export interface Crew {
    * never keeps the data of two.
    */
   hands(): readonly Hand[];
+  /** waits until those asked are so far under way that they go on while the caller is busy */
+  underWay(): Promise<void>;
   /** ends all helpers and what they keep; a later job starts them anew */
   end(): void;
 }

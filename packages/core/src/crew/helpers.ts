@@ -7,6 +7,8 @@ export interface Helper {
   /** may throw where the message cannot be sent */
   post(order: { readonly task: string; readonly input: unknown }, moved: readonly ArrayBuffer[]): void;
   end(): void;
+  /** until then it needs its starter's thread to be idle; from the beginning where absent */
+  readonly underWay?: Promise<void>;
 }
 
 /** What is heard of a helper. */
@@ -21,6 +23,14 @@ export interface Platform {
   start(hear: HelperHearing): Helper;
   /** whether threads can see the same memory */
   readonly shared: boolean;
+}
+
+/** Beside the caller: four members take two parts each of a matrix, and memory is not read faster by more. */
+const MOST_HELPERS = 3;
+
+/** Helpers that a machine of so many processors can use: one each, but for the caller's. */
+export function helperCount(processors: number): number {
+  return Math.max(0, Math.min(MOST_HELPERS, processors - 1));
 }
 
 /** @param size helpers at most */
@@ -42,6 +52,9 @@ export function crewOf(size: number, platform: Platform): Crew {
         }),
       );
     },
+    async underWay() {
+      await Promise.all(members.map((one) => one.underWay()));
+    },
     end() {
       job++;
       for (const one of members) one.end();
@@ -54,8 +67,13 @@ interface Waiting {
   readonly failed: (error: HelperLost) => void;
 }
 
+interface Member extends Hand {
+  underWay(): Promise<void> | undefined;
+  end(): void;
+}
+
 /** One place in the crew: its helper, and who waits for it. One that broke is not started again before the crew was ended. */
-function member(platform: Platform): Hand & { end(): void } {
+function member(platform: Platform): Member {
   let waiting: Waiting[] = [];
   let helper: Helper | undefined;
   let lost: HelperLost | undefined;
@@ -98,6 +116,7 @@ function member(platform: Platform): Hand & { end(): void } {
         }
       });
     },
+    underWay: () => helper?.underWay,
     end() {
       giveUp(new HelperLost('the crew was ended'));
       lost = undefined;

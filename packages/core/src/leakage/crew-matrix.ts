@@ -50,7 +50,7 @@ export async function crewMatrix(
   const hands = crew.hands();
   const away = others.map((range, h) => awayParts({ plan, tables, entries, range }, hands[h]!, crew));
   const [first, ...more] = await together(
-    () => here.start(),
+    () => crew.underWay().then(() => here.start()),
     away.map((one) => one.start()),
   );
   const joined = joinParts(plan, entries, [first, ...more].flat());
@@ -90,7 +90,7 @@ function shares(parts: number, members: number): PartRange[] {
 }
 
 /** What the caller does while helpers are at work, and what they give, in this order. */
-function together<T>(own: () => T, asked: readonly Promise<T>[]): Promise<T[]> {
+function together<T>(own: () => T | Promise<T>, asked: readonly Promise<T>[]): Promise<T[]> {
   // a fault of the own work must wait for them, too
   return Promise.all([new Promise<T>((done) => done(own())), ...asked]);
 }

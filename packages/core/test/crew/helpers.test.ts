@@ -123,6 +123,25 @@ describe('a crew', () => {
     expect(slow.hearings.length).toBe(0);
   });
 
+  it('waits for helpers that were asked until they are under way', async () => {
+    const events: string[] = [];
+    let begin = (): void => {};
+    const underWay = new Promise<void>((done) => {
+      begin = done;
+    });
+    const crew = crewOf(2, { shared: false, start: () => ({ underWay, post: () => {}, end: () => {} }) });
+    await crew.underWay();
+    const asked = crew.hands()[0]!.ask(ADD, { of: [1] });
+    const waited = crew.underWay().then(() => events.push('under way'));
+    await Promise.resolve();
+    events.push('begun');
+    begin();
+    await waited;
+    expect(events).toEqual(['begun', 'under way']);
+    crew.end();
+    await expect(asked).rejects.toThrow(HelperLost);
+  });
+
   it('has shared memory where the platform has', () => {
     const shared = crewOf(0, { shared: true, start: () => ({ post: () => {}, end: () => {} }) });
     expect(shared.doubles(3).buffer).toBeInstanceOf(SharedArrayBuffer);
