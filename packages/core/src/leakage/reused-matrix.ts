@@ -22,7 +22,7 @@ export interface ReusedLeakage extends KnownLeakage {
 /**
  * The leakage matrix of a changed mesh in the same soil. A conductor that is moved, added or removed changes its own
  * segments and those cut anew where it joins; rows of these alone are computed. Entries kept may differ from new ones
- * as two tables of the same images do, by 1e-8 of themselves at most: a table's bins follow the extent of the mesh. (To
+ * as two tables of the same images do, by 1e-7 of themselves at most: a table's bins follow the extent of the mesh. (To
  * start an iteration from the solution before saves one step of a dozen and costs one: measured, and left out.)
  */
 export function reusedLeakageMatrix(previous: KnownLeakage, mesh: SegmentMesh): ReusedLeakage {

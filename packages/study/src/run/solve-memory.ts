@@ -40,7 +40,7 @@ export const noMemory: SolveMemory = {
 };
 
 /**
- * A memory that lasts from one computation to the next. Entries that are taken over differ from new ones by 1e-8 of
+ * A memory that lasts from one computation to the next. Entries that are taken over differ from new ones by 1e-7 of
  * themselves at most, far below the stated uncertainty, but not by nothing: what is recorded is computed without it.
  */
 export function solveMemory(): SolveMemory {
