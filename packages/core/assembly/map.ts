@@ -326,3 +326,19 @@ export function drops(
     }
   }
 }
+
+/** Adds up Σ weight·ln[(h + √(r² + h²))/h] over heights and weights at every r², two at a time. */
+export function heights(list: usize, count: i32, squares: usize, bytes: usize, into: usize): void {
+  for (let i: usize = 0; i < bytes; i += 16) v128.store(into + i, f64x2.splat(0));
+  for (let k: i32 = 0; k < count; k++) {
+    const h = v128.load64_splat(list);
+    const weight = v128.load64_splat(list, 8);
+    const hh = f64x2.mul(h, h);
+    for (let i: usize = 0; i < bytes; i += 16) {
+      const root = f64x2.sqrt(f64x2.add(v128.load(squares + i), hh));
+      const term = f64x2.mul(weight, logarithmOfRatio(f64x2.add(h, root), h));
+      v128.store(into + i, f64x2.add(v128.load(into + i), term));
+    }
+    list += 16;
+  }
+}

@@ -1,7 +1,7 @@
 // Potentials of the soil surface at many points, segment by segment: Gauss points far away, the closed form near.
 import { logarithm, radialPair } from './radial';
 
-export { drops, sources, spread, transfer, wires } from './map';
+export { drops, heights, sources, spread, transfer, wires } from './map';
 
 // Addresses and counts of one group of horizontal metal; written by `level` before points are asked for.
 let segments: usize = 0;

@@ -5,6 +5,7 @@ import type { MapLayout } from './map-layout.ts';
 import { DEGREES, FROM_VALUES, ORDER, ROOTS, TERMS } from './plan-expansion.ts';
 import { COLUMNS, ROD_LEVEL, type RodPoints } from './rod-points.ts';
 import type { RodTables } from './rod-tables.ts';
+import { type PlanBox, radialReach, requireWithin } from './table-reach.ts';
 
 /** Rods whose tables are read at the places of a cell of the finest level, being in none of its expansions. */
 export function nearRods(
@@ -42,7 +43,15 @@ export function addFarRods(
         n[points.ys + r * ORDER + j] = cells.south(k, targets.south + r) + (side / 2) * (1 + ROOTS[j]!);
     n.fill(0, points.values, points.values + cases * points.columns * points.rows);
     const coarsest = k === cells.levels.length - 1;
+    const box: PlanBox = [
+      cells.west(k, targets.west),
+      cells.south(k, targets.south),
+      cells.west(k, targets.east + 1),
+      cells.south(k, targets.north + 1),
+    ];
     rods.forEach((rod, r) => {
+      // cells may reach past the map
+      requireWithin(radialReach(rod.tables[0]!), [rod.x, rod.y, rod.x, rod.y], box);
       writeSource(n, layout, rod);
       const column = cells.column(rod.x) >> k;
       const row = cells.row(rod.y) >> k;

@@ -70,9 +70,12 @@ export function uprightMean({ z1, z2, radiusSquared, ownWeight, rest }: SegmentG
 
 function summed(tables: readonly RadialTable[], strengths: readonly number[]): RadialTable {
   const [first] = tables;
-  const bins = first!.bins.slice();
-  for (let k = 0; k < bins.length; k++)
-    if (k % STRIDE >= BIN_HEAD)
-      bins[k] = tables.reduce((sum, table, t) => sum + strengths[t]! * table.bins[k]!, 0);
+  const bins = new Float64Array(first!.bins.length);
+  tables.forEach((table, t) => {
+    const strength = strengths[t]!;
+    for (let k = 0; k < bins.length; k++) bins[k]! += strength * table.bins[k]!;
+  });
+  for (let bin = 0; bin < bins.length; bin += STRIDE)
+    for (let k = bin; k < bin + BIN_HEAD; k++) bins[k] = first!.bins[k]!;
   return { ...first!, bins };
 }

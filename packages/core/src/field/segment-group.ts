@@ -3,7 +3,7 @@ import type { SegmentMesh } from '../geometry/segments.ts';
 import type { DepthClass } from '../leakage/depth-classes.ts';
 import { type RadialTable, radialTable, radialValue } from '../leakage/radial-table.ts';
 import { smoothKernel } from '../leakage/smooth-kernel.ts';
-import type { SoilImages } from '../soil/image-list.ts';
+import type { ImageList, SoilImages } from '../soil/image-list.ts';
 import type { PlanBox } from './table-reach.ts';
 
 /** Coordinates and currents packed, shape [count] each. Tables are functions of the distance in plan, radius included. */
@@ -36,10 +36,16 @@ const LONGEST = 4;
 /** An image offset below this is none, m. */
 const NO_OFFSET = 1e-12;
 
+/** Whether an image lies at the metal's own distance from the surface: the source or its reflection there. */
+export function isOwn({ offset }: ImageList, k: number): boolean {
+  return Math.abs(offset[k]!) < NO_OFFSET;
+}
+
 /**
  * @param members segments of the class that leak, of one radius
  * @param leakages current into the soil by segment, A; shape [mesh.count] each
  * @param reach largest distance that the tables hold, m
+ * @param upright table of the farther images of vertical metal
  */
 export function segmentGroup(
   mesh: SegmentMesh,
@@ -48,15 +54,15 @@ export function segmentGroup(
   depths: DepthClass,
   members: readonly [number, ...number[]],
   reach: number,
+  upright: (depths: DepthClass, radius: number) => RadialTable | undefined,
 ): SegmentGroup {
   const list = images.list(depths.layer, 0);
   const every = Array.from({ length: list.count }, (_, k) => k);
-  const own = every.filter((k) => Math.abs(list.offset[k]!) < NO_OFFSET);
-  const others = every.filter((k) => Math.abs(list.offset[k]!) >= NO_OFFSET);
+  const own = every.filter((k) => isOwn(list, k));
+  const others = every.filter((k) => !isOwn(list, k));
   const ownWeight = own.reduce((sum, k) => sum + list.weight[k]!, 0);
   const radius = mesh.radius[members[0]]!;
-  const thin = smoothKernel(list, others, depths, 0, Math.hypot(reach, radius));
-  const rest = thin && thickened(thin, radius, reach);
+  const rest = depths.vertical ? upright(depths, radius) : levelRest(list, others, depths, radius, reach);
   const longest = depths.vertical || rest === undefined ? Infinity : LONGEST * rest.smoothness;
   const parts = members.flatMap((i) => evenParts(mesh, i, Math.ceil(mesh.length[i]! / longest) || 1));
   const pick = (value: (part: Part) => number): Float64Array => Float64Array.from(parts, value);
@@ -106,9 +112,16 @@ function evenParts(mesh: SegmentMesh, segment: number, count: number): Part[] {
   });
 }
 
-/** The table of metal with a radius: its distance is that from the axis and the radius together, as near and far alike. */
-function thickened(thin: RadialTable, radius: number, reach: number): RadialTable {
-  return radialTable((rr) => radialValue(thin, rr + radius * radius), thin.smoothness, reach);
+/** The farther images of horizontal metal; its distance is that from the axis and the radius together, near and far alike. */
+function levelRest(
+  list: ImageList,
+  others: readonly number[],
+  depths: DepthClass,
+  radius: number,
+  reach: number,
+): RadialTable | undefined {
+  const thin = smoothKernel(list, others, depths, 0, Math.hypot(reach, radius));
+  return thin && radialTable((rr) => radialValue(thin, rr + radius * radius), thin.smoothness, reach);
 }
 
 /** @param above depth and radius together, m */

@@ -15,19 +15,23 @@ export interface SurfaceMap {
 
 /** The same potentials without expansions. */
 export interface DirectSum {
+  /** leakages, of which maps may be asked for the first few */
+  readonly count: number;
   at(x: number, y: number, into: Float64Array): void;
   atMany(xs: Float64Array, ys: Float64Array, into: Float64Array): void;
   /** @throws RangeError when a place of a box is beyond the tables */
   within(places: PlanBox): void;
 }
 
+export type SlopedMetal = (u: number, x: number, y: number) => number;
+
 /** Points of a map that are compared with the direct sum. */
 const SAMPLE = 64;
 
-/** @param sloped writes what sloped metal adds at a place; undefined where there is none */
+/** @param sloped what sloped metal adds to one leakage at a place; undefined where there is none */
 export function surfaceMap(
   metal: MapMetal,
-  sloped: ((x: number, y: number, into: Float64Array) => void) | undefined,
+  sloped: SlopedMetal | undefined,
   direct: DirectSum,
   box: Box,
   spacing: number,
@@ -36,7 +40,10 @@ export function surfaceMap(
   const grid = gridOver(box, spacing);
   direct.within([grid.x0, grid.y0, grid.x0 + (grid.nx - 1) * spacing, grid.y0 + (grid.ny - 1) * spacing]);
   const { values, at } = gridPotentials(metal, grid);
-  const added = sloped && adaptiveLattices(sloped, tolerances, box, spacing);
+  const all = (x: number, y: number, into: Float64Array): void => {
+    for (let u = 0; u < into.length; u++) into[u] = sloped?.(u, x, y) ?? 0;
+  };
+  const added = sloped && adaptiveLattices(all, tolerances, box, spacing);
   added?.forEach((lattice, u) => {
     lattice.values.forEach((value, place) => {
       values[u]![place]! += value;
@@ -45,27 +52,24 @@ export function surfaceMap(
   const errors = differences(values, grid, direct);
   return {
     lattices: values.map((of, u) => ({ ...grid, values: of, evaluated: of.length, error: errors[u]! })),
-    potential: (u) => potentialOf(at, sloped, direct, metal.cases, u),
+    potential: (u) => potentialOf(at, sloped, direct, u),
   };
 }
 
 function potentialOf(
   at: GridPotentials['at'],
-  sloped: ((x: number, y: number, into: Float64Array) => void) | undefined,
+  sloped: SlopedMetal | undefined,
   direct: DirectSum,
-  cases: number,
   u: number,
 ): SurfacePotential {
-  const all = new Float64Array(cases);
+  const all = new Float64Array(direct.count);
   return (x, y) => {
     const value = at(u, x, y);
     if (value === undefined) {
       direct.at(x, y, all);
       return all[u]!;
     }
-    if (sloped === undefined) return value;
-    sloped(x, y, all);
-    return value + all[u]!;
+    return value + (sloped?.(u, x, y) ?? 0);
   };
 }
 
@@ -79,9 +83,9 @@ function differences(values: readonly Float64Array[], grid: Grid, direct: Direct
   );
   const xs = Float64Array.from(places, (place) => grid.x0 + (place % grid.nx) * grid.spacing);
   const ys = Float64Array.from(places, (place) => grid.y0 + Math.floor(place / grid.nx) * grid.spacing);
-  const sums = new Float64Array(places.length * values.length);
+  const sums = new Float64Array(places.length * direct.count);
   direct.atMany(xs, ys, sums);
   return values.map((of, u) =>
-    places.reduce((most, place, p) => Math.max(most, Math.abs(of[place]! - sums[p * values.length + u]!)), 0),
+    places.reduce((most, place, p) => Math.max(most, Math.abs(of[place]! - sums[p * direct.count + u]!)), 0),
   );
 }

@@ -6,10 +6,11 @@ import { addGroup } from './direct-sum.ts';
 import type { Box } from './lattice.ts';
 import { potentialAt } from './potential.ts';
 import { type RodTables, rodTables } from './rod-tables.ts';
-import { metalBox, segmentGroup } from './segment-group.ts';
+import { metalBox, type SegmentGroup, segmentGroup } from './segment-group.ts';
 import { addByKernel, type PackedGroup, packGroup, surfaceKernel } from './surface-kernel.ts';
-import { type SurfaceMap, type SurfacePotential, surfaceMap } from './surface-map.ts';
+import { type SlopedMetal, type SurfaceMap, type SurfacePotential, surfaceMap } from './surface-map.ts';
 import { type PlanBox, requireWithin } from './table-reach.ts';
+import { uprightRests } from './upright-rests.ts';
 
 export type { SurfacePotential } from './surface-map.ts';
 
@@ -26,7 +27,8 @@ export interface SurfacePotentials {
   /**
    * Maps of a box, far metal by expansions: within about 1e-5 of the rise, the difference from `at` being stated.
    * @param spacing of the points, m
-   * @param tolerances largest error of what sloped metal adds between points that are computed, one a leakage
+   * @param tolerances largest error of what sloped metal adds between points that are computed, one for each leakage
+   * that is mapped, from the first
    */
   map(box: Box, spacing: number, tolerances: readonly number[]): SurfaceMap;
 }
@@ -49,9 +51,15 @@ export function surfacePotentials(
   reach: number,
 ): SurfacePotentials {
   const { classes, of } = depthClasses(mesh);
+  const held = TABLE_REACH * reach;
+  const upright = uprightRests(
+    classes.filter(({ vertical }) => vertical),
+    images,
+    held,
+  );
   const groups = classes.flatMap((depths, c) =>
     byRadius(mesh, of, c).map((members) =>
-      segmentGroup(mesh, images, leakages, depths, members, TABLE_REACH * reach),
+      segmentGroup(mesh, images, leakages, depths, members, held, upright),
     ),
   );
   const sloped = leakages.map((leakage) => leakage.map((current, i) => (of[i]! < 0 ? current : 0)));
@@ -61,8 +69,9 @@ export function surfacePotentials(
   const within = (places: PlanBox): void => {
     if (metal !== undefined) requireWithin(reach, metal, places);
   };
+  const slopedOf: SlopedMetal = (u, x, y) => potentialAt(mesh, images, sloped[u]!, x, y, 0);
   const slopedAt = (x: number, y: number, into: Float64Array): void => {
-    for (let u = 0; u < count; u++) into[u] = anySloped ? potentialAt(mesh, images, sloped[u]!, x, y, 0) : 0;
+    for (let u = 0; u < count; u++) into[u] = anySloped ? slopedOf(u, x, y) : 0;
   };
   const at = (x: number, y: number, into: Float64Array): void => {
     within([x, y, x, y]);
@@ -97,19 +106,27 @@ export function surfacePotentials(
       rods ??= rodTables(
         groups.filter((group) => group.vertical),
         count,
-        reach,
+        held,
       );
-      const level = groups.filter((group) => !group.vertical);
-      return surfaceMap(
-        { groups: level, rods, cases: count },
-        anySloped ? slopedAt : undefined,
-        { at, atMany, within },
-        box,
-        spacing,
-        tolerances,
-      );
+      const cases = tolerances.length;
+      const metal = {
+        groups: groups.filter((group) => !group.vertical).map((group) => ofFirst(group, count, cases)),
+        rods: rods.map((rod) => ({ ...rod, tables: rod.tables.slice(0, cases) })),
+        cases,
+      };
+      const sloping = anySloped ? slopedOf : undefined;
+      return surfaceMap(metal, sloping, { count, at, atMany, within }, box, spacing, tolerances);
     },
   };
+}
+
+/** A group with the first of its leakages only. */
+function ofFirst(group: SegmentGroup, count: number, wanted: number): SegmentGroup {
+  if (wanted === count) return group;
+  const strength = new Float64Array(group.count * wanted);
+  for (let j = 0; j < group.count; j++)
+    for (let u = 0; u < wanted; u++) strength[j * wanted + u] = group.strength[j * count + u]!;
+  return { ...group, strength };
 }
 
 /** Segments of a class that leak, those of each radius together, in the order of the mesh. */

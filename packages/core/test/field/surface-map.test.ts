@@ -85,6 +85,16 @@ describe('a map', () => {
       0,
     );
     expect(worst / unit.resistance).toBeLessThan(KEPT);
+    // the first alone, of potentials of two
+    const first = surfacePotentials(mesh, images, [unit.leakage, other], 200).map(box, 1, [1]);
+    expect(first.lattices).toHaveLength(1);
+    const change = first.lattices[0]!.values.reduce(
+      (most, value, k) => Math.max(most, Math.abs(value - both.lattices[0]!.values[k]!)),
+      0,
+    );
+    expect(change / unit.resistance).toBeLessThan(KEPT);
+    expect(Math.abs(first.potential(0)(12.3, 4.5) - both.potential(0)(12.3, 4.5))).toBeLessThan(KEPT);
+    expect(first.potential(0)(-60, 4)).toBe(both.potential(0)(-60, 4));
     expect(both.potential(1)(12.3, 4.5)).toBeCloseTo(alone.potential(0)(12.3, 4.5), 5);
   });
 

@@ -47,7 +47,7 @@ export function look(
   count: number,
 ): Found[] {
   const { surfaces, graph } = level;
-  const tolerances = graph.units.map((unit) => tolerance * unit.resistance);
+  const tolerances = graph.units.slice(0, count).map((unit) => tolerance * unit.resistance);
   const map = surfaces.map(box, spacing, tolerances);
   const grid = map.lattices[0]!;
   const nodes = nodesReached(grid, level.fields[0]!.nearest);
