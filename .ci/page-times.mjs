@@ -43,6 +43,15 @@ const cell = (values) =>
     ? '–'
     : `${median(values).toFixed(0)} (${Math.min(...values).toFixed(0)} to ${Math.max(...values).toFixed(0)})`;
 
+/** Waits until an edit is computed: the page says so only after it said that it computes. */
+async function computed(page, before) {
+  await page.waitForFunction(
+    (count) => performance.getEntriesByName('edit to whole sheet').length > count,
+    before,
+    { timeout: 120_000 },
+  );
+}
+
 async function measured(page, edit) {
   await page.evaluate(() => {
     globalThis.longTasks = [];
@@ -56,9 +65,11 @@ async function measured(page, edit) {
         performance.clearMeasures();
         globalThis.longTasks.length = 0;
       });
+    const before = await page.evaluate(() => performance.getEntriesByName('edit to whole sheet').length);
     await edit(k);
-    await page.getByText('Computed.', { exact: true }).waitFor({ timeout: 120_000 });
-    await page.waitForTimeout(300);
+    await computed(page, before);
+    // figures are drawn one after another
+    await page.waitForTimeout(500);
   }
   return page.evaluate(() => ({
     first: performance.getEntriesByName('edit to first numbers').map(({ duration }) => duration),
@@ -110,8 +121,6 @@ const rows = [];
 await page.getByRole('button', { name: 'Try the demonstration study' }).click();
 await page.getByText('Computed.', { exact: true }).waitFor({ timeout: 120_000 });
 rows.push(['the demonstration, a resistivity typed', await measured(page, typing(page))]);
-await page.locator('.plan-svg').focus();
-await page.keyboard.press('Enter');
 await page.getByText('Conductors as tables').click();
 await page.getByRole('checkbox').last().check();
 rows.push(['the demonstration, a conductor moved', await measured(page, nudging(page))]);

@@ -6,6 +6,7 @@ import { factorsPart } from './bench-factors.ts';
 import { growthPart } from './bench-growth.ts';
 import { kernelRows } from './bench-kernels.ts';
 import { largeByChild } from './bench-large-child.ts';
+import { mapsPart } from './bench-maps.ts';
 import { demonstrationOf, partRows } from './bench-parts.ts';
 import type { Part, Surroundings } from './bench-stage.ts';
 import { startPart } from './bench-start.ts';
@@ -27,6 +28,7 @@ export function allParts(around: Surroundings): (() => Promise<Part>)[] {
     () => largeByChild('two layers', LARGE_ROUNDS, around),
     ...(around.full ? [() => largeByChild('four layers', 1, around)] : []),
     () => growthPart(around),
+    mapsPart,
     () => startPart(around),
     piecesPart,
   ];
