@@ -133,7 +133,8 @@ describe('a crew', () => {
     await crew.underWay();
     const asked = crew.hands()[0]!.ask(ADD, { of: [1] });
     const waited = crew.underWay().then(() => events.push('under way'));
-    await Promise.resolve();
+    // every promise that can be kept by now is
+    await new Promise((turn) => setImmediate(turn));
     events.push('begun');
     begin();
     await waited;
