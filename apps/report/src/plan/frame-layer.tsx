@@ -6,6 +6,8 @@ import { type Size, toGround, toScreen, type View } from './view.ts';
 
 const TICKS = 7;
 const BAR_PX = 110;
+/** Numbers along one border keep so far from those of the other, pixels. */
+const CORNER_PX = 26;
 
 export interface FrameLayerProps {
   readonly view: View;
@@ -27,6 +29,7 @@ export function FrameLayer({ view, size, units }: FrameLayerProps): VNode {
     <g class="frame-marks">
       {xs.map((x) => {
         const [px] = toScreen(view, size, [x * metres, 0]);
+        if (px < CORNER_PX) return null;
         return (
           <g key={x}>
             <line class="tick" x1={px} x2={px} y1={size.height} y2={size.height - 5} />
@@ -38,6 +41,7 @@ export function FrameLayer({ view, size, units }: FrameLayerProps): VNode {
       })}
       {ys.map((y) => {
         const [, py] = toScreen(view, size, [0, y * metres]);
+        if (py > size.height - CORNER_PX) return null;
         return (
           <g key={y}>
             <line class="tick" x1={0} x2={5} y1={py} y2={py} />

@@ -1,5 +1,5 @@
 // Voltages at a place, between the points of a case's maps.
-import type { CaseMap } from '@ohmstead/study';
+import type { CaseMap, Point, Profile } from '@ohmstead/study';
 
 export interface PlaceReading {
   /** V */
@@ -25,28 +25,27 @@ export function readingAt(map: CaseMap, x: number, y: number): PlaceReading | un
   return { potential: between(map.potential), touch: between(map.touch), step: between(map.step) };
 }
 
-/** Values along a straight line, at about the spacing of the map; shape [count] each. */
-export interface LineReading {
-  readonly distance: Float64Array;
-  readonly potential: Float64Array;
-  readonly touch: Float64Array;
-}
-
-export function readingsAlong(
-  map: CaseMap,
-  from: readonly [number, number],
-  to: readonly [number, number],
-): LineReading {
+/**
+ * Potential and touch voltage along a straight line, at about the spacing of the map.
+ * @returns the part of the line on the map, from its own beginning; undefined where that has less than two points
+ */
+export function profileOn(map: CaseMap, from: Point, to: Point): Profile | undefined {
   const length = Math.hypot(to[0] - from[0], to[1] - from[1]);
   const count = Math.max(2, Math.ceil(length / Math.min(map.dx, map.dy)) + 1);
-  const distance = Float64Array.from({ length: count }, (_, k) => (length * k) / (count - 1));
-  const read = Array.from(distance, (d) => {
-    const share = length === 0 ? 0 : d / length;
-    return readingAt(map, from[0] + share * (to[0] - from[0]), from[1] + share * (to[1] - from[1]));
-  });
+  const read = Array.from({ length: count }, (_, k) => {
+    const share = k / (count - 1);
+    const at: Point = [from[0] + share * (to[0] - from[0]), from[1] + share * (to[1] - from[1])];
+    const reading = readingAt(map, at[0], at[1]);
+    return reading && { at, along: share * length, ...reading };
+  }).filter((one) => one !== undefined);
+  const [first] = read;
+  const last = read.at(-1);
+  if (first === undefined || last === undefined || last.along === first.along) return undefined;
   return {
-    distance,
-    potential: Float64Array.from(read, (one) => one?.potential ?? Number.NaN),
-    touch: Float64Array.from(read, (one) => one?.touch ?? Number.NaN),
+    from: first.at,
+    to: last.at,
+    distance: Float64Array.from(read, ({ along }) => along - first.along),
+    potential: Float64Array.from(read, ({ potential }) => potential),
+    touch: Float64Array.from(read, ({ touch }) => touch),
   };
 }

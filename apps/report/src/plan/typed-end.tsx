@@ -33,7 +33,7 @@ export function TypedEnd({ from, towards, units, take, finish }: TypedEndProps):
       <label class="plan-field">
         to{' '}
         <input
-          class="in"
+          class="in typed-end"
           size={12}
           value={text}
           autocomplete="off"

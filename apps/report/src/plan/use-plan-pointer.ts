@@ -34,7 +34,7 @@ export interface PlanPointer<G> {
     readonly onPointerMove: (event: PointerEvent) => void;
     readonly onPointerUp: (event: PointerEvent) => void;
     readonly onPointerCancel: (event: PointerEvent) => void;
-    readonly onPointerLeave: () => void;
+    readonly onPointerLeave: (event: PointerEvent) => void;
     readonly onWheel: (event: WheelEvent) => void;
     readonly onDblClick: (event: MouseEvent) => void;
   };
@@ -124,8 +124,11 @@ export function usePlanPointer<G>(
     if (last === undefined || last.kind === 'pinch') return;
     const end = dragStep(last, held, view, size);
     if (end.view !== view) look(() => end.view);
-    if (end.drag.kind === 'pan' && !end.drag.far) deeds.click(ground(held.at), keysOf(event));
-    else if (end.drag.kind === 'band') deeds.band(end.drag.from, end.drag.to);
+    if (end.drag.kind === 'pan' && !end.drag.far) {
+      if (event.pointerType === 'touch') deeds.hover(ground(held.at), held.free);
+      deeds.click(ground(held.at), keysOf(event));
+    }
+    if (end.drag.kind === 'band') deeds.band(end.drag.from, end.drag.to);
     else if (end.drag.kind === 'move' && end.drag.far)
       deeds.drop(end.drag.grip, end.drag.from, end.drag.to, held.free);
     else if (end.drag.kind === 'move') deeds.tap(end.drag.grip);
@@ -141,8 +144,9 @@ export function usePlanPointer<G>(
         down.current.delete(event.pointerId);
         set(undefined);
       },
-      onPointerLeave: () => {
-        if (drag.current !== undefined) return;
+      onPointerLeave: (event) => {
+        // a finger that is lifted leaves its reading where it was
+        if (drag.current !== undefined || event.pointerType === 'touch') return;
         drop();
         deeds.hover(undefined, false);
       },

@@ -176,7 +176,7 @@ export function ProfileFigure({ outcome, caseIndex, name, title, css }: ProfileF
   ];
   if (limitEnd !== undefined) labels.push({ text: 'touch limit', tone: 'warn', volts: limitEnd[1] });
   const path = (points: readonly Point[]): string => linePath(drawn(scales, points));
-  const description = `Surface potential and metal potential along a line through the worst touch voltage. The metal rises to ${quantity(of.gpr_V, 'V')}; the touch limit lies ${quantity(of.touch.limit_V, 'V')} below the metal.`;
+  const description = `Surface potential and metal potential along a line${drawing.worst === undefined ? '' : ' through the worst touch voltage'}. The metal rises to ${quantity(of.gpr_V, 'V')}; the touch limit lies ${quantity(of.touch.limit_V, 'V')} below the metal.`;
   const worst = drawing.worst;
   return (
     <Figure name={name} title={title} description={description} width={WIDTH} height={HEIGHT} wide css={css}>

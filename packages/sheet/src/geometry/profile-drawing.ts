@@ -55,11 +55,19 @@ function assessedRuns(outcome: Outcome, profile: Profile): readonly (readonly [n
   return runs.filter(([first, last]) => last > first);
 }
 
-function worstAlong(outcome: Outcome, caseIndex: number, profile: Profile): number {
+/** A line passes through a place within this, m. Reason: places of results are rounded to far less, and no foot is smaller. */
+const THROUGH_M = 0.05;
+
+/** How far along the line the worst touch voltage of the case lies; undefined where the line passes it by. */
+function worstAlong(outcome: Outcome, caseIndex: number, profile: Profile): number | undefined {
   const { x_m, y_m } = outcome.results.cases[caseIndex].touch;
   const [dx, dy] = [profile.to[0] - profile.from[0], profile.to[1] - profile.from[1]];
   const length = Math.hypot(dx, dy);
-  return length > 0 ? ((x_m - profile.from[0]) * dx + (y_m - profile.from[1]) * dy) / length : 0;
+  if (length === 0) return undefined;
+  const [x, y] = [x_m - profile.from[0], y_m - profile.from[1]];
+  const aside = Math.abs(x * dy - y * dx) / length;
+  const along = (x * dx + y * dy) / length;
+  return aside <= THROUGH_M && along >= 0 && along <= length ? along : undefined;
 }
 
 /** Surface, metal and limit along the profile of a case. */
@@ -83,9 +91,11 @@ export function profileDrawing(outcome: Outcome, caseIndex: number): ProfileDraw
       return [...line(floor, first, last), ...[...line(lower, first, last)].reverse()];
     });
   const at = worstAlong(outcome, caseIndex, profile);
-  const nearest = profile.distance.findIndex((d) => d >= at);
+  const nearest = at === undefined ? -1 : profile.distance.findIndex((d) => d >= at);
   const worst =
-    nearest < 0 ? undefined : { along: axis.start + at, surface: surface[nearest], metal: metal[nearest] };
+    at === undefined || nearest < 0
+      ? undefined
+      : { along: axis.start + at, surface: surface[nearest], metal: metal[nearest] };
   return {
     axis,
     range: [along[0], along[along.length - 1]],

@@ -116,4 +116,16 @@ describe('a profile', () => {
     expect(drawing.worst?.along).toBeCloseTo(touch.x_m, 9);
     expect((drawing.worst?.metal ?? 0) - (drawing.worst?.surface ?? 0)).toBeCloseTo(touch.worst_V, 0);
   });
+
+  it('marks no worst place on a line that passes it by or ends before it', () => {
+    const [first] = outcome.cases;
+    const worstOn = (from: readonly [number, number], to: readonly [number, number]): unknown =>
+      profileDrawing({ ...outcome, cases: [{ ...first, profile: { ...first.profile, from, to } }] }, 0).worst;
+    const { from, to } = first.profile;
+    const { x_m } = outcome.results.cases[0].touch;
+    expect(worstOn(from, to)).toBeDefined();
+    expect(worstOn([from[0], from[1] + 1], [to[0], to[1] + 1])).toBeUndefined();
+    expect(worstOn(from, [x_m - 1, to[1]])).toBeUndefined();
+    expect(worstOn([x_m + 1, from[1]], to)).toBeUndefined();
+  });
 });

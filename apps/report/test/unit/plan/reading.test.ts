@@ -2,7 +2,7 @@
 import type { CaseMap } from '@ohmstead/study';
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
-import { readingAt, readingsAlong } from '../../../src/plan/reading.ts';
+import { profileOn, readingAt } from '../../../src/plan/reading.ts';
 
 /** Invented: a lattice on which each quantity is a plane of its own. */
 const planes = {
@@ -56,7 +56,7 @@ describe('readings', () => {
   });
 
   test('along a line stand as close as the points of the map, from end to end', () => {
-    const { distance, potential, touch } = readingsAlong(map, [-4, 10], [4, 16]);
+    const { distance, potential, touch } = profileOn(map, [-4, 10], [4, 16])!;
     expect([distance[0], distance.at(-1)]).toEqual([0, 10]);
     for (let k = 1; k < distance.length; k++) expect(distance[k]! - distance[k - 1]!).toBeLessThanOrEqual(2);
     distance.forEach((d, k) => {
@@ -66,10 +66,15 @@ describe('readings', () => {
     });
   });
 
-  test('along a line that leaves the map are none where it is outside', () => {
-    const { distance, potential } = readingsAlong(map, [0, 10], [0, 34]);
-    distance.forEach((d, k) => {
-      expect(Number.isNaN(potential[k])).toBe(d > 12);
-    });
+  test('along a line that leaves the map are of the part on it', () => {
+    const { from, to, distance, potential } = profileOn(map, [0, 4], [0, 34])!;
+    expect([from, to]).toEqual([
+      [0, 10],
+      [0, 22],
+    ]);
+    expect([distance[0], distance.at(-1)]).toEqual([0, 12]);
+    expect(potential[0]).toBeCloseTo(planes.potential(0, 10), 9);
+    expect(profileOn(map, [0, 40], [9, 60])).toBeUndefined();
+    expect(profileOn(map, [0, 12], [0, 12])).toBeUndefined();
   });
 });
