@@ -136,6 +136,8 @@ export function usePlanWork(desk: PlanDesk, items: readonly PlanItem[], looking:
         else apply(take(tool, snapped(place, free).at));
       },
       pickUp: (place, { shift, free }) => {
+        // a result that comes in does not move the ground under a hand
+        look((now) => now);
         if (shift) return undefined;
         if (tool.tool === 'profile' && tool.taken.length === 0)
           return { kind: 'line', at: snapped(place, free).at };
