@@ -19,25 +19,28 @@ const MAY_IMPORT = {
 /** The only package that runs in Node alone; all others must run in a browser too. */
 const NODE_ONLY = 'apps/cli';
 
-/** Folders of core, each importing only from itself and those before it. */
-const CORE_ORDER = [
-  'kernels',
-  'numerics',
-  'crew',
-  'materials',
-  'soil',
-  'geometry',
-  'leakage',
-  'network',
-  'solve',
-  'field',
-  'safety',
-  'fault',
-  'sizing',
-  'survey',
-  'fieldtest',
-  'closedform',
-];
+/** Folders of a package, each importing only from itself and those before it; files beside them import from all. */
+const FOLDER_ORDER = {
+  'packages/core': [
+    'kernels',
+    'numerics',
+    'crew',
+    'materials',
+    'soil',
+    'geometry',
+    'leakage',
+    'network',
+    'solve',
+    'field',
+    'safety',
+    'fault',
+    'sizing',
+    'survey',
+    'fieldtest',
+    'closedform',
+  ],
+  'apps/report': ['desk', 'files', 'engine', 'plan', 'view'],
+};
 
 /** No file, clock, unseeded chance, network, console or page in core. */
 const IMPURE = [
@@ -109,7 +112,7 @@ function importComplaint(root, home, name, one) {
         return undefined;
       if (!one.path.startsWith(`${home}/src/`)) return 'leaves its package';
       if (/\.tsx?$/.test(one.path) && !existsSync(join(root, one.path))) return 'no such file';
-      return home === 'packages/core' ? coreOrderComplaint(name, one.path) : undefined;
+      return FOLDER_ORDER[home] === undefined ? undefined : orderComplaint(home, name, one.path);
     case 'workspace':
       if (one.inner !== undefined) return 'reaches into a package; only its index is public';
       if (one.own) return 'a package does not import itself by name';
@@ -126,14 +129,15 @@ function importComplaint(root, home, name, one) {
   }
 }
 
-function coreOrderComplaint(from, to) {
-  if (from === 'packages/core/src/index.ts') return undefined;
-  const [here, there] = [from, to].map((path) => /^packages\/core\/src\/([^/]+)\//.exec(path)?.[1]);
-  if (!CORE_ORDER.includes(here)) return `${here ?? from} has no place in the order of core's folders`;
-  if (!CORE_ORDER.includes(there)) return `${there ?? to} has no place in the order of core's folders`;
-  return CORE_ORDER.indexOf(there) <= CORE_ORDER.indexOf(here)
-    ? undefined
-    : `${there} comes after ${here} in core`;
+function orderComplaint(home, from, to) {
+  const folderOf = (path) => path.slice(`${home}/src/`.length).split('/').slice(0, -1)[0];
+  const [here, there] = [from, to].map(folderOf);
+  if (here === undefined) return undefined;
+  const order = FOLDER_ORDER[home];
+  const named = home.split('/')[1];
+  if (!order.includes(here)) return `${here} has no place in the order of ${named}'s folders`;
+  if (!order.includes(there)) return `${there ?? to} has no place in the order of ${named}'s folders`;
+  return order.indexOf(there) <= order.indexOf(here) ? undefined : `${there} comes after ${here} in ${named}`;
 }
 
 function declared(root, home) {

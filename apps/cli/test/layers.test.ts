@@ -9,7 +9,14 @@ let root: string;
 beforeEach(() => {
   root = mkdtempSync(join(tmpdir(), 'layers-'));
   const manifest = JSON.stringify({ dependencies: { 'ml-matrix': '1' } });
-  for (const home of ['packages/core', 'packages/study', 'packages/sheet', 'packages/pack', 'apps/cli']) {
+  for (const home of [
+    'packages/core',
+    'packages/study',
+    'packages/sheet',
+    'packages/pack',
+    'apps/cli',
+    'apps/report',
+  ]) {
     write(`${home}/package.json`, manifest);
   }
   write('packages/core/src/index.ts', "export * from './soil/layers.ts';");
@@ -18,6 +25,7 @@ beforeEach(() => {
     "import { sum } from '../numerics/sum.ts'; export const a = sum;",
   );
   write('packages/core/src/numerics/sum.ts', 'export const sum: number = Math.sqrt(2);');
+  write('apps/report/src/view/bench.ts', 'export const b = 1;');
 });
 afterEach(() => rmSync(root, { recursive: true }));
 
@@ -54,6 +62,12 @@ test.each([
     'packages/core/src/misc/a.ts',
     "import '../soil/layers.ts'",
     "imports ../soil/layers.ts: misc has no place in the order of core's folders",
+  ],
+  [
+    'a later folder of the page',
+    'apps/report/src/desk/a.ts',
+    "import '../view/bench.ts'",
+    'imports ../view/bench.ts: view comes after desk in report',
   ],
   [
     'a package above',
