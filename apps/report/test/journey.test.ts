@@ -123,4 +123,67 @@ describe('files that cannot be opened', () => {
     expect(errors).toEqual([]);
     await page.context().close();
   });
+
+  it('leave the study that is worked at where it is', async () => {
+    const { page } = await watchedPage(sheet);
+    await page.goto(sheet.url);
+    await page.getByRole('button', { name: 'Try the demonstration study' }).click();
+    await computed(page);
+    await page.setInputFiles(FILES, { name: 'cut.zip', mimeType: 'x/x', buffer: Buffer.from('cut') });
+    await page
+      .getByRole('alert')
+      .filter({ hasText: /cut\.zip/ })
+      .waitFor();
+    expect(await page.locator('#rise').count()).toBe(1);
+    await typed(page, 'soil.layers[0].resistivity_ohm_m', '100');
+    await expect
+      .poll(() =>
+        page
+          .getByRole('alert')
+          .filter({ hasText: /cut\.zip/ })
+          .count(),
+      )
+      .toBe(0);
+    await page.context().close();
+  });
+});
+
+describe('what is added to a study that was computed', () => {
+  it('is asked for where it is not whole, and the sheet is out of date until then', async () => {
+    const { page } = await watchedPage(sheet);
+    await page.goto(sheet.url);
+    await page.getByRole('button', { name: 'Try the demonstration study' }).click();
+    await computed(page);
+    await page.getByRole('button', { name: 'add a case' }).click();
+    await page.getByText('Out of date: the sheet asks for what is missing.').waitFor();
+    const needs = page.getByRole('region', { name: /the sheet needs/ });
+    await needs.getByLabel(/grid current/).fill('2 kA');
+    await needs.getByLabel(/grid current/).press('Enter');
+    await needs.getByLabel(/fault duration/).fill('0.5');
+    await needs.getByLabel(/fault duration/).press('Enter');
+    await computed(page);
+    expect(await needs.count()).toBe(0);
+    await page.context().close();
+  });
+
+  it('may be rows typed by hand, which leave the field when they are taken', async () => {
+    const { page } = await watchedPage(sheet);
+    await page.goto(sheet.url);
+    await page.getByRole('button', { name: 'Try the demonstration study' }).click();
+    await computed(page);
+    await page.locator('#ground').getByText('paste rows').click();
+    const rows = page.locator('#ground textarea').first();
+    await rows.fill('100\tthick\n50');
+    await rows.blur();
+    await page.locator('#ground .input-faults').waitFor();
+    await rows.fill('100\t3\n50');
+    await rows.blur();
+    await computed(page);
+    expect(await page.locator('#ground .input-faults').count()).toBe(0);
+    expect(await rows.inputValue()).toBe('');
+    expect(await page.locator('[data-input="soil.layers[0].thickness_m"]').first().inputValue()).toMatch(
+      /^3\s/,
+    );
+    await page.context().close();
+  });
 });

@@ -19,7 +19,7 @@ export type Answer =
       readonly words: string;
     }
   | { readonly kind: 'text'; readonly path: JsonPath; readonly words: string }
-  /** conductors are drawn, pasted or opened; a survey is pasted or opened */
+  /** a table that is opened beside the study */
   | { readonly kind: 'table'; readonly table: 'conductors' | 'survey'; readonly words: string };
 
 export interface Question {
@@ -106,7 +106,7 @@ export function questionsOf({ study }: Draft): readonly Question[] {
     questions.push({
       id: 'conductors',
       ask: 'the conductors of the electrode',
-      answers: [{ kind: 'table', table: 'conductors', words: 'conductors, drawn, pasted or opened' }],
+      answers: [{ kind: 'table', table: 'conductors', words: 'a table of conductors' }],
     });
   }
   questions.push(...caseQuestions(study));

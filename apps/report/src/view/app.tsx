@@ -4,6 +4,7 @@ import { faultLine, type Point, type RowOrigin } from '@ohmstead/study';
 import type { VNode } from 'preact';
 import { useCallback, useEffect, useMemo, useState } from 'preact/hooks';
 import type { Draft } from '../desk/draft.ts';
+import { joinTables } from '../desk/join-tables.ts';
 import { setLabel } from '../desk/labels.ts';
 import { openDraft } from '../desk/open-draft.ts';
 import type { Opening } from '../desk/opening.ts';
@@ -43,6 +44,11 @@ export function App({ begin }: { readonly begin: EnginePlatform['begin'] }): VNo
   const take = (opening: Opening, label: string): void => {
     if (opening.kind === 'faults') setRefused(opening.faults.map(faultLine));
     else {
+      const joined = bench !== undefined && id !== undefined && joinTables(draftOf(bench), opening.draft);
+      if (joined) {
+        act({ kind: 'edit', draft: joined, label: `${label} added` });
+        return;
+      }
       setRefused([]);
       setId(crypto.randomUUID());
       act({ kind: 'open', draft: opening.draft, label });
@@ -68,9 +74,12 @@ export function App({ begin }: { readonly begin: EnginePlatform['begin'] }): VNo
   useEffect(() => {
     if (restoring !== undefined && id === undefined) goOn(restoring);
   }, [restoring]);
+  const history = bench?.history;
+  // a word about files is over with the next edit
+  useEffect(() => setRefused((told) => (told.length === 0 ? told : [])), [history]);
   useDroppedFiles(open);
   useUndoKeys(act);
-  if (bench === undefined || id === undefined || refused.length > 0)
+  if (bench === undefined || id === undefined)
     return (
       <Start
         open={open}
@@ -83,9 +92,11 @@ export function App({ begin }: { readonly begin: EnginePlatform['begin'] }): VNo
     );
   const close = (): void => {
     control.cancel();
+    setRefused([]);
     setId(undefined);
   };
-  return <Work key={id} control={control} bench={bench} open={open} close={close} storage={keeping.word} />;
+  const word = refused.length > 0 ? `These files cannot be read. ${refused.join('; ')}` : keeping.word;
+  return <Work key={id} control={control} bench={bench} open={open} close={close} word={word} />;
 }
 
 interface WorkProps {
@@ -94,13 +105,13 @@ interface WorkProps {
   readonly open: (list: readonly File[]) => void;
   /** back to the studies that are kept */
   readonly close: () => void;
-  /** what the page has to say of its storage */
-  readonly storage: string | undefined;
+  /** what the page has to say of its storage, or of files that were opened last */
+  readonly word: string | undefined;
 }
 
-function Work({ control, bench, open, close, storage }: WorkProps): VNode {
+function Work({ control, bench, open, close, word }: WorkProps): VNode {
   const { act, engine } = control;
-  const [word, setWord] = useState<string>();
+  const [failed, setFailed] = useState<string>();
   const [selected, select] = useState<readonly RowOrigin[]>([]);
   const draft = draftOf(bench);
   const units = unitsOf(draft);
@@ -108,8 +119,8 @@ function Work({ control, bench, open, close, storage }: WorkProps): VNode {
   const goTo = useCallback((x: number, y: number): void => setGoal({ at: [x, y] }), []);
   const present = useMemo(() => standing(draft, selected), [draft, selected]);
   const tell = (work: Promise<void>): void => {
-    setWord(undefined);
-    work.catch((error: unknown) => setWord(error instanceof Error ? error.message : String(error)));
+    setFailed(undefined);
+    work.catch((error: unknown) => setFailed(error instanceof Error ? error.message : String(error)));
   };
   const outcome = bench.solved?.outcome;
   // the share that is done changes many times a second and is no concern of the sheet
@@ -166,13 +177,13 @@ function Work({ control, bench, open, close, storage }: WorkProps): VNode {
           close={close}
           cancel={control.cancel}
           recompute={control.recompute}
-          word={word ?? storage}
+          word={failed ?? word}
         />
         <Contents state={(section) => sectionState(bench, section)} />
         <main id="page">
+          <Missing draft={draft} units={units} act={act} />
           {outcome === undefined ? (
             <>
-              <Missing draft={draft} units={units} act={act} />
               <Faults faults={bench.faults} />
               <Questions />
             </>

@@ -1,13 +1,13 @@
 // The page as a value: the study worked at, what is computed of it, and the states that are pinned.
 import type { SectionId, SectionState } from '@ohmstead/sheet';
-import { type Fault, type Outcome, STUDY_FILE } from '@ohmstead/study';
-import type { Draft } from '../desk/draft.ts';
+import type { Fault, Outcome } from '@ohmstead/study';
+import { type Draft, sameDraft } from '../desk/draft.ts';
 import { beginHistory, commit, type History, redo, undo } from '../desk/history.ts';
 import { questionsOf } from '../desk/missing.ts';
 import { addPin, type Pin, removePin, renamePin, stateOf } from '../desk/pins.ts';
 import type { RunAnswer } from '../engine/messages.ts';
 import { outdatedBy } from './dependence.ts';
-import { faultsOfSection } from './section-faults.ts';
+import { faultsOfSection, isAskedFor } from './section-faults.ts';
 
 /** An outcome and what it belongs to. */
 export interface Solved {
@@ -117,6 +117,8 @@ function answered(bench: Bench, answer: Exclude<RunAnswer, { kind: 'ended' }>): 
     case 'progress':
       return { ...bench, running: { ...running, stage: answer.stage, share: answer.share } };
     case 'first':
+      // words alone were edited: better results stand than an early outcome has
+      if (bench.solved?.early === false && outdatedBy(bench.solved.draft, draft).size === 0) return bench;
       return {
         ...bench,
         solved: { outcome: withOld(answer.outcome, bench.solved?.outcome), run, draft, early: true },
@@ -130,9 +132,10 @@ function answered(bench: Bench, answer: Exclude<RunAnswer, { kind: 'ended' }>): 
   }
 }
 
-/** Faults that are told: what study.json still lacks is asked for instead, as long as anything is. */
+/** Faults that are told: what study.json still lacks is asked for instead. */
 function toldFaults(draft: Draft, faults: readonly Fault[]): readonly Fault[] {
-  return questionsOf(draft).length === 0 ? faults : faults.filter(({ file }) => file !== STUDY_FILE);
+  const questions = questionsOf(draft);
+  return faults.filter((fault) => !isAskedFor(fault, questions));
 }
 
 /** What an early outcome leaves out stands as it was, greyed, where it is still about the same seasons. */
@@ -162,6 +165,14 @@ function afterRemoval(compared: number | undefined, removed: number): number | u
 /** Sections whose results are not those of the draft. */
 export function outdated(bench: Bench): ReadonlySet<SectionId> {
   return bench.solved === undefined ? new Set() : outdatedBy(bench.solved.draft, draftOf(bench));
+}
+
+/** Whether the last outcome is that of the draft, its words included, and final. */
+export function isComplete(bench: Bench): boolean {
+  const { solved, running } = bench;
+  return (
+    solved !== undefined && !solved.early && running === undefined && sameDraft(solved.draft, draftOf(bench))
+  );
 }
 
 /** Sections that an early outcome does not tell yet. */

@@ -83,6 +83,6 @@ function AnswerField({ question, answer, units, set }: AnswerFieldProps): VNode 
         </>
       );
     case 'table':
-      return <span class="soft">{answer.words}, opened beside this page’s strip or pasted below</span>;
+      return <span class="soft">{answer.words}, opened or dropped on this page as a table</span>;
   }
 }

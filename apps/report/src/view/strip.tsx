@@ -2,8 +2,9 @@
 import type { DisplayUnits } from '@ohmstead/study';
 import type { VNode } from 'preact';
 import { redoLabel, undoLabel } from '../desk/history.ts';
+import { questionsOf } from '../desk/missing.ts';
 import type { Bench, BenchAction } from './bench.ts';
-import { outdated } from './bench.ts';
+import { draftOf, isComplete, outdated } from './bench.ts';
 import { FilePicks } from './file-picks.tsx';
 
 export interface StripProps {
@@ -38,7 +39,7 @@ export function Strip(props: StripProps): VNode {
       )}
       <p class="words">
         {bench.running !== undefined && <Word press={props.cancel}>cancel</Word>}
-        {bench.running === undefined && !settled && bench.faults.length === 0 && (
+        {bench.running === undefined && !isComplete(bench) && bench.faults.length === 0 && (
           <Word press={props.recompute}>compute</Word>
         )}
         <Word press={() => act({ kind: 'undo' })} off={undo === undefined} title={undo}>
@@ -52,7 +53,7 @@ export function Strip(props: StripProps): VNode {
         </Word>
         <Word press={props.switchUnits}>{props.units === 'SI' ? 'show feet and inches' : 'show metres'}</Word>
         <Word press={props.saveStudy}>save the study</Word>
-        <Word press={props.takePack} off={!settled}>
+        <Word press={props.takePack} off={!isComplete(bench)}>
           take the review pack
         </Word>
         <FilePicks open={props.open} />
@@ -63,12 +64,17 @@ export function Strip(props: StripProps): VNode {
   );
 }
 
-function doing({ running, solved, faults, failure }: Bench): string {
+function doing(bench: Bench): string {
+  const { running, solved, faults, failure } = bench;
   if (running !== undefined) return `Computing: ${running.stage}`;
   if (failure !== undefined) return `A fault of the program, not of the study: ${failure}`;
   if (faults.length > 0)
     return `The study has ${faults.length === 1 ? 'a fault' : `${faults.length} faults`}.`;
-  return solved === undefined ? 'Not computed.' : 'Computed.';
+  if (solved === undefined) return 'Not computed.';
+  if (isComplete(bench)) return 'Computed.';
+  return questionsOf(draftOf(bench)).length > 0
+    ? 'Out of date: the sheet asks for what is missing.'
+    : 'Out of date.';
 }
 
 interface WordProps {

@@ -1,5 +1,5 @@
 // Takes rows pasted from a spreadsheet into a list of the study, wherever in the list they are pasted.
-import type { ComponentChildren, TargetedClipboardEvent, VNode } from 'preact';
+import type { ComponentChildren, TargetedClipboardEvent, TargetedEvent, VNode } from 'preact';
 import { useId, useState } from 'preact/hooks';
 import type { PastedTable } from '../desk/desk.ts';
 import { useDesk } from '../desk/use-desk.ts';
@@ -26,16 +26,24 @@ export function Pasting({ table, rows, children }: PastingProps): VNode {
     event.preventDefault();
     setComplaints(desk.paste(table, text));
   };
+  // rows typed by hand are taken when the field is left, and stay in it to be mended where they are refused
+  const typed = (event: TargetedEvent<HTMLTextAreaElement>): void => {
+    const field = event.currentTarget;
+    if (field.value.trim() === '') return;
+    const wrong = desk.paste(table, field.value);
+    setComplaints(wrong);
+    if (wrong.length === 0) field.value = '';
+  };
   return (
-    <div class="pasting" onPaste={pasted}>
+    <div class="pasting" onPaste={pasted} onInput={() => setComplaints([])}>
       {children}
       <details class="fold">
         <summary>
           paste rows<span class="unseen"> of {table}</span>
         </summary>
         <div class="folded">
-          <label for={id}>Paste here, or into any field above: {rows}.</label>
-          <textarea id={id} rows={3} spellcheck={false} />
+          <label for={id}>Paste or type here, or paste into any field above: {rows}.</label>
+          <textarea id={id} rows={3} spellcheck={false} onChange={typed} />
         </div>
       </details>
       <div role="alert">
