@@ -202,6 +202,8 @@ describe('the plan', () => {
     // the corner at (63, 27) of the demonstration study
     await plan.drag(await pixelOf(plan, 63, 27), await pixelOf(plan, 65, 29));
     await expect.poll(plan.undoable).toMatch(/corner 3 of the covered area moved to \(65\.0,\s29\.0\)/u);
+    // results that come in change the height of what stands above the plan
+    await plan.computed();
     await plan.drag(await pixelOf(plan, 30, -3), await pixelOf(plan, 30, -5));
     await expect.poll(plan.undoable).toMatch(/corner added to the covered area at \(30\.0,\s\u22125\.0\)/u);
     await expect.poll(() => corners.getByRole('listitem').count()).toBe(7);
