@@ -282,6 +282,19 @@ describe('the plan', () => {
         characterData: true,
       });
     });
+    // figures are drawn one by one after the results are there
+    await expect
+      .poll(
+        () =>
+          page.evaluate(async () => {
+            const { counted } = globalThis as unknown as { counted: { outside: number; ground: number } };
+            Object.assign(counted, { outside: 0, ground: 0 });
+            await new Promise((resolve) => setTimeout(resolve, 500));
+            return counted.outside;
+          }),
+        { timeout: 20_000 },
+      )
+      .toBe(0);
     const marks = await plan.svg.locator('.frame-marks').textContent();
     const [x, y] = await plan.at(0.93, 0.1);
     for (let k = 0; k < 20; k += 1) await page.mouse.move(x - 5 * k, y + 5 * k);
