@@ -5,12 +5,15 @@ import { type Browser, chromium, type Page } from 'playwright-core';
 import { type PreviewServer, preview } from 'vite';
 
 const CHROMIUM = '/usr/bin/chromium';
+/** A name of this machine that browsers take for a plain http host, unlike its loopback address. */
+export const PLAIN_HOST = 'plain.test';
 const FLAGS = [
   '--no-sandbox',
   '--disable-gpu',
   '--disable-quic',
   '--disable-background-networking',
   '--no-first-run',
+  `--host-resolver-rules=MAP ${PLAIN_HOST} 127.0.0.1`,
 ];
 
 export interface LiveSheet {
@@ -30,7 +33,7 @@ export async function openLiveSheet(): Promise<LiveSheet> {
   const server: PreviewServer = await preview({
     root,
     logLevel: 'error',
-    preview: { host: '127.0.0.1', port: 0 },
+    preview: { host: '127.0.0.1', port: 0, allowedHosts: [PLAIN_HOST] },
   });
   const browser = await openBrowser();
   return {

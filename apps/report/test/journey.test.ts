@@ -3,7 +3,7 @@ import { resolve } from 'node:path';
 import { readPack } from '@ohmstead/pack';
 import type { Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { type LiveSheet, openLiveSheet, watchedPage } from './browser.ts';
+import { type LiveSheet, openLiveSheet, PLAIN_HOST, watchedPage } from './browser.ts';
 
 const root = resolve(import.meta.dirname, '../../..');
 const conductors = readFileSync(resolve(root, 'test-data/square-70m/conductors.csv'), 'utf8');
@@ -106,6 +106,28 @@ describe('a study from a bare table to a review pack', () => {
     await expect
       .poll(() => page.locator('[data-input="surfacing.thickness_m"]').first().inputValue())
       .toMatch(/^0\.1524\s*m$/);
+    await page.context().close();
+  });
+});
+
+describe('a plain http host', () => {
+  it('serves a page that computes, writes a review pack and opens it', async () => {
+    const { page, errors } = await watchedPage(sheet);
+    await page.goto(sheet.url.replace('127.0.0.1', PLAIN_HOST));
+    expect(await page.evaluate(() => isSecureContext)).toBe(false);
+    await page.getByRole('button', { name: 'Try the demonstration study' }).click();
+    await computed(page);
+    const [download] = await Promise.all([
+      page.waitForEvent('download'),
+      page.getByRole('button', { name: 'take the review pack' }).click(),
+    ]);
+    await page.getByRole('button', { name: 'all studies' }).click();
+    const buffer = readFileSync(await download.path());
+    await page.setInputFiles(FILES, { name: 'a.zip', mimeType: 'application/zip', buffer });
+    await computed(page);
+    const { entries } = await readPack(new Uint8Array(buffer));
+    expect(entries.has('study/study.json')).toBe(true);
+    expect(errors).toEqual([]);
     await page.context().close();
   });
 });

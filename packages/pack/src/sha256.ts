@@ -1,4 +1,5 @@
-// SHA-256 of a run of bytes, by the platform's own implementation (Node 20 and browsers).
+// SHA-256 of a run of bytes, by the platform's own implementation where it grants one.
+import { plainSha256 } from './plain-sha256.ts';
 
 /**
  * SHA-256 digest (FIPS 180-4).
@@ -6,7 +7,9 @@
  * @returns 32 bytes
  */
 export async function sha256Bytes(bytes: Uint8Array): Promise<Uint8Array> {
-  return new Uint8Array(await crypto.subtle.digest('SHA-256', new Uint8Array(bytes)));
+  const subtle: SubtleCrypto | undefined = globalThis.crypto?.subtle;
+  if (subtle === undefined) return plainSha256(bytes);
+  return new Uint8Array(await subtle.digest('SHA-256', new Uint8Array(bytes)));
 }
 
 /** SHA-256 digest as 64 lower-case hexadecimal digits. */

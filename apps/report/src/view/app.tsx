@@ -11,6 +11,7 @@ import type { Opening } from '../desk/opening.ts';
 import { setValue } from '../desk/set-value.ts';
 import type { EnginePlatform } from '../engine/client.ts';
 import { demoFiles } from '../files/demo.ts';
+import { newId } from '../files/new-id.ts';
 import { openFiles } from '../files/open-files.ts';
 import { useDroppedFiles } from '../files/use-dropped-files.ts';
 import { ElectrodePlan } from '../plan/electrode-plan.tsx';
@@ -50,7 +51,7 @@ export function App({ begin }: { readonly begin: EnginePlatform['begin'] }): VNo
         return;
       }
       setRefused([]);
-      setId(crypto.randomUUID());
+      setId(newId());
       act({ kind: 'open', draft: opening.draft, label });
     }
   };
