@@ -170,6 +170,27 @@ describe('files that cannot be opened', () => {
   });
 });
 
+describe('a cell of the conductor table', () => {
+  it('is marked and told of beside its table while it is at fault', async () => {
+    const { page } = await watchedPage(sheet);
+    await page.goto(sheet.url);
+    await page.getByRole('button', { name: 'Try the demonstration study' }).click();
+    await computed(page);
+    await page.getByText('Conductors as tables').click();
+    const cell = page.getByLabel('diameter_mm, row 2', { exact: true });
+    await cell.fill('thick');
+    await cell.press('Tab');
+    await page.getByText('The study has a fault, told under Electrode.').waitFor();
+    expect(await cell.getAttribute('aria-invalid')).toBe('true');
+    expect(await page.locator('.conductors .input-faults').textContent()).toMatch(/:2: diameter_mm: thick/);
+    await cell.fill('12');
+    await cell.press('Tab');
+    await computed(page);
+    expect(await page.locator('.conductors .input-faults').count()).toBe(0);
+    await page.context().close();
+  });
+});
+
 describe('what is added to a study that was computed', () => {
   it('is asked for where it is not whole, and the sheet is out of date until then', async () => {
     const { page } = await watchedPage(sheet);

@@ -59,6 +59,22 @@ describe('studies kept in the browser', () => {
     await again.context().close();
   });
 
+  it('are told to be open in another window as well', async () => {
+    const { page } = await watchedPage(sheet);
+    await begun(page);
+    await retitled(page, 'Aldermoor, twice');
+    const other = await page.context().newPage();
+    await other.goto(sheet.url);
+    await other.getByRole('button', { name: 'Aldermoor, twice', exact: true }).click();
+    await other.locator(TITLE).waitFor();
+    await retitled(other, 'Aldermoor, from the other');
+    await page
+      .getByRole('alert')
+      .filter({ hasText: /open in another window/ })
+      .waitFor();
+    await page.context().close();
+  });
+
   it('are told to be lost where the browser refuses storage', async () => {
     const { page } = await watchedPage(sheet);
     await page.addInitScript(() => {

@@ -13,6 +13,10 @@ export function unkeptWords(error: unknown): string {
     : `The last changes are not kept (${reason(error)}). Save the study as a file.`;
 }
 
+/** Words for a study that another window keeps as well. */
+export const ELSEWHERE =
+  'This study is open in another window as well: of the two, what is changed last is kept. Close one of them.';
+
 function reason(error: unknown): string {
   const text = error instanceof Error ? error.message || error.name : String(error);
   return text.replace(/\.$/, '');

@@ -192,7 +192,14 @@ function Work({ control, bench, open, close, word }: WorkProps): VNode {
             <PlanDeskContext.Provider value={plan}>{sheet}</PlanDeskContext.Provider>
           )}
           <div class="beside">
-            <ConductorTables draft={draft} units={units} act={act} selected={present} select={select} />
+            <ConductorTables
+              draft={draft}
+              units={units}
+              act={act}
+              faults={bench.faults}
+              selected={present}
+              select={select}
+            />
             <Pins bench={bench} act={act} units={units} />
           </div>
         </main>

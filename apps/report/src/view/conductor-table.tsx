@@ -1,5 +1,5 @@
 // Conductors as tables: every cell is edited by keyboard where it stands, rows are deleted, and pasted from a spreadsheet.
-import type { DisplayUnits, RowOrigin } from '@ohmstead/study';
+import { type DisplayUnits, type Fault, faultLine, type RowOrigin } from '@ohmstead/study';
 import type { VNode } from 'preact';
 import { useState } from 'preact/hooks';
 import { type ConductorKey, conductorKeys } from '../desk/conductor.ts';
@@ -16,6 +16,8 @@ export interface ConductorTablesProps {
   readonly draft: Draft;
   readonly units: DisplayUnits;
   readonly act: (action: BenchAction) => void;
+  /** of the whole study */
+  readonly faults: readonly Fault[];
   readonly selected: readonly RowOrigin[];
   readonly select: (rows: readonly RowOrigin[]) => void;
 }
@@ -40,6 +42,7 @@ function OneTable({
   draft,
   units,
   act,
+  faults,
   selected,
   select,
 }: ConductorTablesProps & { readonly path: string }): VNode {
@@ -55,6 +58,7 @@ function OneTable({
     setComplaints(result.kind === 'complaints' ? result.complaints.map(complaintLine) : []);
     if (result.kind === 'draft') act({ kind: 'edit', draft: result.draft, label: `${path} pasted` });
   };
+  const wrong = faults.filter(({ file }) => file === path);
   const chosen = selected.filter(({ file }) => file === path);
   return (
     <div>
@@ -99,6 +103,7 @@ function OneTable({
                       <Cell
                         label={`${headerText(table, key)}, row ${line}`}
                         text={cellText(table, record, key)}
+                        wrong={wrong.some((one) => one.line === line && one.place === headerText(table, key))}
                         take={(text) =>
                           act({
                             kind: 'edit',
@@ -116,6 +121,13 @@ function OneTable({
           </tbody>
         </table>
       </div>
+      {wrong.length > 0 && (
+        <ul class="input-faults">
+          {wrong.map((fault) => (
+            <li key={faultLine(fault)}>{faultLine(fault)}</li>
+          ))}
+        </ul>
+      )}
       <p class="edits">
         {rows.length > shown && (
           <button type="button" class="word" onClick={() => setShown(shown + PAGE)}>
@@ -171,15 +183,18 @@ function headerText(table: ConductorFile, key: ConductorKey): string {
 interface CellProps {
   readonly label: string;
   readonly text: string;
+  /** whether a fault of the study is about it */
+  readonly wrong: boolean;
   readonly take: (text: string) => void;
 }
 
-function Cell({ label, text, take }: CellProps): VNode {
+function Cell({ label, text, wrong, take }: CellProps): VNode {
   return (
     <input
       class="cell"
       aria-label={label}
       value={text}
+      aria-invalid={wrong}
       size={Math.max(4, text.length)}
       spellcheck={false}
       autocomplete="off"

@@ -1,11 +1,12 @@
 // The line above the sheet: what is being computed, and what can be done with the study as a whole.
-import type { DisplayUnits } from '@ohmstead/study';
+import { type DisplayUnits, type Fault, listed } from '@ohmstead/study';
 import type { VNode } from 'preact';
 import { redoLabel, undoLabel } from '../desk/history.ts';
 import { questionsOf } from '../desk/missing.ts';
 import type { Bench, BenchAction } from './bench.ts';
 import { draftOf, isComplete, outdated } from './bench.ts';
 import { FilePicks } from './file-picks.tsx';
+import { sectionOfFault } from './section-faults.ts';
 
 export interface StripProps {
   readonly bench: Bench;
@@ -68,13 +69,22 @@ function doing(bench: Bench): string {
   const { running, solved, faults, failure } = bench;
   if (running !== undefined) return `Computing: ${running.stage}`;
   if (failure !== undefined) return `A fault of the program, not of the study: ${failure}`;
-  if (faults.length > 0)
-    return `The study has ${faults.length === 1 ? 'a fault' : `${faults.length} faults`}.`;
+  if (faults.length > 0) {
+    const count = faults.length === 1 ? 'a fault' : `${faults.length} faults`;
+    // without an outcome all of them are listed at the top
+    return `The study has ${count}${solved === undefined ? '' : `, told under ${placesOf(faults)}`}.`;
+  }
   if (solved === undefined) return 'Not computed.';
   if (isComplete(bench)) return 'Computed.';
   return questionsOf(draftOf(bench)).length > 0
     ? 'Out of date: the sheet asks for what is missing.'
     : 'Out of date.';
+}
+
+/** Sections that tell faults, by name. */
+function placesOf(faults: readonly Fault[]): string {
+  const names = new Set(faults.map(sectionOfFault));
+  return listed([...names].map((name) => `${name[0]?.toUpperCase()}${name.slice(1)}`));
 }
 
 interface WordProps {

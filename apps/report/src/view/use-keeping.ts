@@ -1,12 +1,14 @@
 // Keeps the study worked at in the browser's database, and finds it again after a reload or a crash.
 import { useCallback, useEffect, useRef, useState } from 'preact/hooks';
 import { valueAt } from '../desk/draft.ts';
-import { refusedWords, unkeptWords } from '../files/store-words.ts';
+import { ELSEWHERE, refusedWords, unkeptWords } from '../files/store-words.ts';
 import { type KeptStudy, type KeptSummary, openStudyStore, type StudyStore } from '../files/study-store.ts';
 import { type Bench, draftOf } from './bench.ts';
 
 /** Edits within this many ms are kept together. */
 const PAUSE_MS = 400;
+/** On which windows tell each other what they keep. */
+const CHANNEL = 'ohmstead-kept';
 /** Where a tab remembers which study it works at. */
 const TAB_KEY = 'ohmstead-study';
 
@@ -27,6 +29,8 @@ export function useKeeping(bench: Bench | undefined, id: string | undefined): Ke
   const [store, setStore] = useState<StudyStore>();
   const [kept, setKept] = useState<readonly KeptSummary[]>([]);
   const [word, setWord] = useState<string>();
+  const [elsewhere, setElsewhere] = useState<string>();
+  const channel = useRef<BroadcastChannel>(undefined);
   const [restoring, setRestoring] = useState(rememberedStudy);
   useEffect(() => {
     openStudyStore()
@@ -54,6 +58,14 @@ export function useKeeping(bench: Bench | undefined, id: string | undefined): Ke
       };
     }
   }
+  useEffect(() => {
+    const opened = new BroadcastChannel(CHANNEL);
+    channel.current = opened;
+    opened.onmessage = ({ data }: MessageEvent<unknown>) => {
+      if (typeof data === 'string') setElsewhere(data);
+    };
+    return () => opened.close();
+  }, []);
   const write = useCallback((): void => {
     const study = latest.current;
     if (store === undefined || study === undefined || study === written.current) return;
@@ -62,6 +74,7 @@ export function useKeeping(bench: Bench | undefined, id: string | undefined): Ke
       .write({ ...study, at: Date.now() })
       .then(async () => {
         setWord(undefined);
+        channel.current?.postMessage(study.id);
         setKept(await store.list());
       })
       .catch((error: unknown) => setWord(unkeptWords(error)));
@@ -85,7 +98,7 @@ export function useKeeping(bench: Bench | undefined, id: string | undefined): Ke
   }, [id, restoring]);
   return {
     kept,
-    word,
+    word: word ?? (id !== undefined && elsewhere === id ? ELSEWHERE : undefined),
     restoring: store === undefined ? undefined : restoring,
     read: async (wanted) => {
       setRestoring(undefined);
