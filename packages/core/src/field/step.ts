@@ -5,7 +5,7 @@ import { paceStencil, steepestDrops } from './pace-stencils.ts';
 import { edgeDirections, edgePlaces, onEdge, type Region } from './region.ts';
 import { bestStarts, type Guess, latticeSummits, likeliest } from './starts.ts';
 import type { SurfacePotential } from './surface-potential.ts';
-import type { WorstPlace } from './touch.ts';
+import { STARTS, type WorstPlace } from './touch.ts';
 
 /** Distance between the feet, m (IEEE Std 80-2013, 3, step voltage). */
 export const PACE_M = 1;
@@ -18,7 +18,6 @@ export interface WorstStep extends WorstPlace {
 
 /** Directions tried over half a turn: the worst falls between two by at most 1 − cos 7.5° = 0.9 %. */
 const DIRECTIONS = 12;
-const STARTS = 4;
 const FINEST_STEP = 1 / 64;
 /** First turn of the search, rad. */
 const TURN = Math.PI / 12;
@@ -58,6 +57,7 @@ function drop(surface: SurfacePotential, x: number, y: number, ex: number, ey: n
  * @param beside places by the metal: one foot of a pace is tried there
  * @param rough a surface potential that costs less, as good as the map: it stands for the exact one away from metal
  * when paces are ranked at first
+ * @param searches begun at most
  */
 export function worstStep(
   step: Lattice,
@@ -66,6 +66,7 @@ export function worstStep(
   surface: SurfacePotential,
   beside: readonly (readonly [number, number])[],
   rough: SurfacePotential = surface,
+  searches: number = STARTS,
 ): WorstStep | undefined {
   const voltage = ([x, y, angle]: Pace, over: SurfacePotential): number => {
     const [ex, ey] = halfPace(angle);
@@ -88,7 +89,7 @@ export function worstStep(
       likely.push({ candidate: [x + candidate[0], y + candidate[1], candidate[2]], value });
   }
   const f = (at: readonly number[]): number => voltage(at as Pace, surface);
-  const starts = bestStarts(likely, f, STARTS).flatMap(([x, y, angle]): Pace[] => [
+  const starts = bestStarts(likely, f, searches).flatMap(([x, y, angle]): Pace[] => [
     [x, y, angle],
     ...onEdge(region, x, y, step.spacing).map(([u, v]): Pace => [u, v, angle]),
   ]);

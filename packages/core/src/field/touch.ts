@@ -18,7 +18,7 @@ export interface WorstPlace {
 }
 
 /** Searches begun, from the best starts by the exact field. */
-const STARTS = 4;
+export const STARTS = 4;
 /** A search ends when its step is this share of the lattice's spacing, 8 mm on half a metre: a summit is flat to 1e-4 there. */
 const FINEST_STEP = 1 / 64;
 
@@ -38,6 +38,7 @@ export function touchLattice(potential: Lattice, reachable: (place: number) => n
  * @param surface exact
  * @param beside places by the metal that a lattice may step over
  * @param rough a surface potential that costs less, as good as the map: it ranks places that are not beside metal
+ * @param searches begun at most
  */
 export function worstTouch(
   touch: Lattice,
@@ -47,6 +48,7 @@ export function worstTouch(
   metal: MetalPotential,
   beside: readonly (readonly [number, number])[],
   rough: SurfacePotential = surface,
+  searches: number = STARTS,
 ): WorstPlace | undefined {
   const over =
     (potential: SurfacePotential) =>
@@ -58,7 +60,7 @@ export function worstTouch(
     ...guessed([...latticeSummits(touch, within), ...edgePlaces(region)], over(rough)),
     ...guessed(beside, over(surface)),
   ];
-  return climbFromBest(guesses, over(surface), region, touch.spacing);
+  return climbFromBest(guesses, over(surface), region, touch.spacing, searches);
 }
 
 /** Climbs in the plane from the best of the likeliest places, along the region's edge where that is near. */
@@ -67,8 +69,9 @@ export function climbFromBest(
   f: (at: readonly number[]) => number,
   region: Region,
   step: number,
+  searches: number = STARTS,
 ): WorstPlace | undefined {
-  const starts = bestStarts(guesses, f, STARTS).flatMap(([x, y]) => [
+  const starts = bestStarts(guesses, f, searches).flatMap(([x, y]) => [
     [x, y] as const,
     ...onEdge(region, x, y, step),
   ]);

@@ -86,6 +86,8 @@ const SCOUT = 2;
 /** Largest interpolation error of a map, of the rise. */
 const MAP_TOLERANCE = 2e-3;
 const SCOUT_TOLERANCE = 1e-2;
+/** It searches from the highest place alone. */
+const SCOUT_SEARCHES = 1;
 /** The map must also show the worst touch and step voltage found by the scout, to this share of them. */
 const MAP_SHARE = 0.02;
 
@@ -140,7 +142,7 @@ export async function solveLevels(prepared: Prepared, options: LevelsOptions): P
   });
   const series = [await at(0), await at(1)];
   const scouts = onFirst === undefined ? 1 : distinct.length;
-  const scouted = look(prepared, series[1]!, box, spacing * SCOUT, SCOUT_TOLERANCE, scouts);
+  const scouted = look(prepared, series[1]!, box, spacing * SCOUT, SCOUT_TOLERANCE, scouts, SCOUT_SEARCHES);
   await onFirst?.(solvedBy(series, scouted));
   while (series.length <= LAST_LEVEL && 2 * series.at(-1)!.graph.mesh.count <= SEGMENT_CEILING) {
     if (series.length >= WANTED_LEVELS && wellResolved(series, scouted[0]!)) break;

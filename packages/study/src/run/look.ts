@@ -36,6 +36,7 @@ export interface Found {
 /**
  * Maps and worst places of the first units of a level. Places are searched on the map's own field; their voltages are
  * then summed segment by segment.
+ * @param searches begun at most for each worst place; the usual number where undefined
  * @param tolerance largest interpolation error of what sloped metal adds to the maps, of the rise
  */
 export function look(
@@ -45,6 +46,7 @@ export function look(
   spacing: number,
   tolerance: number,
   count: number,
+  searches?: number,
 ): Found[] {
   const { surfaces, graph } = level;
   const tolerances = graph.units.slice(0, count).map((unit) => tolerance * unit.resistance);
@@ -71,8 +73,8 @@ export function look(
       step,
       zones: zones.map((zone) => {
         const worst = {
-          touch: worstTouch(touch, zone.touch, zone.touchMask, surface, field.metal, beside, rough),
-          step: worstStep(step, zone.step, zone.stepMask, surface, beside, rough),
+          touch: worstTouch(touch, zone.touch, zone.touchMask, surface, field.metal, beside, rough, searches),
+          step: worstStep(step, zone.step, zone.stepMask, surface, beside, rough, searches),
         };
         return {
           footing: zone.footing,
