@@ -1,9 +1,11 @@
 // The live sheet as static files that work from any plain host.
 import { defineConfig } from 'vite';
+import { offline } from './offline.ts';
 import { pageScriptDefinitions } from './page-scripts.ts';
 
 export default defineConfig(({ isPreview }) => ({
   base: './',
+  plugins: [offline()],
   define: isPreview === true ? {} : pageScriptDefinitions(),
   build: {
     target: 'es2023',

@@ -4,6 +4,7 @@ import { sheetCss } from '@ohmstead/sheet';
 import { render } from 'preact';
 import { blobWorker } from './engine/blob-worker.ts';
 import type { EnginePlatform } from './engine/client.ts';
+import { keepOffline } from './files/keep-offline.ts';
 import { App } from './view/app.tsx';
 import './view/page.css';
 
@@ -18,3 +19,4 @@ const begin: EnginePlatform['begin'] = (hear) => blobWorker(scripts, hear);
 const root = document.getElementById('root');
 if (root === null) throw new Error('the page has no place for the sheet');
 render(<App begin={begin} />, root);
+keepOffline();

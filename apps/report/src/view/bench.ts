@@ -178,12 +178,15 @@ export function isComplete(bench: Bench): boolean {
 /** Sections that an early outcome does not tell yet. */
 const LATER: readonly SectionId[] = ['season', 'trust', 'assumed'];
 
+/** Sections whose numbers finer meshes still move. */
+const REFINED: readonly SectionId[] = ['electrode', 'rise', 'surface', 'people'];
+
 /** How a section stands. */
 export function sectionState(bench: Bench, section: SectionId): SectionState {
   if (faultsOfSection(bench.faults, section).length > 0) return 'fault';
   const { solved, running } = bench;
   const old =
     solved === undefined || outdated(bench).has(section) || (solved.early && LATER.includes(section));
-  if (!old) return 'fresh';
+  if (!old) return solved.early && REFINED.includes(section) ? 'early' : 'fresh';
   return running === undefined ? 'stale' : 'computing';
 }

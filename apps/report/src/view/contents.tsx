@@ -15,6 +15,7 @@ const NAMES: readonly (readonly [SectionId, string])[] = [
 ];
 const WORDS: Readonly<Record<SectionState, string>> = {
   fresh: '',
+  early: 'first numbers',
   computing: 'computing',
   stale: 'out of date',
   fault: 'at fault',

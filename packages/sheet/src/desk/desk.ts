@@ -18,10 +18,10 @@ export type SectionId =
   | 'assumed';
 
 /**
- * How a section's results stand to the study: they belong to it (`fresh`), are being computed anew, belong to an
+ * How a section's results stand to the study: they belong to it (`fresh`), or are its first, from coarse meshes (`early`), are being computed anew, belong to an
  * earlier study (`stale`), or cannot be computed because an input is at fault.
  */
-export type SectionState = 'fresh' | 'computing' | 'stale' | 'fault';
+export type SectionState = 'fresh' | 'early' | 'computing' | 'stale' | 'fault';
 
 /** Quantities that are read with a unit; values are SI: Ω·m, m, A, s, Hz, and 1 for a ratio. */
 export type QuantityKind =

@@ -16,6 +16,7 @@ export interface PartProps {
 
 const STATE_WORDS: Readonly<Record<SectionState, string>> = {
   fresh: 'up to date',
+  early: 'first numbers',
   computing: 'computing',
   stale: 'out of date',
   fault: 'at fault',

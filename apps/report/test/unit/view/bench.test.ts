@@ -2,7 +2,7 @@ import { loadStudy, type Outcome, sourceFromMap } from '@ohmstead/study';
 import { describe, expect, it } from 'vitest';
 import type { Draft } from '../../../src/desk/draft.ts';
 import { setValue } from '../../../src/desk/set-value.ts';
-import { type Bench, beginBench, isComplete, reduceBench } from '../../../src/view/bench.ts';
+import { type Bench, beginBench, isComplete, reduceBench, sectionState } from '../../../src/view/bench.ts';
 import { demo } from '../desk/drafts.ts';
 
 const draft = demo('square-70m');
@@ -26,6 +26,12 @@ describe('results while a newer run is under way', () => {
   it('give way to an early outcome where they are out of date', () => {
     const bench = ran(edited(setValue(draft, ['soil', 'layers', 0, 'resistivity_ohm_m'], 90)), 2, 'first');
     expect(bench.solved).toMatchObject({ run: 2, early: true });
+  });
+  it('are told to be the first while finer meshes still move them', () => {
+    const bench = ran(edited(setValue(draft, ['soil', 'layers', 0, 'resistivity_ohm_m'], 90)), 2, 'first');
+    const states = (['ground', 'rise', 'people', 'season'] as const).map((id) => sectionState(bench, id));
+    expect(states).toEqual(['fresh', 'early', 'early', 'computing']);
+    expect(sectionState(solved, 'rise')).toBe('fresh');
   });
   it('stand where words alone were edited', () => {
     const bench = ran(edited(setValue(draft, ['notes', 'ground'], 'dry')), 2, 'first');
