@@ -143,5 +143,5 @@ console.log('|---|---|---|---|');
 for (const [name, { first, whole, longest }] of rows)
   console.log(`| ${name} | ${cell(first)} | ${cell(whole)} | ${longest.toFixed(0)} |`);
 console.log(
-  `\nFirst render ${render.toFixed(0)} ms after the address is opened; ${(bytes / 1000).toFixed(0)} kB read by the page as served, uncompressed.`,
+  `\nFirst render ${render.toFixed(0)} ms after the address is opened; ${(bytes / 1000).toFixed(0)} kB transferred for the page, compressed as it is served.`,
 );

@@ -251,7 +251,10 @@ describe('the plan', () => {
     const whole = await marks();
     await page.mouse.move(...pixel);
     // a plan that is not in use lets the page scroll
+    const scrolled = (): Promise<number> => page.evaluate(() => scrollY);
+    const before = await scrolled();
     await page.mouse.wheel(0, 40);
+    await expect.poll(scrolled).toBe(before + 40);
     expect(await marks()).toBe(whole);
     await page.mouse.dblclick(...(await pixelOf(plan, 20, 21)));
     await expect.poll(marks).not.toBe(whole);

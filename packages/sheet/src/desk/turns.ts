@@ -1,4 +1,7 @@
-// Work of a live page that waits for its turn: one piece a task, so that the page answers in between.
+// Work of a live page that waits for its turn: one piece a frame, after what was drawn before is on the screen.
+
+/** A page that is not shown has no frames; its work is done after this long, ms. */
+const WITHOUT_FRAME_MS = 200;
 
 const waiting: (() => void)[] = [];
 let called = false;
@@ -12,7 +15,19 @@ function next(): void {
 function call(): void {
   if (called || waiting.length === 0) return;
   called = true;
-  setTimeout(next);
+  afterFrame(next);
+}
+
+/** In a task of its own, once the present frame is drawn. */
+function afterFrame(act: () => void): void {
+  let done = false;
+  const once = (): void => {
+    if (done) return;
+    done = true;
+    act();
+  };
+  requestAnimationFrame(() => setTimeout(once));
+  setTimeout(once, WITHOUT_FRAME_MS);
 }
 
 /**
